@@ -1,0 +1,15 @@
+import { fileURLToPath } from 'node:url';
+import { defineConfig } from 'vitest/config';
+
+const root = fileURLToPath(new URL('..', import.meta.url));
+
+export default defineConfig({
+  root,
+  resolve: { alias: { '@': root.replace(/\/$/, '') } },
+  test: {
+    include: ['lib/**/*.test.{ts,tsx}', 'app/**/*.test.{ts,tsx}', 'db/**/*.test.ts', 'tests/**/*.test.{ts,tsx}', 'fake-services/**/*.test.{ts,mjs}'],
+    exclude: ['tests/e2e/**', 'node_modules/**'],
+    testTimeout: 30_000,
+    hookTimeout: 60_000,
+  },
+});
