@@ -1,0 +1,35 @@
+/** Fractions of the page as stored (crop box, /Rotate not applied), origin top left, y down. */
+export type PageFractions = readonly [x0: number, y0: number, x1: number, y1: number];
+
+export type PageViewSource =
+  | { readonly kind: 'pdf'; readonly url: string }
+  | { readonly kind: 'image'; readonly url: string }
+  | { readonly kind: 'csv'; readonly url: string }
+  /** A sheet that the reader has already turned into rows. */
+  | { readonly kind: 'table'; readonly rows: readonly (readonly string[])[] }
+  | { readonly kind: 'unsupported'; readonly sentence: string }
+  /** Typed in by hand: there is no file. */
+  | { readonly kind: 'none' };
+
+export interface PageMark {
+  readonly rowId: string;
+  /** "pH, sample 3": what the live line says beside page and row. */
+  readonly label: string;
+  /** From 1, the row's number in the grid. */
+  readonly rowNumber: number;
+  readonly page: number | null;
+  readonly box: PageFractions | null;
+  /** For CSV and sheets, from 1. */
+  readonly cell: { readonly row: number; readonly column: number } | null;
+}
+
+export interface PageViewProps {
+  readonly source: PageViewSource;
+  /** Name of the file, for labels. */
+  readonly fileName: string;
+  readonly marks: readonly PageMark[];
+  readonly highlightedRowId: string | null;
+  readonly onPick: (rowId: string) => void;
+  /** Address for "Open the original"; left out where the role may not open it. */
+  readonly originalHref?: string;
+}
