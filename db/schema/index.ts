@@ -1,0 +1,4 @@
+export * from './actions';
+export * from './people';
+export * from './reports';
+export * from './sites';

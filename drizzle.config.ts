@@ -1,0 +1,7 @@
+import { defineConfig } from 'drizzle-kit';
+
+export default defineConfig({
+  dialect: 'postgresql',
+  schema: ['./db/schema/actions.ts', './db/schema/people.ts', './db/schema/reports.ts', './db/schema/sites.ts'],
+  out: './migrations',
+});

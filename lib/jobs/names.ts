@@ -1,0 +1,15 @@
+import { z } from 'zod';
+
+/** A job's payload carries ids only; its handler reads the rows again and may find nothing left to do. */
+export const JOBS = {
+  'read-report': { payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }), expireInSeconds: 150, retryLimit: 3 },
+  'send-mail': { payload: z.strictObject({ id: z.uuid() }), expireInSeconds: 60, retryLimit: 8 },
+  'sweep-reminders': { payload: z.strictObject({}), expireInSeconds: 60, retryLimit: 1 },
+  'sweep-uploads': { payload: z.strictObject({}), expireInSeconds: 60, retryLimit: 1 },
+  'recheck-effects': { payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }), expireInSeconds: 60, retryLimit: 3 },
+} as const;
+
+export type JobName = keyof typeof JOBS;
+export type JobPayload<N extends JobName> = z.infer<(typeof JOBS)[N]['payload']>;
+export const JOB_NAMES = Object.keys(JOBS) as JobName[];
+export const deadLetterOf = (name: JobName) => `${name}-dead`;
