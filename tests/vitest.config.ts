@@ -7,8 +7,15 @@ export default defineConfig({
   root,
   resolve: { alias: { '@': root.replace(/\/$/, '') } },
   test: {
-    include: ['lib/**/*.test.{ts,tsx}', 'app/**/*.test.{ts,tsx}', 'db/**/*.test.ts', 'tests/**/*.test.{ts,tsx}', 'fake-services/**/*.test.{ts,mjs}'],
+    include: [
+      'lib/**/*.test.{ts,tsx}',
+      'app/**/*.test.{ts,tsx}',
+      'db/**/*.test.ts',
+      'tests/**/*.test.{ts,tsx}',
+      'fake-services/**/*.test.{ts,mjs}',
+    ],
     exclude: ['tests/e2e/**', 'node_modules/**'],
+    globalSetup: ['tests/support/services.ts'],
     testTimeout: 30_000,
     hookTimeout: 60_000,
   },
