@@ -17,6 +17,7 @@ const schema = z.object({
   APP_SECRET: z.string().min(32, 'APP_SECRET needs at least 32 characters'),
   LOAMLINE_GALLERY: z.enum(['0', '1']).default('0'),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),
+  SWEEP_SECONDS: z.coerce.number().min(0.5).max(3600).default(30),
   TRUSTED_PROXIES: z.coerce.number().int().min(0).default(0),
 });
 

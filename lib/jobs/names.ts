@@ -4,8 +4,6 @@ import { z } from 'zod';
 export const JOBS = {
   'read-report': { payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }), expireInSeconds: 150, retryLimit: 3 },
   'send-mail': { payload: z.strictObject({ id: z.uuid() }), expireInSeconds: 60, retryLimit: 8 },
-  'sweep-reminders': { payload: z.strictObject({}), expireInSeconds: 60, retryLimit: 1 },
-  'sweep-uploads': { payload: z.strictObject({}), expireInSeconds: 60, retryLimit: 1 },
   'recheck-effects': { payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }), expireInSeconds: 60, retryLimit: 3 },
 } as const;
 
