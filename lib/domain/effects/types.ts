@@ -101,6 +101,8 @@ export type EffectInput = {
   /** Readings of all plots of the site, this one included (the before round is picked from them by day). */
   readonly siteTests: readonly TestPoint[];
   readonly noise: SiteNoise;
+  /** The site's own drift of this analyte, learnt from `tests` tests; subtracted only from 4 tests on and without controls. */
+  readonly drift?: { readonly perYear: number; readonly sd: number; readonly df: number; readonly tests: number };
   /** An after-test chosen by hand; marked "second look" unless it is the one the rule takes. */
   readonly afterTestId?: ResultId;
 };
@@ -162,6 +164,7 @@ export type NoiseComponent = {
     | 'season'
     | 'laboratory'
     | 'site-mean'
+    | 'drift'
     | 'reliability';
   readonly variance: number;
   readonly df: number;
