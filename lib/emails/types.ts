@@ -29,6 +29,8 @@ export interface ResetPasswordProps extends ToPerson {
 export interface PasswordChangedProps extends ToPerson {
   /** In the person's own zone: "1 December 2026, 08:12 (Europe/London)". */
   readonly changedAt: string;
+  /** 'all' after a reset; 'others' when the person asked for it; 'none' otherwise. */
+  readonly signedOut: 'all' | 'others' | 'none';
   readonly resetUrl: string;
 }
 
