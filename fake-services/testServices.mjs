@@ -6,12 +6,14 @@ import { startCluster } from './postgres/cluster.mjs';
 import { prepareTemplate, TEMPLATE } from './postgres/template.mjs';
 import { createBucket } from './storage/createBucket.mjs';
 import { startStorage } from './storage/server.mjs';
+import { createChildren } from './support/children.mjs';
+import { createRunner } from './support/step.mjs';
 
 /**
  * A cluster without durability, a store and a mailbox of the tests' own, on free ports, with everything in a folder that
  * `stop` removes. `env` is what the program and the tests read; DATABASE_URL is left to the test that makes a database.
  */
-export async function startTestServices({ root, template = true }) {
+export async function startTestServices({ root }) {
   const out = path.join(root, 'tests', '.out');
   mkdirSync(out, { recursive: true });
   const folder = mkdtempSync(path.join(out, 'services-'));
@@ -20,9 +22,10 @@ export async function startTestServices({ root, template = true }) {
   const apiKey = `re_${secret()}`;
   const storage = await startStorage({ folder: path.join(folder, 'storage'), port: 0, ...access });
   const mail = await startMail({ folder: path.join(folder, 'mail'), port: 0, apiKey });
+  const children = createChildren({ logs: path.join(folder, 'logs') });
   let cluster;
   const stop = async () => {
-    await Promise.all([storage.close(), mail.close(), cluster?.stop()]);
+    await Promise.all([storage.close(), mail.close(), children.stopAll()]);
     rmSync(folder, { recursive: true, force: true });
     if (cluster !== undefined) rmSync(cluster.home, { recursive: true, force: true });
   };
@@ -31,7 +34,7 @@ export async function startTestServices({ root, template = true }) {
       folder: path.join(folder, 'postgres'),
       database: 'loamline_unused',
       fast: true,
-      logs: path.join(out, 'logs'),
+      children,
     });
     const env = {
       TEST_CLUSTER_URL: cluster.url('postgres', 'postgres'),
@@ -54,8 +57,8 @@ export async function startTestServices({ root, template = true }) {
       NEXT_TELEMETRY_DISABLED: '1',
     };
     await createBucket(env);
-    if (template) prepareTemplate({ cluster, root, env: { ...process.env, ...env } });
-    return { env, stop, cluster };
+    await prepareTemplate({ cluster, run: createRunner({ children, root }), env: { ...process.env, ...env } });
+    return { env, stop };
   } catch (error) {
     await stop();
     throw error;

@@ -1,21 +1,14 @@
-import { spawnSync } from 'node:child_process';
-
 export const TEMPLATE = 'loamline_template';
 
 /** Runs the project's own migration and queue steps as the owner; both are TypeScript, so through tsx. */
-export function prepareDatabase({ root, ownerUrl, env = process.env }) {
-  for (const step of ['db/migrate.ts', 'lib/jobs/commands/prepareQueue.ts']) {
-    const result = spawnSync(process.execPath, ['--import', 'tsx', step], {
-      cwd: root,
-      env: { ...env, DATABASE_OWNER_URL: ownerUrl },
-      encoding: 'utf8',
-    });
-    if (result.status !== 0) throw new Error(`${step} failed:\n${result.stdout}${result.stderr}`);
-  }
+export async function prepareDatabase({ run, ownerUrl, env }) {
+  const asOwner = { env: { ...env, DATABASE_OWNER_URL: ownerUrl } };
+  await run('migrate', process.execPath, ['--import', 'tsx', 'db/migrate.ts'], asOwner);
+  await run('queue', process.execPath, ['--import', 'tsx', 'lib/jobs/commands/prepareQueue.ts'], asOwner);
 }
 
 /** The database every test database is a copy of; nobody may stay connected to it. */
-export function prepareTemplate({ cluster, root, env }) {
+export async function prepareTemplate({ cluster, run, env }) {
   cluster.createDatabase(TEMPLATE);
-  prepareDatabase({ root, ownerUrl: cluster.url('loamline_owner', TEMPLATE), env });
+  await prepareDatabase({ run, ownerUrl: cluster.url('loamline_owner', TEMPLATE), env });
 }
