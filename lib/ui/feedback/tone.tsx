@@ -30,7 +30,7 @@ const marks = {
   look: (
     <>
       <path d="M5 18.5V2" {...line} />
-      <path d="M5 2.8h11l-3 3.9 3 3.9H5z" fill="currentColor" {...line} />
+      <path d="M5 2.8h11l-3 3.9 3 3.9H5z" {...line} fill="currentColor" />
     </>
   ),
   error: (

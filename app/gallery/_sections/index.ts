@@ -1,0 +1,29 @@
+import type { ComponentType } from 'react';
+import { ActionsSection } from './actions';
+import { ColoursSection } from './colours';
+import { DialogsSection } from './dialogs';
+import { FieldsSection } from './fields';
+import { FilesSection } from './files';
+import { FrameSection } from './frame';
+import { LandingSection } from './landing';
+import { MessagesSection } from './messages';
+import { ShowSection } from './show';
+import { TypeSection } from './type';
+import { WaitingSection } from './waiting';
+
+type GallerySection = { id: string; title: string; Section: ComponentType };
+
+/** A new part of the screens gets a file beside this one and a line here. */
+export const sections: readonly GallerySection[] = [
+  { id: 'colours', title: 'Colours', Section: ColoursSection },
+  { id: 'type', title: 'Type and logo', Section: TypeSection },
+  { id: 'actions', title: 'Buttons, menus, choices', Section: ActionsSection },
+  { id: 'fields', title: 'Fields and forms', Section: FieldsSection },
+  { id: 'messages', title: 'Messages', Section: MessagesSection },
+  { id: 'dialogs', title: 'Dialogs', Section: DialogsSection },
+  { id: 'waiting', title: 'Waiting, working, empty', Section: WaitingSection },
+  { id: 'show', title: 'Tables, lists, timelines', Section: ShowSection },
+  { id: 'files', title: 'Files', Section: FilesSection },
+  { id: 'frame', title: 'Frame and layers', Section: FrameSection },
+  { id: 'landing', title: 'Landing', Section: LandingSection },
+];

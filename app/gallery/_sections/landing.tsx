@@ -1,0 +1,38 @@
+import { LinkButton } from '@/lib/ui/actions/link-button';
+import { Hero } from '@/lib/ui/landing/hero';
+import { Round } from '@/lib/ui/landing/round';
+
+export function LandingSection() {
+  return (
+    <div className="-mx-4 border border-horizon-5 sm:mx-0">
+      <Hero
+        title="Did it work?"
+        lead="Loamline keeps every soil test of every plot, what you spread in between, and says plainly whether the change you meant is the change that came."
+        actions={
+          <>
+            <LinkButton href="#landing">Start with your last report</LinkButton>
+            <LinkButton href="#landing" look="quiet">
+              See an example site
+            </LinkButton>
+          </>
+        }
+        note="The numbers drawn here are an invented bed."
+      />
+      <Round
+        title="The round of a year"
+        steps={[
+          {
+            title: 'Drop the report',
+            said: 'PDF or CSV, as the laboratory sent it. It is read, and every number keeps its place on the page.',
+          },
+          { title: 'Check it against its page', said: 'You confirm the values; nothing becomes history before that.' },
+          { title: 'Record what you spread', said: 'Material, amount, day, and the change you mean it to make.' },
+          {
+            title: 'See whether it came',
+            said: 'The next test answers: as intended, short of it, or cannot tell yet and what would settle it.',
+          },
+        ]}
+      />
+    </div>
+  );
+}
