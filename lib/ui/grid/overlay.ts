@@ -68,3 +68,9 @@ export function settle(overlay: Overlay, rowOf: (rowId: string) => GridRow | und
   }
   return changed ? next : overlay;
 }
+
+export function without(overlay: Overlay, rowId: string, columnId: string): Overlay {
+  const next = new Map(overlay);
+  next.delete(cellKey(rowId, columnId));
+  return next;
+}

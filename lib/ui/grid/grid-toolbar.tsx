@@ -1,0 +1,118 @@
+'use client';
+
+import { ArrowDownToLine, Eye, Plus, Redo2, Trash2, Undo2 } from 'lucide-react';
+import { Button } from '../actions/button';
+
+export interface GridToolbarProps {
+  readonly doubtful: number;
+  readonly counts: {
+    readonly saving: number;
+    readonly failed: number;
+    readonly conflicts: number;
+    readonly invalid: number;
+  };
+  readonly canUndo: boolean;
+  readonly canRedo: boolean;
+  readonly readOnly: boolean;
+  readonly selectedRows: number;
+  readonly onNextDoubtful: () => void;
+  readonly onUndo: () => void;
+  readonly onRedo: () => void;
+  /** Left out in the card form, where there is no selection to fill. */
+  readonly onFillDown?: (() => void) | undefined;
+  readonly onAddRow?: (() => void) | undefined;
+  readonly onRemoveRows?: (() => void) | undefined;
+  readonly onRetry: () => void;
+}
+
+export function GridToolbar(props: GridToolbarProps) {
+  const { doubtful, counts, readOnly } = props;
+  return (
+    <fieldset className="flex min-w-0 flex-wrap items-center gap-2">
+      <legend className="sr-only">Grid tools</legend>
+      <Button
+        look={doubtful > 0 ? 'primary' : 'quiet'}
+        size="small"
+        icon={<Eye aria-hidden="true" className="size-4" />}
+        onClick={props.onNextDoubtful}
+        unavailable={doubtful === 0 && 'no doubtful value left'}
+        aria-keyshortcuts="Alt+N"
+      >
+        Next doubtful ({doubtful})
+      </Button>
+      {readOnly ? null : (
+        <>
+          <Button
+            look="quiet"
+            size="small"
+            icon={<Undo2 aria-hidden="true" className="size-4" />}
+            onClick={props.onUndo}
+            unavailable={!props.canUndo && 'nothing to undo'}
+            aria-keyshortcuts="Control+Z"
+          >
+            Undo
+          </Button>
+          <Button
+            look="quiet"
+            size="small"
+            icon={<Redo2 aria-hidden="true" className="size-4" />}
+            onClick={props.onRedo}
+            unavailable={!props.canRedo && 'nothing to redo'}
+            aria-keyshortcuts="Control+Y"
+          >
+            Redo
+          </Button>
+          {props.onFillDown ? (
+            <Button
+              look="quiet"
+              size="small"
+              icon={<ArrowDownToLine aria-hidden="true" className="size-4" />}
+              onClick={props.onFillDown}
+              aria-keyshortcuts="Control+D"
+            >
+              Fill down
+            </Button>
+          ) : null}
+          {props.onAddRow ? (
+            <Button
+              look="quiet"
+              size="small"
+              icon={<Plus aria-hidden="true" className="size-4" />}
+              onClick={props.onAddRow}
+            >
+              Add row
+            </Button>
+          ) : null}
+          {props.onRemoveRows ? (
+            <Button
+              look="quiet"
+              size="small"
+              icon={<Trash2 aria-hidden="true" className="size-4" />}
+              onClick={props.onRemoveRows}
+            >
+              {props.selectedRows > 1 ? `Remove ${props.selectedRows} rows` : 'Remove row'}
+            </Button>
+          ) : null}
+        </>
+      )}
+      <p className="ml-auto text-sm text-clay" data-testid="grid-saved">
+        {stateSentence(counts)}
+        {counts.failed > 0 ? (
+          <Button look="plain" size="small" onClick={props.onRetry}>
+            Try again
+          </Button>
+        ) : null}
+      </p>
+    </fieldset>
+  );
+}
+
+function stateSentence(counts: GridToolbarProps['counts']): string {
+  const parts = [
+    counts.failed > 0 && `${counts.failed} not saved, the text is kept`,
+    counts.invalid > 0 && `${counts.invalid} to mend before saving`,
+    counts.conflicts > 0 && `${counts.conflicts} with two values`,
+    counts.saving > 0 && `saving ${counts.saving}`,
+  ].filter((part) => part !== false);
+  return parts.length > 0 ? `${parts.join(', ')}.` : 'All saved.';
+}
