@@ -41,11 +41,13 @@ export function FilesSection() {
           Pick files without a card
         </FileButton>
       </div>
-      <ul role="status">
-        {said.map((line) => (
-          <li key={line}>{line}</li>
-        ))}
-      </ul>
+      <div role="status">
+        <ul>
+          {said.map((line) => (
+            <li key={line}>{line}</li>
+          ))}
+        </ul>
+      </div>
     </div>
   );
 }

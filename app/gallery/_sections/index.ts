@@ -1,7 +1,9 @@
 import type { ComponentType } from 'react';
 import { ActionsSection } from './actions';
+import { ChartsSection } from './charts';
 import { ColoursSection } from './colours';
 import { DialogsSection } from './dialogs';
+import { EmailsSection } from './emails';
 import { FieldsSection } from './fields';
 import { FilesSection } from './files';
 import { FrameSection } from './frame';
@@ -9,6 +11,7 @@ import { LandingSection } from './landing';
 import { MessagesSection } from './messages';
 import { ShowSection } from './show';
 import { TypeSection } from './type';
+import { VerdictsSection } from './verdicts';
 import { WaitingSection } from './waiting';
 
 type GallerySection = { id: string; title: string; Section: ComponentType };
@@ -26,4 +29,7 @@ export const sections: readonly GallerySection[] = [
   { id: 'files', title: 'Files', Section: FilesSection },
   { id: 'frame', title: 'Frame and layers', Section: FrameSection },
   { id: 'landing', title: 'Landing', Section: LandingSection },
+  { id: 'charts', title: 'Charts', Section: ChartsSection },
+  { id: 'verdicts', title: 'Verdicts', Section: VerdictsSection },
+  { id: 'emails', title: 'E-mails', Section: EmailsSection },
 ];

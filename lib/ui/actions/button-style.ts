@@ -17,7 +17,7 @@ export function buttonClass(look: ButtonLook, size: ButtonSize = 'normal', wide 
     look === 'plain' ? '' : 'border-b-3 active:border-b active:translate-y-0.5',
     size === 'small' ? 'min-h-9 px-3 py-1 text-sm' : 'min-h-(--target) px-4 py-2',
     wide && 'w-full',
-    'aria-disabled:cursor-not-allowed aria-disabled:border-dashed aria-disabled:border-fallow aria-disabled:bg-silt aria-disabled:text-clay aria-disabled:no-underline',
+    'aria-busy:cursor-progress unavailable:cursor-not-allowed unavailable:border-dashed unavailable:border-fallow unavailable:bg-silt unavailable:text-clay unavailable:no-underline',
     looks[look],
   );
 }

@@ -59,11 +59,11 @@ const outlines: Record<EmptyShape, ReactNode> = {
 
 export function EmptyState({ shape, title, children, action }: EmptyStateProps) {
   return (
-    <div className="flex flex-wrap items-center gap-x-10 gap-y-4 py-4">
-      <svg viewBox="0 0 252 132" className="w-64 max-w-full flex-none" aria-hidden="true" focusable="false">
+    <div className="flex flex-wrap items-center gap-x-8 gap-y-4 py-4">
+      <svg viewBox="12 6 232 122" className="w-48 max-w-full flex-none" aria-hidden="true" focusable="false">
         {outlines[shape]}
       </svg>
-      <div className="min-w-0 flex-1 basis-64">
+      <div className="min-w-0 flex-1 basis-52">
         <h3 className="text-lg">{title}</h3>
         {children ? <div className="mt-1 max-w-measure text-clay">{children}</div> : null}
         {action ? <div className="mt-4 flex flex-wrap gap-3">{action}</div> : null}

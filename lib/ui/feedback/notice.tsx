@@ -28,7 +28,7 @@ export function Notice({ tone = 'info', title, children, action, live = false, c
       data-tone={tone}
       className={cx('flex overflow-hidden rounded-sm border text-humus', ground[tone], className)}
     >
-      <span className={cx('flex w-11 flex-none justify-center pt-3.5 text-chalk', tab[tone])}>
+      <span className={cx('flex w-10 flex-none justify-center pt-3.5 text-chalk', tab[tone])}>
         <ToneMark tone={tone} className="size-5" />
       </span>
       <div className="min-w-0 flex-1 px-4 py-3">

@@ -9,7 +9,6 @@ type ProgressBarProps = {
 /** The datum line, drawn as far as the work has come. Sizes are SVG attributes: no style attribute in the page. */
 export function ProgressBar({ label, percent, valueText }: ProgressBarProps) {
   const known = percent === undefined ? undefined : Math.min(100, Math.max(0, Math.round(percent)));
-  const end = known ?? 50;
   return (
     <div className="grid gap-1">
       <p className="flex flex-wrap justify-between gap-x-4 text-sm">
@@ -39,8 +38,14 @@ export function ProgressBar({ label, percent, valueText }: ProgressBarProps) {
             strokeDasharray="1 5"
             strokeLinecap="round"
           />
-          <rect x="0" y="6" width={`${end}%`} height="4" rx="2" fill="#1D4E63" />
-          <circle cx={`${end}%`} cy="8" r="7" fill="#1D4E63" />
+          {known === undefined ? (
+            ['0%', '36%', '72%'].map((x) => <rect key={x} x={x} y="6" width="28%" height="4" rx="2" fill="#1D4E63" />)
+          ) : (
+            <>
+              <rect x="0" y="6" width={`${known}%`} height="4" rx="2" fill="#1D4E63" />
+              <circle cx={`${known}%`} cy="8" r="7" fill="#1D4E63" />
+            </>
+          )}
         </svg>
       </div>
     </div>

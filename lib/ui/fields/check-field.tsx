@@ -17,7 +17,7 @@ export function CheckField({ name, label, hint, error, className, id, ...rest }:
         <span>{label}</span>
       </label>
       {hint ? (
-        <p id={`${field.id}-hint`} className="-mt-2 max-w-measure pl-10 text-sm text-clay">
+        <p id={`${field.id}-hint`} className="-mt-2 max-w-measure pl-9 text-sm text-clay">
           {hint}
         </p>
       ) : null}

@@ -27,7 +27,7 @@ export function ErrorSummary({ problem, errors, scope }: ErrorSummaryProps) {
       data-testid="error-summary"
       className="flex overflow-hidden rounded-sm border border-iron bg-iron-wash"
     >
-      <span className="flex w-11 flex-none justify-center bg-iron pt-3.5 text-chalk">
+      <span className="flex w-10 flex-none justify-center bg-iron pt-3.5 text-chalk">
         <ToneMark tone="error" className="size-5" />
       </span>
       <div className="px-4 py-3">

@@ -37,16 +37,19 @@ export function Frame({
     <div className="flex min-h-dvh flex-col">
       <SkipLink />
       {strip}
-      <header data-frame="bar-top" className={inSite ? undefined : 'datum'}>
-        <div className={inSite ? undefined : 'datum-inner'}>
-          <div className="page-wrap flex min-h-16 flex-wrap items-end gap-x-5">
-            <Link href="/" className="flex min-h-16 items-center rounded-sm" aria-label="Loamline, today">
-              <Wordmark className="max-sm:[&>span]:sr-only" />
-            </Link>
-            {siteSwitcher ? <div className="flex min-h-16 min-w-0 items-center">{siteSwitcher}</div> : null}
-            <NavRow items={nav} label="Main" className="hidden md:block md:ml-auto" />
-            {account ? <div className="ml-auto flex min-h-16 items-center md:ml-0">{account}</div> : null}
-          </div>
+      <header className={inSite ? undefined : 'datum'}>
+        <div className="page-wrap flex min-h-16 flex-wrap items-end gap-x-5">
+          <Link href="/" className="flex min-h-16 items-center rounded-sm" aria-label="Loamline, today">
+            <Wordmark className="max-sm:[&>span]:sr-only" />
+          </Link>
+          {siteSwitcher ? <div className="flex min-h-16 min-w-0 items-center">{siteSwitcher}</div> : null}
+          <NavRow
+            items={nav}
+            label="Main"
+            onLine={!inSite}
+            className={inSite ? 'hidden min-h-16 items-center md:ml-auto md:flex' : 'hidden md:ml-auto md:block'}
+          />
+          {account ? <div className="ml-auto flex min-h-16 items-center md:ml-0">{account}</div> : null}
         </div>
         {inSite ? (
           <div className="datum max-md:pb-[5px]">
@@ -60,7 +63,7 @@ export function Frame({
         {children}
       </main>
       <Footer links={footerLinks} />
-      <NavBar items={phoneNav ?? [...nav, ...(siteNav ?? [])]} label="Places" />
+      <NavBar items={phoneNav ?? (inSite ? [...nav.slice(0, 1), ...siteNav, ...nav.slice(1)] : nav)} label="Places" />
     </div>
   );
 }

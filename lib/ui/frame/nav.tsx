@@ -24,7 +24,15 @@ function Waiting({ count }: { count: number | undefined }) {
 }
 
 /** The row of links that stands on the datum line; the dot is where you are. */
-export function NavRow({ items, label, className }: { items: readonly NavItem[]; label: string; className?: string }) {
+type NavRowProps = {
+  items: readonly NavItem[];
+  label: string;
+  className?: string;
+  /** Off when another row stands on the line. */
+  onLine?: boolean;
+};
+
+export function NavRow({ items, label, className, onLine = true }: NavRowProps) {
   const current = currentItem(items, usePathname());
   return (
     <nav aria-label={label} className={className}>
@@ -34,7 +42,10 @@ export function NavRow({ items, label, className }: { items: readonly NavItem[];
             <Link
               href={item.href}
               aria-current={item === current ? 'page' : undefined}
-              className="datum-stop flex min-h-(--target) items-center gap-2 px-3 pb-3 font-semibold text-clay hover:text-gley-deep aria-[current]:text-humus"
+              className={cx(
+                'flex min-h-(--target) items-center gap-2 px-3 font-semibold text-clay hover:text-gley-deep aria-[current]:text-humus',
+                onLine && 'datum-stop pb-3',
+              )}
             >
               {item.label}
               <Waiting count={item.waiting} />
@@ -72,11 +83,13 @@ export function NavBar({ items, label }: { items: readonly NavItem[]; label: str
         {shown.map((item) => (
           <li key={item.href} className="min-w-0 flex-1">
             <Link href={item.href} aria-current={item === current ? 'page' : undefined} className={place}>
-              <NavIcon name={item.icon} />
-              <span className="flex max-w-full items-center gap-1 leading-tight">
-                <span className="truncate">{item.label}</span>
-                <Waiting count={item.waiting} />
+              <span className="relative">
+                <NavIcon name={item.icon} />
+                <span className="absolute -top-1.5 left-4 leading-none">
+                  <Waiting count={item.waiting} />
+                </span>
               </span>
+              <span className="max-w-full truncate leading-tight">{item.label}</span>
             </Link>
           </li>
         ))}

@@ -29,7 +29,7 @@ export function DataTable<Row>({ caption, hideCaption, columns, rows, rowKey, em
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard (WCAG 2.1.1)
     <section className="scroll-frame border-y border-horizon-5" aria-labelledby={id} tabIndex={0}>
       <table className="w-full border-collapse">
-        <caption id={id} className={hideCaption ? 'sr-only' : 'px-3 pt-3 pb-1 text-left font-semibold'}>
+        <caption id={id} className={hideCaption ? 'sr-only' : 'px-4 pt-3 pb-1 text-left font-semibold'}>
           {caption}
         </caption>
         <thead>
@@ -38,7 +38,7 @@ export function DataTable<Row>({ caption, hideCaption, columns, rows, rowKey, em
               <th
                 key={column.key}
                 scope="col"
-                className={cx('px-3 py-2 align-bottom text-sm font-bold', column.numeric ? 'text-right' : 'text-left')}
+                className={cx('px-4 py-2 align-bottom text-sm font-bold', column.numeric ? 'text-right' : 'text-left')}
               >
                 {column.head}
               </th>
@@ -50,7 +50,7 @@ export function DataTable<Row>({ caption, hideCaption, columns, rows, rowKey, em
             <tr key={rowKey(row)} className="border-b border-horizon-5 last:border-0">
               {columns.map((column) => {
                 const look = cx(
-                  'px-3 py-2.5 align-top',
+                  'px-4 py-2.5 align-top',
                   column.numeric ? 'text-right font-figures whitespace-nowrap' : 'text-left',
                 );
                 return column.rowHead ? (
@@ -67,7 +67,7 @@ export function DataTable<Row>({ caption, hideCaption, columns, rows, rowKey, em
           ))}
           {rows.length === 0 ? (
             <tr>
-              <td colSpan={columns.length} className="px-3 py-5 text-clay">
+              <td colSpan={columns.length} className="px-4 py-5 text-clay">
                 {empty ?? 'Nothing here yet.'}
               </td>
             </tr>

@@ -5,7 +5,7 @@ export type Definition = { term: string; said: ReactNode; note?: ReactNode };
 
 export function DefinitionList({ items, className }: { items: readonly Definition[]; className?: string }) {
   return (
-    <dl className={cx('grid max-w-3xl', className)}>
+    <dl className={cx('grid max-w-3xl content-start', className)}>
       {items.map((item) => (
         <div
           key={item.term}
