@@ -119,7 +119,7 @@ export function comparable(a: TestPoint, b: TestPoint): Comparability {
     if (!isPossible(test))
       return refuse(
         'out-of-range',
-        `${test.value} ${test.unit} is not possible for ${analyte(test.analyte).label}. Correct the result first.`,
+        `A reading of ${test.value} ${test.unit} is not possible for ${analyte(test.analyte).label}. Correct the result first.`,
       );
     if (test.qualifier === 'above')
       return refuse(
