@@ -1,4 +1,4 @@
-import { formatDay, formatRange, formatSigned, withUnit } from './numbers';
+import { changeDecimals, formatDay, formatRange, formatSigned, withUnit } from './numbers';
 import { INK } from './palette';
 import { IntervalBar, StripAxis, StripDot, StripFrame, StripUpright, StripWord } from './strip-parts';
 import { type StripScale, stripScale } from './strip-scale';
@@ -10,7 +10,7 @@ export function compareSentence({ analyte, earlier, later, outcome, locale }: Co
     `${t.label} (${formatDay(t.takenOn, locale)}) ${withUnit(t.printed, analyte.unit)}`;
   const both = `${say(earlier)}; ${say(later)}.`;
   if (outcome.kind === 'refused') return `${both} No difference is given: ${outcome.reason}`;
-  const more = analyte.decimals + 1;
+  const more = changeDecimals(analyte);
   const { difference, moreThanNoise, widenedBy } = outcome;
   const wider = widenedBy.length === 0 ? '' : ` The interval is wider for ${widenedBy.join(' and ')}.`;
   const noise = moreThanNoise
@@ -38,7 +38,7 @@ export function CompareStrip(props: CompareStripProps) {
         <StripAxis scale={scale} y={112} />
       </StripFrame>
       {outcome.kind === 'difference' && (
-        <Difference difference={outcome.difference} decimals={analyte.decimals} least={least} />
+        <Difference difference={outcome.difference} decimals={changeDecimals(analyte)} least={least} />
       )}
       <figcaption className="max-w-measure text-sm text-clay">{compareSentence(props)}</figcaption>
     </figure>
@@ -77,7 +77,7 @@ function Difference({ difference, decimals, least }: { difference: Interval; dec
       <IntervalBar scale={scale} y={40} low={difference.low} high={difference.high} />
       <StripDot scale={scale} value={difference.estimate} y={40} />
       <StripWord scale={scale} value={difference.estimate} y={24} bold>
-        {`difference ${formatSigned(difference.estimate, decimals + 1)}`}
+        {`difference ${formatSigned(difference.estimate, decimals)}`}
       </StripWord>
       <StripAxis scale={scale} y={64} zeroWord="no change" />
     </StripFrame>

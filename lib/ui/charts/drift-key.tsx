@@ -66,7 +66,7 @@ export function DriftKey({ points, amendments, flags, locale }: DriftKeyProps) {
         </p>
       ))}
       {flags && (
-        <ol className="grid gap-x-6 sm:grid-cols-2">
+        <ol className="grid gap-x-6 gap-y-1 sm:grid-cols-2">
           {sorted.map((a, index) => (
             <li key={a.id} className="flex gap-2">
               <span className="inline-grid h-5 min-w-5 flex-none place-items-center border border-core-red px-1 text-xs font-bold text-core-red">

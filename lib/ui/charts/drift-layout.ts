@@ -5,7 +5,7 @@ import type { ChartAnalyte, DriftAmendment, DriftPoint, TargetBand } from './typ
 
 /** Above this many amendments, or where their words would run into each other, numbered flags stand on the axis. */
 export const MOST_LABELS = 4;
-const CHAR_WIDTH = 6.4;
+const CHAR_WIDTH = 7;
 const MARGIN = { top: 26, right: 58, left: 46 } as const;
 const DOT_GAP = 20;
 

@@ -9,7 +9,7 @@ interface DriftMarksProps {
   readonly band: TargetBand | null;
 }
 
-const SMALL = 12;
+const SMALL = 13;
 
 /** Everything that is seen of a drift chart. The interactive chart lays its cursor and tooltip over it. */
 export function DriftMarks({ layout, analyte, band }: DriftMarksProps) {
@@ -160,12 +160,20 @@ function Datum({ layout }: { layout: DriftLayout }) {
 }
 
 function Breaks({ layout }: { layout: DriftLayout }) {
+  const [only, ...more] = layout.breaks;
+  // One break has room for its reason; several are told in the list below the chart.
+  const words = only !== undefined && more.length === 0 && layout.plot.right - only.x > (only.reason.length + 12) * 7.5;
   return (
     <g stroke={INK.humus} strokeWidth={1.5}>
-      {layout.breaks.map(({ x }) => (
+      {layout.breaks.map(({ x, reason }) => (
         <g key={x}>
           <line x1={x} x2={x} y1={layout.plot.top} y2={layout.plot.bottom} stroke={INK.fallow} strokeDasharray="1 5" />
           <path d={`M${x - 5} ${layout.plot.top + 6}l5 -12M${x} ${layout.plot.top + 6}l5 -12`} fill="none" />
+          {words && (
+            <text x={x + 12} y={layout.plot.top - 6} fill={INK.clay} stroke="none">
+              {reason}, not joined
+            </text>
+          )}
         </g>
       ))}
     </g>

@@ -1,5 +1,5 @@
 import type { DriftRow } from './csv';
-import { formatDay, formatRange, withUnit } from './numbers';
+import { changeDecimals, formatDay, formatRange, withUnit } from './numbers';
 import type { ChartAnalyte } from './types';
 
 interface DriftTableProps {
@@ -34,7 +34,7 @@ export function DriftTable({ title, rows, analyte, locale }: DriftTableProps) {
               <td className="py-1 pr-4 text-right font-figures whitespace-nowrap">{row.printed}</td>
               <td className="py-1 pr-4 font-figures whitespace-nowrap">
                 {row.low !== null && row.high !== null && row.value !== null
-                  ? formatRange(row.low, row.high, analyte.decimals + 1)
+                  ? formatRange(row.low, row.high, changeDecimals(analyte))
                   : ''}
               </td>
               <td className="min-w-40 py-1 pr-4">

@@ -1,4 +1,4 @@
-import { formatDay, formatRange, withUnit } from './numbers';
+import { changeDecimals, formatDay, formatRange, withUnit } from './numbers';
 import type { ChartAnalyte, DriftPoint } from './types';
 
 interface DriftTipProps {
@@ -17,7 +17,7 @@ export function DriftTip({ point, analyte, locale }: DriftTipProps) {
         {analyte.label} <span className="font-figures">{withUnit(point.printed, analyte.unit)}</span>
       </p>
       {point.qualifier === 'exact' && point.low !== null && point.high !== null && (
-        <p className="text-clay">95% range {formatRange(point.low, point.high, analyte.decimals + 1)}</p>
+        <p className="text-clay">95% range {formatRange(point.low, point.high, changeDecimals(analyte))}</p>
       )}
       {point.qualifier === 'below' && <p className="text-clay">below what the laboratory can read</p>}
       {point.qualifier === 'above' && <p className="text-clay">above what the laboratory can read</p>}

@@ -1,4 +1,4 @@
-import { formatDay, formatRange, withUnit } from './numbers';
+import { changeDecimals, formatDay, formatRange, withUnit } from './numbers';
 import { INK } from './palette';
 import { IntervalBar, StripAxis, StripDot, StripFrame, StripLink, StripWord, Zone } from './strip-parts';
 import { stripScale } from './strip-scale';
@@ -6,7 +6,7 @@ import type { DumbbellEnd, DumbbellProps } from './types';
 
 export function dumbbellSentence(props: DumbbellProps): string {
   const { analyte, before, after, intended, target, intervalWords = '95% range', locale } = props;
-  const more = analyte.decimals + 1;
+  const more = changeDecimals(analyte);
   const end = (word: string, e: DumbbellEnd): string => {
     const range = e.low === null || e.high === null ? '' : ` (${intervalWords} ${formatRange(e.low, e.high, more)})`;
     return `${word} ${withUnit(e.printed, analyte.unit)} on ${formatDay(e.takenOn, locale)}${range}`;
@@ -32,6 +32,8 @@ export function Dumbbell(props: DumbbellProps) {
     intended.high,
   ];
   const scale = stripScale(values, { signed: false, least: 4 * 10 ** -analyte.decimals });
+  const landed =
+    (intended.low === null || after.value >= intended.low) && (intended.high === null || after.value <= intended.high);
   const rows = { before: 34, after: 84 };
   const bottom = 112;
   const words = (word: string, e: DumbbellEnd): string => `${word} ${e.printed}, ${formatDay(e.takenOn, locale)}`;
@@ -52,7 +54,13 @@ export function Dumbbell(props: DumbbellProps) {
           {words('before', before)}
         </StripWord>
         <End scale={scale} end={after} y={rows.after} />
-        <StripWord scale={scale} value={after.value} y={rows.after + 22} bold>
+        <StripWord
+          scale={scale}
+          value={after.value}
+          y={rows.after + 22}
+          bold
+          ground={landed ? INK.gleyWash : INK.chalk}
+        >
           {words('after', after)}
         </StripWord>
         <StripAxis scale={scale} y={bottom} />

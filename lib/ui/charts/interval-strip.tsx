@@ -1,4 +1,4 @@
-import { formatRange, formatSigned, withUnit } from './numbers';
+import { changeDecimals, formatRange, formatSigned, withUnit } from './numbers';
 import { INK } from './palette';
 import { IntervalBar, StripAxis, StripDot, StripFrame, StripUpright, StripWord, Zone } from './strip-parts';
 import { stripScale } from './strip-scale';
@@ -7,7 +7,7 @@ import type { IntervalStripProps } from './types';
 /** The strip in words; what a screen reader hears and what stands under the drawing. */
 export function intervalSentence(props: IntervalStripProps): string {
   const { analyte, planned, change, half, oneAndHalf, comparedWith } = props;
-  const more = analyte.decimals + 1;
+  const more = changeDecimals(analyte);
   const [zoneLow, zoneHigh] = zoneOf(planned, half, oneAndHalf);
   const seen = withUnit(formatSigned(change.estimate, more), analyte.unit);
   const than = comparedWith === undefined ? '' : `, ${comparedWith}`;
@@ -26,11 +26,12 @@ function zoneOf(planned: number, half: number, oneAndHalf: number | null): reado
 export function IntervalStrip(props: IntervalStripProps) {
   const { analyte, planned, change, half, oneAndHalf, hideSentence = false } = props;
   const [zoneLow, zoneHigh] = zoneOf(planned, half, oneAndHalf);
-  const more = analyte.decimals + 1;
+  const more = changeDecimals(analyte);
   const scale = stripScale([0, planned, half, oneAndHalf, change.estimate, change.low, change.high], {
     signed: true,
     least: 4 * 10 ** -analyte.decimals,
   });
+  const inZone = (zoneLow === null || change.estimate >= zoneLow) && (zoneHigh === null || change.estimate <= zoneHigh);
   const top = 24;
   const bottom = 86;
   const middle = 62;
@@ -45,7 +46,13 @@ export function IntervalStrip(props: IntervalStripProps) {
         </StripWord>
         <IntervalBar scale={scale} y={middle} low={change.low} high={change.high} />
         <StripDot scale={scale} value={change.estimate} y={middle} />
-        <StripWord scale={scale} value={change.estimate} y={middle - 14} bold>
+        <StripWord
+          scale={scale}
+          value={change.estimate}
+          y={middle - 14}
+          bold
+          ground={inZone ? INK.gleyWash : INK.chalk}
+        >
           {`seen ${formatSigned(change.estimate, more)}`}
         </StripWord>
         <StripAxis scale={scale} y={bottom + 2} zeroWord="no change" />

@@ -21,6 +21,11 @@ export function formatRange(low: number | null, high: number | null, decimals: n
   return `${write(low, decimals)} to ${write(high, decimals)}`;
 }
 
+/** A change is finer than the values it comes from, except where those are whole numbers. */
+export function changeDecimals(analyte: { readonly decimals: number }): number {
+  return analyte.decimals === 0 ? 0 : analyte.decimals + 1;
+}
+
 /** "6.3", "41 ppm" */
 export function withUnit(text: string, unit: string): string {
   return unit === '' ? text : `${text} ${unit}`;

@@ -36,7 +36,7 @@ export function StripAxis({ scale, y, zeroWord }: { scale: StripScale; y: number
         </g>
       ))}
       {zeroWord !== undefined && (
-        <text x={pct(scale.at(0))} y={y + 36} textAnchor={anchorAt(scale.at(0))} fill={INK.humus} fontSize="12">
+        <text x={pct(scale.at(0))} y={y + 36} textAnchor={anchorAt(scale.at(0), 9)} fill={INK.humus} fontSize="12">
           {zeroWord}
         </text>
       )}
@@ -131,10 +131,20 @@ interface WordProps {
   readonly children: string;
   readonly colour?: string;
   readonly bold?: boolean;
+  /** Colour the words stand on. */
+  readonly ground?: string;
 }
 
 /** Words at a value, kept inside the strip and readable over a line. */
-export function StripWord({ scale, value, y, children, colour = INK.humus, bold = false }: WordProps) {
+export function StripWord({
+  scale,
+  value,
+  y,
+  children,
+  colour = INK.humus,
+  bold = false,
+  ground = INK.chalk,
+}: WordProps) {
   const at = scale.at(value);
   return (
     <text
@@ -143,7 +153,7 @@ export function StripWord({ scale, value, y, children, colour = INK.humus, bold 
       textAnchor={anchorAt(at)}
       fill={colour}
       fontWeight={bold ? 700 : 400}
-      stroke={INK.chalk}
+      stroke={ground}
       strokeWidth="3"
       paintOrder="stroke"
     >

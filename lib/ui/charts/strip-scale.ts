@@ -37,7 +37,7 @@ export function stripScale(
 }
 
 /** Where a label at this place must be anchored so that it stays inside the strip. */
-export function anchorAt(percent: number): 'start' | 'middle' | 'end' {
-  if (percent < 22) return 'start';
-  return percent > 78 ? 'end' : 'middle';
+export function anchorAt(percent: number, rim = 22): 'start' | 'middle' | 'end' {
+  if (percent < rim) return 'start';
+  return percent > 100 - rim ? 'end' : 'middle';
 }

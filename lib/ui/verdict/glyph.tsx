@@ -46,9 +46,7 @@ const DRAWINGS: Record<Verdict, ReactNode> = {
   'cannot tell yet': (
     <>
       <path d="M4 26C8 26 12 25 16 23" />
-      <path d="M31 15.5C34 13.5 38 11 43 8" strokeDasharray="4 4" />
-      <circle cx="20.5" cy="21" r="0.6" fill={HUMUS} />
-      <circle cx="26.5" cy="18" r="0.6" fill={HUMUS} />
+      <path d="M31 14.5C35 12.5 39 10 44 7" />
     </>
   ),
 };
@@ -69,7 +67,6 @@ export function VerdictGlyph({ verdict, small = false }: { verdict: Verdict; sma
       strokeLinecap="round"
       strokeLinejoin="round"
     >
-      <rect width="48" height="32" fill="#FBF7F0" stroke="none" />
       <rect y="9" width="48" height="13" fill={WASH} stroke="none" />
       <path d="M1 9h46M1 22h46" stroke={GLEY} strokeWidth="1.5" strokeDasharray="0.5 3.5" />
       {DRAWINGS[verdict]}

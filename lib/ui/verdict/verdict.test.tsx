@@ -11,7 +11,7 @@ describe('VerdictGlyph', () => {
     expect(new Set(drawings).size).toBe(VERDICTS.length);
     for (const html of drawings) {
       const colours = new Set(html.match(/#[0-9A-F]{6}/gi));
-      expect([...colours].sort()).toEqual(['#1D4E63', '#211A16', '#DDE9EC', '#FBF7F0']);
+      expect([...colours].sort()).toEqual(['#1D4E63', '#211A16', '#DDE9EC']);
       expect(html).toContain('aria-hidden="true"');
       expect(html).not.toContain('style=');
     }
