@@ -18,7 +18,16 @@ import { plot } from './sites';
 
 export type PlanState = 'draft' | 'adopted' | 'spread' | 'abandoned';
 /** The material as it was that day: later edits of a catalogue entry never rewrite the past. */
-export type FrozenMaterial = { key: string; name: string; analysis: Record<string, number>; source: string };
+export type FrozenMaterial = {
+  key: string;
+  name: string;
+  /** How it acts with time; null when it is not known to change a test by itself. */
+  reaction: 'sulfur' | 'lime' | 'soluble-salt' | null;
+  /** Analytes it acts on, whatever it was meant for. */
+  affects: string[];
+  analysis: Record<string, number>;
+  source: string;
+};
 
 export const plan = pgTable(
   'plan',

@@ -9,7 +9,7 @@ import { type AuditEntry, audit } from './audit';
 import type { Ctx, SignedIn } from './context';
 import { withPeople, withSite } from './transaction';
 
-type Guard = { kind: 'site'; act: Act } | { kind: 'person' } | { kind: 'public' } | { kind: 'worker' };
+export type Guard = { kind: 'site'; act: Act } | { kind: 'person' } | { kind: 'public' } | { kind: 'worker' };
 
 /** A verb is called as `verb({ ctx, input })` and carries its guard and schema, so that routes, the API description and the matrix test read them. */
 export type Verb<S extends z.ZodType, R, G extends Guard = Guard> = ((call: {
@@ -100,6 +100,19 @@ export function personVerb<S extends z.ZodType, R>(spec: {
     const sessionId = ctx.actor.kind === 'person' ? ctx.actor.sessionId : '';
     const parsed = parse(spec.input, input);
     return withPeople((tx) => spec.run({ ctx, tx, person, sessionId, input: parsed }));
+  };
+  return Object.assign(call, { guard: { kind: 'person' as const }, schema: spec.input });
+}
+
+/** A person's verb that opens its own transactions: over several sites one after the other, or around a password hash. */
+export function openPersonVerb<S extends z.ZodType, R>(spec: {
+  input: S;
+  run: (tools: { ctx: Ctx; person: SignedIn; sessionId: string; input: z.output<S> }) => Promise<R>;
+}): Verb<S, R, { kind: 'person' }> {
+  const call = async ({ ctx, input }: { ctx: Ctx; input: unknown }): Promise<R> => {
+    const person = signedIn(ctx);
+    const sessionId = ctx.actor.kind === 'person' ? ctx.actor.sessionId : '';
+    return spec.run({ ctx, person, sessionId, input: parse(spec.input, input) });
   };
   return Object.assign(call, { guard: { kind: 'person' as const }, schema: spec.input });
 }

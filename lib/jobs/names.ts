@@ -4,7 +4,11 @@ import { z } from 'zod';
 export const JOBS = {
   'read-report': { payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }), expireInSeconds: 150, retryLimit: 3 },
   'send-mail': { payload: z.strictObject({ id: z.uuid() }), expireInSeconds: 60, retryLimit: 8 },
-  'recheck-effects': { payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }), expireInSeconds: 60, retryLimit: 3 },
+  'recheck-effects': {
+    payload: z.strictObject({ siteId: z.uuid(), id: z.uuid() }),
+    expireInSeconds: 60,
+    retryLimit: 3,
+  },
 } as const;
 
 export type JobName = keyof typeof JOBS;

@@ -1,8 +1,8 @@
-import type { JobDefinition, JobTools } from './job';
+import type { JobDefinition } from './job';
 import type { JobName } from './names';
+import { recheckEffectsJob } from './recheckEffects/definition';
 import { sendMailJob } from './sendMail/definition';
 
 type AnyJob = { [N in JobName]: JobDefinition<N> }[JobName];
 
-export const JOB_DEFINITIONS: readonly AnyJob[] = [sendMailJob];
-export type { JobTools };
+export const JOB_DEFINITIONS: readonly AnyJob[] = [recheckEffectsJob, sendMailJob];

@@ -2,6 +2,7 @@ import { makeContext } from '@/lib/data/context';
 import { requeueMail } from '@/lib/data/mail/requeueMail';
 import { env } from '@/lib/env';
 import { log } from '@/lib/log';
+import { sweepReminders } from './sweepReminders/handler';
 
 type Sweep = { name: string; run: (ctx: Awaited<ReturnType<typeof makeContext>>) => Promise<unknown> };
 
@@ -9,7 +10,10 @@ type Sweep = { name: string; run: (ctx: Awaited<ReturnType<typeof makeContext>>)
  * Sweeps look for what is due by the database's clock. Every worker runs them and any number may at once: what a sweep
  * writes is closed by unique keys and conditional updates, so a clock jump or a second worker changes nothing.
  */
-const SWEEPS: readonly Sweep[] = [{ name: 'mail', run: (ctx) => requeueMail({ ctx, input: {} }) }];
+const SWEEPS: readonly Sweep[] = [
+  { name: 'reminders', run: sweepReminders },
+  { name: 'mail', run: (ctx) => requeueMail({ ctx, input: {} }) },
+];
 
 export function startSweeps(): { stop: () => Promise<void> } {
   let running: Promise<void> = Promise.resolve();

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import type { z } from 'zod';
 import type { Ctx } from '@/lib/data/context';
-import type { Verb } from '@/lib/data/verb';
+import type { Guard } from '@/lib/data/verb';
 import { Problem } from '@/lib/errors';
 import { assertSameOrigin, contextOf, readJson, readQuery } from './_guard';
 import { problemResponse } from './_problem';
@@ -9,15 +9,18 @@ import { problemResponse } from './_problem';
 type Params = { params: Promise<Record<string, string>> };
 type Descriptor = {
   summary: string;
-  guard: Verb<z.ZodType, unknown>['guard'];
+  guard: Guard;
   input: z.ZodType;
   answer: z.ZodType;
   status: number;
 };
 export type RouteHandler = ((request: Request, params: Params) => Promise<Response>) & { descriptor: Descriptor };
 
-type Spec<S extends z.ZodType, R, A extends z.ZodType> = {
-  verb: Verb<S, R>;
+/** A verb of any guard: the wrapper hands it whatever came in, and the verb's own schema decides. */
+type AnyVerb<R> = { guard: Guard; schema: z.ZodType } & ((call: never) => Promise<R>);
+
+type Spec<R, A extends z.ZodType> = {
+  verb: AnyVerb<R>;
   answer: A;
   summary: string;
   status?: number;
@@ -28,7 +31,7 @@ type Spec<S extends z.ZodType, R, A extends z.ZodType> = {
 };
 
 /** The one wrapper: same origin, session, input, verb, typed answer or problem+json. */
-export function route<S extends z.ZodType, R, A extends z.ZodType>(spec: Spec<S, R, A>): RouteHandler {
+export function route<R, A extends z.ZodType>(spec: Spec<R, A>): RouteHandler {
   const handler = async (request: Request, { params }: Params): Promise<Response> => {
     const requestId = randomUUID();
     try {
@@ -65,6 +68,11 @@ export function route<S extends z.ZodType, R, A extends z.ZodType>(spec: Spec<S,
 export function json(value: unknown, status = 200, headers: Record<string, string> = {}): Response {
   return new Response(JSON.stringify(value), {
     status,
-    headers: { 'content-type': 'application/json', 'cache-control': 'no-store', 'x-content-type-options': 'nosniff', ...headers },
+    headers: {
+      'content-type': 'application/json',
+      'cache-control': 'no-store',
+      'x-content-type-options': 'nosniff',
+      ...headers,
+    },
   });
 }

@@ -16,7 +16,10 @@ export const settleMail = workerVerb({
       const change =
         input.answer === 'sent'
           ? { state: 'sent' as const, sentAt: ctx.now, providerId: input.providerId, lastError: null }
-          : { state: input.answer === 'refused' ? ('failed' as const) : ('queued' as const), lastError: input.sentence };
+          : {
+              state: input.answer === 'refused' ? ('failed' as const) : ('queued' as const),
+              lastError: input.sentence,
+            };
       await tx
         .update(outbox)
         .set(change)
