@@ -17,7 +17,7 @@ export type Verb<S extends z.ZodType, R, G extends Guard = Guard> = ((call: {
   input: G extends { kind: 'site' } ? { siteId: string } & z.input<S> : z.input<S>;
 }) => Promise<R>) & { guard: G; schema: S };
 
-function parse<S extends z.ZodType>(schema: S, input: unknown): z.output<S> {
+export function parse<S extends z.ZodType>(schema: S, input: unknown): z.output<S> {
   const parsed = schema.safeParse(input);
   if (parsed.success) return parsed.data;
   const fields: Record<string, string> = {};
@@ -30,7 +30,7 @@ export function signedIn(ctx: Ctx): SignedIn {
   return ctx.actor.person;
 }
 
-function siteIdOf(input: unknown): SiteId {
+export function siteIdOf(input: unknown): SiteId {
   const id = z.object({ siteId: z.uuid() }).safeParse(input);
   if (!id.success) throw notFound();
   return asSiteId(id.data.siteId);
@@ -68,7 +68,7 @@ export function siteVerb<S extends z.ZodType, R>(spec: {
   input: S;
   run: (tools: SiteTools<z.output<S>>) => Promise<R>;
 }): Verb<S, R, { kind: 'site'; act: Act }> {
-  const call = ({ ctx, input }: { ctx: Ctx; input: unknown }): Promise<R> => {
+  const call = async ({ ctx, input }: { ctx: Ctx; input: unknown }): Promise<R> => {
     const person = signedIn(ctx);
     const siteId = siteIdOf(input);
     return withSite(siteId, async (tx) => {
