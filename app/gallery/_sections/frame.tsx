@@ -13,6 +13,11 @@ export function FrameSection() {
           The frame around sign-in
         </Link>
       </li>
+      <li>
+        <Link className="text-link" href="/gallery/landing">
+          The landing page
+        </Link>
+      </li>
     </ul>
   );
 }

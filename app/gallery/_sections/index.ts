@@ -7,7 +7,6 @@ import { EmailsSection } from './emails';
 import { FieldsSection } from './fields';
 import { FilesSection } from './files';
 import { FrameSection } from './frame';
-import { LandingSection } from './landing';
 import { MessagesSection } from './messages';
 import { ShowSection } from './show';
 import { TypeSection } from './type';
@@ -27,8 +26,7 @@ export const sections: readonly GallerySection[] = [
   { id: 'waiting', title: 'Waiting, working, empty', Section: WaitingSection },
   { id: 'show', title: 'Tables, lists, timelines', Section: ShowSection },
   { id: 'files', title: 'Files', Section: FilesSection },
-  { id: 'frame', title: 'Frame and layers', Section: FrameSection },
-  { id: 'landing', title: 'Landing', Section: LandingSection },
+  { id: 'frame', title: 'Whole pages', Section: FrameSection },
   { id: 'charts', title: 'Charts', Section: ChartsSection },
   { id: 'verdicts', title: 'Verdicts', Section: VerdictsSection },
   { id: 'emails', title: 'E-mails', Section: EmailsSection },

@@ -15,11 +15,11 @@ export function Segmented<V extends string>({ label, options, value, onChange }:
   return (
     <fieldset className="min-w-0">
       <legend className="sr-only">{label}</legend>
-      <div className="inline-flex max-w-full flex-wrap gap-x-1 border-b border-fallow">
+      <div className="inline-flex max-w-full gap-x-1 overflow-x-auto border-b border-fallow">
         {options.map((option) => (
           <label
             key={option.value}
-            className="-mb-px flex min-h-(--target) items-center rounded-t-sm border-b-4 border-transparent px-3 font-semibold text-clay hover:bg-silt hover:text-humus has-checked:border-gley has-checked:text-humus has-focus-visible:outline-3 has-focus-visible:outline-gley"
+            className="relative -mb-px flex min-h-(--target) items-center rounded-t-sm border-b-4 border-transparent px-3 font-semibold whitespace-nowrap text-clay hover:bg-silt hover:text-humus has-checked:border-gley has-checked:text-humus has-focus-visible:-outline-offset-3 has-focus-visible:outline-3 has-focus-visible:outline-gley"
           >
             <input
               type="radio"

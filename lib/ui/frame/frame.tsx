@@ -38,8 +38,8 @@ export function Frame({
       <SkipLink />
       {strip}
       <header className={inSite ? undefined : 'datum'}>
-        <div className="page-wrap flex min-h-16 flex-wrap items-end gap-x-5">
-          <Link href="/" className="flex min-h-16 items-center rounded-sm" aria-label="Loamline, today">
+        <div className="page-wrap flex min-h-16 items-end gap-x-2 sm:gap-x-5">
+          <Link href="/" className="flex min-h-16 flex-none items-center rounded-sm" aria-label="Loamline, today">
             <Wordmark className="max-sm:[&>span]:sr-only" />
           </Link>
           {siteSwitcher ? <div className="flex min-h-16 min-w-0 items-center">{siteSwitcher}</div> : null}
@@ -49,7 +49,7 @@ export function Frame({
             onLine={!inSite}
             className={inSite ? 'hidden min-h-16 items-center md:ml-auto md:flex' : 'hidden md:ml-auto md:block'}
           />
-          {account ? <div className="ml-auto flex min-h-16 items-center md:ml-0">{account}</div> : null}
+          {account ? <div className="ml-auto flex min-h-16 flex-none items-center md:ml-0">{account}</div> : null}
         </div>
         {inSite ? (
           <div className="datum max-md:pb-[5px]">

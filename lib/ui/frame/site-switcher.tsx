@@ -18,7 +18,7 @@ export function SiteSwitcher({
   return (
     <Menu
       look="bare"
-      label={<span className="block max-w-40 truncate sm:max-w-64">{current?.name ?? 'Choose a site'}</span>}
+      label={<span className="block truncate sm:max-w-64">{current?.name ?? 'Choose a site'}</span>}
       items={[
         ...sites.map((site) => ({
           key: site.id,

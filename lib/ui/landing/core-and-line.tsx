@@ -84,6 +84,8 @@ type ReadingProps = { x: number; y: number; ph: number; when: string; last: bool
 
 function Reading({ x, y, ph, when, last }: ReadingProps) {
   const reach = SPREAD * 150;
+  // The last reading stands inside the band; its number goes below the band's edge.
+  const under = y + reach + (last ? 33 : 22);
   return (
     <g>
       <path
@@ -92,10 +94,10 @@ function Reading({ x, y, ph, when, last }: ReadingProps) {
         strokeWidth="1.8"
       />
       <circle cx={x} cy={y} r={last ? 10 : 6.5} fill="#1D4E63" stroke="#FBF7F0" strokeWidth="3" />
-      <text x={x} y={y + reach + 22} textAnchor="middle" {...label} fontWeight="700">
+      <text x={x} y={under} textAnchor="middle" {...label} fontWeight="700">
         {ph.toFixed(1)}
       </text>
-      <text x={x} y={y + reach + 41} textAnchor="middle" {...small}>
+      <text x={x} y={under + 19} textAnchor="middle" {...small}>
         {when}
       </text>
     </g>

@@ -6,8 +6,8 @@ export type RoundStep = { title: string; said: ReactNode };
 export function Round({ title, steps }: { title: string; steps: readonly RoundStep[] }) {
   const lengths = ['core-verdict', 'core-chart', 'core-numbers', 'core-page'];
   return (
-    <section className="border-t border-horizon-5 bg-white">
-      <div className="page-wrap pt-10 pb-12">
+    <section className="border-t border-horizon-5">
+      <div className="page-wrap pt-10 pb-2">
         <h2 className="text-2xl">{title}</h2>
         <ol className="layers mt-6 max-w-5xl">
           {steps.map((step, index) => (

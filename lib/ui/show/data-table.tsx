@@ -51,7 +51,7 @@ export function DataTable<Row>({ caption, hideCaption, columns, rows, rowKey, em
               {columns.map((column) => {
                 const look = cx(
                   'px-4 py-2.5 align-top',
-                  column.numeric ? 'text-right font-figures whitespace-nowrap' : 'text-left',
+                  column.numeric ? 'text-right font-figures whitespace-nowrap' : 'min-w-32 text-left',
                 );
                 return column.rowHead ? (
                   <th key={column.key} scope="row" className={cx(look, 'font-semibold')}>

@@ -2,9 +2,9 @@ import { LinkButton } from '@/lib/ui/actions/link-button';
 import { Hero } from '@/lib/ui/landing/hero';
 import { Round } from '@/lib/ui/landing/round';
 
-export function LandingSection() {
+export function LandingExample() {
   return (
-    <div className="-mx-4 border border-horizon-5 sm:mx-0">
+    <>
       <Hero
         title="Did it work?"
         lead="Loamline keeps every soil test of every plot, what you spread in between, and says plainly whether the change you meant is the change that came."
@@ -33,6 +33,6 @@ export function LandingSection() {
           },
         ]}
       />
-    </div>
+    </>
   );
 }
