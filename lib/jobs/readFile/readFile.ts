@@ -1,0 +1,111 @@
+import { type ChildProcess, fork } from 'node:child_process';
+import { existsSync, readFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import { fileURLToPath, pathToFileURL } from 'node:url';
+import { type Reading, refusedReading } from '@/lib/reading/types';
+import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
+import { maxBytesOf, sniffReport } from '@/lib/services/reading/sniff';
+import { HEAP_LIMIT_MB, MEMORY_CHECK_MS, MEMORY_LIMIT_BYTES, TIME_LIMIT_MS } from './limits';
+import { isFromChild, type ToChild } from './messages';
+
+/** In development the child is the TypeScript file beside this one; in a bundle it is bundled beside the worker. */
+const CHILD_FILES = ['./child.ts', './readFileChild.mjs', './readFileChild.js'];
+
+function childProgram(): { path: string; execArgv: string[] } {
+  const heap = `--max-old-space-size=${HEAP_LIMIT_MB}`;
+  for (const name of CHILD_FILES) {
+    const path = fileURLToPath(new URL(name, import.meta.url));
+    if (!existsSync(path)) continue;
+    if (!name.endsWith('.ts')) return { path, execArgv: [heap] };
+    const tsx = pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href;
+    return { path, execArgv: [heap, '--import', tsx] };
+  }
+  throw new Error('The reading process is missing beside the worker.');
+}
+
+/** Resident memory of a process where the system tells it (Linux); 0 elsewhere, where the heap limit alone holds. */
+function residentBytes(pid: number): number {
+  try {
+    const pages = readFileSync(`/proc/${pid}/statm`, 'utf8').split(' ')[1];
+    return Number(pages ?? 0) * 4096;
+  } catch {
+    return 0;
+  }
+}
+
+type RunInput = {
+  message: ToChild;
+  timeLimitMs: number;
+  memoryLimitBytes: number;
+  signal?: AbortSignal | undefined;
+  onPage?: ((page: number, of: number) => void) | undefined;
+};
+
+function run(input: RunInput): Promise<Reading> {
+  const refuse = (code: RefusalCode) =>
+    refusedReading({ file: input.message.fileName, pages: 0, error: refusal(code) });
+  return new Promise((resolve, reject) => {
+    const { path, execArgv } = childProgram();
+    // No environment: the process that opens strangers' files holds no secret.
+    const child: ChildProcess = fork(path, [], {
+      execArgv,
+      env: {},
+      serialization: 'advanced',
+      stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
+    });
+    let killedFor: RefusalCode | null = null;
+    let reading: Reading | null = null;
+    const kill = (code: RefusalCode) => {
+      killedFor ??= code;
+      child.kill('SIGKILL');
+    };
+    const onAbort = () => child.kill('SIGKILL');
+    const clock = setTimeout(() => kill('too-slow'), input.timeLimitMs);
+    const watch = setInterval(() => {
+      if (child.pid !== undefined && residentBytes(child.pid) > input.memoryLimitBytes) kill('too-much-memory');
+    }, MEMORY_CHECK_MS);
+    input.signal?.addEventListener('abort', onAbort, { once: true });
+    child.on('message', (message: unknown) => {
+      if (!isFromChild(message)) return;
+      if (message.type === 'page') input.onPage?.(message.page, message.of);
+      else reading = message.reading;
+    });
+    child.on('error', () => undefined);
+    child.on('close', (_code, signal) => {
+      clearTimeout(clock);
+      clearInterval(watch);
+      input.signal?.removeEventListener('abort', onAbort);
+      if (input.signal?.aborted) reject(new DOMException('Reading was stopped.', 'AbortError'));
+      else if (reading !== null) resolve(reading);
+      else resolve(refuse(killedFor ?? (signal === 'SIGABRT' ? 'too-much-memory' : 'crashed')));
+    });
+    if (input.signal?.aborted) onAbort();
+    else child.send(input.message);
+  });
+}
+
+/**
+ * Reads one file in a process of its own, killed past the limits of time and memory. Every content ends in a Reading,
+ * a refusal included; only an aborted signal rejects.
+ */
+export async function readFile(input: {
+  bytes: Uint8Array;
+  fileName: string;
+  signal?: AbortSignal | undefined;
+  onPage?: ((page: number, of: number) => void) | undefined;
+  timeLimitMs?: number;
+  memoryLimitBytes?: number;
+}): Promise<Reading> {
+  const refuse = (code: RefusalCode) => refusedReading({ file: input.fileName, pages: 0, error: refusal(code) });
+  const sniffed = sniffReport({ bytes: input.bytes, fileName: input.fileName });
+  if (!sniffed.ok) return refuse(sniffed.code);
+  if (input.bytes.length > maxBytesOf(sniffed.kind)) return refuse('too-large');
+  if (sniffed.kind !== 'pdf' && sniffed.kind !== 'csv') return refuse('kept-not-read');
+  return run({
+    message: { kind: sniffed.kind, fileName: input.fileName, bytes: input.bytes },
+    timeLimitMs: input.timeLimitMs ?? TIME_LIMIT_MS,
+    memoryLimitBytes: input.memoryLimitBytes ?? MEMORY_LIMIT_BYTES,
+    signal: input.signal,
+    onPage: input.onPage,
+  });
+}

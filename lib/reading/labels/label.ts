@@ -1,0 +1,201 @@
+import { type AnalyteKey, analyte, type MethodKey, methodsOf, type UnitKey } from '@/lib/domain/analytes';
+import { METHOD_SPELLINGS, NAMES, UNIT_SPELLINGS } from './dictionary';
+import { findWhole, normal } from './normal';
+
+export type Label = {
+  readonly analyte: AnalyteKey;
+  readonly text: string;
+  /** 1 for a name found as it stands, less the more had to be cut away to find it. */
+  readonly strength: number;
+  readonly unit: UnitKey | null;
+  readonly unitPrinted: string | null;
+  readonly method: MethodKey | null;
+  readonly methodPrinted: string | null;
+  readonly form: string | null;
+  readonly ambiguous: string | null;
+};
+
+const NOISE =
+  /\b(soil|test|result|results|value|level|available|avail|extractable|extr|exchangeable|exch|by|in|of|the|as|reported|measured|analysis|estimated|est|x|plant)\b/g;
+
+/** The unit a text carries, with the characters that say so. */
+export function unitIn(text: string): { unit: UnitKey; printed: string; rest: string } | null {
+  const plain = normal(text);
+  for (const { unit, text: spelling } of UNIT_SPELLINGS) {
+    const at = findWhole(plain, spelling);
+    if (at < 0) continue;
+    const rest = `${plain.slice(0, at)} ${plain.slice(at + spelling.length)}`.replace(/\s+/g, ' ').trim();
+    return { unit, printed: printedUnit(text, spelling), rest };
+  }
+  return null;
+}
+
+function printedUnit(text: string, spelling: string): string {
+  const bare = text
+    .replace(/[()[\],]/g, ' ')
+    .replace(/\s+/g, ' ')
+    .trim();
+  const at = bare.toLowerCase().indexOf(spelling);
+  return at < 0 ? spelling : bare.slice(at, at + spelling.length);
+}
+
+/** The unit when the text is a unit and nothing else. */
+export function unitOnly(text: string): { unit: UnitKey; printed: string } | null {
+  const found = unitIn(text);
+  if (found === null || found.rest !== '') return null;
+  return { unit: found.unit, printed: text.replace(/^[([]|[)\]]$/g, '').trim() };
+}
+
+/** The method of that analyte which a text names, longest spelling first. */
+export function methodIn(key: AnalyteKey, text: string): { method: MethodKey; printed: string } | null {
+  const plain = normal(text);
+  let best: { method: MethodKey; printed: string; length: number } | null = null;
+  for (const method of methodsOf(key)) {
+    for (const spelling of method.spellings) {
+      const wanted = normal(spelling);
+      if (wanted.length < 2 || wanted.length <= (best?.length ?? 0)) continue;
+      if (findWhole(plain, wanted) >= 0) best = { method: method.key, printed: spelling, length: wanted.length };
+    }
+  }
+  return best;
+}
+
+function cutMethods(text: string): string {
+  let rest = text;
+  for (const spelling of METHOD_SPELLINGS) {
+    const at = findWhole(rest, spelling);
+    if (at >= 0) rest = `${rest.slice(0, at)} ${rest.slice(at + spelling.length)}`;
+  }
+  return rest.replace(/\s+/g, ' ').trim();
+}
+
+/** Short symbols count only in a case that a laboratory would print: "Mg", "MG", never "mg" or "as". */
+function caseFits(raw: string, spelling: string): boolean {
+  if (spelling.length > 3) return true;
+  const letters = raw.replace(/[^A-Za-z]/g, '');
+  return raw.includes(spelling) || letters === letters.toUpperCase();
+}
+
+function lookUp(plain: string, raw: string): { analyte: AnalyteKey; ambiguous: string | null } | null {
+  const named = (NAMES.get(plain) ?? []).filter((entry) => caseFits(raw, entry.spelling));
+  const exact = named.find((entry) => entry.spelling === raw.trim()) ?? named[0];
+  if (exact === undefined) return null;
+  if (plain === 'na' && /NA/.test(raw)) {
+    return { analyte: 'sodium', ambiguous: '"NA" can mean sodium, neutralizable acidity or not analysed.' };
+  }
+  if (plain === 'p2')
+    return { analyte: 'phosphorus', ambiguous: '"P2" is strong Bray at one laboratory and Olsen at another.' };
+  const other = named.find((entry) => entry.analyte !== exact.analyte && entry.spelling.length > 1);
+  const clash = other === undefined || exact.analyte === 'sat_na' ? null : analyte(other.analyte).label;
+  return { analyte: exact.analyte, ambiguous: clash === null ? null : `The name can also mean: ${clash}.` };
+}
+
+function sameInAllParts(raw: string): AnalyteKey | null {
+  const parts = raw
+    .split(/[(),;\n]|\s[-–]\s/)
+    .map((part) => part.trim())
+    .filter((part) => part !== '');
+  if (parts.length < 2) {
+    const words = normal(raw).split(' ');
+    for (let cut = 1; cut < words.length; cut++) {
+      const first = NAMES.get(words.slice(0, cut).join(' '))?.[0]?.analyte;
+      if (first !== undefined && first === NAMES.get(words.slice(cut).join(' '))?.[0]?.analyte) return first;
+    }
+    return null;
+  }
+  let found: AnalyteKey | null = null;
+  for (const part of parts) {
+    const one = lookUp(normal(part), part) ?? lookUp(normal(cutMethods(normal(part))), part);
+    const only = unitOnly(part) !== null || cutMethods(normal(part)).replace(NOISE, '').trim() === '';
+    if (one === null && !only) return null;
+    if (one !== null && found !== null && one.analyte !== found) return null;
+    if (one !== null) found = one.analyte;
+  }
+  return found;
+}
+
+const SHARES: Partial<Record<AnalyteKey, AnalyteKey>> = {
+  potassium: 'sat_k',
+  calcium: 'sat_ca',
+  magnesium: 'sat_mg',
+  sodium: 'sat_na',
+  exchangeable_acidity: 'sat_h',
+  aluminium: 'al_saturation',
+};
+
+function formOf(key: AnalyteKey, text: string): { form: string | null; doubt: string | null } {
+  const plain = text.normalize('NFKC').replace(/\s/g, '');
+  if (key === 'phosphorus') return { form: /P2O5/i.test(plain) ? 'P2O5' : 'element', doubt: null };
+  if (key === 'potassium') return { form: /K2O/i.test(plain) ? 'K2O' : 'element', doubt: null };
+  if (key === 'nitrate_n') {
+    if (/N[O0]3-?N|nitrate-?n|nitratenitrogen|nitrogen|PSNT|residualn/i.test(plain))
+      return { form: 'element', doubt: null };
+    return { form: 'NO3', doubt: 'The page says nitrate; it may mean nitrate nitrogen, which is 4.43 times less.' };
+  }
+  if (key === 'sulfur') {
+    if (/S[O0]4-+S|sul(f|ph)ate-?s|sulfatesul/i.test(plain)) return { form: 'element', doubt: null };
+    if (/S[O0]4|sul(f|ph)ate/i.test(plain)) {
+      return { form: 'SO4', doubt: 'The page says sulfate; it may mean sulfate sulfur, which is three times less.' };
+    }
+    return { form: 'element', doubt: null };
+  }
+  const group = analyte(key).group;
+  const elemental = ['nutrients', 'micronutrients', 'metals', 'nitrogen'].includes(group) || key === 'aluminium';
+  return {
+    form: elemental && key !== 'p_saturation' && key !== 'pbi' && key !== 'enr' ? 'element' : null,
+    doubt: null,
+  };
+}
+
+function nameIn(raw: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null {
+  const whole = lookUp(normal(raw), raw);
+  if (whole !== null) return { ...whole, strength: 1 };
+  const unit = unitIn(raw);
+  const withoutUnit = unit === null ? normal(raw) : unit.rest;
+  const second = unit === null ? null : lookUp(withoutUnit, raw);
+  if (second !== null) return { ...second, strength: 0.99 };
+  const withoutMethod = cutMethods(withoutUnit);
+  const third = lookUp(withoutMethod, raw);
+  if (third !== null) return { ...third, strength: 0.98 };
+  const bare = withoutMethod.replace(NOISE, ' ').replace(/\s+/g, ' ').trim();
+  const fourth = bare === withoutMethod ? null : lookUp(bare, raw);
+  if (fourth !== null) return { ...fourth, strength: 0.96 };
+  const same = sameInAllParts(raw);
+  return same === null ? null : { analyte: same, strength: 0.97, ambiguous: null };
+}
+
+/**
+ * What a label or column heading means. `text` is the heading's own words; `captions` are the words of merged captions
+ * above it, which can add a unit, a method or "base saturation" but never name the analyte by themselves.
+ */
+export function readLabel(text: string, captions: readonly string[] = []): Label | null {
+  const named = nameIn(text);
+  if (named === null) return null;
+  const around = [text, ...captions];
+  const unit = around.map((part) => unitIn(part)).find((found) => found !== null) ?? null;
+  const all = around.join(' ');
+  let key = named.analyte;
+  const share = SHARES[key];
+  if (share !== undefined && (unit?.unit === '%' || /saturation|% of cec|of exchangeable bases/i.test(all))) {
+    if (!/total/i.test(text)) key = share;
+  }
+  if (key === 'ec' && unit?.unit === 'mg/kg') key = 'tss';
+  const method = around.map((part) => methodIn(key, part)).find((found) => found !== null) ?? null;
+  const { form, doubt } = formOf(key, text);
+  return {
+    analyte: key,
+    text,
+    strength: named.strength,
+    unit: unit?.unit ?? null,
+    unitPrinted: unit?.printed ?? null,
+    method: method?.method ?? null,
+    methodPrinted: method?.printed ?? null,
+    form,
+    ambiguous: named.ambiguous ?? doubt,
+  };
+}
+
+/** The method that free text beside a row names, only when it is about that analyte. */
+export function methodInAny(key: AnalyteKey, text: string): { method: MethodKey; printed: string } | null {
+  return text.trim() === '' ? null : methodIn(key, text);
+}

@@ -1,0 +1,204 @@
+import { assemble } from './assemble';
+import { type Candidate, remark, type SamplePart } from './candidate';
+import { type CellLine, cellsOf } from './stages/cells';
+import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
+import { ANY_DATE } from './stages/dates';
+import { type IdentityHit, identityHits } from './stages/identity';
+import { type Line, linesOf } from './stages/lines';
+import { type ListRow, listRows, type RoleHeader } from './stages/list';
+import { rowsOfTable, type Table, type TableRow, tablesOf } from './stages/matrix';
+import { adviceOfLines, adviceOfTable } from './stages/recommendations';
+import {
+  laboratoryName,
+  notSoil,
+  type Statements,
+  statementsOf,
+  type ZoneBox,
+  zoneAt,
+  zonesOf,
+} from './stages/sections';
+import { numberStyle } from './stages/values';
+import { type Upright, uprightWords } from './stages/words';
+import { type Page, type Reading, type Remark, refusedReading } from './types';
+
+/** What each stage saw, kept so that a person can see why a number was read. */
+export type Trace = {
+  readonly pages: readonly Upright[];
+  readonly lines: readonly CellLine[];
+  readonly zones: readonly ZoneBox[];
+  readonly tables: readonly Table[];
+  readonly listRows: readonly ListRow[];
+  readonly roleHeaders: readonly RoleHeader[];
+  readonly identity: readonly IdentityHit[];
+  readonly contexts: readonly Context[];
+  readonly statements: Statements;
+};
+
+const NO_TEXT = remark(
+  'no-text-layer',
+  'This file holds only pictures of pages, which cannot be read yet. It is kept; type the numbers in beside the page.',
+);
+export const NO_RESULTS = remark(
+  'no-results',
+  'No soil-test results were found in this file. It is kept; if it is a report, type the numbers in beside the page.',
+);
+
+/** Lines restricted to the phrases that stand in results; advice and notes go their own way. */
+function split(lines: readonly CellLine[], zones: readonly ZoneBox[]): { results: CellLine[]; advice: CellLine[] } {
+  const results: CellLine[] = [];
+  const advice: CellLine[] = [];
+  for (const line of lines) {
+    const zoneOf = (cell: CellLine['cells'][number]) =>
+      zoneAt(zones, cell.phrase.page.number, cell.phrase.x0, cell.phrase.y0);
+    const pick = (zone: 'results' | 'recommendation') => {
+      const cells = line.cells.filter((cell) => zoneOf(cell) === zone);
+      return { ...line, cells, values: cells.filter((cell) => cell.meaning.kind === 'value').length };
+    };
+    if (line.cells.every((cell) => zoneOf(cell) === 'results')) results.push(line);
+    else {
+      const [kept, given] = [pick('results'), pick('recommendation')];
+      if (kept.cells.length > 0) results.push(kept);
+      if (given.cells.length > 0) advice.push(given);
+    }
+  }
+  return { results, advice };
+}
+
+function partsOf(tables: readonly TableRow[], list: readonly ListRow[], contexts: readonly Context[]): SamplePart[] {
+  const shared = contexts[0]?.identity ?? {};
+  const placed: { page: number; y: number; part: SamplePart }[] = tables.map((row) => {
+    const [page, y] = [row.line.line.page.number, row.line.line.y0];
+    const own =
+      row.identity.sampleId !== undefined ||
+      row.identity.labNumber !== undefined ||
+      row.identity.fieldName !== undefined;
+    const identity = own
+      ? withShared(row.identity, shared)
+      : { ...row.identity, ...contextAt(contexts, page, y)?.identity };
+    return { page, y, part: { identity, candidates: row.candidates } };
+  });
+  const byContext = new Map<Context | null, { page: number; y: number; candidates: Candidate[] }>();
+  for (const row of list) {
+    const [page, y] = [row.line.line.page.number, row.line.line.y0];
+    const context = contextAt(contexts, page, y);
+    const group = byContext.get(context) ?? { page, y, candidates: [] };
+    group.candidates.push(row.candidate);
+    byContext.set(context, group);
+  }
+  for (const [context, group] of byContext) {
+    placed.push({
+      page: group.page,
+      y: group.y,
+      part: { identity: context?.identity ?? {}, candidates: group.candidates },
+    });
+  }
+  return placed.sort((a, b) => a.page - b.page || a.y - b.y).map((one) => one.part);
+}
+
+/** Pages that are about soil, and what the others are. A page that does not say goes with the page before it. */
+function soilPages(
+  lines: readonly CellLine[],
+  pages: readonly Upright[],
+): { soil: ReadonlySet<number>; other: string | null } {
+  const soil = new Set<number>();
+  let other: string | null = null;
+  let before: string | null = null;
+  for (const page of pages) {
+    const own = lines.filter((line) => line.line.page === page);
+    const titled = own.some((line) => /\bsoil (test|analysis|report)|soil fertility\b/i.test(line.line.text));
+    before = notSoil(own) ?? (titled ? null : before);
+    if (before === null) soil.add(page.number);
+    else other ??= before;
+  }
+  return { soil, other };
+}
+
+function traced(pages: readonly Upright[]): { lines: CellLine[]; texts: string[] } {
+  const plain: Line[] = pages.flatMap((page) => linesOf(page));
+  const style = numberStyle(pages.flatMap((page) => page.words.map((word) => word.text)));
+  return { lines: cellsOf(plain, style), texts: plain.map((line) => line.text) };
+}
+
+/**
+ * Reads a report given as pages of placed words. Pure: the same pages give the same reading.
+ * Stages: words, lines, cells, sections and identity, columns and headings, rows, samples, checks; each stage's output
+ * is in the trace. Errors: none are thrown for content; a file with nothing to read is a refused reading.
+ */
+export function readPagesTraced(input: { fileName: string; pages: readonly Page[] }): {
+  reading: Reading;
+  trace: Trace | null;
+} {
+  const file = input.fileName;
+  const count = input.pages.length;
+  const upright = input.pages.map((page) => uprightWords(page));
+  const bare = upright.filter((page) => page.words.length < 3);
+  if (bare.length === upright.length)
+    return { reading: refusedReading({ file, pages: count, error: NO_TEXT }), trace: null };
+  const { lines, texts } = traced(upright);
+  const { soil, other } = soilPages(lines, upright);
+  const warnings: Remark[] = [];
+  if (bare.length > 0)
+    warnings.push(
+      remark('page-without-text', `${bare.length} of ${count} pages hold only a picture and were not read.`),
+    );
+  if (other !== null)
+    warnings.push(
+      remark(
+        'not-soil',
+        `This looks like ${other}, not a soil test; ${soil.size === 0 ? 'nothing' : 'only the soil pages'} of it was taken.`,
+      ),
+    );
+  const lab = { name: laboratoryName(lines) };
+  if (soil.size === 0) {
+    return {
+      reading: { file, kind: 'not-soil', error: null, pages: count, warnings, lab, samples: [], recommendations: [] },
+      trace: null,
+    };
+  }
+  const ofSoil = lines.filter((line) => soil.has(line.line.page.number));
+  const zones = zonesOf(ofSoil);
+  const { results, advice } = split(ofSoil, zones);
+  const tables = tablesOf(results);
+  const taken = new Set(tables.flatMap((table) => [...table.header, ...table.rows]));
+  const tableRows = tables.flatMap((table) => rowsOfTable(table));
+  const list = listRows(results, taken);
+  const hits = identityHits(ofSoil, taken);
+  const contexts = contextsOf(hits);
+  const statements = statementsOf(texts);
+  const parts = partsOf(tableRows, list.rows, contexts);
+  const dateTexts = texts.filter((text) => ANY_DATE.test(text));
+  const { samples, warnings: found } = assemble({ parts, statements, dateTexts });
+  const trace: Trace = {
+    pages: upright,
+    lines,
+    zones,
+    tables,
+    listRows: list.rows,
+    roleHeaders: list.headers,
+    identity: hits,
+    contexts,
+    statements,
+  };
+  if (samples.length === 0) return { reading: refusedReading({ file, pages: count, error: NO_RESULTS }), trace };
+  const sampleAt = (line: CellLine) =>
+    contextAt(contexts, line.line.page.number, line.line.y0)?.identity.sampleId ?? null;
+  const recommendations = [...adviceOfTable(tableRows), ...adviceOfLines(advice, sampleAt)];
+  return {
+    reading: {
+      file,
+      kind: 'soil',
+      error: null,
+      pages: count,
+      warnings: [...warnings, ...found],
+      lab,
+      samples,
+      recommendations,
+    },
+    trace,
+  };
+}
+
+/** The reading alone; see readPagesTraced. */
+export function readPages(input: { fileName: string; pages: readonly Page[] }): Reading {
+  return readPagesTraced(input).reading;
+}

@@ -1,0 +1,69 @@
+import { readLabel } from '../labels/label';
+import { type Line, type Phrase, phraseOf } from './lines';
+import { type CellMeaning, type NumberStyle, readCell } from './values';
+
+export type PageCell = { readonly phrase: Phrase; readonly meaning: CellMeaning };
+export type CellLine = { readonly line: Line; readonly cells: readonly PageCell[]; readonly values: number };
+
+function cut(phrase: Phrase, at: number): [Phrase, Phrase] {
+  return [
+    phraseOf(phrase.page, phrase.line, phrase.words.slice(0, at)),
+    phraseOf(phrase.page, phrase.line, phrase.words.slice(at)),
+  ];
+}
+
+function wordsText(phrase: Phrase, from: number, to?: number): string {
+  return phrase.words
+    .slice(from, to)
+    .map((word) => word.text)
+    .join(' ');
+}
+
+/** "Soil pH: 6.4" set with one blank is a label and a value; several numbers set close together are several cells. */
+function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
+  const count = phrase.words.length;
+  if (count < 2 || readCell(phrase.text, style).kind !== 'text') return [phrase];
+  const each = phrase.words.map((word) => readCell(word.text, style));
+  const numbers = each.filter((cell) => cell.kind === 'value').length;
+  if (numbers >= 2 && each.every((cell) => cell.kind !== 'text' && cell.kind !== 'range')) {
+    return phrase.words.map((word) => phraseOf(phrase.page, phrase.line, [word]));
+  }
+  for (let at = count - 1; at >= 1; at--) {
+    const right = readCell(wordsText(phrase, at), style).kind;
+    if (right !== 'value' && right !== 'none' && right !== 'range') continue;
+    const left = wordsText(phrase, 0, at).replace(/[:=]$/, '');
+    if (readLabel(left) !== null) return cut(phrase, at);
+  }
+  return [phrase];
+}
+
+/** Stage 3. Phrases to cells, each with what it can be when nothing around it is known. */
+export function cellsOf(lines: readonly Line[], style: NumberStyle): CellLine[] {
+  return lines.map((line) => {
+    const cells = line.phrases
+      .flatMap((phrase) => parts(phrase, style))
+      .map((phrase) => ({ phrase, meaning: readCell(phrase.text, style) }));
+    return { line, cells, values: cells.filter((cell) => cell.meaning.kind === 'value').length };
+  });
+}
+
+/** The box of the number inside its phrase: the words of the span, the first and last cut by their share of letters. */
+export function numberBox(phrase: Phrase, span: readonly [number, number]) {
+  let at = 0;
+  let box: { x0: number; y0: number; x1: number; y1: number } | null = null;
+  for (const word of phrase.words) {
+    const from = Math.max(span[0] - at, 0);
+    const to = Math.min(span[1] - at, word.text.length);
+    if (to > from) {
+      const step = (word.x1 - word.x0) / (word.text.length || 1);
+      const x0 = word.x0 + from * step;
+      const x1 = word.x0 + to * step;
+      box =
+        box === null
+          ? { x0, y0: word.y0, x1, y1: word.y1 }
+          : { x0: box.x0, y0: Math.min(box.y0, word.y0), x1, y1: Math.max(box.y1, word.y1) };
+    }
+    at += word.text.length + 1;
+  }
+  return box ?? { x0: phrase.x0, y0: phrase.y0, x1: phrase.x1, y1: phrase.y1 };
+}

@@ -1,0 +1,137 @@
+import type { Identity, IdentityField } from '../candidate';
+import { readLabel } from '../labels/label';
+import type { CellLine, PageCell } from './cells';
+import { ANY_DATE } from './dates';
+
+/** Headings of what identifies a sample, most telling first. "other" is known and set aside, so that it is not mistaken. */
+const FIELDS: readonly (readonly [IdentityField, RegExp])[] = [
+  [
+    'dateSampled',
+    /^(date (sampled|collected|taken|of sampling)|(sample|sampling|collection) date|sampled( on)?|collected( on)?|date sample taken)$/,
+  ],
+  [
+    'dateReported',
+    /^(date (reported|of report|printed|issued|completed)|report(ed)?( date| on)?|reporting date|date of issue|issued)$/,
+  ],
+  [
+    'other',
+    /^(date )?(received|processed|analy[sz]ed|logged)( on| date)?$|^(grower|client|customer|account|company|name|address|city|phone|fax|e-?mail|submitted (by|for)|prepared for|adviser|advisor|agent|copy to|bill to|order( no| number)?|report (no|number|id)|invoice|batch|page|county|state|crop(s| to grow| code)?( \d)?|last crop|previous crop|intended crop|yield goal|area|acres|size|sq ft|garden size|soil (type|code|class)|p\.?o\.?( no| number)?|kit|purpose|tillage|matrix|county code|information sheet|client no|account no|customer no)$/,
+  ],
+  [
+    'labNumber',
+    /^(lab(oratory)? ?(no|nr|number|#|id|ref(erence)?|sample( no| number| id)?|code)|lab#|labno|accession( no)?|specimen( no)?)$/,
+  ],
+  ['depthTop', /^(beginning depth|begin depth|top depth|upper depth|depth from|depth top|start depth)$/],
+  ['depthBottom', /^(ending depth|end depth|bottom depth|lower depth|depth to|depth bottom)$/],
+  ['depth', /^((sample|sampling|soil) )?depth( range)?( (in|inches|cm))?$/],
+  [
+    'sampleId',
+    /^((soil|your|client|grower|customer|field) )?sample ?(id|ident|identification|identity|name|description|label|ref(erence)?|no|nr|number|#|code|location)?$|^(id|ident|identification|sampleid|sample-id|bed|plot( name)?|garden bed|location|description|your reference|your ref|client ref(erence)?|area sampled|sample area)$/,
+  ],
+  ['fieldName', /^(field( ?(id|name|no|number))?|site( name)?|garden|block|paddock|farm( name)?)$/],
+];
+
+function bareHeading(text: string): string {
+  return text
+    .toLowerCase()
+    .replace(/\((in|inches|cm)\.?\)/, '$1')
+    .replace(/[.:()]/g, ' ')
+    .replace(/[_]/g, ' ')
+    .replace(/\s+/g, ' ')
+    .trim();
+}
+
+/** The field that a heading names, or null when it names none. */
+export function fieldOf(text: string): IdentityField | null {
+  const bare = bareHeading(text);
+  if (bare === '' || bare.length > 40) return null;
+  return FIELDS.find(([, pattern]) => pattern.test(bare))?.[0] ?? null;
+}
+
+/** "Sample ID: Top bed" or "Lab No 20418" in one phrase. */
+export function fieldWithValue(text: string): { field: IdentityField; value: string } | null {
+  const colon = text.indexOf(':');
+  if (colon > 0) {
+    const field = fieldOf(text.slice(0, colon));
+    const value = text.slice(colon + 1).trim();
+    return field === null || value === '' ? null : { field, value };
+  }
+  const words = text.split(' ');
+  for (let cut = Math.min(words.length - 1, 4); cut >= 1; cut--) {
+    const field = fieldOf(words.slice(0, cut).join(' '));
+    const value = words.slice(cut).join(' ');
+    if (field === null) continue;
+    const dated = field === 'dateSampled' || field === 'dateReported';
+    const ok = dated
+      ? ANY_DATE.test(value)
+      : field === 'labNumber'
+        ? /\d{2,}/.test(value)
+        : field === 'depth' && /\d/.test(value);
+    if (ok) return { field, value };
+  }
+  return null;
+}
+
+export type IdentityHit = {
+  readonly field: IdentityField;
+  readonly value: string;
+  readonly page: number;
+  readonly line: number;
+  readonly x0: number;
+  readonly y0: number;
+};
+
+function isHeading(text: string): boolean {
+  return fieldOf(text) !== null || fieldWithValue(text) !== null;
+}
+
+function fits(field: IdentityField, text: string): boolean {
+  if (field === 'dateSampled' || field === 'dateReported') return ANY_DATE.test(text);
+  if (field === 'depth') return /\d/.test(text);
+  return /[\p{L}\p{N}]/u.test(text) && text.length <= 60 && readLabel(text) === null;
+}
+
+function below(lines: readonly CellLine[], at: number, cell: PageCell): string | null {
+  for (const next of lines.slice(at + 1, at + 3)) {
+    if (next.line.page !== cell.phrase.page || next.line.y0 - cell.phrase.y1 > 1.8 * cell.phrase.size) return null;
+    const hit = next.cells.find((other) => other.phrase.x0 < cell.phrase.x1 && other.phrase.x1 > cell.phrase.x0);
+    if (hit !== undefined) return isHeading(hit.phrase.text) ? null : hit.phrase.text;
+  }
+  return null;
+}
+
+/** Stage 4a. Form boxes around the numbers: "label: value", label beside value, label over value. */
+export function identityHits(lines: readonly CellLine[], taken: ReadonlySet<CellLine>): IdentityHit[] {
+  const hits: IdentityHit[] = [];
+  for (const [at, line] of lines.entries()) {
+    if (taken.has(line)) continue;
+    for (const [index, cell] of line.cells.entries()) {
+      const text = cell.phrase.text;
+      const place = { page: cell.phrase.page.number, line: line.line.index, x0: cell.phrase.x0, y0: cell.phrase.y0 };
+      const whole = fieldWithValue(text);
+      if (whole !== null) {
+        hits.push({ ...whole, ...place });
+        continue;
+      }
+      const field = fieldOf(text);
+      if (field === null) continue;
+      const right = line.cells[index + 1];
+      const beside =
+        right !== undefined &&
+        !isHeading(right.phrase.text) &&
+        right.phrase.x0 - cell.phrase.x1 < 14 * cell.phrase.size;
+      const value = beside && fits(field, right.phrase.text) ? right.phrase.text : below(lines, at, cell);
+      if (value !== null && fits(field, value)) hits.push({ field, value, ...place });
+    }
+  }
+  return hits;
+}
+
+/** Hits that belong together, first one of each field kept. */
+export function identityOf(hits: readonly IdentityHit[]): Identity {
+  const identity: Identity = {};
+  for (const hit of hits) {
+    if (identity[hit.field] === undefined) identity[hit.field] = hit.value;
+  }
+  return identity;
+}

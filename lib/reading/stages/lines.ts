@@ -1,0 +1,85 @@
+import type { Placed, Upright } from './words';
+
+/** Words that stand close together on one line and are read as one: a label, a name, a number with its unit. */
+export type Phrase = {
+  readonly page: Upright;
+  readonly line: number;
+  readonly text: string;
+  readonly words: readonly Placed[];
+  readonly x0: number;
+  readonly y0: number;
+  readonly x1: number;
+  readonly y1: number;
+  readonly size: number;
+};
+
+export type Line = {
+  readonly page: Upright;
+  readonly index: number;
+  readonly phrases: readonly Phrase[];
+  readonly text: string;
+  readonly y0: number;
+  readonly y1: number;
+  readonly size: number;
+};
+
+/** A gap wider than this share of the type size parts two phrases; a blank is about 0.28, in typewriter type 0.6. */
+const BETWEEN_PHRASES = 0.66;
+/** Words whose middles differ by less than this share of the smaller type stand on one line. */
+const SAME_LINE = 0.38;
+
+export function phraseOf(page: Upright, line: number, words: readonly Placed[]): Phrase {
+  return {
+    page,
+    line,
+    words,
+    text: words.map((word) => word.text).join(' '),
+    x0: Math.min(...words.map((word) => word.x0)),
+    y0: Math.min(...words.map((word) => word.y0)),
+    x1: Math.max(...words.map((word) => word.x1)),
+    y1: Math.max(...words.map((word) => word.y1)),
+    size: Math.max(...words.map((word) => word.size)),
+  };
+}
+
+function middle(word: Placed): number {
+  return (word.y0 + word.y1) / 2;
+}
+
+function groupByLine(words: readonly Placed[]): Placed[][] {
+  const groups: { words: Placed[]; middle: number; size: number }[] = [];
+  for (const word of [...words].sort((a, b) => middle(a) - middle(b))) {
+    const last = groups[groups.length - 1];
+    const near = last !== undefined && middle(word) - last.middle < SAME_LINE * Math.min(last.size, word.size);
+    if (last !== undefined && near) last.words.push(word);
+    else groups.push({ words: [word], middle: middle(word), size: word.size });
+  }
+  return groups.map((group) => group.words.sort((a, b) => a.x0 - b.x0));
+}
+
+/** Stage 2. Words to lines, lines to phrases, by position alone. */
+export function linesOf(page: Upright): Line[] {
+  return groupByLine(page.words).map((words, index) => {
+    const phrases: Phrase[] = [];
+    let run: Placed[] = [];
+    for (const word of words) {
+      const last = run[run.length - 1];
+      const gap = last === undefined ? 0 : word.x0 - last.x1;
+      if (last !== undefined && gap > BETWEEN_PHRASES * Math.min(last.size, word.size)) {
+        phrases.push(phraseOf(page, index, run));
+        run = [];
+      }
+      run.push(word);
+    }
+    if (run.length > 0) phrases.push(phraseOf(page, index, run));
+    return {
+      page,
+      index,
+      phrases,
+      text: phrases.map((phrase) => phrase.text).join('  '),
+      y0: Math.min(...words.map((word) => word.y0)),
+      y1: Math.max(...words.map((word) => word.y1)),
+      size: Math.max(...words.map((word) => word.size)),
+    };
+  });
+}

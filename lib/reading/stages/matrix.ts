@@ -1,0 +1,237 @@
+import { type Candidate, type Identity, remark, type SamplePart } from '../candidate';
+import { readLabel } from '../labels/label';
+import { type CellLine, numberBox, type PageCell } from './cells';
+import { type Column, columnsOf, headerScore, spansOf } from './columns';
+import { NOT_A_SAMPLE } from './roles';
+import { storedBox } from './words';
+
+export type Table = {
+  readonly header: readonly CellLine[];
+  readonly rows: readonly CellLine[];
+  readonly columns: readonly Column[];
+  readonly borrowed: boolean;
+};
+
+export type AdviceCell = { readonly sampleKey: Identity; readonly column: Column; readonly cell: PageCell };
+export type TableRow = SamplePart & { readonly line: CellLine; readonly advice: readonly AdviceCell[] };
+
+const HEADER_LINES = 6;
+
+function samePage(a: CellLine, b: CellLine): boolean {
+  return a.line.page === b.line.page;
+}
+
+function labelsIn(line: CellLine): number {
+  return line.cells.filter((cell) => cell.meaning.kind !== 'value' && readLabel(cell.phrase.text) !== null).length;
+}
+
+function headerAbove(lines: readonly CellLine[], at: number, taken: ReadonlySet<CellLine>): CellLine[] {
+  const header: CellLine[] = [];
+  let under = lines[at];
+  for (let index = at - 1; index >= 0 && header.length < HEADER_LINES; index--) {
+    const line = lines[index];
+    if (line === undefined || under === undefined || taken.has(line) || !samePage(line, under) || line.values >= 2)
+      break;
+    if (line.values === 1 && labelsIn(line) > 0) break;
+    const gap = under.line.y0 - line.line.y1;
+    if (gap > (header.length === 0 ? 4 : 2.2) * line.line.size) break;
+    header.unshift(line);
+    under = line;
+  }
+  return header;
+}
+
+/** Rows under a header: until a new header, a wide gap, or lines that fit no column. */
+function rowsFrom(lines: readonly CellLine[], at: number): CellLine[] {
+  const rows: CellLine[] = [];
+  let last: CellLine | undefined;
+  for (const line of lines.slice(at)) {
+    if (last !== undefined) {
+      if (!samePage(line, last)) break;
+      if (line.line.y0 - last.line.y1 > 5 * last.line.size) break;
+      const headings = labelsIn(line);
+      if (headings >= 3 && line.values <= 1) break;
+    }
+    rows.push(line);
+    last = line;
+  }
+  return rows;
+}
+
+function isRow(line: CellLine, columns: readonly Column[]): boolean {
+  const hits = line.cells.filter(
+    (cell) => cell.meaning.kind === 'value' && columnAt(columns, cell)?.label != null,
+  ).length;
+  const named = line.cells.some((cell) => columnAt(columns, cell)?.field != null);
+  return hits >= 2 || (hits === 1 && named);
+}
+
+function columnAt(columns: readonly Column[], cell: PageCell): Column | undefined {
+  let best: Column | undefined;
+  let most = 0;
+  for (const column of columns) {
+    const over = Math.min(column.x1, cell.phrase.x1) - Math.max(column.x0, cell.phrase.x0);
+    if (over > most) [best, most] = [column, over];
+  }
+  return best;
+}
+
+function trustworthy(columns: readonly Column[]): boolean {
+  const named = columns.filter((column) => column.label !== null).length;
+  const free = columns.filter((column) => column.field === null).length;
+  return named >= 3 || (named === 2 && free <= 3);
+}
+
+/** Stage 5a. Tables with analytes across the top. A table at the top of a page without a header borrows the last one. */
+export function tablesOf(lines: readonly CellLine[]): Table[] {
+  const tables: Table[] = [];
+  const taken = new Set<CellLine>();
+  for (const [at, line] of lines.entries()) {
+    if (taken.has(line) || line.values < 2) continue;
+    const block = rowsFrom(lines, at);
+    const data = block.filter((row, index) => row.values >= 2 && (index === 0 || labelsIn(row) < 2));
+    const above = headerAbove(lines, at, taken);
+    let best: { header: CellLine[]; columns: Column[]; score: number } | null = null;
+    for (let count = 1; count <= above.length; count++) {
+      const header = above.slice(above.length - count);
+      const columns = columnsOf(header, data);
+      const score = headerScore(columns, count);
+      if (trustworthy(columns) && score > (best?.score ?? 0)) best = { header, columns, score };
+    }
+    const borrowed = best === null ? borrow(tables[tables.length - 1], data, line, lines, at) : null;
+    const columns = best?.columns ?? borrowed;
+    if (columns === null || columns === undefined) continue;
+    const rows = block.filter((row) => isRow(row, columns) || isRatingRow(row) || isTail(row, columns));
+    for (const used of [...(best?.header ?? []), ...rows]) taken.add(used);
+    tables.push({ header: best?.header ?? [], rows, columns, borrowed: best === null });
+  }
+  return tables;
+}
+
+function borrow(
+  last: Table | undefined,
+  data: readonly CellLine[],
+  line: CellLine,
+  lines: readonly CellLine[],
+  at: number,
+): Column[] | null {
+  const previous = last?.rows[0];
+  if (last === undefined || previous === undefined || samePage(previous, line)) return null;
+  if (line.line.page.number !== previous.line.page.number + 1) return null;
+  const before = lines.slice(0, at).filter((other) => samePage(other, line) && other.values >= 2);
+  if (before.length > 0) return null;
+  const spans = spansOf(data);
+  const matched = spans.filter((span) =>
+    last.columns.some((column) => Math.min(column.x1, span.x1) - Math.max(column.x0, span.x0) > 0),
+  );
+  if (spans.length < 3 || matched.length < 0.85 * spans.length) return null;
+  return [...last.columns];
+}
+
+function isRatingRow(line: CellLine): boolean {
+  const ratings = line.cells.filter((cell) => cell.meaning.kind === 'rating').length;
+  return ratings > 0 && ratings >= 0.6 * line.cells.length && line.values === 0;
+}
+
+/** The rest of a sample name that went on to the next line. */
+function isTail(line: CellLine, columns: readonly Column[]): boolean {
+  return (
+    line.values === 0 &&
+    line.cells.length <= 2 &&
+    line.cells.every((cell) => columnAt(columns, cell)?.field === 'sampleId')
+  );
+}
+
+function ratingFor(row: CellLine, cell: PageCell): string | null {
+  const index = row.cells.indexOf(cell);
+  const next = row.cells[index + 1];
+  if (next?.meaning.kind !== 'rating') return null;
+  return next.phrase.x0 - cell.phrase.x1 < 5 * cell.phrase.size ? next.meaning.rating : null;
+}
+
+function candidateOf(
+  row: CellLine,
+  cell: PageCell,
+  column: Column,
+  table: Table,
+  under: string | null,
+): Candidate | null {
+  const { label } = column;
+  if (cell.meaning.kind !== 'value' || label === null) return null;
+  const value = cell.meaning;
+  return {
+    label: { ...label, text: column.heading },
+    value,
+    rating: value.rating ?? ratingFor(row, cell) ?? under,
+    unit: value.unit ?? label.unit,
+    unitPrinted: value.unitPrinted ?? label.unitPrinted,
+    method: label.method,
+    methodPrinted: label.methodPrinted,
+    page: row.line.page.number,
+    box: storedBox(row.line.page, numberBox(cell.phrase, value.span)),
+    cell: null,
+    position: column.position * (table.borrowed ? 0.95 : 1),
+    doubts: table.borrowed
+      ? [remark('header-on-page-before', 'The headings of this column stand on the page before.')]
+      : [],
+  };
+}
+
+function rowIdentity(row: CellLine, table: Table): Identity {
+  const identity: Identity = {};
+  for (const cell of row.cells) {
+    const column = columnAt(table.columns, cell);
+    if (column === undefined) continue;
+    const first = table.columns.find((other) => other.label === null && other.role !== 'recommendation');
+    const field =
+      column.field ??
+      (column === first && cell.meaning.kind === 'text' && !table.columns.some((other) => other.field === 'sampleId')
+        ? 'sampleId'
+        : null);
+    if (field !== null)
+      identity[field] = identity[field] === undefined ? cell.phrase.text : `${identity[field]} ${cell.phrase.text}`;
+  }
+  return identity;
+}
+
+/** Stage 6a. One part per row of a table; rating rows and name tails go to the row above them. */
+export function rowsOfTable(table: Table): TableRow[] {
+  const rows: TableRow[] = [];
+  for (const [index, row] of table.rows.entries()) {
+    const last = rows[rows.length - 1];
+    if (isRatingRow(row)) continue;
+    if (last !== undefined && isTail(row, table.columns) && row.line.y0 - last.line.line.y1 < 1.2 * row.line.size) {
+      const tail = row.cells.map((cell) => cell.phrase.text).join(' ');
+      const before = last.identity.sampleId;
+      rows[rows.length - 1] = {
+        ...last,
+        identity: { ...last.identity, sampleId: before === undefined ? tail : `${before} ${tail}` },
+      };
+      continue;
+    }
+    const identity = rowIdentity(row, table);
+    const name = identity.sampleId ?? identity.labNumber ?? row.cells[0]?.phrase.text ?? '';
+    if (NOT_A_SAMPLE.test(name)) continue;
+    const next = table.rows[index + 1];
+    const ratings = next !== undefined && isRatingRow(next) ? next : null;
+    const candidates: Candidate[] = [];
+    const advice: AdviceCell[] = [];
+    for (const cell of row.cells) {
+      const column = columnAt(table.columns, cell);
+      if (column === undefined || cell.meaning.kind !== 'value') continue;
+      if (column.role === 'recommendation') advice.push({ sampleKey: identity, column, cell });
+      if (column.label === null || column.role !== null) continue;
+      const under = ratings?.cells.find((other) => columnAt(table.columns, other) === column);
+      const candidate = candidateOf(
+        row,
+        cell,
+        column,
+        table,
+        under?.meaning.kind === 'rating' ? under.meaning.rating : null,
+      );
+      if (candidate !== null) candidates.push(candidate);
+    }
+    rows.push({ identity, candidates, line: row, advice });
+  }
+  return rows.filter((row) => row.candidates.length > 0);
+}

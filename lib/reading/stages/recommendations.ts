@@ -1,0 +1,79 @@
+import { unitIn } from '../labels/label';
+import type { ReadRecommendation } from '../types';
+import type { CellLine } from './cells';
+import type { TableRow } from './matrix';
+import { storedBox } from './words';
+
+const AMOUNT = /(?<![\d.,/])(\d{1,3}(?:,\d{3})+|\d*\.?\d+)(?:\s*(?:-|–|to)\s*\d*\.?\d+)?\s*/;
+const UNIT = /^(?:of [\w ]{1,30}? )?((?:lbs?\.?|pounds?|oz\.?|ounces?|tons?|t|kg|g|cwt)\b[^;,]{0,40})/i;
+const FILLER =
+  /\b(apply|add|use|spread|broadcast|of|per|in|the|a|at|to|each|rate|about|and|work|incorporate|recommended|recommendation|suggested)\b/gi;
+
+function tidyItem(text: string): string {
+  return text
+    .replace(FILLER, ' ')
+    .replace(/[^\p{L}\p{N}\s()-]/gu, ' ')
+    .replace(/\s+/g, ' ')
+    .trim()
+    .slice(0, 80);
+}
+
+function fromText(text: string): { item: string; amount: number; unit: string | null; printed: string } | null {
+  for (const match of text.matchAll(new RegExp(AMOUNT, 'g'))) {
+    const after = text.slice((match.index ?? 0) + match[0].length);
+    const unitText = UNIT.exec(after)?.[1];
+    if (unitText === undefined) continue;
+    const unit = unitIn(after)?.unit ?? null;
+    const before = tidyItem(text.slice(0, match.index));
+    const rest = tidyItem(
+      after
+        .replace(/\b(lbs?|pounds?|oz|ounces?|tons?|kg|cwt)\b\.?/gi, ' ')
+        .replace(/[\d,]*\s*(sq(uare)?\.? ?(ft|feet|yd)|acre|ha|m2)\b\.?/gi, ' '),
+    );
+    const item = before !== '' ? before : rest;
+    if (item === '') continue;
+    const amount = Number((match[1] ?? '').replace(/,/g, ''));
+    return { item, amount, unit: unit ?? unitText.trim(), printed: text };
+  }
+  return null;
+}
+
+/** Advice in words and lists ("Elemental sulfur: 10 lb per 1,000 sq ft"), with the box of the whole line. */
+export function adviceOfLines(
+  lines: readonly CellLine[],
+  sampleId: (line: CellLine) => string | null,
+): ReadRecommendation[] {
+  return lines.flatMap((line) => {
+    const text = line.cells.map((cell) => cell.phrase.text).join(' ');
+    const found = fromText(text);
+    if (found === null) return [];
+    const box = {
+      x0: Math.min(...line.cells.map((cell) => cell.phrase.x0)),
+      y0: line.line.y0,
+      x1: Math.max(...line.cells.map((cell) => cell.phrase.x1)),
+      y1: line.line.y1,
+    };
+    return [{ sampleId: sampleId(line), ...found, page: line.line.page.number, box: storedBox(line.line.page, box) }];
+  });
+}
+
+/** Advice that stands in columns of a results table. */
+export function adviceOfTable(rows: readonly TableRow[]): ReadRecommendation[] {
+  return rows.flatMap((row) =>
+    row.advice.flatMap(({ column, cell, sampleKey }) => {
+      if (cell.meaning.kind !== 'value') return [];
+      const unit = unitIn(column.heading);
+      return [
+        {
+          sampleId: sampleKey.sampleId ?? null,
+          item: column.heading,
+          amount: cell.meaning.value,
+          printed: cell.phrase.text,
+          unit: unit?.unit ?? cell.meaning.unit,
+          page: row.line.line.page.number,
+          box: storedBox(row.line.line.page, cell.phrase),
+        },
+      ];
+    }),
+  );
+}

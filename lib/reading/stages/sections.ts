@@ -1,0 +1,182 @@
+import { ANALYTES, type AnalyteKey, METHODS, type UnitKey } from '@/lib/domain/analytes';
+import { methodIn, unitIn } from '../labels/label';
+import { findWhole, normal } from '../labels/normal';
+import type { CellLine } from './cells';
+
+export type Zone = 'results' | 'recommendation' | 'notes';
+export type ZoneBox = {
+  readonly zone: Zone;
+  readonly page: number;
+  readonly x0: number;
+  readonly x1: number;
+  readonly y0: number;
+  readonly y1: number;
+};
+
+const ADVICE =
+  /^(\W|\d\.)*((fertili[sz]er|lime|limestone|nutrient|amendment|soil amendment|lime (and|&) fertili[sz]er|soil fertility|crop|garden|our)\s*)*(recommendations?|suggestions?|suggested (rates?|amendments?|treatment|application)|advice|guidelines|what to (add|apply)|(rates?|amounts?) to apply)\b/i;
+const NOTES =
+  /^(notes?|comments?|remarks|interpretation|explanations?|how to read|understanding|legend|key|methods?( of analysis)?|definitions|guide to)\b/i;
+const RESULTS =
+  /^(soil )?((test|analysis|laboratory|analytical) )?(results?|analysis|report of analysis|soil test|soil analysis|test values)\b/i;
+
+function zoneOfHeading(text: string): Zone | null {
+  if (text.split(' ').length > 8) return null;
+  if (ADVICE.test(text)) return 'recommendation';
+  if (NOTES.test(text)) return 'notes';
+  return RESULTS.test(text) ? 'results' : null;
+}
+
+/**
+ * Stage 4b. Which part of a page is results, advice or notes, from headings. A heading beside another heading, or one
+ * that begins right of the middle, rules only its own side.
+ */
+export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
+  const heads: { zone: Zone; page: number; x0: number; x1: number; y: number }[] = [];
+  for (const line of lines) {
+    if (line.values >= 2) continue;
+    const found = line.cells.flatMap((cell) => {
+      const zone = zoneOfHeading(cell.phrase.text);
+      return zone === null ? [] : [{ zone, cell }];
+    });
+    const alone = line.cells.length === 1;
+    for (const [index, { zone, cell }] of found.entries()) {
+      if (!alone && found.length < 2 && zone !== 'recommendation') continue;
+      const width = cell.phrase.page.width;
+      const next = found[index + 1];
+      const sided = found.length > 1 || cell.phrase.x0 > 0.52 * width;
+      heads.push({
+        zone,
+        page: cell.phrase.page.number,
+        x0: sided ? cell.phrase.x0 - 2 * cell.phrase.size : 0,
+        x1: sided && next !== undefined ? next.cell.phrase.x0 - next.cell.phrase.size : width,
+        y: cell.phrase.y0,
+      });
+    }
+  }
+  return heads.map((head) => {
+    const ends = heads.find(
+      (other) => other.page === head.page && other.y > head.y + 1 && other.x0 < head.x1 && other.x1 > head.x0,
+    );
+    return {
+      zone: head.zone,
+      page: head.page,
+      x0: head.x0,
+      x1: head.x1,
+      y0: head.y,
+      y1: ends?.y ?? Number.POSITIVE_INFINITY,
+    };
+  });
+}
+
+export function zoneAt(zones: readonly ZoneBox[], page: number, x: number, y: number): Zone {
+  let zone: Zone = 'results';
+  for (const box of zones) {
+    if (box.page === page && x >= box.x0 && x < box.x1 && y >= box.y0 - 0.5 && y < box.y1 - 0.5) zone = box.zone;
+  }
+  return zone;
+}
+
+export type Statements = {
+  /** Unit that the document says all results are in. */
+  readonly unit: { unit: UnitKey; printed: string } | null;
+  readonly methods: ReadonlyMap<AnalyteKey, { method: ReturnType<typeof methodIn>; printed: string }>;
+};
+
+const ALL_RESULTS =
+  /\b(all )?(results|values|nutrients|levels)\b.{0,30}\b(are |is )?(reported|expressed|given|shown|stated|listed|are|in)\b.{0,12}\b(in|as)\b/i;
+const EXTRACTANTS = METHODS.filter((method) =>
+  ['M3', 'M1', 'mod_Morgan', 'Morgan', 'AB_DTPA', 'H3A', 'NH4OAc'].includes(method.key),
+);
+
+function analytesNamed(text: string): AnalyteKey[] {
+  const found = new Set<AnalyteKey>();
+  const words = text.split(/[\s,;:&/()]+|\band\b/).map((word) => word.replace(/\.$/, ''));
+  for (const entry of ANALYTES) {
+    const symbol = entry.symbol;
+    const names = entry.spellings.filter((spelling) => spelling.length > 3).map((spelling) => normal(spelling));
+    const bySymbol = words.includes(symbol) && symbol !== 'CaCO3';
+    const byName = names.some((name) => findWhole(normal(text), name) >= 0);
+    if (bySymbol || byName) found.add(entry.key);
+  }
+  if (found.has('buffer_ph') && !/(^|[,;:&] ?|and )pH\b(?! buffer)/.test(text.replace(/buffer pH/gi, '')))
+    found.delete('soil_ph_water');
+  return [...found];
+}
+
+/** Stage 4c. What the page says once for all its numbers: "P, K, Ca, Mg: Mehlich-3; organic matter: loss on ignition". */
+export function statementsOf(texts: readonly string[]): Statements {
+  const methods = new Map<AnalyteKey, { method: ReturnType<typeof methodIn>; printed: string }>();
+  let unit: Statements['unit'] = null;
+  const everyone = new Set<AnalyteKey>();
+  for (const text of texts) {
+    if (unit === null && ALL_RESULTS.test(text)) {
+      const found = unitIn(text.slice(text.search(ALL_RESULTS)));
+      if (found !== null && ['mg/kg', 'lb/acre', 'kg/ha', 'mg/L', 'mg/dm3'].includes(found.unit))
+        unit = { unit: found.unit, printed: found.printed };
+    }
+    if (!/method|extract|procedure|determined|measured|\bby\b|analy[sz]ed|mehlich|suspension|ignition/i.test(text))
+      continue;
+    for (const clause of text.split(/;|\.\s|\s\|\s/)) {
+      const named = analytesNamed(clause);
+      for (const key of named) {
+        const method = methodIn(key, clause);
+        if (method !== null && !methods.has(key)) methods.set(key, { method, printed: method.printed });
+      }
+      const extractant = EXTRACTANTS.find((entry) =>
+        entry.spellings.some((spelling) => spelling.length > 3 && findWhole(normal(clause), normal(spelling)) >= 0),
+      );
+      if (named.length === 0 && extractant !== undefined && /extract|method/i.test(clause)) {
+        for (const key of extractant.analytes) everyone.add(key);
+        for (const key of everyone) {
+          const method = methodIn(key, clause);
+          if (method !== null && !methods.has(key)) methods.set(key, { method, printed: method.printed });
+        }
+      }
+    }
+  }
+  return { unit, methods };
+}
+
+const NOT_SOIL: readonly (readonly [string, RegExp])[] = [
+  [
+    'a plant tissue test',
+    /\b(plant (tissue|analysis)|tissue (test|analysis)|leaf (analysis|tissue)|petiole|foliar analysis)\b/i,
+  ],
+  ['a water test', /\b((irrigation |well |drinking )?water (analysis|test|quality|report|suitability))\b/i],
+  ['a compost or manure test', /\b((compost|manure|biosolids) (analysis|test|report))\b/i],
+  ['a fertiliser analysis', /\bfertili[sz]er (analysis|solution analysis|test report)\b/i],
+  ['a potting mix test', /\b(potting (mix|media)|greenhouse media|soilless (media|mix)) (analysis|test|report)\b/i],
+];
+
+/** What a page is when it is not about soil, from its larger type and its "sample type"; null for soil. */
+export function notSoil(lines: readonly CellLine[]): string | null {
+  const cells = lines.flatMap((line) => line.cells);
+  const sizes = cells.map((cell) => cell.phrase.size).sort((a, b) => a - b);
+  const usual = sizes[Math.floor(sizes.length / 2)] ?? 10;
+  const titles = cells.filter(
+    (cell) => cell.phrase.size > 1.15 * usual || /^(sample|matrix|material) ?(type)?:/i.test(cell.phrase.text),
+  );
+  const text = titles.map((cell) => cell.phrase.text).join(' | ');
+  if (/\bsoil (test|analysis|report|sample)|soil fertility\b/i.test(text)) return null;
+  return NOT_SOIL.find(([, pattern]) => pattern.test(text))?.[0] ?? null;
+}
+
+/** The laboratory's name: the largest type near the top that calls itself a laboratory or a testing service. */
+export function laboratoryName(lines: readonly CellLine[]): string | null {
+  const named = lines
+    .filter((line) => line.line.page.number <= 2 && line.line.y0 < 0.35 * line.line.page.height)
+    .flatMap((line) => line.cells)
+    .filter((cell) =>
+      /\b(laborator(y|ies)|labs?|testing (service|cent(er|re))|analytical|soil (service|testing))\b/i.test(
+        cell.phrase.text,
+      ),
+    )
+    .filter(
+      (cell) =>
+        !/\b(no|number|id|report|results?|analysis of|method)\b|[:#]/i.test(cell.phrase.text) &&
+        cell.phrase.text.length <= 70,
+    );
+  const best = named.sort((a, b) => b.phrase.size - a.phrase.size || a.phrase.y0 - b.phrase.y0)[0];
+  return best?.phrase.text ?? null;
+}

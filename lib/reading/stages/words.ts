@@ -1,0 +1,112 @@
+import { clean } from '../labels/normal';
+import type { Box, Page, Word } from '../types';
+
+/** A word turned upright, in points from the top left of the page as a person reads it. */
+export type Placed = {
+  readonly text: string;
+  readonly x0: number;
+  readonly y0: number;
+  readonly x1: number;
+  readonly y1: number;
+  readonly size: number;
+};
+
+export type Upright = {
+  readonly number: number;
+  readonly width: number;
+  readonly height: number;
+  /** Quarter turn that was undone, so that a box can be given on the page as stored. */
+  readonly turn: 0 | 90 | 180 | 270;
+  readonly words: readonly Placed[];
+  /** Words that run another way than the page: captions up the side, watermarks. */
+  readonly sideways: readonly Word[];
+};
+
+/** A gap narrower than this share of the type size is inside a word, not between two. */
+const INSIDE_WORD = 0.07;
+
+function mainDirection(words: readonly Word[]): 0 | 90 | 180 | 270 {
+  const counts = new Map<0 | 90 | 180 | 270, number>();
+  for (const word of words) counts.set(word.direction, (counts.get(word.direction) ?? 0) + word.text.length);
+  let best: 0 | 90 | 180 | 270 = 0;
+  for (const [direction, count] of counts) if (count > (counts.get(best) ?? 0)) best = direction;
+  return best;
+}
+
+function turnWord(word: Word, page: Page, turn: 0 | 90 | 180 | 270): Placed {
+  const [w, h] = [page.width, page.height];
+  const [x0, y0, x1, y1] = [word.x0 * w, word.y0 * h, word.x1 * w, word.y1 * h];
+  const rest = { text: clean(word.text), size: word.size };
+  if (turn === 90) return { ...rest, x0: y0, y0: w - x1, x1: y1, y1: w - x0 };
+  if (turn === 180) return { ...rest, x0: w - x1, y0: h - y1, x1: w - x0, y1: h - y0 };
+  if (turn === 270) return { ...rest, x0: h - y1, y0: x0, x1: h - y0, y1: x1 };
+  return { ...rest, x0, y0, x1, y1 };
+}
+
+/** A box in upright points, given back as fractions of the page as stored. */
+export function storedBox(page: Upright, box: { x0: number; y0: number; x1: number; y1: number }): Box {
+  const sideways = page.turn === 90 || page.turn === 270;
+  const [w, h] = sideways ? [page.height, page.width] : [page.width, page.height];
+  const corners: Box =
+    page.turn === 90
+      ? [w - box.y1, box.x0, w - box.y0, box.x1]
+      : page.turn === 180
+        ? [w - box.x1, h - box.y1, w - box.x0, h - box.y0]
+        : page.turn === 270
+          ? [box.y0, h - box.x1, box.y1, h - box.x0]
+          : [box.x0, box.y0, box.x1, box.y1];
+  const share = (value: number, whole: number) => Math.round(Math.min(1, Math.max(0, value / whole)) * 1e5) / 1e5;
+  return [share(corners[0], w), share(corners[1], h), share(corners[2], w), share(corners[3], h)];
+}
+
+function joinPieces(words: readonly Placed[]): Placed[] {
+  const sorted = [...words].sort((a, b) => a.y0 - b.y0 || a.x0 - b.x0);
+  const joined: Placed[] = [];
+  const used = new Set<Placed>();
+  for (const word of sorted) {
+    if (used.has(word)) continue;
+    let whole = word;
+    for (;;) {
+      const next = sorted.find(
+        (other) =>
+          !used.has(other) &&
+          other !== word &&
+          other.x0 >= whole.x0 &&
+          Math.abs(other.y1 - whole.y1) < 0.12 * whole.size &&
+          Math.abs(other.size - whole.size) < 0.05 * whole.size &&
+          Math.abs(other.x0 - whole.x1) < INSIDE_WORD * whole.size,
+      );
+      if (next === undefined) break;
+      used.add(next);
+      whole = { ...whole, text: whole.text + next.text, x1: next.x1, y0: Math.min(whole.y0, next.y0) };
+    }
+    joined.push(whole);
+  }
+  return joined.filter((word) => !used.has(word));
+}
+
+/**
+ * Stage 1. Turns the page so that its text runs to the right, sets words that run another way aside, joins the pieces
+ * into which a PDF writer cut a word, and drops the same word printed twice in one place (false bold).
+ */
+export function uprightWords(page: Page): Upright {
+  const turn = mainDirection(page.words);
+  const swap = turn === 90 || turn === 270;
+  const straight = page.words.filter((word) => word.direction === turn);
+  const placed = straight.map((word) => turnWord(word, page, turn)).filter((word) => word.text !== '');
+  const seen = new Set<string>();
+  const once = placed.filter((word) => {
+    const key = `${word.text}@${Math.round(word.x0)},${Math.round(word.y0)}`;
+    if (seen.has(key)) return false;
+    seen.add(key);
+    return true;
+  });
+  return {
+    number: page.number,
+    width: swap ? page.height : page.width,
+    height: swap ? page.width : page.height,
+    turn,
+    words: joinPieces(once),
+    sideways: page.words.filter((word) => word.direction !== turn),
+  };
+}
