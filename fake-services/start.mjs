@@ -18,7 +18,7 @@ import { createRunner } from './support/step.mjs';
 /*
  * Loamline with everything it needs, on this machine: `npm start`, or `npm run dev` with --dev.
  * --port and --mail-port: where to begin looking for free ports. --data: the folder to keep everything in.
- * --fast-database: no durability (tests). --no-demo: no demo data. --ready-file: written once everything answers.
+ * --local: only services of our own, whatever the environment or .env names. --fast-database: no durability (tests). --no-demo: no demo data. --ready-file: written once everything answers.
  */
 const root = fileURLToPath(new URL('..', import.meta.url));
 const { values: options } = parseArgs({
@@ -27,12 +27,22 @@ const { values: options } = parseArgs({
     port: { type: 'string', default: '3000' },
     'mail-port': { type: 'string', default: '3001' },
     data: { type: 'string', default: path.join(root, '.data') },
+    local: { type: 'boolean', default: false },
     'fast-database': { type: 'boolean', default: false },
     'no-demo': { type: 'boolean', default: false },
     'ready-file': { type: 'string' },
   },
 });
 const data = path.resolve(options.data);
+const EXTERNAL = [
+  'APP_ORIGIN',
+  'DATABASE_URL',
+  'DATABASE_OWNER_URL',
+  'S3_ENDPOINT',
+  'RESEND_API_KEY',
+  'RESEND_BASE_URL',
+  'MAILBOX_URL',
+];
 const place = (name) => path.join(data, name);
 const say = (text) => console.log(text);
 
@@ -88,7 +98,7 @@ async function startDatabase(env) {
   const cluster = await startCluster({
     folder: place('postgres'),
     database: 'loamline',
-    port: 5433,
+    port: options['fast-database'] ? 0 : 5433,
     fast: options['fast-database'],
     children,
     say,
@@ -166,7 +176,8 @@ async function main() {
   }
   await pidFile.recover(say);
   pidFile.claim();
-  if (existsSync(path.join(root, '.env'))) process.loadEnvFile(path.join(root, '.env'));
+  if (options.local) for (const name of EXTERNAL) delete process.env[name];
+  else if (existsSync(path.join(root, '.env'))) process.loadEnvFile(path.join(root, '.env'));
   if (!process.env.DATABASE_URL) ensureDebianPackages(['postgresql'], say);
   await ensureDependencies({ root, run, say });
   if (options.dev) copyPdfWorker(root);
@@ -179,6 +190,7 @@ async function main() {
   const origin = `http://127.0.0.1:${webPort}`;
   const env = {
     NEXT_TELEMETRY_DISABLED: '1',
+    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
     NODE_ENV: options.dev ? 'development' : 'production',
     APP_ORIGIN: process.env.APP_ORIGIN || origin,
     APP_SECRET: process.env.APP_SECRET || secrets.APP_SECRET,

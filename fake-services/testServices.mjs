@@ -55,6 +55,7 @@ export async function startTestServices({ root }) {
       APP_SECRET: secret(),
       LOAMLINE_GALLERY: '1',
       NEXT_TELEMETRY_DISABLED: '1',
+      AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
     };
     await createBucket(env);
     await prepareTemplate({ cluster, run: createRunner({ children, root }), env: { ...process.env, ...env } });

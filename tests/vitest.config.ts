@@ -15,6 +15,7 @@ export default defineConfig({
       'fake-services/**/*.test.{ts,mjs}',
     ],
     exclude: ['tests/e2e/**', 'node_modules/**'],
+    setupFiles: ['tests/support/strictConsole.ts'],
     globalSetup: ['tests/support/services.ts'],
     testTimeout: 30_000,
     hookTimeout: 60_000,

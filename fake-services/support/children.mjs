@@ -42,17 +42,23 @@ function tail(file, lines) {
 
 /**
  * The processes a script has started. Each child leads a group of its own, writes into logs/<name>.log and, when
- * `show`, to the terminal as well. `onChange` hears the living children (for the pid file), `onExit` the unexpected end of one.
+ * `show`, to the terminal as well. `inherit` leaves the
+ * terminal to it. `onChange` hears the living children (for the pid file), `onExit` the unexpected end of one.
  */
 export function createChildren({ logs, onChange = () => {}, onExit = () => {} }) {
   const running = [];
   let stopping = false;
   mkdirSync(logs, { recursive: true });
 
-  function start(name, command, args, { env = process.env, cwd, stopSignal = 'SIGTERM', show = false } = {}) {
+  function start(
+    name,
+    command,
+    args,
+    { env = process.env, cwd, stopSignal = 'SIGTERM', show = false, inherit = false } = {},
+  ) {
     const logFile = path.join(logs, `${name}.log`);
     const log = openSync(logFile, 'w');
-    const stdio = show ? ['ignore', 'pipe', 'pipe'] : ['ignore', log, log];
+    const stdio = inherit ? ['ignore', 'inherit', 'inherit'] : show ? ['ignore', 'pipe', 'pipe'] : ['ignore', log, log];
     const child = spawn(command, args, { cwd, env, stdio, detached: true });
     closeSync(log);
     if (show) {
