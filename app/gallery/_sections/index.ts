@@ -1,4 +1,7 @@
 import type { ComponentType } from 'react';
+import { GridGallery } from '@/lib/ui/grid/grid-gallery';
+import { PageViewGallery } from '@/lib/ui/page-view/page-view-gallery';
+import { SitePlanGallery } from '@/lib/ui/site-plan/site-plan-gallery';
 import { ActionsSection } from './actions';
 import { ChartsSection } from './charts';
 import { ColoursSection } from './colours';
@@ -29,5 +32,8 @@ export const sections: readonly GallerySection[] = [
   { id: 'frame', title: 'Whole pages', Section: FrameSection },
   { id: 'charts', title: 'Charts', Section: ChartsSection },
   { id: 'verdicts', title: 'Verdicts', Section: VerdictsSection },
+  { id: 'grid', title: 'Review grid', Section: GridGallery },
+  { id: 'page', title: 'Page view', Section: PageViewGallery },
+  { id: 'plan', title: 'Site plan', Section: SitePlanGallery },
   { id: 'emails', title: 'E-mails', Section: EmailsSection },
 ];

@@ -1,6 +1,4 @@
-export type FetchedFile =
-  | { readonly ok: true; readonly bytes: Uint8Array }
-  | { readonly ok: false; readonly reason: 'store-silent' | 'not-allowed' | 'gone' };
+import type { FetchedFile } from './types';
 
 /** The bytes of a report's file; every way it can fail has a reason of its own. */
 export async function fetchFile(url: string, signal: AbortSignal): Promise<FetchedFile> {

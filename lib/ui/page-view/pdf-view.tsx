@@ -15,7 +15,7 @@ type PaneProps = Omit<PageViewProps, 'source' | 'originalHref'>;
 export const ZOOMS = [0.75, 1, 1.5, 2, 3] as const;
 
 export function PdfView({ url, ...props }: PaneProps & { url: string }) {
-  const { file, again } = useFile(url);
+  const { file, again } = useFile(url, props.load);
   if (file.kind === 'loading') return <ViewLoading fileName={props.fileName} />;
   if (file.kind === 'failed') return <ViewFailed reason={file.reason} onAgain={again} />;
   return <OpenedPdf bytes={file.bytes} {...props} />;

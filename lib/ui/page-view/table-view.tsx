@@ -15,7 +15,7 @@ type TableProps = Omit<PageViewProps, 'source' | 'originalHref'>;
 const SHOWN_ROWS = 500;
 
 export function CsvView({ url, ...props }: TableProps & { url: string }) {
-  const { file, again } = useFile(url);
+  const { file, again } = useFile(url, props.load);
   const rows = useMemo(() => {
     if (file.kind !== 'ready') return [];
     const text = decodeText(file.bytes);

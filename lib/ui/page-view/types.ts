@@ -23,6 +23,10 @@ export interface PageMark {
   readonly cell: { readonly row: number; readonly column: number } | null;
 }
 
+export type FetchedFile =
+  | { readonly ok: true; readonly bytes: Uint8Array }
+  | { readonly ok: false; readonly reason: 'store-silent' | 'not-allowed' | 'gone' };
+
 export interface PageViewProps {
   readonly source: PageViewSource;
   /** Name of the file, for labels. */
@@ -30,6 +34,8 @@ export interface PageViewProps {
   readonly marks: readonly PageMark[];
   readonly highlightedRowId: string | null;
   readonly onPick: (rowId: string) => void;
+  /** How the file's bytes are got; a plain same-origin fetch when left out. */
+  readonly load?: (url: string, signal: AbortSignal) => Promise<FetchedFile>;
   /** Address for "Open the original"; left out where the role may not open it. */
   readonly originalHref?: string;
 }

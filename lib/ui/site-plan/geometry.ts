@@ -157,3 +157,15 @@ function probe(outline: PlanOutline): PlanPoint {
   const left = { x: middle.x + step.x, y: middle.y + step.y };
   return isInside(outline, left) ? left : { x: middle.x - step.x, y: middle.y - step.y };
 }
+
+/** Puts an outline exactly into a rectangle, not snapped: for numbers typed in. */
+export function placeAt(outline: PlanOutline, rectangle: PlanRectangle): PlanOutline {
+  const bounds = boundsOf(outline);
+  if (!bounds) return outline;
+  const wide = bounds.maxX - bounds.minX;
+  const high = bounds.maxY - bounds.minY;
+  return outline.map((point) => ({
+    x: rectangle.x + (wide > 0 ? ((point.x - bounds.minX) / wide) * rectangle.width : 0),
+    y: rectangle.y + (high > 0 ? ((point.y - bounds.minY) / high) * rectangle.height : 0),
+  }));
+}

@@ -1,0 +1,122 @@
+'use client';
+
+import type { DragEvent, KeyboardEvent, PointerEvent } from 'react';
+import { cx } from '../cx';
+import { boundsOf } from './geometry';
+import type { DrawingSize } from './plan-furniture';
+import { fitText, lastTestText, plotArea, plotPhrase } from './plot-words';
+import type { LengthUnit, PlanOutline, PlanPlot } from './types';
+import { type PlanView, toDrawing } from './viewport';
+
+export interface PlotShapeProps {
+  readonly plot: PlanPlot;
+  readonly outline: PlanOutline;
+  readonly view: PlanView;
+  readonly size: DrawingSize;
+  readonly unit: LengthUnit;
+  readonly selected: boolean;
+  readonly dropTarget: boolean;
+  readonly canMove: boolean;
+  readonly helpId: string;
+  readonly onOpen: () => void;
+  readonly onKeyDown: (event: KeyboardEvent<SVGElement>) => void;
+  readonly onKeyUp: (event: KeyboardEvent<SVGElement>) => void;
+  readonly onBlur: () => void;
+  readonly onBodyDown: (event: PointerEvent<SVGElement>) => void;
+  readonly onCornerDown: (event: PointerEvent<SVGElement>, corner: number) => void;
+  readonly dropHandlers: {
+    readonly onDragOver: (event: DragEvent<SVGElement>) => void;
+    readonly onDragLeave: (event: DragEvent<SVGElement>) => void;
+    readonly onDrop: (event: DragEvent<SVGElement>) => void;
+  };
+}
+
+export function PlotShape(props: PlotShapeProps) {
+  const { plot, outline, view, size, unit, selected, dropTarget, canMove } = props;
+  const corners = outline.map((point) => toDrawing(point, view, size));
+  const points = corners.map((corner) => `${corner.x},${corner.y}`).join(' ');
+  return (
+    <g {...props.dropHandlers} data-plot-id={plot.id}>
+      {/* biome-ignore lint/a11y/useSemanticElements: a shape of a drawing cannot be a button element */}
+      <polygon
+        points={points}
+        role="button"
+        tabIndex={0}
+        aria-pressed={selected}
+        aria-label={plotPhrase(plot, outline, unit)}
+        aria-describedby={props.helpId}
+        onKeyDown={props.onKeyDown}
+        onKeyUp={props.onKeyUp}
+        onBlur={props.onBlur}
+        onPointerDown={props.onBodyDown}
+        onDoubleClick={props.onOpen}
+        className={cx(
+          'touch-none focus-visible:shadow-none',
+          dropTarget
+            ? 'fill-gley-wash stroke-gley stroke-[4] [stroke-dasharray:8_4]'
+            : selected
+              ? 'fill-gley-wash stroke-gley stroke-[3]'
+              : 'fill-[url(#plan-furrows)] stroke-horizon-2 stroke-2 hover:stroke-gley hover:stroke-[3]',
+          selected && canMove ? 'cursor-move' : 'cursor-pointer',
+        )}
+      />
+      <PlotLabel {...props} corners={corners} />
+      {selected && canMove
+        ? corners.map((corner, index) => (
+            <g
+              // biome-ignore lint/suspicious/noArrayIndexKey: a corner has no other name than its place in the outline
+              key={index}
+              onPointerDown={(event) => props.onCornerDown(event, index)}
+              className="cursor-crosshair touch-none"
+            >
+              <circle cx={corner.x} cy={corner.y} r={18} className="fill-transparent" />
+              <rect
+                x={corner.x - 6}
+                y={corner.y - 6}
+                width={12}
+                height={12}
+                className="fill-white stroke-gley stroke-2"
+              />
+            </g>
+          ))
+        : null}
+    </g>
+  );
+}
+
+function PlotLabel(props: PlotShapeProps & { corners: readonly { x: number; y: number }[] }) {
+  const { plot, outline, unit, dropTarget, corners } = props;
+  const bounds = boundsOf(corners);
+  if (!bounds) return null;
+  const width = bounds.maxX - bounds.minX - 12;
+  const height = bounds.maxY - bounds.minY - 8;
+  const upload = plot.uploads?.[0];
+  const lines = (
+    dropTarget
+      ? ['Let go to send the file']
+      : [plotArea(plot, outline, unit), lastTestText(plot), plot.crop ?? '', upload?.text ?? '']
+  )
+    .map((line) => fitText(line, width, 13))
+    .filter((line) => line !== '');
+  const name = fitText(plot.name, width, 16);
+  const room = Math.max(0, Math.floor((height - 20) / 17));
+  const shown = lines.slice(0, room);
+  const x = (bounds.minX + bounds.maxX) / 2;
+  const top = (bounds.minY + bounds.maxY) / 2 - (shown.length * 17) / 2;
+  if (name === '' || height < 14) return null;
+  return (
+    // biome-ignore lint/a11y/noAriaHiddenOnFocusable: a group of a drawing cannot take the focus
+    <g textAnchor="middle" pointerEvents="none" aria-hidden="true">
+      <text x={x} y={top + 5} className="fill-humus text-base font-semibold">
+        {name}
+      </text>
+      <g className="fill-clay text-sm">
+        {shown.map((line, index) => (
+          <text key={line} x={x} y={top + 24 + index * 17}>
+            {line}
+          </text>
+        ))}
+      </g>
+    </g>
+  );
+}
