@@ -2,6 +2,7 @@
 
 import { lazy, Suspense, useId, useRef, useState } from 'react';
 import { Button } from '../actions/button';
+import { cx } from '../cx';
 import { driftCsv, driftRows } from './csv';
 import { DriftKey } from './drift-key';
 import { driftLayout } from './drift-layout';
@@ -34,6 +35,8 @@ export function DriftChart(props: DriftChartProps) {
   const drawing = { analyte, points, amendments, band, asOf, ...worded };
   const flags = width > 0 && driftLayout({ ...drawing, width, height }).flags;
 
+  const drawn = width > 0 && rows.length > 0;
+
   const saveCsv = () =>
     saveBlob(new Blob([`\uFEFF${driftCsv(rows, analyte)}`], { type: 'text/csv;charset=utf-8' }), `${fileName}.csv`);
   const savePicture = async () => {
@@ -44,11 +47,11 @@ export function DriftChart(props: DriftChartProps) {
   };
 
   return (
-    <figure className="grid min-w-0 gap-3 break-inside-avoid" aria-labelledby={findingId}>
-      <p id={findingId} className="max-w-measure text-lg leading-snug">
+    <figure className="@container grid min-w-0 gap-3 break-inside-avoid" aria-labelledby={findingId}>
+      <p id={findingId} className={cx('max-w-measure text-lg leading-snug', drawn && 'print:hidden')}>
         {finding}
       </p>
-      <div ref={box} className="h-[340px] max-[560px]:h-[300px] min-w-0">
+      <div ref={box} className={cx('h-[340px] min-w-0 @max-[520px]:h-[300px]', drawn && 'print:hidden')}>
         {points.length === 0 && amendments.length === 0 ? (
           <EmptyPlot />
         ) : (
@@ -60,11 +63,27 @@ export function DriftChart(props: DriftChartProps) {
         )}
         {width === 0 && points.length > 0 && <Skeleton />}
       </div>
-      <DriftKey points={points} amendments={amendments} flags={flags} {...worded} />
-      <figcaption className="text-sm text-clay">
+      <div className={drawn ? 'print:hidden' : ''}>
+        <DriftKey points={points} amendments={amendments} flags={flags} {...worded} />
+      </div>
+      <figcaption className={cx('text-sm text-clay', drawn && 'print:hidden')}>
         {title}, drawn {formatDay(asOf, locale)}.{band !== null && ` Target band ${band.label}: ${band.source}.`}{' '}
         {source}.
       </figcaption>
+      {drawn && (
+        // On paper the picture stands in for the chart, whose width is that of the screen.
+        <div className="hidden print:block [&>svg]:h-auto [&>svg]:w-full">
+          <DriftPicture
+            ref={picture}
+            title={title}
+            finding={finding}
+            drawnOn={`Drawn ${formatDay(asOf, locale)}`}
+            source={source}
+            fontFamily="'Atkinson Hyperlegible Next', 'Liberation Sans', Arial, sans-serif"
+            {...drawing}
+          />
+        </div>
+      )}
       {rows.length > 0 && (
         <div className="grid gap-2">
           <ShowNumbers>
@@ -81,19 +100,6 @@ export function DriftChart(props: DriftChartProps) {
           <p role="status" className="text-sm text-iron empty:hidden">
             {failure}
           </p>
-        </div>
-      )}
-      {width > 0 && rows.length > 0 && (
-        <div hidden>
-          <DriftPicture
-            ref={picture}
-            title={title}
-            finding={finding}
-            drawnOn={`Drawn ${formatDay(asOf, locale)}`}
-            source={source}
-            fontFamily="'Atkinson Hyperlegible Next', 'Liberation Sans', Arial, sans-serif"
-            {...drawing}
-          />
         </div>
       )}
     </figure>

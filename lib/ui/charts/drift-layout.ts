@@ -125,8 +125,15 @@ function datumPath(
   last: { x: number; y: number } | null,
 ): string {
   const parts = [`M${left} ${bottom}`];
-  for (const x of [...dips].sort((a, b) => a - b)) {
-    parts.push(`L${x - 6} ${bottom} Q${x - 2} ${bottom} ${x} ${bottom + 5} Q${x + 2} ${bottom} ${x + 6} ${bottom}`);
+  const sorted = [...dips].sort((a, b) => a - b);
+  for (const [index, x] of sorted.entries()) {
+    const before = x - (sorted[index - 1] ?? Number.NEGATIVE_INFINITY);
+    const after = (sorted[index + 1] ?? Number.POSITIVE_INFINITY) - x;
+    const near = Math.min(6, before / 2);
+    const far = Math.min(6, after / 2);
+    parts.push(
+      `L${x - near} ${bottom} Q${x - near / 3} ${bottom} ${x} ${bottom + 5} Q${x + far / 3} ${bottom} ${x + far} ${bottom}`,
+    );
   }
   parts.push(`L${right} ${bottom}`);
   if (last !== null) parts.push(`C${last.x} ${bottom} ${right} ${last.y} ${last.x} ${last.y}`);

@@ -1,7 +1,10 @@
-import type { Ref } from 'react';
-import { driftLayout, type LayoutInput } from './drift-layout';
+import type { ReactNode, Ref } from 'react';
+import { type DriftLayout, driftLayout, type LayoutInput } from './drift-layout';
 import { DriftMarks } from './drift-marks';
+import { formatDay } from './numbers';
 import { INK } from './palette';
+import { splitSeries } from './series';
+import { Mark } from './shapes';
 
 interface DriftPictureProps extends Omit<LayoutInput, 'width' | 'height'> {
   readonly title: string;
@@ -13,27 +16,31 @@ interface DriftPictureProps extends Omit<LayoutInput, 'width' | 'height'> {
   readonly ref?: Ref<SVGSVGElement>;
 }
 
-export const PICTURE = { width: 900, height: 560 } as const;
+const WIDTH = 900;
 const PAD = 28;
-const HEAD = 86;
-const FOOT = 34;
+const HEAD = 94;
+const CHART = 410;
+const ROW = 19;
 
-/** The chart as one self-contained drawing with its title, day and source: what the exported PNG shows. */
+/** The chart as one self-contained drawing with title, key, day and source: the exported PNG, and the chart on paper. */
 export function DriftPicture({ title, finding, drawnOn, source, fontFamily, ref, ...input }: DriftPictureProps) {
-  const width = PICTURE.width - PAD * 2;
-  const height = PICTURE.height - HEAD - FOOT - PAD;
-  const layout = driftLayout({ ...input, width, height });
+  const layout = driftLayout({ ...input, width: WIDTH - PAD * 2, height: CHART });
+  const rows = keyRows(input, layout);
+  const keyTop = HEAD + CHART + 26;
+  const height = keyTop + rows.length * ROW + 38;
+  const band = input.band === null ? '' : ` Target band: ${input.band.source}.`;
   return (
     <svg
       ref={ref}
       xmlns="http://www.w3.org/2000/svg"
-      width={PICTURE.width}
-      height={PICTURE.height}
-      viewBox={`0 0 ${PICTURE.width} ${PICTURE.height}`}
+      width={WIDTH}
+      height={height}
+      viewBox={`0 0 ${WIDTH} ${height}`}
       fontFamily={fontFamily}
+      fontSize={13}
       aria-hidden="true"
     >
-      <rect width={PICTURE.width} height={PICTURE.height} fill={INK.chalk} />
+      <rect width={WIDTH} height={height} fill={INK.chalk} />
       <text x={PAD} y={42} fontSize={22} fontWeight={700} fill={INK.humus}>
         {title}
       </text>
@@ -42,14 +49,66 @@ export function DriftPicture({ title, finding, drawnOn, source, fontFamily, ref,
           {line}
         </text>
       ))}
-      <g transform={`translate(${PAD} ${HEAD + 8})`}>
+      <g transform={`translate(${PAD} ${HEAD})`}>
         <DriftMarks layout={layout} analyte={input.analyte} band={input.band} />
       </g>
-      <text x={PAD} y={PICTURE.height - 20} fontSize={12} fill={INK.clay}>
-        {source}. {drawnOn}. Bars: 95% range of one test.
+      {rows.map(({ key, sign, words }, index) => (
+        <g key={key} transform={`translate(${PAD} ${keyTop + index * ROW})`}>
+          {sign}
+          <text x={38} y={4} fill={INK.clay}>
+            {wrap(words, 118, 1)[0] ?? ''}
+          </text>
+        </g>
+      ))}
+      <text x={PAD} y={height - 18} fontSize={12} fill={INK.clay}>
+        {source}. {drawnOn}.{band}
       </text>
     </svg>
   );
+}
+
+interface KeyRow {
+  readonly key: string;
+  readonly sign: ReactNode;
+  readonly words: string;
+}
+
+/** A picture travels without the page, so it says itself what its marks and numbers mean. */
+function keyRows(input: Pick<LayoutInput, 'points' | 'locale'>, layout: DriftLayout): KeyRow[] {
+  const segments = splitSeries(input.points);
+  const range = layout.points.some((p) => p.whisker !== null) ? '; bar: 95% range of one test' : '';
+  const series = segments.map(({ key, style, points, breakBefore }): KeyRow => {
+    const first = points[0];
+    const how = [first?.method, first?.laboratory].filter(Boolean).join(', ') || 'method not stated';
+    const from =
+      breakBefore === null ? '' : `; from ${formatDay(first?.takenOn ?? '', input.locale)}, not joined: ${breakBefore}`;
+    return {
+      key,
+      sign: (
+        <g>
+          <line x1={0} x2={28} y1={0} y2={0} stroke={style.colour} strokeWidth={2} strokeDasharray={style.dash} />
+          <Mark x={14} y={0} colour={style.colour} shape={style.marker} size={4} />
+        </g>
+      ),
+      words: `${how}${range}${from}`,
+    };
+  });
+  if (!layout.flags) return series;
+  const flags = layout.amendments.map(
+    ({ amendment, text }): KeyRow => ({
+      key: amendment.id,
+      sign: (
+        <g>
+          <rect x={6} y={-8} width={16} height={15} rx={2} fill={INK.chalk} stroke={INK.redHorizon} />
+          <text x={14} y={4} textAnchor="middle" fill={INK.redHorizon} fontWeight={600}>
+            {text}
+          </text>
+        </g>
+      ),
+      words: `${formatDay(amendment.on, input.locale)}: ${[amendment.label, amendment.detail].filter(Boolean).join(', ')}`,
+    }),
+  );
+  return [...series, ...flags];
 }
 
 /** Breaks a sentence into at most `most` lines; what does not fit ends in an ellipsis. */

@@ -7,7 +7,11 @@ export function useWidth<T extends HTMLElement>(): { readonly box: RefObject<T |
   useEffect(() => {
     const element = box.current;
     if (element === null) return;
-    const measure = () => setWidth(Math.floor(element.getBoundingClientRect().width));
+    const measure = () => {
+      const now = Math.floor(element.getBoundingClientRect().width);
+      // Hidden for print it measures 0; the last real width stays.
+      if (now > 0) setWidth(now);
+    };
     measure();
     const observer = new ResizeObserver(measure);
     observer.observe(element);
