@@ -1,7 +1,7 @@
 import { type SQL, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import type { SiteId } from '@/lib/domain/ids';
-import { type JobName, type JobPayload, JOBS } from '@/lib/jobs/names';
+import { JOBS, type JobName, type JobPayload } from '@/lib/jobs/names';
 import { type SendOptions, sendJob } from '@/lib/services/queue/queue';
 import { database } from './database';
 
@@ -27,11 +27,16 @@ async function withRetry<T>(run: () => Promise<T>): Promise<T> {
   }
 }
 
-/** One transaction, one site: the setting is local to it, so a pooled connection cannot carry it to the next caller. */
+/** Local to the transaction, so a pooled connection cannot carry it to the next caller. */
+export async function enterSite(tx: Transaction, siteId: SiteId): Promise<void> {
+  await tx.execute(sql`select set_config('app.site_id', ${siteId}, true)`);
+}
+
+/** One transaction, one site. */
 export function withSite<T>(siteId: SiteId, run: (tx: Transaction) => Promise<T>): Promise<T> {
   return withRetry(() =>
     database().transaction(async (tx) => {
-      await tx.execute(sql`select set_config('app.site_id', ${siteId}, true)`);
+      await enterSite(tx, siteId);
       return run(tx);
     }),
   );
@@ -47,11 +52,11 @@ const bound = (value: unknown): unknown => {
   return typeof value === 'object' ? JSON.stringify(value) : value;
 };
 
-/** Turns the queue's `$1` text into a bound statement on this transaction. */
-function statement(text: string, values: unknown[]): SQL {
+/** Turns the `$1` text of a package (queue, limiter) into a bound statement of ours. */
+export function statement(text: string, values: unknown[]): SQL {
   const parts = text.split(/\$(\d+)/);
   const chunks = parts.map((part, at) => {
-    // Odd places are parameter numbers, even places the queue's own constant text.
+    // Odd places are parameter numbers, even places the package's own constant text.
     if (at % 2 === 1) return sql`${bound(values[Number(part) - 1])}`;
     return constantText(part);
   });

@@ -11,10 +11,13 @@ import { withPeople, withSite } from './transaction';
 
 export type Guard = { kind: 'site'; act: Act } | { kind: 'person' } | { kind: 'public' } | { kind: 'worker' };
 
+/** zod gives an object without fields a type that allows no field at all, not even the site's id beside it. */
+type Fields<S extends z.ZodType> = z.input<S> extends Record<string, never> ? object : z.input<S>;
+
 /** A verb is called as `verb({ ctx, input })` and carries its guard and schema, so that routes, the API description and the matrix test read them. */
 export type Verb<S extends z.ZodType, R, G extends Guard = Guard> = ((call: {
   ctx: Ctx;
-  input: G extends { kind: 'site' } ? { siteId: string } & z.input<S> : z.input<S>;
+  input: G extends { kind: 'site' } ? { siteId: string } & Fields<S> : Fields<S>;
 }) => Promise<R>) & { guard: G; schema: S };
 
 export function parse<S extends z.ZodType>(schema: S, input: unknown): z.output<S> {

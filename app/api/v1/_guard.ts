@@ -10,7 +10,9 @@ export function assertSameOrigin(request: Request): void {
   if (site === 'same-origin' || site === 'none') return;
   const origin = request.headers.get('origin');
   if (site === null && origin === env().APP_ORIGIN) return;
-  throw new Problem('forbidden', 'This request did not come from a page of Loamline, so nothing was changed.', { reason: 'cross-site' });
+  throw new Problem('forbidden', 'This request did not come from a page of Loamline, so nothing was changed.', {
+    reason: 'cross-site',
+  });
 }
 
 /** The caller's address: forwarded headers count only for as many proxies as the settings name. */
@@ -34,16 +36,17 @@ export async function readJson(request: Request, limitBytes: number): Promise<un
   if (request.method === 'GET' || request.method === 'HEAD') return {};
   if (!request.body) return {};
   const length = Number(request.headers.get('content-length') ?? '0');
-  if (length > limitBytes) throw new Problem('too-large', `This is larger than the ${limitBytes / 1024} KiB taken here.`);
-  if (!/^application\/json\b/i.test(request.headers.get('content-type') ?? '')) {
-    if (length === 0) return {};
-    throw new Problem('wrong-type', 'Send the body as application/json.');
-  }
+  if (length > limitBytes)
+    throw new Problem('too-large', `This is larger than the ${limitBytes / 1024} KiB taken here.`);
+  const isJson = /^application\/json\b/i.test(request.headers.get('content-type') ?? '');
   const chunks: Uint8Array[] = [];
   let total = 0;
   for await (const chunk of request.body as unknown as AsyncIterable<Uint8Array>) {
     total += chunk.byteLength;
-    if (total > limitBytes) throw new Problem('too-large', `This is larger than the ${limitBytes / 1024} KiB taken here.`);
+    // Only JSON makes a browser ask first whether another site may send this; an empty body needs no type.
+    if (!isJson && total > 0) throw new Problem('wrong-type', 'Send the body as application/json.');
+    if (total > limitBytes)
+      throw new Problem('too-large', `This is larger than the ${limitBytes / 1024} KiB taken here.`);
     chunks.push(chunk);
   }
   if (total === 0) return {};

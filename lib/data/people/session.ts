@@ -1,12 +1,22 @@
+import { and, eq, ne } from 'drizzle-orm';
+import { Cookie } from 'lucia';
+import type { Transaction } from '@/db/client';
+import { session } from '@/db/schema';
 import { asPersonId } from '@/lib/domain/ids';
 import { type Actor, type Ctx, databaseNow } from '../context';
-import { lucia, SESSION_COOKIE } from './lucia';
+import { luciaAt, SESSION_COOKIE } from './lucia';
 import { hashSecret, newSecret } from './secrets';
 
-const ABSOLUTE_MS = 30 * 24 * 3600 * 1000;
-const SHARED_MS = 12 * 3600 * 1000;
+const ABSOLUTE_SECONDS = 30 * 24 * 3600;
+const SHARED_SECONDS = 12 * 3600;
 
 export type OpenedSession = { setCookie: string };
+
+/** On a shared computer the cookie has no age of its own: it goes when the browser is closed. */
+function cookie(value: string, maxAge: number | undefined): string {
+  const attributes = { httpOnly: true, secure: true, sameSite: 'lax', path: '/' } as const;
+  return new Cookie(SESSION_COOKIE, value, maxAge === undefined ? attributes : { ...attributes, maxAge }).serialize();
+}
 
 export async function openSession(
   ctx: Ctx,
@@ -14,34 +24,41 @@ export async function openSession(
   options: { sharedComputer: boolean; userAgent: string | null },
 ): Promise<OpenedSession> {
   const secret = newSecret(ctx);
-  await lucia().createSession(
+  await luciaAt(ctx.now).createSession(
     personId,
     { createdAt: ctx.now, sharedComputer: options.sharedComputer, userAgent: options.userAgent },
     { sessionId: hashSecret(secret) },
   );
-  return { setCookie: lucia().createSessionCookie(secret).serialize() };
+  return { setCookie: cookie(secret, options.sharedComputer ? undefined : ABSOLUTE_SECONDS) };
 }
 
-export const closeSession = async (sessionId: string): Promise<OpenedSession> => {
-  await lucia().invalidateSession(sessionId);
-  return { setCookie: lucia().createBlankSessionCookie().serialize() };
-};
+export const blankCookie = (): OpenedSession => ({ setCookie: cookie('', 0) });
 
-export const closeAllSessions = (personId: string): Promise<void> => lucia().invalidateUserSessions(personId);
+export const closeSession = (ctx: Ctx, sessionId: string): Promise<void> =>
+  luciaAt(ctx.now).invalidateSession(sessionId);
+
+/** In the caller's transaction, so that a new password and the end of the old sessions are one change. */
+export async function closeAllSessions(tx: Transaction, personId: string, except?: string): Promise<void> {
+  await tx
+    .delete(session)
+    .where(except ? and(eq(session.userId, personId), ne(session.id, except)) : eq(session.userId, personId));
+}
 
 /** Who holds this cookie. An expired, over-age or disabled one is nobody, and its row goes. */
 export async function actorOfCookie(secret: string | undefined): Promise<Actor> {
   if (!secret || secret.length > 100) return { kind: 'nobody' };
-  const { session, user } = await lucia().validateSession(hashSecret(secret));
-  if (!session || !user) return { kind: 'nobody' };
-  const age = (await databaseNow()).getTime() - session.createdAt.getTime();
-  if (user.disabledAt || age > (session.sharedComputer ? SHARED_MS : ABSOLUTE_MS)) {
-    await lucia().invalidateSession(session.id);
+  const now = await databaseNow();
+  const lucia = luciaAt(now);
+  const { session: found, user } = await lucia.validateSession(hashSecret(secret));
+  if (!found || !user) return { kind: 'nobody' };
+  const age = (now.getTime() - found.createdAt.getTime()) / 1000;
+  if (user.disabledAt || age > (found.sharedComputer ? SHARED_SECONDS : ABSOLUTE_SECONDS)) {
+    await lucia.invalidateSession(found.id);
     return { kind: 'nobody' };
   }
   return {
     kind: 'person',
-    sessionId: session.id,
+    sessionId: found.id,
     person: {
       id: asPersonId(user.id),
       name: user.name,
