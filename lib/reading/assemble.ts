@@ -168,7 +168,11 @@ function doubtAll(groups: readonly Group[]): ReadResult[][] {
     markPrimary(
       group.results.map((result) => {
         const doubts = [...result.doubts, ...(raised.get(result) ?? [])];
-        return { ...result, doubts, confidence: Math.round(Math.min(result.confidence, ceiling(doubts)) * 100) / 100 };
+        return {
+          ...result,
+          doubts,
+          confidence: Math.round(Math.min(0.99, result.confidence, ceiling(doubts)) * 100) / 100,
+        };
       }),
     ),
   );

@@ -7,7 +7,7 @@ import { type IdentityHit, identityHits } from './stages/identity';
 import { type Line, linesOf } from './stages/lines';
 import { type ListRow, listRows, type RoleHeader } from './stages/list';
 import { rowsOfTable, type Table, type TableRow, tablesOf } from './stages/matrix';
-import { adviceOfLines, adviceOfTable } from './stages/recommendations';
+import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommendations';
 import {
   laboratoryName,
   notSoil,
@@ -182,7 +182,8 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   if (samples.length === 0) return { reading: refusedReading({ file, pages: count, error: NO_RESULTS }), trace };
   const sampleAt = (line: CellLine) =>
     contextAt(contexts, line.line.page.number, line.line.y0)?.identity.sampleId ?? null;
-  const recommendations = [...adviceOfTable(tableRows), ...adviceOfLines(advice, sampleAt)];
+  const names = samples.flatMap((sample) => sample.sampleId ?? []);
+  const recommendations = withSampleNames([...adviceOfTable(tableRows), ...adviceOfLines(advice, sampleAt)], names);
   return {
     reading: {
       file,

@@ -49,7 +49,7 @@ function run(input: RunInput): Promise<Reading> {
     // No environment: the process that opens strangers' files holds no secret.
     const child: ChildProcess = fork(path, [], {
       execArgv,
-      env: {},
+      env: { NODE_ENV: 'production' },
       serialization: 'advanced',
       stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
     });

@@ -46,7 +46,11 @@ export const UNIT_SPELLINGS: readonly UnitSpelling[] = UNITS.filter((unit) => un
 
 /** Method spellings that may be cut off a label to reach the name inside it, longest first. */
 export const METHOD_SPELLINGS: readonly string[] = [
-  ...new Set(METHODS.flatMap((method) => method.spellings.map((spelling) => normal(spelling)))),
+  ...new Set(
+    METHODS.flatMap((method) =>
+      method.spellings.flatMap((spelling) => [normal(spelling), normal(spelling).replace(/ (?=[\di]+$)/, '-')]),
+    ),
+  ),
 ]
   .filter((text) => text.length > 1 && !NAMES.has(text) && !['total', 'class', 'direct', 'none'].includes(text))
   .sort((a, b) => b.length - a.length);

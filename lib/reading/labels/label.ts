@@ -46,13 +46,18 @@ export function unitOnly(text: string): { unit: UnitKey; printed: string } | nul
   return { unit: found.unit, printed: text.replace(/^[([]|[)\]]$/g, '').trim() };
 }
 
+/** "Mehlich-3" and "Mehlich 3" are one method. */
+function loose(text: string): string {
+  return normal(text).replace(/-/g, ' ');
+}
+
 /** The method of that analyte which a text names, longest spelling first. */
 export function methodIn(key: AnalyteKey, text: string): { method: MethodKey; printed: string } | null {
-  const plain = normal(text);
+  const plain = loose(text);
   let best: { method: MethodKey; printed: string; length: number } | null = null;
   for (const method of methodsOf(key)) {
     for (const spelling of method.spellings) {
-      const wanted = normal(spelling);
+      const wanted = loose(spelling);
       if (wanted.length < 2 || wanted.length <= (best?.length ?? 0)) continue;
       if (findWhole(plain, wanted) >= 0) best = { method: method.key, printed: spelling, length: wanted.length };
     }

@@ -17,7 +17,7 @@ export type Column = {
 };
 
 type Span = { x0: number; x1: number };
-type Stack = Span & { own: string[]; captions: string[]; reached: boolean };
+type Stack = Span & { own: string[]; captions: string[]; over: boolean };
 
 /** Share of the narrower of two spans by which they must overlap to be one column. */
 const SAME_COLUMN = 0.2;
@@ -81,6 +81,7 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[]) {
   const best = over.sort((a, b) => overlap(b, phrase) - overlap(a, phrase))[0];
   if (best !== undefined) {
     best.own.push(phrase.text);
+    best.over = true;
     return;
   }
   const gap = (stack: Stack) => Math.max(stack.x0 - phrase.x1, phrase.x0 - stack.x1);
@@ -96,7 +97,6 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[]) {
     .sort((a, b) => gap(a) - gap(b))[0];
   if (near === undefined) return;
   near.own.push(phrase.text);
-  near.reached = true;
 }
 
 const ADVICE_UNITS = new Set([
@@ -131,13 +131,13 @@ function meaningOf(stack: Stack, first: boolean): Column {
         ? 'previous'
         : null;
   }
-  return { ...span, label, field: label === null ? field : null, role, position: stack.reached ? 0.9 : 1 };
+  return { ...span, label, field: label === null ? field : null, role, position: stack.over ? 1 : 0.96 };
 }
 
 /** Stage 5. Columns with the meaning of their stacked headings; captions that stretch over several are given to each. */
 export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]): Column[] {
   const spans = spansOf(rows);
-  const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], reached: false }));
+  const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], over: false }));
   for (const line of header) {
     const phrases = line.cells.flatMap((cell: PageCell) => partHeading(cell.phrase, spans));
     for (const phrase of phrases) place(phrase, phrases, stacks);

@@ -35,10 +35,11 @@ export function dateOrder(texts: Iterable<string>): DateOrder {
   let dayFirst = 0;
   let monthFirst = 0;
   for (const text of texts) {
-    const match = NUMERIC.exec(text);
-    if (match === null || (match[1] ?? '').length > 2) continue;
-    if (Number(match[1]) > 12) dayFirst += 1;
-    if (Number(match[2]) > 12) monthFirst += 1;
+    for (const match of text.matchAll(new RegExp(NUMERIC, 'g'))) {
+      if ((match[1] ?? '').length > 2) continue;
+      if (Number(match[1]) > 12) dayFirst += 1;
+      if (Number(match[2]) > 12) monthFirst += 1;
+    }
   }
   return dayFirst > monthFirst ? 'day-first' : monthFirst > dayFirst ? 'month-first' : 'unknown';
 }

@@ -77,3 +77,11 @@ export function adviceOfTable(rows: readonly TableRow[]): ReadRecommendation[] {
     }),
   );
 }
+
+/** "Top bed: elemental sulfur" names the sample first; it is told apart when that name is one of the report's. */
+export function withSampleNames(advice: readonly ReadRecommendation[], names: readonly string[]): ReadRecommendation[] {
+  return advice.map((one) => {
+    const name = names.find((sample) => one.item.toLowerCase().startsWith(`${sample.toLowerCase()} `));
+    return name === undefined ? one : { ...one, sampleId: name, item: one.item.slice(name.length).trim() };
+  });
+}

@@ -124,7 +124,11 @@ export function statementsOf(texts: readonly string[]): Statements {
         if (method !== null && !methods.has(key)) methods.set(key, { method, printed: method.printed });
       }
       const extractant = EXTRACTANTS.find((entry) =>
-        entry.spellings.some((spelling) => spelling.length > 3 && findWhole(normal(clause), normal(spelling)) >= 0),
+        entry.spellings.some(
+          (spelling) =>
+            spelling.length > 3 &&
+            findWhole(normal(clause).replace(/-/g, ' '), normal(spelling).replace(/-/g, ' ')) >= 0,
+        ),
       );
       if (named.length === 0 && extractant !== undefined && /extract|method/i.test(clause)) {
         for (const key of extractant.analytes) everyone.add(key);
