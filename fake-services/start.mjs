@@ -205,7 +205,7 @@ async function main() {
   const running = withoutOwner(childEnv(env));
   const worker = options.dev
     ? ['--import', 'tsx', 'lib/jobs/worker.ts']
-    : ['--enable-source-maps', '.next/worker/lib/jobs/worker.mjs'];
+    : ['--enable-source-maps', '.next/worker/worker.mjs'];
   children.start('worker', process.execPath, worker, { cwd: root, env: running, show: options.dev });
   const next = [
     'node_modules/next/dist/bin/next',
@@ -232,7 +232,8 @@ async function main() {
     ].join('\n'),
   );
   if (options['ready-file'] !== undefined) {
-    const owner = cluster === undefined ? {} : { DATABASE_SUPERUSER_URL: cluster.url('postgres') };
+    const owner =
+      cluster === undefined ? {} : { DATABASE_SUPERUSER_URL: cluster.url('postgres'), DATABASE_FOLDER: cluster.home };
     const making = `${options['ready-file']}.making`;
     writeFileSync(making, JSON.stringify({ ...env, ...owner }), { mode: 0o600 });
     renameSync(making, options['ready-file']);

@@ -1,4 +1,4 @@
-import { existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
+import { chmodSync, existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { copyPdfWorker, ensureBuild } from './support/build.mjs';
@@ -22,6 +22,8 @@ const filters = words.filter((word) => word !== '--bench');
 
 mkdirSync(out, { recursive: true });
 const work = mkdtempSync(path.join(out, 'run-'));
+// The user postgres must be able to enter.
+chmodSync(work, 0o755);
 const children = createChildren({
   logs: path.join(work, 'logs'),
   onExit: ({ name, code, signal, lastLines }) => {
@@ -32,6 +34,7 @@ const run = createRunner({ children, root });
 const total = { passed: 0, failed: 0, skipped: 0 };
 const times = [];
 let services;
+let stackDatabase;
 let finishing;
 
 function add(counts) {
@@ -51,9 +54,11 @@ async function timed(name, work) {
 function finish(code, reason) {
   finishing ??= (async () => {
     if (reason !== undefined) console.error(reason);
+    if (code === 1 && total.failed === 0) total.failed = 1;
     await children.stopAll();
     await services?.stop();
     rmSync(work, { recursive: true, force: true });
+    if (stackDatabase !== undefined) rmSync(stackDatabase, { recursive: true, force: true });
     if (times.length > 0) console.log(`\n${times.join(', ')}`);
     if (total.skipped > 0) console.log(`${total.skipped} skipped`);
     if (!isBench) console.log(`${total.passed} passed, ${total.failed} failed`);
@@ -114,7 +119,9 @@ async function startStack() {
     if (finishing) return {};
     await pause(50);
   }
-  return { ...JSON.parse(readFileSync(ready, 'utf8')), STACK_FOLDER: path.join(work, 'stack') };
+  const { DATABASE_FOLDER, ...known } = JSON.parse(readFileSync(ready, 'utf8'));
+  stackDatabase = DATABASE_FOLDER;
+  return { ...known, STACK_FOLDER: path.join(work, 'stack') };
 }
 
 async function browserTests(patterns) {

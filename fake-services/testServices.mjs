@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { mkdirSync, mkdtempSync, rmSync } from 'node:fs';
+import { chmodSync, mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { startMail } from './mail/server.mjs';
 import { startCluster } from './postgres/cluster.mjs';
@@ -17,6 +17,8 @@ export async function startTestServices({ root }) {
   const out = path.join(root, 'tests', '.out');
   mkdirSync(out, { recursive: true });
   const folder = mkdtempSync(path.join(out, 'services-'));
+  // The user postgres must be able to enter.
+  chmodSync(folder, 0o755);
   const secret = () => randomBytes(24).toString('hex');
   const access = { accessKeyId: 'TESTSTORE', secretAccessKey: secret(), region: 'eu-central-1' };
   const apiKey = `re_${secret()}`;

@@ -31,7 +31,8 @@ const steps = {
     tool('node_modules/@biomejs/biome/bin/biome', 'check', '--error-on-warnings', '--max-diagnostics=40', '.'),
   types: () => tool('node_modules/typescript/bin/tsc', '--noEmit', '--pretty', 'false'),
   layering,
-  'dead code': () => tool('node_modules/knip/bin/knip.js', '--config', '.knip.json', '--no-progress', '--no-config-hints'),
+  'dead code': () =>
+    tool('node_modules/knip/bin/knip.js', '--config', '.knip.json', '--no-progress', '--no-config-hints'),
   ...Object.fromEntries(Object.entries(TEXT_RULES).map(([name, rule]) => [name, async () => rule(root)])),
 };
 
