@@ -22,6 +22,7 @@ export function driftRows(points: readonly DriftPoint[], amendments: readonly Dr
   const tests = sortPoints(points).map((p): DriftRow => {
     const notes = [p.breakBefore === null ? '' : `not joined to the test before: ${p.breakBefore}`];
     if (p.qualifier === 'below') notes.push('below what the laboratory can read');
+    if (p.qualifier === 'below-unknown') notes.push('below a limit the laboratory does not state');
     if (p.qualifier === 'above') notes.push('above what the laboratory can read');
     return {
       kind: 'test',

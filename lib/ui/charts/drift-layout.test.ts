@@ -68,6 +68,24 @@ describe('driftLayout', () => {
     expect(layout.points.map((p) => p.whisker === null)).toEqual([true, true, false, false]);
   });
 
+  it('puts a result below an unknown limit at the foot, without letting it stretch the axis', () => {
+    const [first, ...rest] = phHistory;
+    if (first === undefined) throw new Error('no sample');
+    const unknown = {
+      ...first,
+      value: 0,
+      printed: 'not detected',
+      qualifier: 'below-unknown',
+      low: null,
+      high: null,
+    } as const;
+    const layout = driftLayout({ ...base, points: [unknown, ...rest] });
+    expect(layout.valueDomain[0]).toBeGreaterThan(5);
+    const y = layout.points[0]?.y ?? 0;
+    expect(y).toBeLessThan(layout.plot.bottom);
+    expect(y).toBeGreaterThan(layout.plot.bottom - 12);
+  });
+
   it('ends the datum line at the last value', () => {
     const layout = driftLayout(base);
     expect(layout.last?.label).toBe('6.6');

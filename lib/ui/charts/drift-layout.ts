@@ -8,6 +8,8 @@ export const MOST_LABELS = 4;
 const CHAR_WIDTH = 7;
 const MARGIN = { top: 26, right: 58, left: 46 } as const;
 const DOT_GAP = 20;
+/** How far above the axis a result without any known value stands. */
+const FOOT = 8;
 
 export interface LayoutInput {
   readonly analyte: ChartAnalyte;
@@ -163,7 +165,8 @@ export function driftLayout(input: LayoutInput): DriftLayout {
       const { low, high } = point;
       const whisker =
         point.qualifier === 'exact' && low !== null && high !== null ? { top: yOf(high), bottom: yOf(low) } : null;
-      return { point, segment, x: xOf(dayMs(point.takenOn)), y: yOf(point.value), whisker };
+      const y = point.qualifier === 'below-unknown' ? bottom - FOOT : yOf(point.value);
+      return { point, segment, x: xOf(dayMs(point.takenOn)), y, whisker };
     }),
   );
   const lastPoint = placedPoints.at(-1);

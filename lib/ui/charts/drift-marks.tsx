@@ -212,7 +212,12 @@ function Tests({ layout }: { layout: DriftLayout }) {
           <Mark key={point.id} x={x} y={y} colour={segment.style.colour} shape={segment.style.marker} />
         ) : (
           <g key={point.id}>
-            <LimitMark x={x} y={y} colour={segment.style.colour} side={point.qualifier} />
+            <LimitMark
+              x={x}
+              y={y}
+              colour={segment.style.colour}
+              side={point.qualifier === 'above' ? 'above' : 'below'}
+            />
             <text
               x={x}
               y={y - 9}

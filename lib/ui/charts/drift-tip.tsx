@@ -20,6 +20,7 @@ export function DriftTip({ point, analyte, locale }: DriftTipProps) {
         <p className="text-clay">95% range {formatRange(point.low, point.high, changeDecimals(analyte))}</p>
       )}
       {point.qualifier === 'below' && <p className="text-clay">below what the laboratory can read</p>}
+      {point.qualifier === 'below-unknown' && <p className="text-clay">below a limit the laboratory does not state</p>}
       {point.qualifier === 'above' && <p className="text-clay">above what the laboratory can read</p>}
       {where !== '' && <p className="text-clay">{where}</p>}
       {point.breakBefore !== null && <p className="text-clay">Not joined to the test before: {point.breakBefore}.</p>}

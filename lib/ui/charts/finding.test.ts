@@ -42,6 +42,15 @@ describe('driftFinding', () => {
     expect(driftFinding({ analyte: boron, points: boronHistory.slice(0, 1), band: wide })).not.toContain('target band');
   });
 
+  it('says nothing of the band for a result without any limit', () => {
+    const [first] = boronHistory;
+    if (first === undefined) throw new Error('no sample');
+    const unknown = { ...first, value: 0, printed: 'not detected', qualifier: 'below-unknown' } as const;
+    const text = driftFinding({ analyte: boron, points: [unknown], band: boronBand });
+    expect(text).toContain('not detected');
+    expect(text).not.toContain('target band');
+  });
+
   it('does without a band', () => {
     expect(say(phHistory, null)).not.toContain('band');
   });

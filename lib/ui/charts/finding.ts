@@ -14,7 +14,7 @@ interface FindingInput {
 }
 
 function bandWords(point: DriftPoint, band: TargetBand | null): string {
-  if (band === null || (band.low === null && band.high === null)) return '';
+  if (band === null || (band.low === null && band.high === null) || point.qualifier === 'below-unknown') return '';
   if (point.qualifier === 'below' && (band.low === null || point.value > band.low)) return '';
   if (point.qualifier === 'above' && (band.high === null || point.value < band.high)) return '';
   if (band.low !== null && point.value < band.low) return ', under the target band';

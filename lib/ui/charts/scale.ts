@@ -39,7 +39,7 @@ export function valueAxis(
   analyte: ChartAnalyte,
   wanted = 5,
 ): Axis {
-  const values = points.flatMap((p) => [p.value, p.low, p.high]);
+  const values = points.flatMap((p) => (p.qualifier === 'below-unknown' ? [] : [p.value, p.low, p.high]));
   const all = [...values, band?.low, band?.high].filter(
     (v): v is number => typeof v === 'number' && Number.isFinite(v),
   );

@@ -131,11 +131,22 @@ function MiniDrawing({ mini, amendments, from, asOf }: MiniProps) {
       )}
       {segments.map((segment) =>
         segment.points.map((point) => (
-          <svg key={point.id} x={pct(x(point.takenOn))} y={y(point.value)} overflow="visible" aria-hidden="true">
+          <svg
+            key={point.id}
+            x={pct(x(point.takenOn))}
+            y={point.qualifier === 'below-unknown' ? BOTTOM - 2 : y(point.value)}
+            overflow="visible"
+            aria-hidden="true"
+          >
             {point.qualifier === 'exact' ? (
               <Mark x={0} y={0} colour={segment.style.colour} shape={segment.style.marker} size={4} />
             ) : (
-              <LimitMark x={0} y={0} colour={segment.style.colour} side={point.qualifier} />
+              <LimitMark
+                x={0}
+                y={0}
+                colour={segment.style.colour}
+                side={point.qualifier === 'above' ? 'above' : 'below'}
+              />
             )}
           </svg>
         )),

@@ -12,11 +12,12 @@ export interface ChartAnalyte {
 export interface DriftPoint {
   readonly id: string;
   readonly takenOn: string;
-  /** For a result below (or above) what the laboratory can read: the limit itself. */
+  /** For a result below (or above) what the laboratory can read: the limit itself. Unused for 'below-unknown'. */
   readonly value: number;
   /** As the report prints it: "6.3", "< 0.1". */
   readonly printed: string;
-  readonly qualifier: 'exact' | 'below' | 'above';
+  /** 'below-unknown': printed as 0 or "not detected" without a limit; it stands at the foot of the chart. */
+  readonly qualifier: 'exact' | 'below' | 'above' | 'below-unknown';
   /** 95 % range of this one test; null where no noise figure is known. */
   readonly low: number | null;
   readonly high: number | null;
