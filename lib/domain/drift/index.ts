@@ -96,6 +96,7 @@ export type DriftView = {
   readonly expected: { readonly perYear: number; readonly sd: number; readonly joined: boolean } | null;
 };
 
+const earlierOf = (a: Day, b: Day): Day => (daysBetween(a, b) >= 0 ? a : b);
 const yearsOf = (day: Day): number => dayNumber(day) / YEAR;
 
 /** One step for each first test after spreading; a product with no test before or after it teaches nothing here. */
@@ -161,7 +162,7 @@ function forecastOf(input: DriftInput, error: SiteError, line: Line, last: TestP
     };
   const earliest = day(interval.from);
   const ordinary = addMonths(last.day, RETEST_MONTHS);
-  const soonest = earliest < ordinary ? earliest : ordinary;
+  const soonest = earlierOf(earliest, ordinary);
   const rough = line.tests <= FEWEST_TESTS;
   return {
     ok: true,
@@ -170,7 +171,7 @@ function forecastOf(input: DriftInput, error: SiteError, line: Line, last: TestP
     until: day(interval.until),
     edge,
     rough,
-    retestBy: soonest < last.day ? last.day : soonest,
+    retestBy: daysBetween(last.day, soonest) < 0 ? last.day : soonest,
     sentence: `It reaches ${edge} about ${dayInWords(day(t))} (${dayInWords(earliest)} to ${dayInWords(day(interval.until))})${rough ? ', a rough date from few tests' : ''}.`,
   };
 }
