@@ -10,14 +10,14 @@ export interface ConflictActions {
   readonly takeTheirs: (cell: GridCellRef, conflict: Conflict) => void;
 }
 
-const LINE = 'mt-0.5 flex items-start gap-1 font-text text-xs leading-snug';
+const LINE = 'mt-0.5 flex max-w-72 items-start gap-1 font-text text-xs leading-snug';
 const ICON = 'mt-px size-3.5 flex-none';
 
 /** What is to be said about a cell, always icon + word + reason; the cell points here with aria-describedby. */
 export function CellNotes({ view, id }: { view: CellView; id: string }) {
   const { state, doubts } = view;
   return (
-    <div id={id}>
+    <div id={id} className={view.column.kind === 'number' ? 'grid justify-items-end' : undefined}>
       {state.kind === 'invalid' ? (
         <p className={`${LINE} text-iron`}>
           <CircleAlert aria-hidden="true" className={ICON} />
@@ -80,7 +80,7 @@ export function ConflictChoice({
   const cell = { rowId: view.rowId, columnId: view.column.id };
   const tabIndex = inGrid ? -1 : 0;
   return (
-    <div className="mt-1 flex flex-wrap gap-1">
+    <div className={`mt-1 flex flex-wrap gap-1 ${inGrid && view.column.kind === 'number' ? 'justify-end' : ''}`}>
       <Button look="quiet" size="small" tabIndex={tabIndex} onClick={() => actions.keepMine(cell, conflict)}>
         Keep mine<span className="sr-only">, {view.name}</span>: {conflict.mine || 'empty'}
       </Button>

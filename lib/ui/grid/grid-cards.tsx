@@ -1,6 +1,6 @@
 'use client';
 
-import { Trash2 } from 'lucide-react';
+import { ChevronDown, Trash2 } from 'lucide-react';
 import { useEffect, useId, useLayoutEffect, useRef, useState } from 'react';
 import { Button } from '../actions/button';
 import { CellNotes, type ConflictActions, ConflictChoice, hasNotes } from './cell-notes';
@@ -46,19 +46,21 @@ function Card({ row, rowIndex, ...props }: CardsProps & { row: GridRow; rowIndex
         {row.place ? <span className="text-xs text-clay">{row.place}</span> : null}
       </div>
       <div className="grid grid-cols-2 gap-x-3 gap-y-2 p-3">
-        {views.map((view, columnIndex) => (
-          <CardField
-            key={view.column.id}
-            view={view}
-            version={row.version ?? null}
-            at={`${rowIndex}:${columnIndex}`}
-            onFocus={() => {
-              props.cursor.follow({ row: rowIndex, column: columnIndex });
-              props.onFocusCell(row.id, view.column.id);
-            }}
-            {...props}
-          />
-        ))}
+        {views.map((view, columnIndex) =>
+          view.column.id === header?.id && !view.editable ? null : (
+            <CardField
+              key={view.column.id}
+              view={view}
+              version={row.version ?? null}
+              at={`${rowIndex}:${columnIndex}`}
+              onFocus={() => {
+                props.cursor.follow({ row: rowIndex, column: columnIndex });
+                props.onFocusCell(row.id, view.column.id);
+              }}
+              {...props}
+            />
+          ),
+        )}
       </div>
       {props.onRemoveRow && !readOnly && !row.readOnly ? (
         <div className="border-t border-fallow/50 px-3 py-1">
@@ -97,7 +99,7 @@ function CardField({ view, version, at, onFocus, edits, onAcceptDoubt }: FieldPr
     'aria-invalid': view.doubts.length > 0 || ['invalid', 'error', 'conflict'].includes(view.state.kind) || undefined,
     'aria-describedby': noted ? notesId : undefined,
     'aria-label': view.name,
-    className: `field-box scroll-mt-40 scroll-mb-24 ${view.column.kind === 'number' ? 'font-figures' : ''}`,
+    className: `field-box scroll-mt-40 scroll-mb-24 ${view.column.kind === 'number' ? 'font-figures' : ''} ${view.doubts.length > 0 ? 'border-ochre! bg-ochre-wash!' : ''}`,
     onFocus,
   };
   const actions: ConflictActions = edits;
@@ -107,16 +109,22 @@ function CardField({ view, version, at, onFocus, edits, onAcceptDoubt }: FieldPr
         {view.column.header}
       </label>
       {view.editable && view.column.kind === 'select' ? (
-        <select {...shared} value={view.value} onChange={(event) => write(event.target.value)}>
-          {view.column.options?.some((one) => one.value === view.value) ? null : (
-            <option value={view.value}>{view.value || '(empty)'}</option>
-          )}
-          {view.column.options?.map((option) => (
-            <option key={option.value} value={option.value}>
-              {option.label}
-            </option>
-          ))}
-        </select>
+        <div className="relative">
+          <select {...shared} value={view.value} onChange={(event) => write(event.target.value)}>
+            {view.column.options?.some((one) => one.value === view.value) ? null : (
+              <option value={view.value}>{view.value || '(empty)'}</option>
+            )}
+            {view.column.options?.map((option) => (
+              <option key={option.value} value={option.value}>
+                {option.label}
+              </option>
+            ))}
+          </select>
+          <ChevronDown
+            aria-hidden="true"
+            className="pointer-events-none absolute top-1/2 right-3 size-5 -translate-y-1/2 text-clay"
+          />
+        </div>
       ) : view.editable ? (
         <DraftInput
           shared={shared}

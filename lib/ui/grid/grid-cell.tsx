@@ -44,6 +44,7 @@ export const GridCell = memo(function GridCell(props: GridCellProps) {
         isRowHeader && 'border-l-4 pl-2 font-semibold',
         isRowHeader && (activeRow ? 'border-l-gley' : 'border-l-transparent'),
         cellGround(selected, bad, doubtful, view.editable, activeRow),
+        !view.editable && !isRowHeader && 'text-clay',
       )}
     >
       {editing ? (
@@ -82,6 +83,6 @@ function cellGround(selected: boolean, bad: boolean, doubtful: boolean, editable
   if (selected) return 'bg-gley-wash outline-1 outline-dotted outline-gley -outline-offset-1';
   if (bad) return 'bg-iron-wash';
   if (doubtful) return 'bg-ochre-wash';
-  if (!editable) return activeRow ? 'bg-silt text-clay' : 'bg-chalk text-clay';
+  if (!editable) return activeRow ? 'bg-silt' : 'bg-chalk';
   return 'bg-white';
 }

@@ -145,7 +145,7 @@ function CellLine({ body }: { body: GridBodyProps }) {
   return (
     <div className="flex min-h-9 flex-wrap items-center gap-x-3 gap-y-1 text-sm">
       <span className="font-semibold">
-        Row {cursor.active.row + 1}: {view.name}
+        Row {cursor.active.row + 1}: {column.id === rowHeaderOf(columns)?.id ? view.shown : view.name}
       </span>
       {row.place ? <span className="text-clay">{row.place}</span> : null}
       {view.doubts.length > 0 ? (

@@ -45,6 +45,7 @@ function OpenedPdf({ bytes, ...props }: PaneProps & { bytes: Uint8Array }) {
         <Button
           look="quiet"
           size="small"
+          className="gap-0!"
           icon={<ChevronLeft aria-hidden="true" className="size-4" />}
           onClick={() => setPage(shownPage - 1)}
           unavailable={shownPage <= 1 && 'this is the first page'}
@@ -57,6 +58,7 @@ function OpenedPdf({ bytes, ...props }: PaneProps & { bytes: Uint8Array }) {
         <Button
           look="quiet"
           size="small"
+          className="gap-0!"
           icon={<ChevronRight aria-hidden="true" className="size-4" />}
           onClick={() => setPage(shownPage + 1)}
           unavailable={shownPage >= pages && 'this is the last page'}
@@ -78,6 +80,7 @@ export function ZoomButtons({ at, onChange }: { at: number; onChange: (next: num
       <Button
         look="quiet"
         size="small"
+        className="gap-0!"
         icon={<ZoomOut aria-hidden="true" className="size-4" />}
         onClick={() => onChange(at - 1)}
         unavailable={at === 0 && 'smallest size'}
@@ -88,6 +91,7 @@ export function ZoomButtons({ at, onChange }: { at: number; onChange: (next: num
       <Button
         look="quiet"
         size="small"
+        className="gap-0!"
         icon={<ZoomIn aria-hidden="true" className="size-4" />}
         onClick={() => onChange(at + 1)}
         unavailable={at === ZOOMS.length - 1 && 'largest size'}
@@ -115,7 +119,7 @@ export function PagePane({
       aria-label={`Report ${fileName}`}
       // biome-ignore lint/a11y/noNoninteractiveTabindex: a scrolling frame must be reachable by keyboard
       tabIndex={0}
-      className="max-h-[75vh] min-h-64 overflow-auto border border-fallow bg-silt"
+      className="max-h-[75vh] min-h-24 overflow-auto border border-fallow bg-silt"
     >
       {children}
     </section>

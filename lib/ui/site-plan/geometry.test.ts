@@ -5,6 +5,7 @@ import {
   boundsOf,
   dragCorner,
   isInside,
+  labelSpot,
   moveBy,
   outlineOf,
   overlaps,
@@ -169,5 +170,31 @@ describe('isInside', () => {
   it('tells inside from outside', () => {
     expect(isInside(square(1, 1, 2), { x: 2, y: 2 })).toBe(true);
     expect(isInside(square(1, 1, 2), { x: 4, y: 2 })).toBe(false);
+  });
+});
+
+describe('labelSpot', () => {
+  it('is the middle of a rectangle', () => {
+    expect(labelSpot(outlineOf({ x: 2, y: 2, width: 4, height: 3 }))).toEqual({
+      at: { x: 4, y: 3.5 },
+      width: 4,
+      height: 3,
+    });
+  });
+
+  it('lies inside an L, whose own middle does not', () => {
+    const ell = [
+      { x: 0, y: 0 },
+      { x: 12, y: 0 },
+      { x: 12, y: 3 },
+      { x: 3, y: 3 },
+      { x: 3, y: 12 },
+      { x: 0, y: 12 },
+    ];
+    expect(isInside(ell, { x: 6, y: 6 })).toBe(false);
+    const { at, width, height } = labelSpot(ell);
+    expect(isInside(ell, at)).toBe(true);
+    expect(isInside(ell, { x: at.x - width / 2 + 0.01, y: at.y })).toBe(true);
+    expect(isInside(ell, { x: at.x, y: at.y + height / 2 - 0.01 })).toBe(true);
   });
 });

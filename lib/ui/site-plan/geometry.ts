@@ -169,3 +169,49 @@ export function placeAt(outline: PlanOutline, rectangle: PlanRectangle): PlanOut
     y: rectangle.y + (high > 0 ? ((point.y - bounds.minY) / high) * rectangle.height : 0),
   }));
 }
+
+export interface LabelSpot {
+  readonly at: PlanPoint;
+  /** Room to both sides and up and down along the axes through the spot. */
+  readonly width: number;
+  readonly height: number;
+}
+
+const SPOT_STEPS = 24;
+
+/** The place for a label: well inside, so that the label of an L does not lie across its notch. */
+export function labelSpot(outline: PlanOutline): LabelSpot {
+  const bounds = boundsOf(outline);
+  const centre = centreOf(outline);
+  if (!bounds) return { at: centre, width: 0, height: 0 };
+  const wide = bounds.maxX - bounds.minX;
+  const high = bounds.maxY - bounds.minY;
+  if (asRectangle(outline)) return { at: centre, width: wide, height: high };
+  let best: LabelSpot = { at: centre, width: 0, height: 0 };
+  for (let column = 1; column < SPOT_STEPS; column += 1) {
+    for (let row = 1; row < SPOT_STEPS; row += 1) {
+      const at = { x: bounds.minX + (column / SPOT_STEPS) * wide, y: bounds.minY + (row / SPOT_STEPS) * high };
+      if (!isInside(outline, at)) continue;
+      const across = nearestCrossings(outline, at, 'x');
+      const up = nearestCrossings(outline, at, 'y');
+      const width = 2 * Math.min(at.x - across.before, across.after - at.x);
+      const height = 2 * Math.min(at.y - up.before, up.after - at.y);
+      // A label is about twice as wide as it is high.
+      if (Math.min(width, 2 * height) > Math.min(best.width, 2 * best.height)) best = { at, width, height };
+    }
+  }
+  return best;
+}
+
+function nearestCrossings(outline: PlanOutline, at: PlanPoint, along: 'x' | 'y'): { before: number; after: number } {
+  const other = along === 'x' ? 'y' : 'x';
+  let before = Number.NEGATIVE_INFINITY;
+  let after = Number.POSITIVE_INFINITY;
+  for (const [a, b] of sidesOf(outline)) {
+    if (a[other] > at[other] === b[other] > at[other]) continue;
+    const crossing = a[along] + ((at[other] - a[other]) / (b[other] - a[other])) * (b[along] - a[along]);
+    if (crossing <= at[along]) before = Math.max(before, crossing);
+    else after = Math.min(after, crossing);
+  }
+  return { before, after };
+}

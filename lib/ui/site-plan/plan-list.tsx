@@ -49,7 +49,11 @@ export function PlanList(props: PlanListProps) {
               <div key={upload.fileName} className="mt-1 text-sm">
                 <span className="font-semibold">{upload.fileName}</span>: {upload.text}
                 {upload.share === null ? null : (
-                  <progress className="mt-1 block h-2 w-full max-w-64 accent-gley" max={1} value={upload.share}>
+                  <progress
+                    className="mt-1 block h-2.5 w-full max-w-64 appearance-none border border-fallow bg-white [&::-moz-progress-bar]:bg-gley [&::-webkit-progress-bar]:bg-white [&::-webkit-progress-value]:bg-gley"
+                    max={1}
+                    value={upload.share}
+                  >
                     {Math.round(upload.share * 100)}%
                   </progress>
                 )}

@@ -2,11 +2,13 @@
 
 import type { DragEvent, KeyboardEvent, PointerEvent } from 'react';
 import { cx } from '../cx';
-import { boundsOf } from './geometry';
+import { labelSpot } from './geometry';
 import type { DrawingSize } from './plan-furniture';
 import { fitText, lastTestText, plotArea, plotPhrase } from './plot-words';
 import type { LengthUnit, PlanOutline, PlanPlot } from './types';
 import { type PlanView, toDrawing } from './viewport';
+
+const LINE = 18;
 
 export interface PlotShapeProps {
   readonly plot: PlanPlot;
@@ -60,7 +62,7 @@ export function PlotShape(props: PlotShapeProps) {
           selected && canMove ? 'cursor-move' : 'cursor-pointer',
         )}
       />
-      <PlotLabel {...props} corners={corners} />
+      <PlotLabel {...props} />
       {selected && canMove
         ? corners.map((corner, index) => (
             <g
@@ -84,35 +86,40 @@ export function PlotShape(props: PlotShapeProps) {
   );
 }
 
-function PlotLabel(props: PlotShapeProps & { corners: readonly { x: number; y: number }[] }) {
-  const { plot, outline, unit, dropTarget, corners } = props;
-  const bounds = boundsOf(corners);
-  if (!bounds) return null;
-  const width = bounds.maxX - bounds.minX - 12;
-  const height = bounds.maxY - bounds.minY - 8;
-  const upload = plot.uploads?.[0];
-  const lines = (
-    dropTarget
-      ? ['Let go to send the file']
-      : [plotArea(plot, outline, unit), lastTestText(plot), plot.crop ?? '', upload?.text ?? '']
-  )
-    .map((line) => fitText(line, width, 13))
-    .filter((line) => line !== '');
+function PlotLabel({ plot, outline, view, size, unit, dropTarget }: PlotShapeProps) {
+  const spot = labelSpot(outline);
+  const at = toDrawing(spot.at, view, size);
+  const across = (spot.width / view.width) * size.width - 12;
+  const up = (spot.height / view.height) * size.height - 12;
+  // A long narrow bed carries its label along its length.
+  const turned = up > 1.5 * across && fitText(plot.name, across, 16) !== plot.name;
+  const [width, height] = turned ? [up, across] : [across, up];
   const name = fitText(plot.name, width, 16);
-  const room = Math.max(0, Math.floor((height - 20) / 17));
-  const shown = lines.slice(0, room);
-  const x = (bounds.minX + bounds.maxX) / 2;
-  const top = (bounds.minY + bounds.maxY) / 2 - (shown.length * 17) / 2;
   if (name === '' || height < 14) return null;
+  const upload = plot.uploads?.[0];
+  const lines = dropTarget
+    ? ['Let go to send the file']
+    : [plotArea(plot, outline, unit), lastTestText(plot), plot.crop ?? '', upload?.text ?? ''];
+  const room = Math.max(0, Math.floor((height - 18) / LINE));
+  const shown = lines
+    .map((line) => fitText(line, width, 14))
+    .filter((line) => line !== '')
+    .slice(0, room);
+  const top = -((shown.length * LINE) / 2) + 5;
   return (
     // biome-ignore lint/a11y/noAriaHiddenOnFocusable: a group of a drawing cannot take the focus
-    <g textAnchor="middle" pointerEvents="none" aria-hidden="true">
-      <text x={x} y={top + 5} className="fill-humus text-base font-semibold">
+    <g
+      textAnchor="middle"
+      pointerEvents="none"
+      aria-hidden="true"
+      transform={`translate(${at.x} ${at.y})${turned ? ' rotate(-90)' : ''}`}
+    >
+      <text y={top} className="fill-humus text-base font-semibold">
         {name}
       </text>
       <g className="fill-clay text-sm">
         {shown.map((line, index) => (
-          <text key={line} x={x} y={top + 24 + index * 17}>
+          <text key={line} y={top + (index + 1) * LINE + 1}>
             {line}
           </text>
         ))}

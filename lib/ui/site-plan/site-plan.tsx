@@ -127,6 +127,7 @@ export function SitePlan(props: SitePlanProps) {
           <Button
             look="quiet"
             size="small"
+            className="gap-0!"
             icon={<ZoomOut aria-hidden="true" className="size-4" />}
             onClick={() => setOwnView(zoomView(view, 1 / 1.4))}
           >
@@ -135,6 +136,7 @@ export function SitePlan(props: SitePlanProps) {
           <Button
             look="quiet"
             size="small"
+            className="gap-0!"
             icon={<ZoomIn aria-hidden="true" className="size-4" />}
             onClick={() => setOwnView(zoomView(view, 1.4, centreOfSelected(selectedOutline)))}
           >
