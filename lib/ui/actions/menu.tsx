@@ -45,7 +45,8 @@ export function Menu({ label, name, items, look = 'quiet', align = 'start' }: Me
         <span className="min-w-0">{label}</span>
         <OpenMark />
       </DropdownMenu.Trigger>
-      <DropdownMenu.Portal>
+      {/* Inside the page's main part, so that nothing stands outside a landmark. */}
+      <DropdownMenu.Portal container={typeof document === 'undefined' ? null : document.getElementById('content')}>
         <DropdownMenu.Content
           align={align}
           sideOffset={6}

@@ -38,11 +38,14 @@ export function AnnounceProvider({ children }: { children: ReactNode }) {
       <div className="sr-only" aria-live="assertive" data-testid="announce-now">
         {spoken.now && spoken.now + again}
       </div>
-      <div className="no-print pointer-events-none fixed inset-x-3 bottom-[calc(var(--bar-bottom)+0.75rem)] z-50 grid justify-items-start gap-2 sm:left-6 sm:right-auto">
+      <section
+        aria-label="Messages"
+        className="no-print pointer-events-none fixed inset-x-3 bottom-[calc(var(--bar-bottom)+0.75rem)] z-50 grid justify-items-start gap-2 sm:left-6 sm:right-auto"
+      >
         {shown.map((message) => (
           <Toast key={message.id} message={message} onDismiss={dismiss} />
         ))}
-      </div>
+      </section>
     </AnnounceContext.Provider>
   );
 }

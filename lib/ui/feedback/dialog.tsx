@@ -2,7 +2,7 @@
 
 import { X } from 'lucide-react';
 import { Dialog as Base } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { type ReactNode, useRef } from 'react';
 import { cx } from '../cx';
 
 export type DialogProps = {
@@ -33,12 +33,21 @@ export function Dialog({
   size = 'normal',
   className,
 }: DialogProps) {
+  const from = useRef<HTMLElement | null>(null);
   return (
     <Base.Root open={open} onOpenChange={onOpenChange}>
       <Base.Portal>
         <div className="fixed inset-0 z-40 bg-humus/60" aria-hidden="true" data-dialog-open />
         <Base.Content
           {...(description ? {} : { 'aria-describedby': undefined })}
+          onOpenAutoFocus={() => {
+            from.current = document.activeElement instanceof HTMLElement ? document.activeElement : null;
+          }}
+          onCloseAutoFocus={(event) => {
+            // There is no trigger of the package's own, so the way back is kept here.
+            event.preventDefault();
+            from.current?.focus();
+          }}
           className={cx(
             'fixed inset-x-0 bottom-0 z-40 flex max-h-[92dvh] flex-col border-t-2 border-gley bg-chalk shadow-lift outline-none',
             'sm:inset-x-auto sm:top-1/2 sm:bottom-auto sm:left-1/2 sm:w-[calc(100%-3rem)] sm:-translate-x-1/2 sm:-translate-y-1/2 sm:rounded-md',
@@ -46,17 +55,9 @@ export function Dialog({
             className,
           )}
         >
-          <div className="flex items-start gap-4 px-5 pt-4 sm:px-7 sm:pt-6">
-            <div className="min-w-0 flex-1">
-              <Base.Title className="text-xl">{title}</Base.Title>
-              {description ? <Base.Description className="mt-1 text-clay">{description}</Base.Description> : null}
-            </div>
-            <Base.Close
-              aria-label="Close"
-              className="-mt-1.5 -mr-2 grid size-(--target) flex-none place-items-center rounded-sm text-clay hover:bg-silt hover:text-humus"
-            >
-              <X aria-hidden className="size-6" />
-            </Base.Close>
+          <div className="pt-4 pr-16 pl-5 sm:pt-6 sm:pl-7">
+            <Base.Title className="text-xl">{title}</Base.Title>
+            {description ? <Base.Description className="mt-1 text-clay">{description}</Base.Description> : null}
           </div>
           {children ? (
             <div className="min-h-0 overflow-y-auto px-5 py-5 sm:px-7">{children}</div>
@@ -68,6 +69,13 @@ export function Dialog({
               {actions}
             </div>
           ) : null}
+          {/* Last in the order of keys, so that a dialog opens on its first field or its gentler button. */}
+          <Base.Close
+            aria-label="Close"
+            className="absolute top-2.5 right-3 grid size-(--target) place-items-center rounded-sm text-clay hover:bg-silt hover:text-humus"
+          >
+            <X aria-hidden className="size-6" />
+          </Base.Close>
         </Base.Content>
       </Base.Portal>
     </Base.Root>

@@ -42,6 +42,12 @@ function tidy(text: string): Plain {
   return { ok: true, text: body.startsWith('.') ? `0${body}` : body };
 }
 
+/** What a number field holds, as the API takes it; what cannot be read goes as typed, and the schema says why not. */
+export function numberText(typed: string | undefined): string {
+  const read = parseNumber(typed ?? '');
+  return read.ok ? read.text : (typed ?? '').trim();
+}
+
 export const numberReason: Record<'empty' | 'not_a_number' | 'ambiguous_separators', string> = {
   empty: 'Enter a number.',
   not_a_number: 'This is not a number Loamline can read. Write it like 6.4 or 6,4.',
