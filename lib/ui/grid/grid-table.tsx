@@ -48,7 +48,8 @@ export function GridTable(props: GridBodyProps) {
     () => rows.map((row) => columns.map((column) => viewOf({ row, column, overlay: edits.overlay, header, readOnly }))),
     [rows, columns, edits.overlay, header, readOnly],
   );
-  const keys = useGridKeys({ ...props, views, element });
+  const ownFocus = useRef(false);
+  const keys = useGridKeys({ ...props, views, element, ownFocus });
   const { editing } = keys;
 
   const { focusTurn, active } = cursor;
@@ -56,7 +57,10 @@ export function GridTable(props: GridBodyProps) {
   activeKey.current = `${active.row}:${active.column}`;
   useLayoutEffect(() => {
     if (focusTurn === 0) return;
+    // The cursor is already there; while a selection is pulled it may even be further by now.
+    ownFocus.current = true;
     element.current?.querySelector<HTMLElement>(`[data-cell="${activeKey.current}"]`)?.focus();
+    ownFocus.current = false;
   }, [focusTurn]);
 
   const { keepMine, takeTheirs } = edits;

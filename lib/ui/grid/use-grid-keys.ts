@@ -31,6 +31,8 @@ export interface EditingCell {
 type Input = GridBodyProps & {
   readonly views: readonly (readonly CellView[])[];
   readonly element: RefObject<HTMLTableElement | null>;
+  /** True while the grid itself puts the focus on the active cell. */
+  readonly ownFocus: RefObject<boolean>;
 };
 
 const LOCKED = 'This cell is locked.';
@@ -188,7 +190,7 @@ export function useGridKeys(input: Input) {
     const point = pointOfEvent(event.target);
     const view = point && viewAt(point);
     if (!point || !view) return;
-    latest.current.cursor.follow(point);
+    if (!latest.current.ownFocus.current) latest.current.cursor.follow(point);
     latest.current.onFocusCell(view.rowId, view.column.id);
   };
 

@@ -194,7 +194,11 @@ describe('labelSpot', () => {
     expect(isInside(ell, { x: 6, y: 6 })).toBe(false);
     const { at, width, height } = labelSpot(ell);
     expect(isInside(ell, at)).toBe(true);
-    expect(isInside(ell, { x: at.x - width / 2 + 0.01, y: at.y })).toBe(true);
-    expect(isInside(ell, { x: at.x, y: at.y + height / 2 - 0.01 })).toBe(true);
+    expect(width).toBeGreaterThan(2.5);
+    for (const x of [-1, 1]) {
+      for (const y of [-1, 1]) {
+        expect(isInside(ell, { x: at.x + x * (width / 2 - 0.01), y: at.y + y * (height / 2 - 0.01) })).toBe(true);
+      }
+    }
   });
 });

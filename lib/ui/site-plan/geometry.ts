@@ -172,12 +172,14 @@ export function placeAt(outline: PlanOutline, rectangle: PlanRectangle): PlanOut
 
 export interface LabelSpot {
   readonly at: PlanPoint;
-  /** Room to both sides and up and down along the axes through the spot. */
+  /** Size of a box round the spot that lies inside the shape. */
   readonly width: number;
   readonly height: number;
 }
 
 const SPOT_STEPS = 24;
+/** A label of a few short lines is somewhat wider than it is high. */
+const LABEL_ASPECT = 1.6;
 
 /** The place for a label: well inside, so that the label of an L does not lie across its notch. */
 export function labelSpot(outline: PlanOutline): LabelSpot {
@@ -194,13 +196,19 @@ export function labelSpot(outline: PlanOutline): LabelSpot {
       if (!isInside(outline, at)) continue;
       const across = nearestCrossings(outline, at, 'x');
       const up = nearestCrossings(outline, at, 'y');
-      const width = 2 * Math.min(at.x - across.before, across.after - at.x);
-      const height = 2 * Math.min(at.y - up.before, up.after - at.y);
-      // A label is about twice as wide as it is high.
-      if (Math.min(width, 2 * height) > Math.min(best.width, 2 * best.height)) best = { at, width, height };
+      let width = 2 * Math.min(at.x - across.before, across.after - at.x);
+      width = Math.min(width, 2 * LABEL_ASPECT * Math.min(at.y - up.before, up.after - at.y));
+      while (width > best.width && !holdsBox(outline, at, width, width / LABEL_ASPECT)) width *= 0.9;
+      if (width > best.width) best = { at, width, height: width / LABEL_ASPECT };
     }
   }
   return best;
+}
+
+function holdsBox(outline: PlanOutline, at: PlanPoint, width: number, height: number): boolean {
+  const within = (point: PlanPoint) => Math.abs(point.x - at.x) < width / 2 && Math.abs(point.y - at.y) < height / 2;
+  const corners = outlineOf({ x: at.x - width / 2, y: at.y - height / 2, width, height });
+  return !outline.some(within) && !sidesOf(outline).some((side) => sidesOf(corners).some((edge) => cross(side, edge)));
 }
 
 function nearestCrossings(outline: PlanOutline, at: PlanPoint, along: 'x' | 'y'): { before: number; after: number } {

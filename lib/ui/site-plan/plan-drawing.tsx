@@ -96,7 +96,7 @@ export function PlanDrawing(props: PlanDrawingProps) {
       <svg
         ref={props.svg}
         viewBox={`0 0 ${size.width} ${size.height}`}
-        className={`block aspect-4/5 w-full touch-pan-y border border-fallow bg-white sm:aspect-3/2 ${mode === 'none' ? 'cursor-grab' : 'cursor-crosshair'}`}
+        className={`block aspect-4/5 w-full touch-pan-y select-none border border-fallow bg-white sm:aspect-3/2 ${mode === 'none' ? 'cursor-grab' : 'cursor-crosshair'}`}
         data-testid="site-plan-drawing"
         onPointerDown={pointer.onGroundDown}
         onPointerMove={pointer.onMove}

@@ -99,7 +99,7 @@ function PlotLabel({ plot, outline, view, size, unit, dropTarget }: PlotShapePro
   const upload = plot.uploads?.[0];
   const lines = dropTarget
     ? ['Let go to send the file']
-    : [plotArea(plot, outline, unit), lastTestText(plot), plot.crop ?? '', upload?.text ?? ''];
+    : [plotArea(plot, outline, unit), ...testLines(plot, width), plot.crop ?? '', upload?.text ?? ''];
   const room = Math.max(0, Math.floor((height - 18) / LINE));
   const shown = lines
     .map((line) => fitText(line, width, 14))
@@ -126,4 +126,10 @@ function PlotLabel({ plot, outline, view, size, unit, dropTarget }: PlotShapePro
       </g>
     </g>
   );
+}
+
+/** One line where it fits, else pH and day under each other. */
+function testLines(plot: PlanPlot, width: number): string[] {
+  const whole = lastTestText(plot);
+  return fitText(whole, width, 14) === whole ? [whole] : whole.split(', ');
 }

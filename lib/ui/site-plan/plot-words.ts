@@ -20,7 +20,7 @@ export function plotPhrase(plot: PlanPlot, outline: PlanOutline | null, unit: Le
 
 /** About how wide bold text of this size is; enough to decide what fits into a plot. */
 export function fitText(text: string, width: number, fontSize: number): string {
-  const room = Math.floor(width / (fontSize * 0.56));
+  const room = Math.floor(width / (fontSize * 0.53));
   if (text.length <= room) return text;
   return room >= 4 ? `${text.slice(0, room - 1)}…` : '';
 }
