@@ -9,6 +9,9 @@ export const metadata: Metadata = {
   description: 'Soil-test history, amendment records and honest effect checks for growers who test their soil.',
 };
 
+/** Every page carries a nonce of its own request, so none is made ahead of time. */
+export const dynamic = 'force-dynamic';
+
 export const viewport: Viewport = {
   width: 'device-width',
   initialScale: 1,

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 
 const schema = z.object({
+  NODE_ENV: z.enum(['development', 'production', 'test']).default('production'),
   APP_ORIGIN: z.url(),
   DATABASE_URL: z.string().min(1),
   DATABASE_OWNER_URL: z.string().min(1).optional(),

@@ -72,6 +72,7 @@ export function json(value: unknown, status = 200, headers: Record<string, strin
       'content-type': 'application/json',
       'cache-control': 'no-store',
       'x-content-type-options': 'nosniff',
+      'content-security-policy': "default-src 'none'; frame-ancestors 'none'",
       ...headers,
     },
   });

@@ -1,0 +1,136 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { can } from '@/lib/access/table';
+import { type Member, type MemberList, roleSchema } from '@/lib/schemas/sites';
+import { ConfirmButton } from '@/lib/ui/actions/confirm-button';
+import { callApi } from '@/lib/ui/api';
+import { useAnnounce } from '@/lib/ui/feedback/announce';
+import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
+import { SelectField } from '@/lib/ui/fields/select-field';
+import { useApi } from '@/lib/ui/use-api';
+import { useSubmit } from '@/lib/ui/use-submit';
+import { onDay, ROLE_OPTIONS } from './role-options';
+
+export function Members({ siteId, first }: { siteId: string; first: MemberList }) {
+  const path = `/sites/${siteId}/members`;
+  const { data = first, problem, reload } = useApi<MemberList>(path, { fallback: first });
+  return (
+    <div className="grid gap-4">
+      <ProblemNotice problem={problem} />
+      <ul className="border-y border-horizon-5">
+        {data.members.map((member) => (
+          <li key={member.id} className="border-b border-horizon-5 py-4 last:border-0">
+            <MemberRow
+              siteId={siteId}
+              member={member}
+              manages={can(data.role, 'site.manage')}
+              onChanged={() => void reload()}
+            />
+          </li>
+        ))}
+      </ul>
+    </div>
+  );
+}
+
+type RowProps = { siteId: string; member: Member; manages: boolean; onChanged: () => void };
+
+function MemberRow({ siteId, member, manages, onChanged }: RowProps) {
+  const { send, busy, problem } = useSubmit();
+  const announce = useAnnounce();
+  const path = `/sites/${siteId}/members/${member.id}`;
+  const change = async (text: string) => {
+    const role = roleSchema.parse(text);
+    const result = await send(path, { method: 'PATCH', body: { role } });
+    if (result.ok) announce(`${member.name} is now ${role}.`, { tone: 'saved' });
+    onChanged();
+  };
+  return (
+    <div className="grid gap-3 sm:grid-cols-[1fr_12rem_11rem] sm:items-center sm:gap-6">
+      <div className="min-w-0">
+        <p className="font-semibold break-words">
+          {member.name}
+          {member.isYou ? <span className="font-normal text-clay"> (you)</span> : null}
+        </p>
+        <p className="text-sm break-all text-clay">
+          {member.email ? `${member.email} · ` : ''}since {onDay(member.since)}
+        </p>
+      </div>
+      {manages ? (
+        <SelectField
+          // A refused change goes back to what is true.
+          key={`${member.role}-${problem ? 'refused' : 'kept'}`}
+          name={`role-${member.id}`}
+          label={`Role of ${member.name}`}
+          hideLabel
+          options={ROLE_OPTIONS}
+          defaultValue={member.role}
+          aria-busy={busy}
+          onChange={(event) => void change(event.currentTarget.value)}
+        />
+      ) : (
+        <p className="capitalize">{member.role}</p>
+      )}
+      <div className="sm:justify-self-end">
+        {member.isYou ? (
+          <Leave siteId={siteId} />
+        ) : manages ? (
+          <Remove path={path} member={member} onChanged={onChanged} />
+        ) : null}
+      </div>
+      {problem ? (
+        <div className="sm:col-span-3">
+          <ProblemNotice problem={problem} />
+        </div>
+      ) : null}
+    </div>
+  );
+}
+
+function Remove({ path, member, onChanged }: { path: string; member: Member; onChanged: () => void }) {
+  const announce = useAnnounce();
+  return (
+    <ConfirmButton
+      size="small"
+      look="destructive"
+      title={`Remove ${member.name}?`}
+      sentence="They see nothing of this site from now on. What they recorded stays, under their name."
+      confirmLabel={`Remove ${member.name}`}
+      busyLabel="Removing"
+      keepLabel="Keep them"
+      onConfirm={async () => {
+        const result = await callApi(path, { method: 'DELETE' });
+        if (result.ok) announce(`${member.name} is off this site.`, { tone: 'saved' });
+        if (result.ok) onChanged();
+        return result;
+      }}
+    >
+      Remove
+    </ConfirmButton>
+  );
+}
+
+function Leave({ siteId }: { siteId: string }) {
+  const router = useRouter();
+  return (
+    <ConfirmButton
+      size="small"
+      title="Leave this site?"
+      sentence="You see nothing of it from then on, and get no mail about it. What you recorded stays. To come back you need a new invitation."
+      confirmLabel="Leave the site"
+      busyLabel="Leaving"
+      keepLabel="Stay"
+      onConfirm={async () => {
+        const result = await callApi(`/sites/${siteId}/membership`, { method: 'DELETE' });
+        if (result.ok) {
+          router.push('/today');
+          router.refresh();
+        }
+        return result;
+      }}
+    >
+      Leave this site
+    </ConfirmButton>
+  );
+}
