@@ -3,6 +3,7 @@ import { requeueMail } from '@/lib/data/mail/requeueMail';
 import { env } from '@/lib/env';
 import { log } from '@/lib/log';
 import { sweepReminders } from './sweepReminders/handler';
+import { sweepUploads } from './sweepUploads/handler';
 
 type Sweep = { name: string; run: (ctx: Awaited<ReturnType<typeof makeContext>>) => Promise<unknown> };
 
@@ -11,6 +12,7 @@ type Sweep = { name: string; run: (ctx: Awaited<ReturnType<typeof makeContext>>)
  * writes is closed by unique keys and conditional updates, so a clock jump or a second worker changes nothing.
  */
 const SWEEPS: readonly Sweep[] = [
+  { name: 'uploads', run: sweepUploads },
   { name: 'reminders', run: sweepReminders },
   { name: 'mail', run: (ctx) => requeueMail({ ctx, input: {} }) },
 ];

@@ -12,45 +12,20 @@ export const REPORT_STATES = [
 ] as const;
 export const reportStateSchema = z.enum(REPORT_STATES);
 
-/** What may be uploaded, and how large it may be. Pictures and sheets are kept but not read yet. */
-export const UPLOAD_KINDS = {
-  pdf: {
-    label: 'PDF',
-    extensions: ['pdf'],
-    contentType: 'application/pdf',
-    largestBytes: 20 * 1024 * 1024,
-    read: true,
-  },
-  csv: {
-    label: 'data file',
-    extensions: ['csv', 'tsv', 'txt'],
-    contentType: 'text/csv',
-    largestBytes: 5 * 1024 * 1024,
-    read: true,
-  },
-  png: {
-    label: 'PNG picture',
-    extensions: ['png'],
-    contentType: 'image/png',
-    largestBytes: 20 * 1024 * 1024,
-    read: false,
-  },
-  jpeg: {
-    label: 'JPEG picture',
-    extensions: ['jpg', 'jpeg'],
-    contentType: 'image/jpeg',
-    largestBytes: 20 * 1024 * 1024,
-    read: false,
-  },
-  xlsx: {
-    label: 'Excel sheet',
-    extensions: ['xlsx'],
-    contentType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
-    largestBytes: 5 * 1024 * 1024,
-    read: false,
-  },
-} as const;
-export type UploadKind = keyof typeof UPLOAD_KINDS;
+/** For the file picker; the server decides by content and name together. Pictures and sheets are kept but not read yet. */
+export const UPLOAD_ENDINGS = [
+  '.pdf',
+  '.csv',
+  '.tsv',
+  '.txt',
+  '.tab',
+  '.jpg',
+  '.jpeg',
+  '.png',
+  '.xlsx',
+  '.xls',
+] as const;
+/** Of a PDF or picture; data files and sheets end at 5 MB. */
 export const LARGEST_UPLOAD_BYTES = 20 * 1024 * 1024;
 
 /** The fields beside the file in the multipart form; all values arrive as text. */
@@ -78,7 +53,10 @@ export const uploadAnswerSchema = z.discriminatedUnion('kind', [
 
 export const listReportsInput = z.strictObject({ state: reportStateSchema.optional(), plotId: idSchema.optional() });
 export const reportInput = z.strictObject({ reportId: idSchema });
-export const reportFileInput = z.strictObject({ reportId: idSchema, download: z.enum(['yes', 'no']).default('no') });
+export const reportFileInput = z.strictObject({
+  reportId: idSchema,
+  as: z.enum(['attachment', 'inline']).default('attachment'),
+});
 export const reportReasonInput = z.strictObject({
   reportId: idSchema,
   reason: lineSchema(500, 'Say why, in a few words: it stays with the report.'),

@@ -53,6 +53,8 @@ export const builtInTargetSetSchema = z.object({
   key: z.string(),
   name: z.string(),
   source: z.string(),
+  /** What was looked for and not found in print. */
+  gaps: z.string(),
   bands: z.array(bandSchema.extend({ low: decimalSchema.nullable(), high: decimalSchema.nullable() })),
 });
 /** `own` holds the newest version of each set. */

@@ -11,9 +11,9 @@ import { updatePlot } from '@/lib/data/plots/updatePlot';
 import { createTargetSet } from '@/lib/data/targets/createTargetSet';
 import { editTargetSet } from '@/lib/data/targets/editTargetSet';
 import { listTargets } from '@/lib/data/targets/listTargets';
-import { type Problem, Problem as ProblemError } from '@/lib/errors';
 import type { Plot } from '@/lib/schemas/plots';
 import { ctxAs, ctxNobody, makePlot, makeSite, type TestSite, useWorld } from '../support/factory';
+import { problemOf } from '../support/reports';
 
 useWorld();
 
@@ -23,16 +23,6 @@ const square = (side: number) => [
   { x: side, y: side },
   { x: 0, y: side },
 ];
-
-async function problemOf(work: Promise<unknown>): Promise<Problem> {
-  try {
-    await work;
-  } catch (error) {
-    if (error instanceof ProblemError) return error;
-    throw error;
-  }
-  throw new Error('It was let through.');
-}
 
 let here: TestSite;
 let there: TestSite;

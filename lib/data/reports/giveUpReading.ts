@@ -1,0 +1,33 @@
+import { and, eq, inArray, sql } from 'drizzle-orm';
+import { z } from 'zod';
+import { report } from '@/db/schema';
+import { asSiteId } from '@/lib/domain/ids';
+import { idSchema } from '@/lib/schemas/parts';
+import { audit } from '../audit';
+import { withSite } from '../transaction';
+import { workerVerb } from '../verb';
+
+const SENTENCE =
+  'This file was tried several times and could not be read. It is kept; type its numbers in beside the page, or let it be read again later.';
+
+/** No try is left: the report says so instead of waiting for ever. */
+export const giveUpReading = workerVerb({
+  input: z.strictObject({ siteId: idSchema, id: idSchema }),
+  run: ({ ctx, input }): Promise<void> => {
+    const siteId = asSiteId(input.siteId);
+    return withSite(siteId, async (tx) => {
+      const rows = await tx
+        .update(report)
+        .set({
+          state: 'unreadable',
+          refusalCode: sql`coalesce(${report.refusalCode}, 'reader-failed')`,
+          refusalSentence: sql`coalesce(${report.refusalSentence}, ${SENTENCE})`,
+          version: sql`${report.version} + 1`,
+        })
+        .where(and(eq(report.siteId, siteId), eq(report.id, input.id), inArray(report.state, ['received', 'reading'])))
+        .returning({ id: report.id });
+      if (rows.length > 0)
+        await audit(tx, ctx, siteId, { act: 'report.give-up', objectKind: 'report', objectId: input.id });
+    });
+  },
+});
