@@ -72,7 +72,7 @@ export const applicationAnswer = z.object({
   material: z.object({
     key: z.string(),
     name: z.string(),
-    reaction: z.string().nullable(),
+    reaction: z.enum(['sulfur', 'lime', 'soluble-salt']).nullable(),
     affects: z.array(z.string()),
   }),
   amountKg: z.number(),
@@ -101,3 +101,28 @@ export const applicationAnswer = z.object({
 });
 export type ApplicationAnswer = z.infer<typeof applicationAnswer>;
 export const applicationsAnswer = z.object({ applications: z.array(applicationAnswer) });
+
+export const suggestChangeInput = z.strictObject({
+  plotId: idSchema,
+  material: z.string().min(1).max(80),
+  amount: z.coerce.number().positive().max(100000),
+  amountUnit: z.enum(AMOUNT_UNITS),
+  areaM2: z.coerce.number().positive().max(1000000).optional(),
+  depthCm: z.coerce.number().min(0).max(100).optional(),
+});
+export const suggestChangeAnswer = z.object({
+  suggestions: z.array(
+    z.object({
+      analyte: z.string(),
+      unit: z.string(),
+      likely: z.number(),
+      low: z.number(),
+      high: z.number(),
+      source: z.string(),
+      weakSource: z.boolean(),
+    }),
+  ),
+  /** Why there is none. */
+  sentence: z.string().nullable(),
+});
+export type SuggestChangeAnswer = z.infer<typeof suggestChangeAnswer>;

@@ -37,7 +37,8 @@ describe('isolation of sites', () => {
       where c.relkind = 'r' and c.relnamespace = 'public'::regnamespace and a.attname = 'site_id' and not a.attisdropped`;
     expect(rows.length).toBeGreaterThan(15);
     expect(rows.filter((row) => !row.relrowsecurity || !row.relforcerowsecurity)).toEqual([]);
-    const [site] = await world.owner()`select relrowsecurity and relforcerowsecurity as held from pg_class where relname = 'site'`;
+    const [site] =
+      await world.owner()`select relrowsecurity and relforcerowsecurity as held from pg_class where relname = 'site'`;
     expect(site?.held).toBe(true);
   });
 
@@ -71,7 +72,9 @@ describe('isolation of sites', () => {
     );
     expect(await codeOf(insertThere)).toBe('42501');
     const pointThere = withSite(one.id, (tx) =>
-      tx.execute(sql`insert into planting (site_id, plot_id, year, crop) values (${one.id}, ${foreign}, 2026, 'onion')`),
+      tx.execute(
+        sql`insert into planting (site_id, plot_id, year, crop) values (${one.id}, ${foreign}, 2026, 'onion')`,
+      ),
     );
     expect(await codeOf(pointThere)).toBe('23503');
   });
@@ -123,12 +126,19 @@ describe('database roles', () => {
       select p.proname as name, r.rolname as owner, p.proconfig as config
       from pg_proc p join pg_roles r on r.oid = p.proowner
       where p.pronamespace = 'public'::regnamespace and p.prosecdef order by 1`;
-    expect(rows.map((row) => row.name)).toEqual(['due_reminders', 'site_of_mail', 'site_of_token', 'sites_of_person', 'stale_uploads']);
+    expect(rows.map((row) => row.name)).toEqual([
+      'due_reminders',
+      'site_of_mail',
+      'site_of_token',
+      'sites_of_person',
+      'stale_uploads',
+    ]);
     for (const row of rows) {
       expect(row.owner).toBe('loamline_lookup');
       expect(row.config).toEqual(['search_path=public, pg_temp']);
     }
-    const [lookup] = await world.owner()`select rolcanlogin, rolbypassrls from pg_roles where rolname = 'loamline_lookup'`;
+    const [lookup] =
+      await world.owner()`select rolcanlogin, rolbypassrls from pg_roles where rolname = 'loamline_lookup'`;
     expect(lookup).toEqual({ rolcanlogin: false, rolbypassrls: true });
   });
 

@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { eq } from 'drizzle-orm';
 import postgres from 'postgres';
 import { afterAll, beforeAll } from 'vitest';
-import { membership, person, plot, session, site } from '@/db/schema';
+import { laboratory, membership, person, plot, report, reportSample, result, sample, session, site } from '@/db/schema';
 import type { Role } from '@/lib/access/table';
 import { type Ctx, makeContext } from '@/lib/data/context';
 import { closeDatabase, database } from '@/lib/data/database';
@@ -150,4 +150,69 @@ export async function makePlot(siteId: SiteId, over: Partial<typeof plot.$inferI
   const row = rows[0];
   if (!row) throw new Error('The plot was not written.');
   return asPlotId(row.id);
+}
+
+export async function makeLaboratory(siteId: SiteId, name = 'Millbrook Soil Office'): Promise<string> {
+  const [row] = await withSite(siteId, (tx) =>
+    tx.insert(laboratory).values({ siteId, name }).returning({ id: laboratory.id }),
+  );
+  if (!row) throw new Error('The laboratory was not written.');
+  return row.id;
+}
+
+export type TestValue = {
+  analyte: string;
+  value: string;
+  unit: string;
+  method?: string | null;
+  basis?: 'mass' | 'none';
+};
+
+/** A confirmed report of one bag, as a confirmation would have left it. */
+export async function makeTest(
+  site: TestSite,
+  plotId: PlotId,
+  takenOn: string,
+  values: TestValue[],
+  over: { laboratoryId?: string; cores?: number } = {},
+): Promise<string[]> {
+  const by = site.people.owner.id;
+  return withSite(site.id, async (tx) => {
+    const siteId = site.id;
+    const bag = { siteId, plotId, takenOn, depthFromCm: '0', depthToCm: '15' };
+    const [bagRow] = await tx
+      .insert(sample)
+      .values({ ...bag, cores: over.cores ?? 15 })
+      .returning();
+    const [reportRow] = await tx
+      .insert(report)
+      .values({ siteId, origin: 'typed', state: 'confirmed', uploadedBy: by })
+      .returning();
+    if (!bagRow || !reportRow) throw new Error('The sample or its report was not written.');
+    const [line] = await tx
+      .insert(reportSample)
+      .values({ siteId, reportId: reportRow.id, ordinal: 1, plotId, takenOn, sampleId: bagRow.id })
+      .returning();
+    if (!line) throw new Error('The sample line was not written.');
+    const rows = await tx
+      .insert(result)
+      .values(
+        values.map(({ basis = 'none', method = '1:1_water', ...value }) => ({
+          ...bag,
+          ...value,
+          method,
+          unitBasis: basis,
+          valueSi: basis === 'mass' ? value.value : null,
+          sampleId: bagRow.id,
+          reportId: reportRow.id,
+          reportSampleId: line.id,
+          laboratoryId: over.laboratoryId ?? null,
+          qualifier: '=' as const,
+          printed: value.value,
+          confirmedBy: by,
+        })),
+      )
+      .returning({ id: result.id });
+    return rows.map((row) => row.id);
+  });
 }

@@ -61,7 +61,11 @@ export const getEffects = siteVerb({
         .slice(1)
         .map((row) => ({ verdict: row.verdict, computedAt: row.computedAt.toISOString() })),
     }));
-    const latest = (check: EffectCheckAnswer) => check.applications.map((one) => one.appliedOn).sort().at(-1) ?? '';
+    const latest = (check: EffectCheckAnswer) =>
+      check.applications
+        .map((one) => one.appliedOn)
+        .sort()
+        .at(-1) ?? '';
     checks.sort((a, b) => latest(b).localeCompare(latest(a)));
     return { today: picture.today as string, checks };
   },

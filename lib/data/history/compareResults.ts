@@ -1,8 +1,8 @@
 import { eq } from 'drizzle-orm';
 import { laboratory, plot } from '@/db/schema';
 import { analyte, isAnalyteKey, isMethodKey, methodLabel } from '@/lib/domain/analytes';
-import { compareTests, type TestPoint } from '@/lib/domain/effects';
 import { readingRange } from '@/lib/domain/drift';
+import { compareTests, type TestPoint } from '@/lib/domain/effects';
 import { notFound, Problem } from '@/lib/errors';
 import { compareInput } from '@/lib/schemas/effects';
 import { siteVerb } from '../verb';

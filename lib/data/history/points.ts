@@ -72,6 +72,8 @@ function groupedBy<T>(items: readonly T[], keyOf: (item: T) => string): T[][] {
 export type SiteReadings = {
   /** One point a plot, day, analyte, method, form and basis: bags and analyses of it averaged. */
   points: TestPoint[];
+  /** What the paper says, by the id a point carries. */
+  papers: Map<string, { printed: string; reportId: string }>;
   labDuplicates: DuplicatePair[];
   fieldDuplicates: DuplicatePair[];
 };
@@ -113,7 +115,8 @@ export async function loadReadings(
     )
     .orderBy(result.takenOn, sample.composite, result.analysis);
   const flat: Row[] = rows.map((row) => ({ ...row.result, cores: row.cores, composite: row.composite }));
-  const readings: SiteReadings = { points: [], labDuplicates: [], fieldDuplicates: [] };
+  const readings: SiteReadings = { points: [], papers: new Map(), labDuplicates: [], fieldDuplicates: [] };
+  for (const row of flat) readings.papers.set(row.id, { printed: row.printed, reportId: row.reportId });
   for (const test of groupedBy(flat, alike)) foldTest(test, readings);
   readings.points.sort((a, b) => (a.day < b.day ? -1 : a.day > b.day ? 1 : 0));
   return readings;

@@ -5,7 +5,7 @@ import type { JobTools } from '../job';
 
 export async function sendQueuedMail({ ctx, payload }: JobTools<'send-mail'>): Promise<void> {
   const mail = await claimMail({ ctx, input: { id: payload.id } });
-  if (!mail || mail.state !== 'sending') return;
+  if (mail?.state !== 'sending') return;
   const answer = await sendMail({
     to: mail.toAddress,
     subject: mail.subject,
