@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { type CompareOutcome, compareTests } from '@/lib/domain/effects';
+import type { AnalyteKey } from '@/lib/domain/analytes';
+import { type CompareOutcome, compareTests, type TestPoint } from '@/lib/domain/effects';
 import { asLaboratoryId } from '@/lib/domain/ids';
 import { NO_LEARNING, testPoint } from '../support/test-points';
 
@@ -106,5 +107,29 @@ describe('two tests side by side', () => {
         ['a', '2026-04-14', 6.9, { depthCm: { from: 0, to } }],
       ).ok;
     expect([shallow(6.2), shallow(6.5)]).toEqual([true, false]);
+  });
+
+  it('keeps the default noise of every class: 90 % reach of a change of 15 cores, plain, other season, other laboratory', () => {
+    // Worked out in R from the defaults (qt at the Satterthwaite degrees of freedom); pH in units, the rest as a ratio.
+    const table: readonly (readonly [AnalyteKey, number, number | null, number])[] = [
+      ['soil_ph_water', 0.33, 0.47, 0.55],
+      ['soil_ph_salt', 0.27, 0.32, 0.44],
+      ['phosphorus', 1.49, 1.55, 1.78],
+      ['potassium', 1.4, 1.52, 1.66],
+      ['calcium', 1.29, 1.32, 1.43],
+      ['organic_matter', 1.22, 1.24, 1.61],
+      ['zinc', 1.56, 1.65, 2.7],
+      ['nitrate_n', 2.13, null, 2.59],
+    ];
+    const other = asLaboratoryId('other');
+    for (const [analyte, plain, season, laboratory] of table) {
+      const reach = (a: string, more: Partial<TestPoint> = {}): number => {
+        const outcome = answered(compare(['a', a, 6, { analyte }], ['a', '2026-04-14', 6, { analyte, ...more }]));
+        return outcome.ratio?.hi ?? outcome.hi;
+      };
+      expect(reach('2025-04-10'), analyte).toBeCloseTo(plain, 2);
+      expect(reach('2025-04-10', { laboratoryId: other }), analyte).toBeCloseTo(laboratory, 2);
+      if (season !== null) expect(reach('2025-10-10'), analyte).toBeCloseTo(season, 2);
+    }
   });
 });

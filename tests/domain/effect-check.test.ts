@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { asDay } from '@/lib/domain/days';
 import { type ControlPlot, checkEffect, type EffectInput, type TestPoint } from '@/lib/domain/effects';
+import { questionablePairs } from '@/lib/domain/effects/learn';
 import { asApplicationId, asLaboratoryId, asPlotId } from '@/lib/domain/ids';
 import { effectInput, intent, NO_LEARNING, testPoint } from '../support/test-points';
 
@@ -43,7 +44,7 @@ describe('a plot without untreated plots', () => {
     expect(outcome.reading.rho).toBe(1);
     expect(outcome.verdict).toBe('right way, size not settled');
     expect(outcome.sentences[0]).toBe(
-      'pH fell by 0.50; 0.62 was planned. It moved the right way; how far is not settled. Anywhere from 0.17 to 0.83 fits these samples.',
+      'pH fell by 0.50; 0.62 was due by then (0.80 in full). It moved the right way; how far is not settled. Anywhere from 0.17 to 0.83 fits these samples.',
     );
     expect(outcome.sentences.join(' ')).toContain('fewer than three plots');
     expect(outcome.sentences.join(' ')).not.toContain('because of the');
@@ -86,7 +87,7 @@ describe('a plot without untreated plots', () => {
     const outcome = verdictOf(effectInput({ tests: [was(7.5), now(7.0)], intents: [half] }));
     expect(outcome.planned).toBe(-1.6);
     expect(outcome.intended).toBeCloseTo(-0.8 * 0.7775, 10);
-    expect(outcome.sentences.join(' ')).toContain('The plan in full is 1.60');
+    expect(outcome.sentences.join(' ')).toContain('0.62 was due by then (1.60 in full)');
   });
 
   it('says what would settle it', () => {
@@ -98,7 +99,7 @@ describe('a plot without untreated plots', () => {
     );
     expect(outcome.verdict).toBe('cannot tell yet');
     expect(outcome.settle.length).toBeGreaterThan(0);
-    expect(outcome.sentences[1]).toContain('Next time:');
+    expect(outcome.sentences[1]).toMatch(/^Next time .* would settle it\.$/);
   });
 });
 
@@ -333,6 +334,20 @@ describe('concentrations', () => {
 });
 
 describe('what the site teaches', () => {
+  it('asks about a duplicate pair more than 3 root-2 sds apart, and keeps it', () => {
+    // Laboratory sd 0.06: 3 x 1.414 x 0.06 = 0.2546.
+    const pair = (gap: number) => ({ first: was(6.8), second: was(6.8 + gap) });
+    const taught = { ...NO_LEARNING, labDuplicates: [pair(0.25), pair(0.26)] };
+    expect(questionablePairs('soil_ph_water', taught)).toEqual([taught.labDuplicates[1]]);
+    expect(questionablePairs('ec', taught)).toEqual([]);
+  });
+
+  it('takes pH without a printed unit as pH', () => {
+    const bare = { unit: '', basis: 'index' as const };
+    const outcome = verdictOf(effectInput({ tests: [was(7.5, bare), now(7.0)] }));
+    expect(outcome.sentences[0]).toMatch(/^pH fell by 0\.50;/);
+  });
+
   it('narrows or widens with its field duplicates, by the update of the R vectors', () => {
     const pairs = (gap: number) =>
       Array.from({ length: 4 }, (_, index) => ({

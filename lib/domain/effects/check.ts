@@ -86,7 +86,7 @@ function readingsOf({ input, chosen, intended, speaker }: Facts, error: SiteErro
     };
   }
   const low = [...weighed.map((row) => row.test), after].some((test) => error.noise.scale === 'log' && isLow(test));
-  const by = intended.byThen;
+  const by = intended;
   const main = heaviest(aloneBefores.length > 0 ? aloneBefores : choice.befores)?.test ?? after;
   const base = { uses: choice.uses, error, sitePlots: roundReadings(error, input.siteTests, main).length };
   const aloneLow = low ? lowEstimate(error, aloneBefores, after, []) : null;

@@ -72,6 +72,8 @@ function methodRefusal(a: TestPoint, b: TestPoint): Comparability {
 }
 
 function unitRefusal(a: TestPoint, b: TestPoint): Comparability {
+  // pH has one unit, which reports print as pH, SU or not at all.
+  if (isPh(a.analyte)) return { ok: true };
   const bases = [a.basis, b.basis];
   if (a.basis !== b.basis || a.unit !== b.unit) {
     const missing = bases.includes('volume')

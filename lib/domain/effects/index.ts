@@ -1,8 +1,4 @@
-export { checkEffect, RULE_VERSION } from './check';
-export { type Comparability, comparable, sameLaboratory } from './comparable';
+export { checkEffect } from './check';
 export { compareTests } from './compare';
-export { intendedBy, reactedShare } from './intended';
-export { questionablePairs } from './learn';
-export { type NoiseClassKey, noiseClassOf } from './noise-defaults';
-export { judgingWindow } from './select';
+export { noiseClassOf } from './noise-defaults';
 export * from './types';

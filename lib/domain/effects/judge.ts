@@ -1,4 +1,5 @@
 import { tQuantile } from '../quantiles';
+import type { IntendedNow } from './intended';
 import type { LowEstimate } from './low-values';
 import type { Estimate } from './reading';
 import { verdictSentence } from './sentences';
@@ -10,10 +11,11 @@ import type { Speaker } from './words';
 export function judge(
   estimate: Estimate,
   scale: Exclude<WorkingScale, 'low-values'>,
-  intended: number,
+  intention: IntendedNow,
   withControls: boolean,
   speaker: Speaker,
 ): Reading {
+  const intended = intention.byThen;
   const s = Math.sqrt(estimate.variance);
   const at = turnedInterval(estimate.D, s, estimate.nu, intended);
   const isLog = scale === 'log';
@@ -40,10 +42,11 @@ export function judge(
     rho: estimate.site.rho,
     components: estimate.components,
   };
-  return { ...reading, sentence: verdictSentence(reading, intended, speaker) };
+  return { ...reading, sentence: verdictSentence(reading, intention, speaker) };
 }
 
-export function judgeLow(low: LowEstimate, intended: number, withControls: boolean, speaker: Speaker): Reading {
+export function judgeLow(low: LowEstimate, intention: IntendedNow, withControls: boolean, speaker: Speaker): Reading {
+  const intended = intention.byThen;
   const s = Math.sqrt(low.variance);
   const q = tQuantile(CONFIDENCE_PER_SIDE, low.nu);
   const { lo, estimate, hi } = low.interval(q);
@@ -66,5 +69,5 @@ export function judgeLow(low: LowEstimate, intended: number, withControls: boole
     rho: 1,
     components: low.components,
   };
-  return { ...reading, sentence: verdictSentence(reading, intended, speaker) };
+  return { ...reading, sentence: verdictSentence(reading, intention, speaker) };
 }

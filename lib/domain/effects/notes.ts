@@ -22,7 +22,6 @@ export type NoteFacts = {
   readonly speaker: Speaker;
 };
 
-const DIFFERS_BY = 0.1;
 const EXPLAINED = 0.1;
 
 const WHY_UNUSED: Readonly<Record<NonNullable<ControlUse['why']>, string>> = {
@@ -42,14 +41,6 @@ function missed({ reading, intended }: NoteFacts): string[] {
     p >= EXPLAINED
       ? 'The miss is no larger than the uncertainty of a published rate explains.'
       : 'The miss is larger than the unknowns of the soil explain: check amount, depth, spreading and sample.',
-  ];
-}
-
-function plan({ intended, speaker }: NoteFacts): string[] {
-  const { byThen, planned } = intended;
-  if (Math.abs(byThen - planned) <= DIFFERS_BY * Math.abs(planned)) return [];
-  return [
-    `The plan in full is ${speaker.size(planned)}; by the day of the test ${speaker.size(byThen)} of it could have happened.`,
   ];
 }
 
@@ -104,9 +95,8 @@ export function notesFor(facts: NoteFacts): readonly string[] {
   const unknownCores = [...facts.befores.map((row) => row.test), facts.after].some((test) => test.cores === null);
   const first = facts.settle[0];
   return [
-    ...(first ? [`Next time: ${first.text}${first.kind === 'larger-step' ? '.' : ' settle it.'}`] : []),
+    ...(first ? [first.text] : []),
     ...missed(facts),
-    ...plan(facts),
     ...cost(facts),
     ...controls(facts),
     ...correction(facts),

@@ -16,24 +16,36 @@ const ENDS: Readonly<Record<Verdict, (compared: boolean) => string>> = {
   'cannot tell yet': () => 'These samples cannot tell yet.',
 };
 
+const DIFFERS_BY = 0.1;
+
+/** "0.62 was planned", or both figures when the day of the test or a short spreading make the plan and its due part differ. */
+function intentionWords(intended: number, planned: number, sameWay: boolean, speaker: Speaker) {
+  const full = speaker.size(planned);
+  const differs = Math.abs(intended - planned) > DIFFERS_BY * Math.abs(planned);
+  const due = speaker.size(intended);
+  const what = sameWay ? due : `a ${nounFor(intended)} of ${due}`;
+  return differs
+    ? { was: `${what} was due by then (${full} in full)`, the: `the ${due} due by then (${full} in full)` }
+    : { was: `${what} was planned`, the: `the ${due} planned` };
+}
+
 export function verdictSentence(
-  reading: Pick<Reading, 'verdict' | 'change' | 'changeLo' | 'changeHi' | 'lo' | 'hi' | 'withControls'>,
-  intended: number,
+  reading: Pick<Reading, 'verdict' | 'change' | 'changeLo' | 'changeHi' | 'withControls'>,
+  intention: { readonly byThen: number; readonly planned: number },
   speaker: Speaker,
 ): string {
   const { verdict, change, changeLo, changeHi, withControls } = reading;
-  const beside = withControls ? ' against the untreated plots' : '';
-  const start = `${speaker.name} ${verbFor(change)} by ${speaker.size(change)}${beside} (${intervalInWords(changeLo, changeHi, Math.sign(intended), speaker)})`;
-  const plan = speaker.size(intended);
+  const { byThen, planned } = intention;
+  const direction = Math.sign(byThen);
+  const moved = `${speaker.name} ${verbFor(change)} by ${speaker.size(change)}${withControls ? ' against the untreated plots' : ''}`;
+  const span = intervalInWords(changeLo, changeHi, direction, speaker);
+  const start = `${moved} (${span})`;
+  const words = intentionWords(byThen, planned, Math.sign(change) === direction, speaker);
   const mayBeNothing = changeLo <= 0 && changeHi >= 0;
-  const planned =
-    Math.sign(change) === Math.sign(intended) ? `${plan} was planned` : `a ${nounFor(intended)} of ${plan} was planned`;
-  if (verdict === 'short of it')
-    return `${start}, less than the ${plan} planned.${mayBeNothing ? ' It may be nothing.' : ''}`;
-  if (verdict === 'beyond it') return `${start}, more than the ${plan} planned.`;
+  if (verdict === 'short of it') return `${start}, less than ${words.the}.${mayBeNothing ? ' It may be nothing.' : ''}`;
+  if (verdict === 'beyond it') return `${start}, more than ${words.the}.`;
   if (verdict === 'right way, size not settled') {
-    const span = intervalInWords(changeLo, changeHi, Math.sign(intended), speaker);
-    return `${speaker.name} ${verbFor(change)} by ${speaker.size(change)}${beside}; ${planned}. ${ENDS[verdict](withControls)} Anywhere from ${span} fits these samples.`;
+    return `${moved}; ${words.was}. ${ENDS[verdict](withControls)} Anywhere from ${span} fits these samples.`;
   }
-  return `${start}; ${planned}. ${ENDS[verdict](withControls)}`;
+  return `${start}; ${words.was}. ${ENDS[verdict](withControls)}`;
 }

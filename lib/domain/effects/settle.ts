@@ -13,6 +13,8 @@ const MOST_CONTROLS = 4;
 
 const plots = (count: number): string => (count === 1 ? 'one untreated plot' : `${count} untreated plots`);
 
+const next = (what: string): string => `Next time ${what} would settle it.`;
+
 export function remediesFor(input: {
   readonly verdict: Verdict;
   readonly error: SiteError;
@@ -49,36 +51,37 @@ export function remediesFor(input: {
     cores.cores <= MOST_CORES &&
     spread(v(cores.cores), input.controls) <= target * (1 + 1e-9)
   ) {
-    found.push({ kind: 'cores', count: cores.cores, text: `${cores.cores} cores in each sample would` });
+    found.push({ kind: 'cores', count: cores.cores, text: next(`${cores.cores} cores in each sample`) });
   }
   if (spread(v(now, 2), input.controls) <= target) {
-    found.push({ kind: 'second-composite', count: 2, text: 'a second bag from the plot each time would' });
+    found.push({ kind: 'second-composite', count: 2, text: next('a second bag from the plot each time') });
   } else if (spread(v(many, 2), input.controls) <= target) {
-    found.push({ kind: 'second-composite', count: 2, text: `a second bag of ${many} cores each time would` });
+    found.push({ kind: 'second-composite', count: 2, text: next(`a second bag of ${many} cores each time`) });
   }
   for (let count = Math.max(1, input.controls + 1); count <= MOST_CONTROLS; count += 1) {
     if (spread(v(now), count) <= target) {
-      found.push({ kind: 'controls', count, text: `leaving ${plots(count)} would` });
+      found.push({ kind: 'controls', count, text: next(`leaving ${plots(count)}`) });
       break;
     }
     if (spread(v(many), count) <= target) {
-      found.push({ kind: 'controls', count, text: `${many} cores and ${plots(count)} would` });
+      found.push({ kind: 'controls', count, text: next(`${many} cores and ${plots(count)}`) });
       break;
     }
     if (count === MOST_CONTROLS && spread(v(many, 2), count) <= target) {
-      found.push({ kind: 'controls', count, text: `two bags of ${many} cores each time and ${plots(count)} would` });
+      found.push({ kind: 'controls', count, text: next(`two bags of ${many} cores each time and ${plots(count)}`) });
     }
   }
   const reading = v(now);
   if (input.controls === 0 && (reading + occasion.variance) * 1.5 <= target) {
-    found.push({ kind: 'another-test', count: 1, text: 'one more test next year in the same season would' });
+    found.push({ kind: 'another-test', count: 1, text: 'One more test next year in the same season would settle it.' });
   }
-  return found.length > 0
-    ? found
-    : [
-        {
-          kind: 'larger-step',
-          text: 'a change of this size cannot be told on this plot; plan a larger step or judge over three seasons',
-        },
-      ];
+  if (found.length > 0) return found;
+  const what =
+    verdict === 'cannot tell yet' ? 'A change of this size cannot be told' : 'How far it moved cannot be settled';
+  return [
+    {
+      kind: 'larger-step',
+      text: `${what} on this plot in one season: plan a larger step, or judge over three seasons.`,
+    },
+  ];
 }

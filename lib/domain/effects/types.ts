@@ -217,6 +217,7 @@ export type ControlUse = {
 export type Remedy = {
   readonly kind: 'cores' | 'second-composite' | 'controls' | 'another-test' | 'larger-step';
   readonly count?: number;
+  /** A whole sentence. */
   readonly text: string;
 };
 

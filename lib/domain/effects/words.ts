@@ -9,16 +9,14 @@ export type Speaker = {
 };
 
 const PH_DECIMALS = 2;
+const TWO_FIGURES = 10;
 
-/** pH gets one decimal more than it is printed with, because differences of 0.05 count; others keep three figures. */
+/** pH gets one decimal more than it is printed with, because differences of 0.05 count; others below 10 too. */
 export function speakerFor(key: AnalyteKey, unit: string): Speaker {
   const { label, decimals } = analyte(key);
-  const isPh = unit === 'pH';
-  const digits = (value: number): string => {
-    if (isPh) return value.toFixed(PH_DECIMALS);
-    const magnitude = Math.floor(Math.log10(Math.max(Math.abs(value), 1e-9)));
-    return value.toFixed(Math.max(0, Math.min(Math.max(decimals, 2 - magnitude), 3)));
-  };
+  const isPh = analyte(key).unit === 'pH';
+  const digits = (value: number): string =>
+    value.toFixed(isPh ? PH_DECIMALS : Math.abs(value) >= TWO_FIGURES ? decimals : decimals + 1);
   const withUnit = (value: number): string =>
     isPh ? digits(value) : `${digits(value)}${unit === '%' ? ' %' : ` ${unit}`}`;
   return { name: isPh ? 'pH' : label, size: (value) => withUnit(Math.abs(value)), value: withUnit };
