@@ -14,10 +14,10 @@ const LINE = 'mt-0.5 flex max-w-72 items-start gap-1 font-text text-xs leading-s
 const ICON = 'mt-px size-3.5 flex-none';
 
 /** What is to be said about a cell, always icon + word + reason; the cell points here with aria-describedby. */
-export function CellNotes({ view, id }: { view: CellView; id: string }) {
+export function CellNotes({ view, id, toTheRight = false }: { view: CellView; id: string; toTheRight?: boolean }) {
   const { state, doubts } = view;
   return (
-    <div id={id} className={view.column.kind === 'number' ? 'grid justify-items-end' : undefined}>
+    <div id={id} className={toTheRight ? 'grid justify-items-end' : undefined}>
       {state.kind === 'invalid' ? (
         <p className={`${LINE} text-iron`}>
           <CircleAlert aria-hidden="true" className={ICON} />

@@ -3,10 +3,10 @@
 import { ChevronDown, Trash2 } from 'lucide-react';
 import { useEffect, useId, useLayoutEffect, useRef, useState } from 'react';
 import { Button } from '../actions/button';
+import type { GridBodyProps } from './body-props';
 import { CellNotes, type ConflictActions, ConflictChoice, hasNotes } from './cell-notes';
 import { rowHeaderOf } from './cell-value';
 import { type CellView, viewOf } from './cell-view';
-import type { GridBodyProps } from './grid-table';
 import type { GridRow } from './types';
 
 type CardsProps = GridBodyProps & { readonly onRemoveRow?: ((rowId: string) => void) | undefined };

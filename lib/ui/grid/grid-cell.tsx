@@ -71,7 +71,7 @@ export const GridCell = memo(function GridCell(props: GridCellProps) {
           {view.shown}
         </span>
       )}
-      {noted ? <CellNotes view={view} id={notesId} /> : null}
+      {noted ? <CellNotes view={view} id={notesId} toTheRight={view.column.kind === 'number'} /> : null}
       {view.state.kind === 'conflict' ? (
         <ConflictChoice view={view} conflict={view.state} actions={props.actions} inGrid />
       ) : null}

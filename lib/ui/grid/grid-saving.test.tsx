@@ -3,8 +3,8 @@ import { render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
+import { cell, columns, focused, makeRow, narrowScreen, type OnEdit, ROWS, sent, setUp } from '@/tests/support/grid';
 import { Grid } from './grid';
-import { cell, columns, focused, makeRow, narrowScreen, type OnEdit, ROWS, sent, setUp } from './grid-test-support';
 import type { GridEditOutcome } from './types';
 
 describe('saving and the server', () => {

@@ -3,31 +3,17 @@
 import { createColumnHelper, tableFeatures, useTable } from '@tanstack/react-table';
 import { useCallback, useLayoutEffect, useMemo, useRef } from 'react';
 import { cx } from '../cx';
+import type { GridBodyProps } from './body-props';
 import { rowHeaderOf } from './cell-value';
 import { type CellView, viewOf } from './cell-view';
 import { GridCell } from './grid-cell';
 import { contains, isSingle } from './rectangle';
-import type { GridColumn, GridRow } from './types';
-import type { GridCursor } from './use-grid-cursor';
-import type { GridEdits } from './use-grid-edits';
+import type { GridRow } from './types';
 import { useGridKeys } from './use-grid-keys';
 
 const features = tableFeatures({});
 const helper = createColumnHelper<typeof features, GridRow>();
 const rowIdOf = (row: GridRow) => row.id;
-
-export interface GridBodyProps {
-  readonly labelledBy: string;
-  readonly columns: readonly GridColumn[];
-  readonly rows: readonly GridRow[];
-  readonly readOnly: boolean;
-  readonly edits: GridEdits;
-  readonly cursor: GridCursor;
-  readonly say: (sentence: string) => void;
-  readonly onFocusCell: (rowId: string, columnId: string) => void;
-  readonly onFillDown: () => void;
-  readonly onAcceptDoubt?: ((cell: { rowId: string; columnId: string }) => void) | undefined;
-}
 
 /** The table form: one tab stop, arrows move, one cell at a time is edited in place. */
 export function GridTable(props: GridBodyProps) {

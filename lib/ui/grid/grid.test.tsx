@@ -1,7 +1,7 @@
 // @vitest-environment happy-dom
 import { fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it, vi } from 'vitest';
-import { cell, focused, said, sent, setUp } from './grid-test-support';
+import { cell, focused, said, sent, setUp } from '@/tests/support/grid';
 
 describe('roles and tab stop', () => {
   it('is a named grid of rows, headers and cells with one tab stop', () => {

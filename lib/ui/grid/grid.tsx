@@ -2,10 +2,11 @@
 
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '../actions/button';
+import type { GridBodyProps } from './body-props';
 import { rowHeaderOf } from './cell-value';
 import { needsAttention, viewOf } from './cell-view';
 import { GridCards } from './grid-cards';
-import { type GridBodyProps, GridTable } from './grid-table';
+import { GridTable } from './grid-table';
 import { GridToolbar } from './grid-toolbar';
 import { nextDoubtful } from './navigate';
 import { planFillDown } from './paste-plan';

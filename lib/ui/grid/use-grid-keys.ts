@@ -10,11 +10,11 @@ import {
   useRef,
   useState,
 } from 'react';
+import type { GridBodyProps } from './body-props';
 import type { LeaveEditor } from './cell-editor';
 import { labelOf } from './cell-value';
 import type { CellView } from './cell-view';
 import { formatTsv, parseTsv } from './delimited';
-import type { GridBodyProps } from './grid-table';
 import { commandFor, type GridCommand } from './key-map';
 import { moveFrom, nextEditable } from './navigate';
 import { type PlannedValue, planPaste } from './paste-plan';

@@ -53,7 +53,7 @@ export function PlotShape(props: PlotShapeProps) {
         onPointerDown={props.onBodyDown}
         onDoubleClick={props.onOpen}
         className={cx(
-          'touch-none focus-visible:shadow-none',
+          'touch-none outline-none focus-visible:outline-3 focus-visible:outline-gley focus-visible:shadow-none',
           dropTarget
             ? 'fill-gley-wash stroke-gley stroke-[4] [stroke-dasharray:8_4]'
             : selected

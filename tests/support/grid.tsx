@@ -1,8 +1,8 @@
 import { cleanup, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, vi } from 'vitest';
-import { Grid } from './grid';
-import type { GridColumn, GridEdit, GridProps, GridRow } from './types';
+import { Grid } from '@/lib/ui/grid/grid';
+import type { GridColumn, GridEdit, GridProps, GridRow } from '@/lib/ui/grid/types';
 
 export const columns: readonly GridColumn[] = [
   { id: 'analyte', header: 'Analyte', kind: 'readonly', rowHeader: true },
