@@ -31,8 +31,6 @@ export function withUnit(text: string, unit: string): string {
   return unit === '' ? text : `${text} ${unit}`;
 }
 
-const DAY_MS = 86_400_000;
-
 /** Milliseconds of an ISO day at midnight UTC; days have no zone, so none is applied. */
 export function dayMs(isoDay: string): number {
   return Date.parse(`${isoDay.slice(0, 10)}T00:00:00Z`);
@@ -40,10 +38,6 @@ export function dayMs(isoDay: string): number {
 
 export function isoDay(ms: number): string {
   return new Date(ms).toISOString().slice(0, 10);
-}
-
-export function addDays(isoDayText: string, days: number): string {
-  return isoDay(dayMs(isoDayText) + days * DAY_MS);
 }
 
 /** "3 May 2026": the month in letters, whatever the reader's habit of day and month. */

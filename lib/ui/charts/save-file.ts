@@ -22,9 +22,7 @@ export async function svgToPng(svg: SVGSVGElement, scale = 2): Promise<PictureAn
   const text = new XMLSerializer().serializeToString(svg);
   const url = URL.createObjectURL(new Blob([text], { type: 'image/svg+xml;charset=utf-8' }));
   try {
-    const image = new Image(width, height);
-    image.src = url;
-    await image.decode();
+    const image = await loaded(url, width, height);
     const canvas = document.createElement('canvas');
     canvas.width = width * scale;
     canvas.height = height * scale;
@@ -38,4 +36,13 @@ export async function svgToPng(svg: SVGSVGElement, scale = 2): Promise<PictureAn
   } finally {
     URL.revokeObjectURL(url);
   }
+}
+
+function loaded(url: string, width: number, height: number): Promise<HTMLImageElement> {
+  return new Promise((done, fail) => {
+    const image = new Image(width, height);
+    image.onload = () => done(image);
+    image.onerror = () => fail(new Error('The drawing was not accepted as a picture.'));
+    image.src = url;
+  });
 }
