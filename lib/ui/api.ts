@@ -74,7 +74,7 @@ async function once<T>(path: string, method: string, options: CallOptions): Prom
         ? 'cancelled'
         : 'timed-out'
       : 'unreachable';
-    return { ok: false, problem: localProblem(why, method) };
+    return { ok: false, problem: localProblem(why, method, options.timeoutMs) };
   } finally {
     clearTimeout(timer);
     options.signal?.removeEventListener('abort', cancel);
@@ -144,13 +144,13 @@ function isRecord(value: unknown): value is Record<string, unknown> {
 
 type LocalCode = 'timed-out' | 'unreachable' | 'cancelled' | 'unreadable-answer';
 
-export function localProblem(code: LocalCode, method: string): Problem {
+export function localProblem(code: LocalCode, method: string, waitedMs = ANSWER_WITHIN_MS): Problem {
   const reading = method === 'GET';
   const kept = reading
     ? 'What is on the screen may be older than what is saved. Try again when the connection is better.'
     : 'What you entered is still here. It may or may not have been saved: reload the page before sending it again.';
   const said: Record<LocalCode, [string, string]> = {
-    'timed-out': ['No answer yet', `Loamline did not answer within 10 seconds. ${kept}`],
+    'timed-out': ['No answer yet', `Loamline did not answer within ${Math.round(waitedMs / 1000)} seconds. ${kept}`],
     unreachable: [
       'No connection',
       reading
