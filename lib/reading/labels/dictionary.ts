@@ -24,7 +24,9 @@ function buildNames(): ReadonlyMap<string, readonly Named[]> {
     const carries = new RegExp(`(^|[\\s(-])${symbol}(\\d|$|[\\s)-])`);
     for (const method of entry.methods) {
       for (const spelling of method.spellings) {
-        if (carries.test(spelling) && spelling !== 'P2O5') add(map, normal(spelling), { analyte: entry.key, spelling });
+        const named = normal(spelling).includes(entry.label.toLowerCase());
+        if ((named || carries.test(spelling)) && spelling !== 'P2O5')
+          add(map, normal(spelling), { analyte: entry.key, spelling });
       }
     }
   }

@@ -71,7 +71,7 @@ function cutMethods(text: string): string {
     const at = findWhole(rest, spelling);
     if (at >= 0) rest = `${rest.slice(0, at)} ${rest.slice(at + spelling.length)}`;
   }
-  return rest.replace(/\s+/g, ' ').trim();
+  return rest.replace(/\s+/g, ' ').replace(/^[\s-]+|[\s-]+$/g, '');
 }
 
 /** Short symbols count only in a case that a laboratory would print: "Mg", "MG", never "mg" or "as". */
@@ -95,19 +95,22 @@ function lookUp(plain: string, raw: string): { analyte: AnalyteKey; ambiguous: s
   return { analyte: exact.analyte, ambiguous: clash === null ? null : `The name can also mean: ${clash}.` };
 }
 
+/** "SMP buffer pH", "CEC sum of cations": two names of one analyte side by side. */
+function twoNames(plain: string): AnalyteKey | null {
+  const words = plain.split(' ');
+  for (let cut = 1; cut < words.length; cut++) {
+    const first = NAMES.get(words.slice(0, cut).join(' '))?.[0]?.analyte;
+    if (first !== undefined && first === NAMES.get(words.slice(cut).join(' '))?.[0]?.analyte) return first;
+  }
+  return null;
+}
+
 function sameInAllParts(raw: string): AnalyteKey | null {
   const parts = raw
     .split(/[(),;\n]|\s[-–]\s/)
     .map((part) => part.trim())
     .filter((part) => part !== '');
-  if (parts.length < 2) {
-    const words = normal(raw).split(' ');
-    for (let cut = 1; cut < words.length; cut++) {
-      const first = NAMES.get(words.slice(0, cut).join(' '))?.[0]?.analyte;
-      if (first !== undefined && first === NAMES.get(words.slice(cut).join(' '))?.[0]?.analyte) return first;
-    }
-    return null;
-  }
+  if (parts.length < 2) return null;
   let found: AnalyteKey | null = null;
   for (const part of parts) {
     const one = lookUp(normal(part), part) ?? lookUp(normal(cutMethods(normal(part))), part);
@@ -165,7 +168,7 @@ function nameIn(raw: string): { analyte: AnalyteKey; strength: number; ambiguous
   const bare = withoutMethod.replace(NOISE, ' ').replace(/\s+/g, ' ').trim();
   const fourth = bare === withoutMethod ? null : lookUp(bare, raw);
   if (fourth !== null) return { ...fourth, strength: 0.96 };
-  const same = sameInAllParts(raw);
+  const same = twoNames(withoutUnit) ?? sameInAllParts(raw);
   return same === null ? null : { analyte: same, strength: 0.97, ambiguous: null };
 }
 

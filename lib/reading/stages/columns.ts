@@ -1,5 +1,6 @@
+import { analyte } from '@/lib/domain/analytes';
 import type { IdentityField } from '../candidate';
-import { type Label, readLabel, unitOnly } from '../labels/label';
+import { type Label, methodIn, readLabel, unitIn, unitOnly } from '../labels/label';
 import type { CellLine, PageCell } from './cells';
 import { fieldOf } from './identity';
 import { type Phrase, phraseOf } from './lines';
@@ -14,10 +15,13 @@ export type Column = {
   readonly role: Role | null;
   /** 1 when the heading stands over its numbers, less when it had to be reached for. */
   readonly position: number;
+  /** Heading lines that the meaning left unexplained. */
+  readonly unexplained: number;
 };
 
 type Span = { x0: number; x1: number };
 type Stack = Span & { own: string[]; captions: string[]; over: boolean };
+type Caption = { text: string; middle: number; first: number; last: number };
 
 /** Share of the narrower of two spans by which they must overlap to be one column. */
 const SAME_COLUMN = 0.2;
@@ -68,14 +72,20 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
   return meant ? parts : [phrase];
 }
 
-function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[]) {
+function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], captions: Caption[]) {
   const over = stacks.filter((stack) => overlap(stack, phrase) > 0);
   const wide = over.filter((stack) => {
     const middle = (stack.x0 + stack.x1) / 2;
     return middle > phrase.x0 && middle < phrase.x1;
   });
   if (wide.length >= 2) {
-    for (const stack of wide) stack.captions.push(phrase.text);
+    const at = wide.map((stack) => stacks.indexOf(stack));
+    captions.push({
+      text: phrase.text,
+      middle: (phrase.x0 + phrase.x1) / 2,
+      first: Math.min(...at),
+      last: Math.max(...at),
+    });
     return;
   }
   const best = over.sort((a, b) => overlap(b, phrase) - overlap(a, phrase))[0];
@@ -99,6 +109,37 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[]) {
   near.own.push(phrase.text);
 }
 
+const CHARGED = new Set(['potassium', 'calcium', 'magnesium', 'sodium', 'exchangeable_acidity', 'aluminium']);
+
+/** Whether a caption has something to say to a column that it does not yet know. */
+function takesCaption(stack: Stack | undefined, caption: string): boolean {
+  if (stack === undefined || stack.captions.length > 0) return false;
+  const label = readLabel(stack.own.join(' '));
+  if (label === null) return false;
+  const unit = unitIn(caption)?.unit;
+  if (unit === 'meq/100g' || unit === '%' || /saturation/i.test(caption))
+    return label.unit === null && CHARGED.has(label.analyte);
+  if (unit !== undefined) return label.unit === null && analyte(label.analyte).unit === 'mg/kg';
+  return label.method === null && methodIn(label.analyte, caption) !== null;
+}
+
+/** A caption is centred over its group: the widest run of columns that can take it and has it in the middle. */
+function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
+  let [low, high] = [caption.first, caption.last];
+  while (takesCaption(stacks[low - 1], caption.text)) low -= 1;
+  while (takesCaption(stacks[high + 1], caption.text)) high += 1;
+  let best = { first: caption.first, last: caption.last };
+  for (let first = low; first <= caption.first; first++) {
+    for (let last = caption.last; last <= high; last++) {
+      const [left, right] = [stacks[first], stacks[last]];
+      if (left === undefined || right === undefined || last - first <= best.last - best.first) continue;
+      const pitch = (right.x1 - left.x0) / (last - first + 1);
+      if (Math.abs((left.x0 + right.x1) / 2 - caption.middle) < 0.55 * pitch) best = { first, last };
+    }
+  }
+  for (const stack of stacks.slice(best.first, best.last + 1)) stack.captions.push(caption.text);
+}
+
 const ADVICE_UNITS = new Set([
   'lb/1000ft2',
   'lb/100ft2',
@@ -114,8 +155,10 @@ function meaningOf(stack: Stack, first: boolean): Column {
   const heading = stack.own.join(' ');
   const span = { x0: stack.x0, x1: stack.x1, heading };
   let label: Label | null = null;
+  let unexplained = 0;
   for (let drop = 0; drop < Math.max(stack.own.length, 1) && label === null; drop++) {
     label = readLabel(stack.own.slice(drop).join(' '), [...stack.own.slice(0, drop), ...stack.captions]);
+    unexplained = drop;
   }
   const fields = stack.own.map((_, drop) => fieldOf(stack.own.slice(drop).join(' ')));
   const field = fields.find((found) => found !== null) ?? null;
@@ -131,28 +174,31 @@ function meaningOf(stack: Stack, first: boolean): Column {
         ? 'previous'
         : null;
   }
-  return { ...span, label, field: label === null ? field : null, role, position: stack.over ? 1 : 0.96 };
+  return { ...span, label, field: label === null ? field : null, role, position: stack.over ? 1 : 0.96, unexplained };
 }
 
 /** Stage 5. Columns with the meaning of their stacked headings; captions that stretch over several are given to each. */
 export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]): Column[] {
   const spans = spansOf(rows);
   const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], over: false }));
+  const captions: Caption[] = [];
   for (const line of header) {
     const phrases = line.cells.flatMap((cell: PageCell) => partHeading(cell.phrase, spans));
-    for (const phrase of phrases) place(phrase, phrases, stacks);
+    for (const phrase of phrases) place(phrase, phrases, stacks, captions);
   }
+  for (const caption of captions) spreadCaption(caption, stacks);
   return stacks.map((stack, index) => meaningOf(stack, index === 0));
 }
 
-/** How much a reading of the header explains; more lines must earn their place. */
-export function headerScore(columns: readonly Column[], lines: number): number {
-  let score = -0.05 * lines;
+/** How much a reading of the header explains; heading lines that explain nothing count against it. */
+export function headerScore(columns: readonly Column[]): number {
+  let score = 0;
   for (const column of columns) {
-    if (column.label !== null)
+    if (column.label !== null) {
       score +=
         column.label.strength + (column.label.unit === null ? 0 : 0.2) + (column.label.method === null ? 0 : 0.1);
-    else if (column.field !== null) score += 0.3;
+      score -= 0.05 * column.unexplained;
+    } else if (column.field !== null) score += 0.3;
   }
   return score;
 }

@@ -107,6 +107,7 @@ function segmentValues(cells: readonly PageCell[], header: RoleHeader | null): {
       }
       if (found.length === 0) methodText += ` ${cell.phrase.text}`;
     } else if (cell.meaning.kind === 'rating' && last !== undefined) last.rating ??= cell.meaning.rating;
+    else if (header === null && found.length > 0 && cell.meaning.kind === 'text') break;
     else if (cell.meaning.kind === 'text') methodText += ` ${cell.phrase.text}`;
   }
   return { found, methodText };

@@ -2,6 +2,7 @@ import { type Candidate, type Identity, remark, type SamplePart } from '../candi
 import { readLabel } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { type Column, columnsOf, headerScore, spansOf } from './columns';
+import { fieldWithValue } from './identity';
 import { NOT_A_SAMPLE } from './roles';
 import { storedBox } from './words';
 
@@ -33,6 +34,7 @@ function headerAbove(lines: readonly CellLine[], at: number, taken: ReadonlySet<
     if (line === undefined || under === undefined || taken.has(line) || !samePage(line, under) || line.values >= 2)
       break;
     if (line.values === 1 && labelsIn(line) > 0) break;
+    if (line.cells.some((cell) => fieldWithValue(cell.phrase.text) !== null)) break;
     const gap = under.line.y0 - line.line.y1;
     if (gap > (header.length === 0 ? 4 : 2.2) * line.line.size) break;
     header.unshift(line);
@@ -50,7 +52,7 @@ function rowsFrom(lines: readonly CellLine[], at: number): CellLine[] {
       if (!samePage(line, last)) break;
       if (line.line.y0 - last.line.y1 > 5 * last.line.size) break;
       const headings = labelsIn(line);
-      if (headings >= 3 && line.values <= 1) break;
+      if (headings >= 3 && line.values <= 1 && !isRatingRow(line)) break;
     }
     rows.push(line);
     last = line;
@@ -95,8 +97,8 @@ export function tablesOf(lines: readonly CellLine[]): Table[] {
     for (let count = 1; count <= above.length; count++) {
       const header = above.slice(above.length - count);
       const columns = columnsOf(header, data);
-      const score = headerScore(columns, count);
-      if (trustworthy(columns) && score > (best?.score ?? 0)) best = { header, columns, score };
+      const score = headerScore(columns);
+      if (trustworthy(columns) && score >= (best?.score ?? 0.01)) best = { header, columns, score };
     }
     const borrowed = best === null ? borrow(tables[tables.length - 1], data, line, lines, at) : null;
     const columns = best?.columns ?? borrowed;

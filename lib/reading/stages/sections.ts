@@ -41,7 +41,9 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
     });
     const alone = line.cells.length === 1;
     for (const [index, { zone, cell }] of found.entries()) {
-      if (!alone && found.length < 2 && zone !== 'recommendation') continue;
+      // A line of column headings ("Test, Method, Result") is no section heading.
+      if (!alone && found.length < line.cells.length && !(zone === 'recommendation' && line.cells.length === 2))
+        continue;
       const width = cell.phrase.page.width;
       const next = found[index + 1];
       const sided = found.length > 1 || cell.phrase.x0 > 0.52 * width;
@@ -131,7 +133,7 @@ export function statementsOf(texts: readonly string[]): Statements {
         ),
       );
       if (named.length === 0 && extractant !== undefined && /extract|method/i.test(clause)) {
-        for (const key of extractant.analytes) everyone.add(key);
+        for (const key of [...extractant.analytes, 'phosphorus' as const]) everyone.add(key);
         for (const key of everyone) {
           const method = methodIn(key, clause);
           if (method !== null && !methods.has(key)) methods.set(key, { method, printed: method.printed });
