@@ -140,6 +140,9 @@ describe('with untreated plots', () => {
       f: 'other-laboratory',
       g: 'not-sampled-the-same-days',
     });
+    expect(outcome.sentences).toContain(
+      'Not usable as untreated plots: g (not sampled on the same days); f (sent to another laboratory); e (treated or disturbed in between).',
+    );
   });
 
   it('needs no season or laboratory term when the controls went the same way', () => {

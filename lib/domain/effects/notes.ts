@@ -25,11 +25,11 @@ export type NoteFacts = {
 const EXPLAINED = 0.1;
 
 const WHY_UNUSED: Readonly<Record<NonNullable<ControlUse['why']>, string>> = {
-  'not-sampled-the-same-days': 'was not sampled on the same days',
-  'other-laboratory': 'went to another laboratory',
-  'not-comparable': 'was tested by another method or to another depth',
-  'something-happened': 'had something done to it in between',
-  'below-limit': 'reads below what the laboratory can tell',
+  'not-sampled-the-same-days': 'not sampled on the same days',
+  'other-laboratory': 'sent to another laboratory',
+  'not-comparable': 'tested by another method or to another depth',
+  'something-happened': 'treated or disturbed in between',
+  'below-limit': 'below what the laboratory can tell',
 };
 
 function missed({ reading, intended }: NoteFacts): string[] {
@@ -79,10 +79,11 @@ function controls({ controls: uses, reading, withoutControls }: NoteFacts): stri
   const used = uses.filter((use) => use.used).map((use) => use.name);
   if (used.length > 0)
     notes.push(`Compared with the untreated ${used.length === 1 ? 'plot' : 'plots'} ${listInWords(used)}.`);
-  for (const use of uses) {
-    if (!use.used && use.why)
-      notes.push(`${use.name} could not serve as an untreated plot: it ${WHY_UNUSED[use.why]}.`);
-  }
+  const unused = Object.entries(WHY_UNUSED).flatMap(([why, words]) => {
+    const names = uses.filter((use) => use.why === why).map((use) => use.name);
+    return names.length > 0 ? [`${listInWords(names)} (${words})`] : [];
+  });
+  if (unused.length > 0) notes.push(`Not usable as untreated plots: ${unused.join('; ')}.`);
   if (withoutControls && reading.s > withoutControls.s) {
     notes.push(
       `So few untreated plots make the interval wider, but they guard against shifts nobody knows of. Without them: ${withoutControls.sentence}`,

@@ -3,8 +3,8 @@ import type { Material } from './types';
 
 export { citation } from '../sources';
 export { MATERIALS } from './catalogue';
-export { type Suggestion, type SuggestRefusal, suggestIntendedChange, type Texture } from './suggest';
-export type { AnalysisKey, Caution, Figure, Material } from './types';
+export { suggestIntendedChange, type Texture } from './suggest';
+export type { Material } from './types';
 
 const BY_KEY: ReadonlyMap<string, Material> = new Map(MATERIALS.map((entry) => [entry.key, entry]));
 
