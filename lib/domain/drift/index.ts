@@ -9,7 +9,7 @@ import { crossing, joinByPrecision, type Line, weightedLine } from './line';
 import { readingRange } from './range';
 import { type SenSlope, theilSen } from './theil-sen';
 
-export type { BreakReason, DriftBreak } from './breaks';
+export type { DriftBreak } from './breaks';
 export { readingRange } from './range';
 export type { SenSlope } from './theil-sen';
 
