@@ -12,8 +12,9 @@ interface DriftTableProps {
 /** The chart as numbers: the reading for a screen reader, for print and for whoever prefers a table. */
 export function DriftTable({ title, rows, analyte, locale }: DriftTableProps) {
   return (
+    // biome-ignore lint/a11y/useSemanticElements: several charts may share a title, so this is a group and no landmark
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a box that scrolls sideways must be reachable by keyboard
-    <section className="overflow-x-auto" aria-label={`Numbers of ${title}`} tabIndex={0}>
+    <div role="group" className="overflow-x-auto" aria-label={`Numbers of ${title}`} tabIndex={0}>
       <table className="w-full border-collapse text-sm">
         <caption className="sr-only">{title}</caption>
         <thead>
@@ -45,7 +46,7 @@ export function DriftTable({ title, rows, analyte, locale }: DriftTableProps) {
           ))}
         </tbody>
       </table>
-    </section>
+    </div>
   );
 }
 
