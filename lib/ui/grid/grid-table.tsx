@@ -35,7 +35,8 @@ export function GridTable(props: GridBodyProps) {
     [rows, columns, edits.overlay, header, readOnly],
   );
   const ownFocus = useRef(false);
-  const keys = useGridKeys({ ...props, views, element, ownFocus });
+  const pointing = useRef(false);
+  const keys = useGridKeys({ ...props, views, element, ownFocus, pointing });
   const { editing } = keys;
 
   const { focusTurn, active } = cursor;
@@ -45,8 +46,11 @@ export function GridTable(props: GridBodyProps) {
     if (focusTurn === 0) return;
     // The cursor is already there; while a selection is pulled it may even be further by now.
     ownFocus.current = true;
-    element.current?.querySelector<HTMLElement>(`[data-cell="${activeKey.current}"]`)?.focus();
+    element.current
+      ?.querySelector<HTMLElement>(`[data-cell="${activeKey.current}"]`)
+      ?.focus({ preventScroll: pointing.current });
     ownFocus.current = false;
+    pointing.current = false;
   }, [focusTurn]);
 
   const { keepMine, takeTheirs } = edits;

@@ -4,6 +4,8 @@ import { ArrowDownToLine, Eye, Plus, Redo2, Trash2, Undo2 } from 'lucide-react';
 import { Button } from '../actions/button';
 
 export interface GridToolbarProps {
+  /** On a narrow screen undo and redo show their sign alone, so that the bar keeps to one line. */
+  readonly compact: boolean;
   readonly doubtful: number;
   readonly counts: {
     readonly saving: number;
@@ -46,21 +48,23 @@ export function GridToolbar(props: GridToolbarProps) {
             look="quiet"
             size="small"
             icon={<Undo2 aria-hidden="true" className="size-4" />}
+            className={props.compact ? 'gap-0!' : ''}
             onClick={props.onUndo}
             unavailable={!props.canUndo && 'nothing to undo'}
             aria-keyshortcuts="Control+Z"
           >
-            Undo
+            <span className={props.compact ? 'sr-only' : ''}>Undo</span>
           </Button>
           <Button
             look="quiet"
             size="small"
             icon={<Redo2 aria-hidden="true" className="size-4" />}
+            className={props.compact ? 'gap-0!' : ''}
             onClick={props.onRedo}
             unavailable={!props.canRedo && 'nothing to redo'}
             aria-keyshortcuts="Control+Y"
           >
-            Redo
+            <span className={props.compact ? 'sr-only' : ''}>Redo</span>
           </Button>
           {props.onFillDown ? (
             <Button
@@ -73,7 +77,7 @@ export function GridToolbar(props: GridToolbarProps) {
               Fill down
             </Button>
           ) : null}
-          {props.onAddRow ? (
+          {props.onAddRow && !props.compact ? (
             <Button
               look="quiet"
               size="small"

@@ -1,5 +1,6 @@
 'use client';
 
+import { Plus } from 'lucide-react';
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '../actions/button';
 import type { GridBodyProps } from './body-props';
@@ -103,6 +104,7 @@ export function Grid(props: GridProps) {
     <div className="grid min-w-0 gap-2" data-testid="grid">
       <div className="sticky top-0 z-20 -mx-1 grid gap-1 border-b-2 border-gley bg-chalk px-1 py-2">
         <GridToolbar
+          compact={narrow}
           doubtful={doubtful}
           counts={counts}
           canUndo={edits.canUndo}
@@ -128,6 +130,11 @@ export function Grid(props: GridProps) {
       ) : (
         <GridTable {...body} />
       )}
+      {narrow && props.onAddRow && !readOnly ? (
+        <Button look="quiet" wide icon={<Plus aria-hidden="true" className="size-4" />} onClick={props.onAddRow}>
+          Add row
+        </Button>
+      ) : null}
       <p role="status" aria-live="polite" className="sr-only" data-testid="grid-said">
         {said.text}
         {said.turn % 2 === 0 ? '' : '\u00a0'}

@@ -33,6 +33,8 @@ type Input = GridBodyProps & {
   readonly element: RefObject<HTMLTableElement | null>;
   /** True while the grid itself puts the focus on the active cell. */
   readonly ownFocus: RefObject<boolean>;
+  /** True while a pointer chooses the cell: it is in sight, and the page must not move under a second click. */
+  readonly pointing: RefObject<boolean>;
 };
 
 const LOCKED = 'This cell is locked.';
@@ -171,13 +173,16 @@ export function useGridKeys(input: Input) {
     if (!point || isField(event.target) || event.button !== 0) return;
     const { active, moveTo } = latest.current.cursor;
     pressedOnActive.current = active.row === point.row && active.column === point.column;
+    latest.current.pointing.current = true;
     moveTo(point, event.shiftKey);
   };
   const onMouseOver = (event: MouseEvent<HTMLTableElement>) => {
     const point = pointOfEvent(event.target);
     if (event.buttons !== 1 || !point || editingRef.current) return;
     const { active, moveTo } = latest.current.cursor;
-    if (active.row !== point.row || active.column !== point.column) moveTo(point, true);
+    if (active.row === point.row && active.column === point.column) return;
+    latest.current.pointing.current = true;
+    moveTo(point, true);
   };
   const onClick = (event: MouseEvent<HTMLTableElement>) => {
     const touched = 'pointerType' in event.nativeEvent && event.nativeEvent.pointerType === 'touch';

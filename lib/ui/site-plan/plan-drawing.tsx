@@ -194,7 +194,11 @@ function Pencil({
       {corners.map((corner) => (
         <circle key={`${corner.x} ${corner.y}`} cx={corner.x} cy={corner.y} r={4} className="fill-gley" />
       ))}
-      <text x={at.x} y={at.y - 8} className="fill-gley-deep font-figures text-sm font-semibold">
+      <text
+        x={Math.max(4, Math.min(at.x, size.width - 290))}
+        y={Math.max(16, at.y - 8)}
+        className="fill-gley-deep font-figures text-sm font-semibold"
+      >
         {closed ? `${wide} × ${long} = ` : ''}
         {areaText(areaOf(outline), unit)}
       </text>

@@ -98,7 +98,7 @@ function PlotLabel({ plot, outline, view, size, unit, dropTarget }: PlotShapePro
   if (name === '' || height < 14) return null;
   const upload = plot.uploads?.[0];
   const lines = dropTarget
-    ? ['Let go to send the file']
+    ? ['Let go here']
     : [plotArea(plot, outline, unit), ...testLines(plot, width), plot.crop ?? '', upload?.text ?? ''];
   const room = Math.max(0, Math.floor((height - 18) / LINE));
   const shown = lines

@@ -184,7 +184,7 @@ describe('files', () => {
     const onDropFiles = vi.fn();
     render(<Held onDropFiles={onDropFiles} />);
     fireEvent.dragOver(shape(/North/), carried());
-    expect(screen.getByText('Let go to send the file')).toBeTruthy();
+    expect(screen.getByText('Let go here')).toBeTruthy();
     fireEvent.drop(shape(/North/), carried());
     expect(onDropFiles.mock.calls[0]?.[0]).toBe('north');
     expect(onDropFiles.mock.calls[0]?.[1][0].name).toBe('spring.pdf');

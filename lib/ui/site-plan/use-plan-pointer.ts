@@ -77,9 +77,7 @@ export function usePlanPointer(input: Input) {
     }
     if (!moved.current) return;
     const at = metresAt(event, now.kind === 'pan' ? now.view : view);
-    if (now.kind === 'move') {
-      drafts.preview(now.plot, moveBy(now.outline, { x: at.x - now.start.x, y: at.y - now.start.y }));
-    } else if (now.kind === 'corner') drafts.preview(now.plot, dragCorner(now.outline, now.corner, at));
+    if (now.kind === 'move' || now.kind === 'corner') drafts.preview(now.plot, draggedTo(now, at));
     else if (now.kind === 'draw') setDrawn(drawnBetween(now.start, at));
     else input.onPan({ ...now.view, x: now.view.x - (at.x - now.start.x), y: now.view.y - (at.y - now.start.y) });
   };
@@ -93,7 +91,10 @@ export function usePlanPointer(input: Input) {
       if (outline) input.onDrawn(outline);
     } else if (now.kind === 'pan') {
       if (!moved.current) input.onSelect(null);
-    } else if (moved.current) drafts.commit(now.plot);
+    } else if (moved.current) {
+      // From the event itself: the last preview may not have been drawn yet.
+      drafts.commit(now.plot, draggedTo(now, metresAt(event)));
+    }
   };
   const onCancel = () => {
     const now = drag.current;
@@ -108,6 +109,11 @@ export function usePlanPointer(input: Input) {
   };
 
   return { drawn, corners, clearFree, closeFree, onBodyDown, onCornerDown, onGroundDown, onMove, onUp, onCancel };
+}
+
+function draggedTo(drag: Extract<Drag, { kind: 'move' | 'corner' }>, at: PlanPoint): PlanOutline {
+  if (drag.kind === 'corner') return dragCorner(drag.outline, drag.corner, at);
+  return moveBy(drag.outline, { x: at.x - drag.start.x, y: at.y - drag.start.y });
 }
 
 function drawnBetween(a: PlanPoint, b: PlanPoint): PlanOutline {
