@@ -105,7 +105,7 @@ function soilPages(
   let before: string | null = null;
   for (const page of pages) {
     const own = lines.filter((line) => line.line.page === page);
-    const titled = own.some((line) => /\bsoil (test|analysis|report)|soil fertility\b/i.test(line.line.text));
+    const titled = own.some((line) => SOIL_WORDS.test(line.line.text));
     before = notSoil(own) ?? (titled ? null : before);
     if (before === null) soil.add(page.number);
     else other ??= before;

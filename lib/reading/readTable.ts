@@ -7,7 +7,7 @@ import { listShape, longShape, matrixShape, type Shape, titleIdentity } from './
 import { NO_RESULTS } from './readPages';
 import { withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
-import { statementsOf } from './stages/sections';
+import { SOIL_WORDS, statementsOf } from './stages/sections';
 import { numberStyle } from './stages/values';
 import { type Reading, type Remark, refusedReading } from './types';
 
@@ -67,7 +67,7 @@ export function readTable(input: { fileName: string; bytes?: Uint8Array; text?: 
   const titles = grid.slice(0, Math.min(found?.titleRows ?? 5, 20)).map((row) => row.join(' '));
   const lab = { name: laboratory(grid, found?.titleRows ?? 5) };
   const other = OTHER_MATERIAL.find(([, pattern]) => pattern.test(titles.join(' ')))?.[0];
-  if (other !== undefined && !/\bsoil\b/i.test(titles.join(' '))) {
+  if (other !== undefined && !SOIL_WORDS.test(titles.join(' '))) {
     const warning = remark('not-soil', `This looks like ${other}, not a soil test; nothing of it was taken.`);
     return {
       file,

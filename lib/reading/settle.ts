@@ -61,6 +61,13 @@ function settleUnit(
       doubts: [remark('reads-like-recommendation', 'The unit is one of advice; this may be a recommendation.')],
     };
   }
+  if (unit === '%' && entry.unit === 'mg/kg') {
+    const doubt = remark(
+      'unit-unusual',
+      'Per cent is unusual for this in soil; the number may be of plants or fertiliser.',
+    );
+    return { unit, printed: unitPrinted, doubts: [doubt] };
+  }
   if (unit !== null) return { unit, printed: unitPrinted, doubts: [] };
   if (statements.unit !== null && entry.unit === 'mg/kg') {
     return { unit: statements.unit.unit, printed: statements.unit.printed, doubts: [] };

@@ -29,3 +29,4 @@ process.once('message', (message: ToChild) => {
     () => process.exit(1),
   );
 });
+send({ type: 'ready' });

@@ -3,12 +3,14 @@ import type { Reading } from '@/lib/reading/types';
 export type ToChild = { readonly kind: 'pdf' | 'csv'; readonly fileName: string; readonly bytes: Uint8Array };
 
 export type FromChild =
+  | { readonly type: 'ready' }
   | { readonly type: 'page'; readonly page: number; readonly of: number }
   | { readonly type: 'done'; readonly reading: Reading };
 
 /** The child is our own program; the check guards against a half-written message of a dying process. */
 export function isFromChild(message: unknown): message is FromChild {
   if (typeof message !== 'object' || message === null || !('type' in message)) return false;
+  if (message.type === 'ready') return true;
   if (message.type === 'page') return 'page' in message && 'of' in message;
   return (
     message.type === 'done' && 'reading' in message && typeof message.reading === 'object' && message.reading !== null

@@ -5,7 +5,7 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 import { type Reading, refusedReading } from '@/lib/reading/types';
 import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
 import { maxBytesOf, sniffReport } from '@/lib/services/reading/sniff';
-import { HEAP_LIMIT_MB, MEMORY_CHECK_MS, MEMORY_LIMIT_BYTES, TIME_LIMIT_MS } from './limits';
+import { HEAP_LIMIT_MB, MEMORY_CHECK_MS, MEMORY_LIMIT_BYTES, START_LIMIT_MS, TIME_LIMIT_MS } from './limits';
 import { isFromChild, type ToChild } from './messages';
 
 /** In development the child is the TypeScript file beside this one; in a bundle it is bundled beside the worker. */
@@ -60,14 +60,18 @@ function run(input: RunInput): Promise<Reading> {
       child.kill('SIGKILL');
     };
     const onAbort = () => child.kill('SIGKILL');
-    const clock = setTimeout(() => kill('too-slow'), input.timeLimitMs);
+    let clock = setTimeout(() => kill('too-slow'), START_LIMIT_MS);
     const watch = setInterval(() => {
       if (child.pid !== undefined && residentBytes(child.pid) > input.memoryLimitBytes) kill('too-much-memory');
     }, MEMORY_CHECK_MS);
     input.signal?.addEventListener('abort', onAbort, { once: true });
     child.on('message', (message: unknown) => {
       if (!isFromChild(message)) return;
-      if (message.type === 'page') input.onPage?.(message.page, message.of);
+      if (message.type === 'ready') {
+        clearTimeout(clock);
+        clock = setTimeout(() => kill('too-slow'), input.timeLimitMs);
+        child.send(input.message);
+      } else if (message.type === 'page') input.onPage?.(message.page, message.of);
       else reading = message.reading;
     });
     child.on('error', () => undefined);
@@ -80,7 +84,6 @@ function run(input: RunInput): Promise<Reading> {
       else resolve(refuse(killedFor ?? (signal === 'SIGABRT' ? 'too-much-memory' : 'crashed')));
     });
     if (input.signal?.aborted) onAbort();
-    else child.send(input.message);
   });
 }
 

@@ -155,6 +155,10 @@ const NOT_SOIL: readonly (readonly [string, RegExp])[] = [
   ['a potting mix test', /\b(potting (mix|media)|greenhouse media|soilless (media|mix)) (analysis|test|report)\b/i],
 ];
 
+/** Words of a soil report; "Soil Testing Service" is a laboratory's name and says nothing. */
+export const SOIL_WORDS =
+  /\bsoil (test|analysis|analyses|report|sample|fertility)s?\b(?! (laborator|lab|service|cent))/i;
+
 /** What a page is when it is not about soil, from its larger type and its "sample type"; null for soil. */
 export function notSoil(lines: readonly CellLine[]): string | null {
   const cells = lines.flatMap((line) => line.cells);
@@ -164,7 +168,7 @@ export function notSoil(lines: readonly CellLine[]): string | null {
     (cell) => cell.phrase.size > 1.15 * usual || /^(sample|matrix|material) ?(type)?:/i.test(cell.phrase.text),
   );
   const text = titles.map((cell) => cell.phrase.text).join(' | ');
-  if (/\bsoil (test|analysis|report|sample)|soil fertility\b/i.test(text)) return null;
+  if (SOIL_WORDS.test(text)) return null;
   return NOT_SOIL.find(([, pattern]) => pattern.test(text))?.[0] ?? null;
 }
 

@@ -1,0 +1,33 @@
+import { describe, expect, it } from 'vitest';
+import { sniffReport } from './sniff';
+
+const bytes = (text: string) => new TextEncoder().encode(text);
+const hex = (text: string) => Uint8Array.from(Buffer.from(text, 'hex'));
+
+describe('sniffReport', () => {
+  it.each([
+    ['a.pdf', bytes('%PDF-1.4\n'), 'pdf', true],
+    ['A.PDF', bytes('\n\n%PDF-1.4\n'), 'pdf', true],
+    ['a.csv', bytes('pH,P\n6.5,20\n'), 'csv', true],
+    ['a.tsv', hex('fffe70004800'), 'csv', true],
+    ['a.jpg', hex('ffd8ffe000104a464946'), 'jpeg', false],
+    ['a.png', hex('89504e470d0a1a0a'), 'png', false],
+    ['a.xls', hex('d0cf11e0a1b11ae1'), 'xls', false],
+    ['a.xlsx', Uint8Array.from([...hex('504b0304'), ...bytes('[Content_Types].xml')]), 'xlsx', false],
+  ])('%s', (fileName, content, kind, readable) => {
+    expect(sniffReport({ bytes: content, fileName })).toMatchObject({ ok: true, kind, readable });
+  });
+  it.each([
+    ['a.pdf', bytes('<html></html>'), 'not-a-pdf'],
+    ['a.csv', bytes('%PDF-1.4'), 'not-what-it-says'],
+    ['a.csv', bytes('  <!DOCTYPE html>'), 'not-what-it-says'],
+    ['a.png', hex('ffd8ffe0'), 'not-what-it-says'],
+    ['a.xlsx', hex('504b0304aaaa'), 'not-what-it-says'],
+    ['a.csv', hex('0102030405060708'), 'not-what-it-says'],
+    ['a.svg', bytes('<svg/>'), 'type-not-accepted'],
+    ['a', bytes('pH,P'), 'type-not-accepted'],
+    ['a.pdf', new Uint8Array(), 'empty'],
+  ])('%s is refused', (fileName, content, code) => {
+    expect(sniffReport({ bytes: content, fileName })).toMatchObject({ ok: false, code });
+  });
+});
