@@ -11,6 +11,7 @@ import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommen
 import {
   laboratoryName,
   notSoil,
+  SOIL_WORDS,
   type Statements,
   statementsOf,
   type ZoneBox,
