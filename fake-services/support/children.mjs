@@ -41,15 +41,25 @@ function tail(file, lines) {
 }
 
 /**
- * The processes a script has started. Each child leads a group of its own, writes into logs/<name>.log and, when
- * `show`, to the terminal as well. `inherit` leaves the
- * terminal to it. `onChange` hears the living children (for the pid file), `onExit` the unexpected end of one.
+ * @typedef {{ name: string, code: number | string | null, signal: string | null, lastLines: string }} UnexpectedEnd
+ * @typedef {{ name: string, child: import('node:child_process').ChildProcess, stopSignal: string, logFile: string,
+ *   exited: boolean, expected: boolean, ended: Promise<{ code: number | string | null, signal: string | null }> }} Started
  */
-export function createChildren({ logs, onChange = () => {}, onExit = () => {} }) {
+
+/**
+ * The processes a script has started. Each child leads a group of its own, writes into logs/<name>.log and, when
+ * `show`, to the terminal as well; `inherit` leaves the terminal to it. `onChange` hears the living children (for the pid
+ * file), `onExit` the unexpected end of one.
+ */
+export function createChildren(
+  /** @type {{ logs: string, onChange?: (living: { name: string, pid: number }[]) => void, onExit?: (end: UnexpectedEnd) => void }} */
+  { logs, onChange = () => {}, onExit = () => {} },
+) {
   const running = [];
   let stopping = false;
   mkdirSync(logs, { recursive: true });
 
+  /** @returns {Started} */
   function start(
     name,
     command,
@@ -66,7 +76,7 @@ export function createChildren({ logs, onChange = () => {}, onExit = () => {} })
         readline.createInterface({ input: stream }).on('line', (line) => console.log(`${name.padEnd(8)}| ${line}`));
       }
     }
-    const entry = { name, child, stopSignal, logFile, exited: false };
+    const entry = { name, child, stopSignal, logFile, exited: false, expected: false, ended: undefined };
     entry.ended = new Promise((resolve) => {
       const end = (code, signal) => {
         if (entry.exited) return;

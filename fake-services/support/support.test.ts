@@ -6,7 +6,7 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { treeHash } from './build.mjs';
-import { createChildren } from './children.mjs';
+import { createChildren, type UnexpectedEnd } from './children.mjs';
 import { countsOfReport } from './counts.mjs';
 import { dependenciesAreInstalled } from './dependencies.mjs';
 import { openPidFile, startTimeOf } from './pidFile.mjs';
@@ -54,7 +54,7 @@ describe('the children of a script', () => {
   });
 
   it('are missed when they end by themselves, with their last words', async () => {
-    const missed = await new Promise<{ name: string; code: number; lastLines: string }>((resolve) => {
+    const missed = await new Promise<UnexpectedEnd>((resolve) => {
       const children = createChildren({ logs: path.join(folder, 'logs'), onExit: resolve });
       children.start('web', 'sh', ['-c', 'echo out of soil; exit 3']);
     });
@@ -62,7 +62,7 @@ describe('the children of a script', () => {
   });
 
   it('are missed when their program does not exist', async () => {
-    const missed = await new Promise<{ name: string; code: string }>((resolve) => {
+    const missed = await new Promise<UnexpectedEnd>((resolve) => {
       const children = createChildren({ logs: path.join(folder, 'logs'), onExit: resolve });
       children.start('web', '/no/such/program', []);
     });
