@@ -44,9 +44,10 @@ export function CellNotes({ view, id, toTheRight = false }: { view: CellView; id
         </p>
       ) : null}
       {state.kind === 'saving' ? (
-        <p className={`${LINE} text-clay`}>
+        // Takes no room of its own: rows must not jump under the pointer while a value is saved.
+        <p className={`absolute top-1 ${toTheRight ? 'left-1' : 'right-1'} text-clay`}>
           <BusyMark />
-          <span>saving</span>
+          <span className="sr-only">saving</span>
         </p>
       ) : null}
       {doubts.map((doubt) => (

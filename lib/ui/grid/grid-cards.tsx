@@ -92,7 +92,7 @@ function CardField({ view, version, at, onFocus, edits, onAcceptDoubt }: FieldPr
   const cell = { rowId: view.rowId, columnId: view.column.id };
   const write = (value: string, seen?: { before: string; version: number | null }) =>
     edits.write('edit', [{ ...cell, value, ...(seen ? { seen } : {}) }]);
-  const wide = noted || view.column.rowHeader;
+  const wide = (noted && view.state.kind !== 'saving') || view.column.rowHeader;
   const shared = {
     id,
     'data-cell': at,
@@ -104,7 +104,7 @@ function CardField({ view, version, at, onFocus, edits, onAcceptDoubt }: FieldPr
   };
   const actions: ConflictActions = edits;
   return (
-    <div className={wide ? 'col-span-2' : ''}>
+    <div className={wide ? 'relative col-span-2' : 'relative'}>
       <label htmlFor={id} className="text-xs font-semibold text-clay">
         {view.column.header}
       </label>

@@ -99,7 +99,8 @@ export function GridToolbar(props: GridToolbarProps) {
           ) : null}
         </>
       )}
-      <p className="ml-auto text-sm text-clay" data-testid="grid-saved">
+      {/* A line of its own: the rows under it must not move when the sentence or a button grows. */}
+      <p className="min-h-9 basis-full content-center text-sm text-clay" data-testid="grid-saved">
         {stateSentence(counts)}
         {counts.failed > 0 ? (
           <Button look="plain" size="small" onClick={props.onRetry}>
