@@ -1,10 +1,5 @@
-/** Runs once before the first request: a process with missing or weak settings does not start. */
+/** Runs before the first request: a process with missing or weak settings throws here and does not start. */
 export async function register(): Promise<void> {
   const { env } = await import('@/lib/env');
-  try {
-    env();
-  } catch (error) {
-    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
-    process.exit(1);
-  }
+  env();
 }
