@@ -36,7 +36,7 @@ export const uploadFields = z.strictObject({
 /** What the route hands to the verb: the bytes come from the request, never from a client's JSON. */
 export const uploadInput = z.strictObject({
   fileName: z.string(),
-  bytes: z.instanceof(Uint8Array),
+  bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
   plotId: idSchema.optional(),
   asRevision: z.enum(['true', 'false']).optional(),
 });
