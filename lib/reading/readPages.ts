@@ -1,5 +1,6 @@
 import { assemble } from './assemble';
-import { type Candidate, remark, type SamplePart } from './candidate';
+import { type Candidate, type Identity, remark, type SamplePart } from './candidate';
+import { samplesAcross } from './stages/across';
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
@@ -65,6 +66,15 @@ function split(lines: readonly CellLine[], zones: readonly ZoneBox[]): { results
   return { results, advice };
 }
 
+function isContext(from: Context | Identity): from is Context {
+  return 'identity' in from;
+}
+
+function identityFrom(from: Context | Identity | null, shared: Identity): Identity {
+  if (from === null) return {};
+  return isContext(from) ? from.identity : withShared(from, shared);
+}
+
 function partsOf(tables: readonly TableRow[], list: readonly ListRow[], contexts: readonly Context[]): SamplePart[] {
   const shared = contexts[0]?.identity ?? {};
   const placed: { page: number; y: number; part: SamplePart }[] = tables.map((row) => {
@@ -78,10 +88,10 @@ function partsOf(tables: readonly TableRow[], list: readonly ListRow[], contexts
       : { ...row.identity, ...contextAt(contexts, page, y)?.identity };
     return { page, y, part: { identity, candidates: row.candidates } };
   });
-  const byContext = new Map<Context | null, { page: number; y: number; candidates: Candidate[] }>();
+  const byContext = new Map<Context | Identity | null, { page: number; y: number; candidates: Candidate[] }>();
   for (const row of list) {
     const [page, y] = [row.line.line.page.number, row.line.line.y0];
-    const context = contextAt(contexts, page, y);
+    const context = row.identity ?? contextAt(contexts, page, y, row.x0);
     const group = byContext.get(context) ?? { page, y, candidates: [] };
     group.candidates.push(row.candidate);
     byContext.set(context, group);
@@ -90,7 +100,7 @@ function partsOf(tables: readonly TableRow[], list: readonly ListRow[], contexts
     placed.push({
       page: group.page,
       y: group.y,
-      part: { identity: context?.identity ?? {}, candidates: group.candidates },
+      part: { identity: identityFrom(context, shared), candidates: group.candidates },
     });
   }
   return placed.sort((a, b) => a.page - b.page || a.y - b.y).map((one) => one.part);
@@ -162,7 +172,9 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const tables = tablesOf(results);
   const taken = new Set(tables.flatMap((table) => [...table.header, ...table.rows]));
   const tableRows = tables.flatMap((table) => rowsOfTable(table));
-  const list = listRows(results, taken);
+  const across = samplesAcross(results.filter((line) => !taken.has(line)));
+  const list = listRows(results, taken, across);
+  for (const line of across.flatMap((one) => one.lines)) taken.add(line);
   const hits = identityHits(ofSoil, taken);
   const contexts = contextsOf(hits);
   const statements = statementsOf(texts);
@@ -184,7 +196,10 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const sampleAt = (line: CellLine) =>
     contextAt(contexts, line.line.page.number, line.line.y0)?.identity.sampleId ?? null;
   const names = samples.flatMap((sample) => sample.sampleId ?? []);
-  const recommendations = withSampleNames([...adviceOfTable(tableRows), ...adviceOfLines(advice, sampleAt)], names);
+  const recommendations = withSampleNames(
+    [...adviceOfTable(tableRows), ...adviceOfLines(advice, zones, sampleAt)],
+    names,
+  );
   return {
     reading: {
       file,

@@ -55,7 +55,12 @@ const ROWS = [
     'meq/100g me/100g mEq/100g MEQ/100G meq/100gm meq% cmol(+)/kg cmol+/kg cmolc/kg cmol/kg meq/lOOg|meq/100 g|me/100 g|mEq/100 g|cmol(+) kg-1|meq per 100 g|meq',
   ],
   ['mmolc/kg', 'mmolc/kg', 'charge', 'mmol(+)/kg mmolc/kg'],
-  ['meq/100cm3', 'meq/100 cm³', 'charge', 'meq/100cm3|meq/100 cm³|meq/100 cm3'],
+  [
+    'meq/100cm3',
+    'meq/100 cm³',
+    'charge',
+    'meq/100cm3 cmolc/dm3 cmol/dm3 cmol(+)/dm3 cmolc/dm³|meq/100 cm³|meq/100 cm3',
+  ],
   ['meq/L', 'meq/L', 'charge', 'meq/L mmolc/L me/L meq/l'],
   ['%', '%', 'share', '% pct pct. percent Percent|per cent|g/100g|g/100 g|% of CEC|% CEC|%CEC|% by wt|% w/w'],
   ['dS/m', 'dS/m', 'none', 'dS/m ds/m mmhos/cm mmho/cm mmhos millimhos/cm mS/cm'],

@@ -155,7 +155,11 @@ function formOf(key: AnalyteKey, text: string): { form: string | null; doubt: st
   };
 }
 
-function nameIn(raw: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null {
+/** A target range inside a label ("Phosphorus (25-50 ppm)") is no part of the name. */
+const RANGE_IN_LABEL = /\(\s*[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*[^)]*\)/g;
+
+function nameIn(printed: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null {
+  const raw = printed.replace(RANGE_IN_LABEL, ' ').trim();
   const whole = lookUp(normal(raw), raw);
   if (whole !== null) return { ...whole, strength: 1 };
   const unit = unitIn(raw);

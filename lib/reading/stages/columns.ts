@@ -160,6 +160,12 @@ function meaningOf(stack: Stack, first: boolean): Column {
     label = readLabel(stack.own.slice(drop).join(' '), [...stack.own.slice(0, drop), ...stack.captions]);
     unexplained = drop;
   }
+  // A last line that is no unit we know ("mval/100 g") must not hide the analyte: the unit is then missing, and doubted.
+  if (label === null && stack.own.length > 1) {
+    label = readLabel(stack.own.slice(0, -1).join(' '), stack.captions);
+    unexplained = 1;
+    if (label !== null) label = { ...label, strength: Math.min(label.strength, 0.9) };
+  }
   const fields = stack.own.map((_, drop) => fieldOf(stack.own.slice(drop).join(' ')));
   const field = fields.find((found) => found !== null) ?? null;
   const all = [...stack.captions, heading].join(' ');

@@ -1,6 +1,7 @@
-import { type Candidate, remark } from '../candidate';
+import { type Candidate, type Identity, remark } from '../candidate';
 import { type Label, methodInAny, readLabel, unitOnly } from '../labels/label';
 import type { Remark } from '../types';
+import { type Across, acrossAt, sampleOver } from './across';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { fieldOf } from './identity';
 import { type Role, roleOf } from './roles';
@@ -11,7 +12,13 @@ type RoleSpan = { readonly x0: number; readonly x1: number; readonly role: Role;
 export type RoleHeader = { readonly line: CellLine; readonly spans: readonly RoleSpan[] };
 
 /** A number of a list with the line it stands on, so that the right sample can be found. */
-export type ListRow = { readonly candidate: Candidate; readonly line: CellLine; readonly x0: number };
+export type ListRow = {
+  readonly candidate: Candidate;
+  readonly line: CellLine;
+  readonly x0: number;
+  /** The sample over the number's column, when samples stand side by side. */
+  readonly identity: Identity | null;
+};
 
 function overlapping(a: { x0: number; x1: number }, b: { x0: number; x1: number }): boolean {
   return Math.min(a.x1, b.x1) > Math.max(a.x0, b.x0);
@@ -83,6 +90,7 @@ type Found = {
 function segmentValues(cells: readonly PageCell[], header: RoleHeader | null): { found: Found[]; methodText: string } {
   const found: Found[] = [];
   let methodText = '';
+  let ahead: { unit: Value['unit']; printed: string } | null = null;
   for (const cell of cells) {
     const last = found[found.length - 1];
     const role = roleFor(header, cell);
@@ -92,8 +100,8 @@ function segmentValues(cells: readonly PageCell[], header: RoleHeader | null): {
       found.push({
         value: cell.meaning,
         cell,
-        unit: cell.meaning.unit ?? headUnit?.unit ?? null,
-        unitPrinted: cell.meaning.unitPrinted ?? headUnit?.printed ?? null,
+        unit: cell.meaning.unit ?? headUnit?.unit ?? ahead?.unit ?? null,
+        unitPrinted: cell.meaning.unitPrinted ?? headUnit?.printed ?? ahead?.printed ?? null,
         rating: cell.meaning.rating,
         role,
       });
@@ -105,7 +113,7 @@ function segmentValues(cells: readonly PageCell[], header: RoleHeader | null): {
           : [last]) {
         if (one.unit === null) [one.unit, one.unitPrinted] = [unit.unit, unit.printed];
       }
-      if (found.length === 0) methodText += ` ${cell.phrase.text}`;
+      if (found.length === 0) ahead = unit;
     } else if (cell.meaning.kind === 'rating' && last !== undefined) last.rating ??= cell.meaning.rating;
     else if (header === null && found.length > 0 && cell.meaning.kind === 'text') break;
     else if (cell.meaning.kind === 'text') methodText += ` ${cell.phrase.text}`;
@@ -176,7 +184,32 @@ function isRatingHere(line: CellLine, index: number): boolean {
   return !(far && line.cells[index + 1]?.meaning.kind === 'value');
 }
 
-function rowsOfLine(lines: readonly CellLine[], at: number, header: RoleHeader | null): ListRow[] {
+/** Label set over and under a line that holds only its numbers. */
+function labelAround(lines: readonly CellLine[], at: number): { label: Label; cell: PageCell } | null {
+  const [above, line, under] = [lines[at - 1], lines[at], lines[at + 1]];
+  const [first, over, below] = [line?.cells[0], above?.cells[0], under?.cells[0]];
+  if (first?.meaning.kind !== 'value' || over === undefined || below === undefined || above?.values !== 0) return null;
+  if (
+    under?.values !== 0 ||
+    Math.abs(over.phrase.x0 - below.phrase.x0) > over.phrase.size ||
+    over.phrase.x1 > first.phrase.x0
+  )
+    return null;
+  if (
+    first.phrase.y0 - over.phrase.y1 > 0.3 * first.phrase.size ||
+    below.phrase.y0 - first.phrase.y1 > 0.3 * first.phrase.size
+  )
+    return null;
+  const label = readLabel(`${over.phrase.text} ${below.phrase.text}`);
+  return label === null ? null : { label: { ...label, strength: Math.min(label.strength, 0.96) }, cell: over };
+}
+
+function rowsOfLine(
+  lines: readonly CellLine[],
+  at: number,
+  header: RoleHeader | null,
+  across: Across | null,
+): ListRow[] {
   const line = lines[at];
   if (line === undefined) return [];
   const starts = line.cells.flatMap((cell, index) => {
@@ -186,10 +219,14 @@ function rowsOfLine(lines: readonly CellLine[], at: number, header: RoleHeader |
     const label = labelAt(lines, at, cell, line.cells[index + 1]);
     return label === null ? [] : [{ index, label, cell }];
   });
+  const around = starts.length === 0 ? labelAround(lines, at) : null;
+  if (around !== null) starts.push({ index: -1, ...around });
   return starts.flatMap(({ index, label, cell }, order) => {
     const end = starts[order + 1]?.index ?? line.cells.length;
     const { found, methodText } = segmentValues(line.cells.slice(index + 1, end), header);
-    const { taken, doubts, position } = choose(found);
+    const over = found.map((one) => (across === null ? null : sampleOver(across, one.cell.phrase)));
+    const sideBySide = header === null && found.length > 0 && over.every((identity) => identity !== null);
+    const { taken, doubts, position } = sideBySide ? { taken: found, doubts: [], position: 0.99 } : choose(found);
     const method = label.method === null ? methodInAny(label.analyte, methodText) : null;
     return taken.map((one): ListRow => {
       const withUnit = one.unit === '%' && label.unit === null ? readLabel(`${label.text} %`) : null;
@@ -197,8 +234,9 @@ function rowsOfLine(lines: readonly CellLine[], at: number, header: RoleHeader |
       return {
         line,
         x0: cell.phrase.x0,
+        identity: sideBySide ? (over[found.indexOf(one)] ?? null) : null,
         candidate: {
-          label: { ...better, text: cell.phrase.text.replace(/[:=]\s*$/, '') },
+          label: { ...better, text: label.text },
           value: one.value,
           rating: one.rating,
           unit: one.unit ?? label.unit,
@@ -220,6 +258,7 @@ function rowsOfLine(lines: readonly CellLine[], at: number, header: RoleHeader |
 export function listRows(
   lines: readonly CellLine[],
   taken: ReadonlySet<CellLine>,
+  across: readonly Across[],
 ): { rows: ListRow[]; headers: RoleHeader[] } {
   const rows: ListRow[] = [];
   const headers: RoleHeader[] = [];
@@ -236,7 +275,8 @@ export function listRows(
       headers.push(found);
       continue;
     }
-    if (line.values > 0) rows.push(...rowsOfLine(lines, at, header));
+    if (line.values > 0)
+      rows.push(...rowsOfLine(lines, at, header, acrossAt(across, line.line.page.number, line.line.y0)));
   }
   return { rows, headers };
 }

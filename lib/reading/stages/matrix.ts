@@ -3,7 +3,7 @@ import { readLabel } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { type Column, columnsOf, headerScore, spansOf } from './columns';
 import { fieldWithValue } from './identity';
-import { NOT_A_SAMPLE } from './roles';
+import { JUST_RESULT, NOT_A_SAMPLE } from './roles';
 import { storedBox } from './words';
 
 export type Table = {
@@ -144,11 +144,14 @@ function isTail(line: CellLine, columns: readonly Column[]): boolean {
   );
 }
 
-function ratingFor(row: CellLine, cell: PageCell): string | null {
+function ratingFor(row: CellLine, cell: PageCell, columns: readonly Column[]): string | null {
   const index = row.cells.indexOf(cell);
   const next = row.cells[index + 1];
   if (next?.meaning.kind !== 'rating') return null;
-  return next.phrase.x0 - cell.phrase.x1 < 5 * cell.phrase.size ? next.meaning.rating : null;
+  const between = columns.some(
+    (column) => column.label !== null && column.x0 > cell.phrase.x1 && column.x1 < next.phrase.x0,
+  );
+  return between ? null : next.meaning.rating;
 }
 
 function candidateOf(
@@ -164,7 +167,7 @@ function candidateOf(
   return {
     label: { ...label, text: column.heading },
     value,
-    rating: value.rating ?? ratingFor(row, cell) ?? under,
+    rating: value.rating ?? ratingFor(row, cell, table.columns) ?? under,
     unit: value.unit ?? label.unit,
     unitPrinted: value.unitPrinted ?? label.unitPrinted,
     method: label.method,
@@ -190,7 +193,7 @@ function rowIdentity(row: CellLine, table: Table): Identity {
       (column === first && cell.meaning.kind === 'text' && !table.columns.some((other) => other.field === 'sampleId')
         ? 'sampleId'
         : null);
-    if (field !== null)
+    if (field !== null && !JUST_RESULT.test(cell.phrase.text))
       identity[field] = identity[field] === undefined ? cell.phrase.text : `${identity[field]} ${cell.phrase.text}`;
   }
   return identity;

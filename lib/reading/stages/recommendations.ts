@@ -1,7 +1,9 @@
+import type { UnitKey } from '@/lib/domain/analytes';
 import { unitIn } from '../labels/label';
 import type { ReadRecommendation } from '../types';
 import type { CellLine } from './cells';
 import type { TableRow } from './matrix';
+import type { ZoneBox } from './sections';
 import { storedBox } from './words';
 
 const AMOUNT = /(?<![\d.,/])(\d{1,3}(?:,\d{3})+|\d*\.?\d+)(?:\s*(?:-|–|to)\s*\d*\.?\d+)?\s*/;
@@ -18,11 +20,18 @@ function tidyItem(text: string): string {
     .slice(0, 80);
 }
 
-function fromText(text: string): { item: string; amount: number; unit: string | null; printed: string } | null {
+function fromText(
+  text: string,
+  unitAbove: UnitKey | null,
+): { item: string; amount: number; unit: string | null; printed: string } | null {
   for (const match of text.matchAll(new RegExp(AMOUNT, 'g'))) {
     const after = text.slice((match.index ?? 0) + match[0].length);
     const unitText = UNIT.exec(after)?.[1];
-    if (unitText === undefined) continue;
+    if (unitText === undefined) {
+      const bare = tidyItem(text.slice(0, match.index));
+      if (unitAbove === null || bare === '' || after.trim() !== '') continue;
+      return { item: bare, amount: Number((match[1] ?? '').replace(/,/g, '')), unit: unitAbove, printed: text };
+    }
     const unit = unitIn(after)?.unit ?? null;
     const before = tidyItem(text.slice(0, match.index));
     const rest = tidyItem(
@@ -41,11 +50,23 @@ function fromText(text: string): { item: string; amount: number; unit: string | 
 /** Advice in words and lists ("Elemental sulfur: 10 lb per 1,000 sq ft"), with the box of the whole line. */
 export function adviceOfLines(
   lines: readonly CellLine[],
+  zones: readonly ZoneBox[],
   sampleId: (line: CellLine) => string | null,
 ): ReadRecommendation[] {
   return lines.flatMap((line) => {
     const text = line.cells.map((cell) => cell.phrase.text).join(' ');
-    const found = fromText(text);
+    const first = line.cells[0]?.phrase;
+    const zone = zones.find(
+      (one) =>
+        one.zone === 'recommendation' &&
+        one.page === line.line.page.number &&
+        first !== undefined &&
+        first.x0 >= one.x0 &&
+        first.x0 < one.x1 &&
+        first.y0 > one.y0 &&
+        first.y0 < one.y1,
+    );
+    const found = fromText(text, zone?.unit ?? null);
     if (found === null) return [];
     const box = {
       x0: Math.min(...line.cells.map((cell) => cell.phrase.x0)),

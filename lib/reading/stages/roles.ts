@@ -45,4 +45,7 @@ export function roleOf(text: string, first: boolean): Role | null {
 
 /** Names of rows that are not samples. */
 export const NOT_A_SAMPLE =
-  /^(optimum|optimal|desired|target|ideal|previous|last|average|avg|mean|median|min(imum)?|max(imum)?|totals?|sum|std|reporting|detection|mdl|rl|lod|blank|duplicate rpd|normal|range|sufficien|guide|units?|method|rating|recommend|critical)\b/i;
+  /^(optimum|optimal|desired|target|ideal|previous|last|average|avg|mean|median|min(imum)?|max(imum)?|totals?|sum|std|reporting|detection|mdl|rl|lod|blank|duplicate rpd|normal|range|sufficien|guide|units?|method|rating|recommend|critical|deficit|difference|shortage|surplus|needed|wanted)\b/i;
+
+/** Row names that say "this is the result" and name no sample. */
+export const JUST_RESULT = /^(your |test |soil )?(values?|levels?|results?)( found)?$|^found$/i;

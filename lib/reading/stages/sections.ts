@@ -11,6 +11,8 @@ export type ZoneBox = {
   readonly x1: number;
   readonly y0: number;
   readonly y1: number;
+  /** Unit that the heading gives for everything under it. */
+  readonly unit: UnitKey | null;
 };
 
 const ADVICE =
@@ -32,7 +34,7 @@ function zoneOfHeading(text: string): Zone | null {
  * that begins right of the middle, rules only its own side.
  */
 export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
-  const heads: { zone: Zone; page: number; x0: number; x1: number; y: number }[] = [];
+  const heads: { unit: UnitKey | null; zone: Zone; page: number; x0: number; x1: number; y: number }[] = [];
   for (const line of lines) {
     if (line.values >= 2) continue;
     const found = line.cells.flatMap((cell) => {
@@ -48,6 +50,7 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
       const next = found[index + 1];
       const sided = found.length > 1 || cell.phrase.x0 > 0.52 * width;
       heads.push({
+        unit: unitIn(cell.phrase.text)?.unit ?? null,
         zone,
         page: cell.phrase.page.number,
         x0: sided ? cell.phrase.x0 - 2 * cell.phrase.size : 0,
@@ -61,6 +64,7 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
       (other) => other.page === head.page && other.y > head.y + 1 && other.x0 < head.x1 && other.x1 > head.x0,
     );
     return {
+      unit: head.unit,
       zone: head.zone,
       page: head.page,
       x0: head.x0,

@@ -88,6 +88,8 @@ function tailOf(rest: string): Tail | null {
     const [left, right] = [words.slice(0, cut).join(' '), words.slice(cut).join(' ')];
     const first = unitOnly(left);
     const last = ratingIn(right);
+    const [rated, after] = [ratingIn(left), unitOnly(right)];
+    if (rated !== null && after !== null) return { rating: rated, unit: after.unit, unitPrinted: after.printed };
     if (first !== null && last !== null) return { rating: last, unit: first.unit, unitPrinted: first.printed };
   }
   return null;
