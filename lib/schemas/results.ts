@@ -48,3 +48,4 @@ export const resultSchema = z.object({
 export const resultListSchema = z.object({ results: z.array(resultSchema) });
 
 export type Result = z.infer<typeof resultSchema>;
+export type ResultList = z.infer<typeof resultListSchema>;

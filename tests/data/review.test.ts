@@ -127,6 +127,15 @@ describe('the review', () => {
     expect(again).toMatchObject({ value: '6.9', qualifier: '<', original: { printed: '6.3' } });
   });
 
+  it('takes the page’s own characters back as the page meant them', async () => {
+    const { reportId } = await ready({ results: [{ ...P, printed: '1,934', value: 1934 }] });
+    const row = only((await review(reportId)).rows);
+    const edited = await editRow({ ctx: helper, input: { ...at(row, reportId), value: '19' } });
+    expect(edited).toMatchObject({ value: '19', state: 'edited' });
+    const undone = await editRow({ ctx: helper, input: { ...at(edited, reportId), value: '1,934' } });
+    expect(undone).toMatchObject({ value: '1934', printed: '1,934', state: 'proposed', original: null, version: 3 });
+  });
+
   it('lets one of two edits at the same moment win', async () => {
     const { reportId } = await ready();
     const row = only((await review(reportId)).rows.filter((one) => one.analyte === 'phosphorus'));

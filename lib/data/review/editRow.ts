@@ -17,7 +17,7 @@ export const editRow = siteVerb({
     if (before.state === 'removed') {
       throw new Problem('conflict', 'This row was removed. Bring it back first.', { reason: 'row-removed' });
     }
-    const edited = applyEdit(before, edits);
+    const edited = applyEdit(before, edits, before.original);
     if (!edited.ok) throw new Problem('invalid', edited.sentence, { fields: { [edited.field]: edited.sentence } });
     const columns = editColumns(before, edited, person.id, ctx.now);
     const row = await writeRow(tx, siteId, { reportId, rowId, version }, columns);

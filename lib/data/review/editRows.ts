@@ -18,7 +18,7 @@ async function editOne(tools: Tools, before: RowColumns, edit: Edit): Promise<Ro
   const { rowId, version, ...edits } = edit;
   if (before.version !== version) return { kind: 'stale', sentence: STALE_ROW, current: await rowAnswer(tx, before) };
   if (before.state === 'removed') return { kind: 'refused', sentence: 'This row was removed. Bring it back first.' };
-  const edited = applyEdit(before, edits);
+  const edited = applyEdit(before, edits, before.original);
   if (!edited.ok) return { kind: 'refused', sentence: edited.sentence };
   const columns = editColumns(before, edited, tools.by, tools.at);
   const row = await writeRow(tx, siteId, { reportId, rowId, version }, columns);
