@@ -11,7 +11,7 @@ import { createRunner } from './support/step.mjs';
 
 /*
  * `npm test`: everything, with a cluster, store and mailbox of its own. `npm test -- <part of a file name>`: only those
- * tests. `npm run bench`: the measurements of lib/jobs/commands/bench.ts beside a started stack.
+ * tests. `npm run bench`: the measurements of tests/bench/main.ts beside a started stack.
  */
 const root = fileURLToPath(new URL('..', import.meta.url));
 const out = path.join(root, 'tests', '.out');
@@ -137,7 +137,7 @@ async function browserTests(patterns, hasTests) {
 async function bench() {
   await ensureBuild({ root, run, say: console.log });
   const env = { ...process.env, ...(await startStack()) };
-  await run('bench', process.execPath, ['--import', 'tsx', 'lib/jobs/commands/bench.ts', ...filters], {
+  await run('bench', process.execPath, ['--import', 'tsx', 'tests/bench/main.ts', ...filters], {
     env,
     inherit: true,
   });

@@ -5,8 +5,6 @@ import { idSchema } from './parts';
 /** Outcomes are the domain's own types: computed when read, never taken from a client. */
 const outcomeOf = <T>() => z.custom<T>((value) => typeof value === 'object' && value !== null && 'ok' in value);
 
-export const plotEffectsInput = z.strictObject({ plotId: idSchema });
-
 export const effectCheckAnswer = z.object({
   key: z.string(),
   plotId: idSchema,
@@ -56,4 +54,3 @@ export const compareAnswer = z.object({
   b: compared,
   outcome: outcomeOf<CompareOutcome>(),
 });
-export type CompareAnswer = z.infer<typeof compareAnswer>;

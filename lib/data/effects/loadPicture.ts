@@ -8,13 +8,8 @@ import { dayOf } from '../days';
 import { loadReadings } from '../history/points';
 import type { SitePicture } from './assemble';
 
-/** What the effect check looks at: every plot of the site, its live results of these analytes, and what was spread. */
-export async function loadPicture(
-  tx: Transaction,
-  siteId: SiteId,
-  now: Date,
-  analytes?: readonly string[],
-): Promise<SitePicture> {
+/** What the effect check looks at: every plot of the site, what was spread, and live results of what it was meant to change. */
+export async function loadPicture(tx: Transaction, siteId: SiteId, now: Date): Promise<SitePicture> {
   const [place] = await tx.select().from(site).where(eq(site.id, siteId));
   if (!place) throw notFound();
   const plots = await tx
@@ -22,16 +17,13 @@ export async function loadPicture(
     .from(plot)
     .where(eq(plot.siteId, siteId))
     .orderBy(asc(plot.createdAt), asc(plot.name));
+  const applications = await loadApplications(tx, siteId, null);
+  const intended = new Set(applications.flatMap((one) => one.intents.map((intent) => intent.analyte)));
   return {
     today: dayOf(now, place.timeZone),
     warmMonths: place.warmMonths,
     plots: plots.map((row) => ({ id: asPlotId(row.id), name: row.name })),
-    applications: await loadApplications(tx, siteId, null),
-    readings: await loadReadings(tx, siteId, analytes ? { analytes } : {}),
+    applications,
+    readings: await loadReadings(tx, siteId, { analytes: [...intended] }),
   };
 }
-
-/** The analytes that some live application of the site was meant to change. */
-export const intendedAnalytes = (picture: Pick<SitePicture, 'applications'>): string[] => [
-  ...new Set(picture.applications.flatMap((one) => one.intents.map((intent) => intent.analyte))),
-];
