@@ -15,7 +15,7 @@ export function SignInForm({ next, email }: { next: string; email: string }) {
   return (
     <>
       <Form
-        problem={problem}
+        problem={problem?.code === 'not-signed-in' ? { ...problem, title: 'Not signed in' } : problem}
         onSubmit={async (values) => {
           const body = {
             email: values.email ?? '',

@@ -83,7 +83,9 @@ function LookForMail({ email, mailboxUrl, onChange }: LookForMailProps) {
       <MailboxHint url={mailboxUrl} />
       <ProblemNotice problem={again.problem} />
       <p role="status" className="empty:hidden">
-        {times > 0 ? `Asked for again${times > 1 ? `, ${times} times` : ''}. The newest link is the one to use.` : ''}
+        {times > 0
+          ? `Asked for again${times > 1 ? `, ${times} times` : ''}. Each of the links works until one is used.`
+          : ''}
       </p>
       <div className="flex flex-wrap gap-3">
         <Button look="quiet" busy={again.busy} busyLabel="Sending" onClick={() => void resend()}>

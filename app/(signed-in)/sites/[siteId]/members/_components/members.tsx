@@ -2,15 +2,14 @@
 
 import { useRouter } from 'next/navigation';
 import { can } from '@/lib/access/table';
-import { type Member, type MemberList, roleSchema } from '@/lib/schemas/sites';
+import type { Member, MemberList } from '@/lib/schemas/sites';
 import { ConfirmButton } from '@/lib/ui/actions/confirm-button';
 import { callApi } from '@/lib/ui/api';
 import { useAnnounce } from '@/lib/ui/feedback/announce';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
-import { SelectField } from '@/lib/ui/fields/select-field';
 import { useApi } from '@/lib/ui/use-api';
-import { useSubmit } from '@/lib/ui/use-submit';
-import { onDay, ROLE_OPTIONS } from './role-options';
+import { ChangeRole } from './change-role';
+import { onDay } from './role-options';
 
 export function Members({ siteId, first }: { siteId: string; first: MemberList }) {
   const path = `/sites/${siteId}/members`;
@@ -37,53 +36,24 @@ export function Members({ siteId, first }: { siteId: string; first: MemberList }
 type RowProps = { siteId: string; member: Member; manages: boolean; onChanged: () => void };
 
 function MemberRow({ siteId, member, manages, onChanged }: RowProps) {
-  const { send, busy, problem } = useSubmit();
-  const announce = useAnnounce();
   const path = `/sites/${siteId}/members/${member.id}`;
-  const change = async (text: string) => {
-    const role = roleSchema.parse(text);
-    const result = await send(path, { method: 'PATCH', body: { role } });
-    if (result.ok) announce(`${member.name} is now ${role}.`, { tone: 'saved' });
-    onChanged();
-  };
   return (
-    <div className="grid gap-3 sm:grid-cols-[1fr_12rem_11rem] sm:items-center sm:gap-6">
+    <div className="grid gap-3 sm:grid-cols-[1fr_auto] sm:items-center sm:gap-6">
       <div className="min-w-0">
         <p className="font-semibold break-words">
           {member.name}
           {member.isYou ? <span className="font-normal text-clay"> (you)</span> : null}
         </p>
-        <p className="text-sm break-all text-clay">
-          {member.email ? `${member.email} · ` : ''}since {onDay(member.since)}
+        {member.email ? <p className="text-sm break-all text-clay">{member.email}</p> : null}
+        <p className="text-sm text-clay">
+          <span className="font-semibold text-humus capitalize">{member.role}</span> since {onDay(member.since)}
         </p>
       </div>
-      {manages ? (
-        <SelectField
-          // A refused change goes back to what is true.
-          key={`${member.role}-${problem ? 'refused' : 'kept'}`}
-          name={`role-${member.id}`}
-          label={`Role of ${member.name}`}
-          hideLabel
-          options={ROLE_OPTIONS}
-          defaultValue={member.role}
-          aria-busy={busy}
-          onChange={(event) => void change(event.currentTarget.value)}
-        />
-      ) : (
-        <p className="capitalize">{member.role}</p>
-      )}
-      <div className="sm:justify-self-end">
-        {member.isYou ? (
-          <Leave siteId={siteId} />
-        ) : manages ? (
-          <Remove path={path} member={member} onChanged={onChanged} />
-        ) : null}
+      <div className="flex flex-wrap gap-3">
+        {manages ? <ChangeRole path={path} member={member} onChanged={onChanged} /> : null}
+        {member.isYou ? <Leave siteId={siteId} /> : null}
+        {manages && !member.isYou ? <Remove path={path} member={member} onChanged={onChanged} /> : null}
       </div>
-      {problem ? (
-        <div className="sm:col-span-3">
-          <ProblemNotice problem={problem} />
-        </div>
-      ) : null}
     </div>
   );
 }

@@ -25,7 +25,7 @@ export function AuditTrail({ siteId, first, timeZone }: { siteId: string; first:
     setBefore(result.data.before);
   };
   return (
-    <div className="grid justify-items-start gap-4">
+    <div className="grid grid-cols-[minmax(0,1fr)] justify-items-start gap-4">
       <p className="max-w-measure text-clay">
         Every change of this site, newest first. Nobody can edit or remove a line here.
       </p>
