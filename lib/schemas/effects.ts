@@ -27,6 +27,7 @@ export const effectCheckAnswer = z.object({
 });
 export type EffectCheckAnswer = z.infer<typeof effectCheckAnswer>;
 export const effectsAnswer = z.object({ today: z.string(), checks: z.array(effectCheckAnswer) });
+export type EffectsAnswer = z.infer<typeof effectsAnswer>;
 
 export const compareInput = z.strictObject({
   analyte: z.string().max(60),
@@ -54,3 +55,4 @@ export const compareAnswer = z.object({
   b: compared,
   outcome: outcomeOf<CompareOutcome>(),
 });
+export type CompareAnswer = z.infer<typeof compareAnswer>;

@@ -24,7 +24,7 @@ export function compareSentence({ analyte, earlier, later, outcome, locale }: Co
 
 /** Two tests on one scale and, where they may be compared, their difference beside "no change". */
 export function CompareStrip(props: CompareStripProps) {
-  const { analyte, earlier, later, outcome } = props;
+  const { analyte, earlier, later, outcome, zeroWord = 'no change' } = props;
   const least = 4 * 10 ** -analyte.decimals;
   const scale = stripScale(
     [earlier, later].flatMap((t) => [t.value, t.low, t.high]),
@@ -38,7 +38,12 @@ export function CompareStrip(props: CompareStripProps) {
         <StripAxis scale={scale} y={112} />
       </StripFrame>
       {outcome.kind === 'difference' && (
-        <Difference difference={outcome.difference} decimals={changeDecimals(analyte)} least={least} />
+        <Difference
+          difference={outcome.difference}
+          decimals={changeDecimals(analyte)}
+          least={least}
+          zeroWord={zeroWord}
+        />
       )}
       <figcaption className="max-w-measure text-sm text-clay">{compareSentence(props)}</figcaption>
     </figure>
@@ -69,7 +74,17 @@ function Row({
   );
 }
 
-function Difference({ difference, decimals, least }: { difference: Interval; decimals: number; least: number }) {
+function Difference({
+  difference,
+  decimals,
+  least,
+  zeroWord,
+}: {
+  difference: Interval;
+  decimals: number;
+  least: number;
+  zeroWord: string;
+}) {
   const scale = stripScale([0, difference.estimate, difference.low, difference.high], { signed: true, least });
   return (
     <StripFrame height={104}>
@@ -79,7 +94,7 @@ function Difference({ difference, decimals, least }: { difference: Interval; dec
       <StripWord scale={scale} value={difference.estimate} y={24} bold>
         {`difference ${formatSigned(difference.estimate, decimals)}`}
       </StripWord>
-      <StripAxis scale={scale} y={64} zeroWord="no change" />
+      <StripAxis scale={scale} y={64} zeroWord={zeroWord} />
     </StripFrame>
   );
 }

@@ -16,6 +16,8 @@ export interface DriftRow {
   readonly laboratory: string;
   readonly depth: string;
   readonly note: string;
+  /** Where the test can be read in full; not part of the CSV. */
+  readonly href?: string;
 }
 
 export function driftRows(points: readonly DriftPoint[], amendments: readonly DriftAmendment[]): DriftRow[] {
@@ -36,6 +38,7 @@ export function driftRows(points: readonly DriftPoint[], amendments: readonly Dr
       laboratory: p.laboratory,
       depth: p.depth,
       note: notes.filter(Boolean).join('; '),
+      ...(p.href === undefined ? {} : { href: p.href }),
     };
   });
   const spread = amendments.map(

@@ -23,7 +23,7 @@ const PICTURE_FAILED =
 
 /** One analyte of one plot over true time, with its text, table, CSV and picture. */
 export function DriftChart(props: DriftChartProps) {
-  const { title, analyte, points, amendments, band, asOf, source, fileName, locale } = props;
+  const { title, analyte, points, amendments, band, asOf, source, fileName, hideFinding = false, locale } = props;
   const { box, width } = useWidth<HTMLDivElement>();
   const picture = useRef<SVGSVGElement>(null);
   const [failure, setFailure] = useState('');
@@ -48,7 +48,10 @@ export function DriftChart(props: DriftChartProps) {
 
   return (
     <figure className="@container grid min-w-0 gap-3 break-inside-avoid" aria-labelledby={findingId}>
-      <p id={findingId} className={cx('max-w-measure text-lg leading-snug', drawn && 'print:hidden')}>
+      <p
+        id={findingId}
+        className={hideFinding ? 'sr-only' : cx('max-w-measure text-lg leading-snug', drawn && 'print:hidden')}
+      >
         {finding}
       </p>
       <div ref={box} className={cx('h-[340px] min-w-0 @max-[520px]:h-[300px]', drawn && 'print:hidden')}>

@@ -30,7 +30,13 @@ export function DriftTable({ title, rows, analyte, locale }: DriftTableProps) {
           {rows.map((row) => (
             <tr key={`${row.kind} ${row.id}`} className="border-b border-fallow/40 align-top">
               <th scope="row" className="py-1 pr-4 text-left font-normal whitespace-nowrap">
-                {formatDay(row.on, locale)}
+                {row.href === undefined ? (
+                  formatDay(row.on, locale)
+                ) : (
+                  <a href={row.href} className="text-link">
+                    {formatDay(row.on, locale)}
+                  </a>
+                )}
               </th>
               <td className="py-1 pr-4 text-right font-figures whitespace-nowrap">{row.printed}</td>
               <td className="py-1 pr-4 font-figures whitespace-nowrap">

@@ -24,6 +24,13 @@ export function DriftTip({ point, analyte, locale }: DriftTipProps) {
       {point.qualifier === 'above' && <p className="text-clay">above what the laboratory can read</p>}
       {where !== '' && <p className="text-clay">{where}</p>}
       {point.breakBefore !== null && <p className="text-clay">Not joined to the test before: {point.breakBefore}.</p>}
+      {point.href !== undefined && (
+        <p>
+          <a href={point.href} className="text-link">
+            Open its report
+          </a>
+        </p>
+      )}
     </div>
   );
 }

@@ -58,6 +58,8 @@ export interface DriftChartProps {
   readonly band: TargetBand | null;
   /** One sentence; when left out it is written from the points, without any claim of a trend. */
   readonly finding?: string;
+  /** Set when the finding already stands above the chart; it stays the figure's name. */
+  readonly hideFinding?: boolean;
   /** The day the chart is drawn for: the right end of the time axis. */
   readonly asOf: string;
   /** Printed under an exported picture: site and where the numbers come from. */
@@ -154,5 +156,7 @@ export interface CompareStripProps {
         readonly widenedBy: readonly string[];
       }
     | { readonly kind: 'refused'; readonly reason: string };
+  /** Under the zero of the difference: two tests of one plot changed, two plots differ. */
+  readonly zeroWord?: string;
   readonly locale?: string;
 }
