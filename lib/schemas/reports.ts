@@ -28,11 +28,6 @@ export const UPLOAD_ENDINGS = [
 /** Of a PDF or picture; data files and sheets end at 5 MB. */
 export const LARGEST_UPLOAD_BYTES = 20 * 1024 * 1024;
 
-/** The fields beside the file in the multipart form; all values arrive as text. */
-export const uploadFields = z.strictObject({
-  plotId: idSchema.optional(),
-  asRevision: z.enum(['true', 'false']).optional(),
-});
 /** What the route hands to the verb: the bytes come from the request, never from a client's JSON. */
 export const uploadInput = z.strictObject({
   fileName: z.string(),

@@ -5,7 +5,6 @@ import { plotSchema } from './plots';
 import { laboratorySchema, reportSchema } from './reports';
 
 export const QUALIFIER_WORDS = ['=', '<', '>', 'nd', 'trace'] as const;
-export const FORMS = ['element', 'P2O5', 'K2O', 'NO3', 'SO4', 'CaO', 'MgO'] as const;
 
 const analyteSchema = z.enum(ANALYTE_KEYS, 'This analyte is not on the list.');
 const unitSchema = z.string().refine(isUnitKey, 'This unit is not on the list.').nullable();
