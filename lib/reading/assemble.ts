@@ -58,26 +58,44 @@ function belongs(group: Group, identity: Identity, results: readonly ReadResult[
   return (named || both || none) && !contradicts(group.results, results);
 }
 
+/** Names under which a part can find the sample it belongs to; a part without any name goes by the empty one. */
+function namesOf(identity: Identity): string[] {
+  const names = [identity.labNumber, identity.sampleId, identity.fieldName].flatMap((name) =>
+    name === undefined ? [] : [name.toLowerCase()],
+  );
+  return names.length === 0 ? [''] : names;
+}
+
+function addTo(home: Group, results: readonly ReadResult[]) {
+  for (const result of results) {
+    const twice = home.results.some(
+      (other) =>
+        other.analyte === result.analyte &&
+        other.unit === result.unit &&
+        other.method === result.method &&
+        other.form === result.form &&
+        other.value === result.value &&
+        other.qualifier === result.qualifier,
+    );
+    if (!twice) home.results.push(result);
+  }
+}
+
 function merge(parts: readonly { identity: Identity; results: readonly ReadResult[] }[]): Group[] {
   const groups: Group[] = [];
+  const byName = new Map<string, Group[]>();
   for (const part of parts) {
     if (part.results.length === 0) continue;
-    const home = groups.find((group) => belongs(group, part.identity, part.results));
-    if (home === undefined) groups.push({ identity: part.identity, results: [...part.results] });
-    else {
-      home.identity = { ...part.identity, ...home.identity };
-      for (const result of part.results) {
-        const twice = home.results.some(
-          (other) =>
-            other.analyte === result.analyte &&
-            other.unit === result.unit &&
-            other.method === result.method &&
-            other.form === result.form &&
-            other.value === result.value &&
-            other.qualifier === result.qualifier,
-        );
-        if (!twice) home.results.push(result);
-      }
+    const near = namesOf(part.identity).flatMap((name) => byName.get(name) ?? []);
+    const home = near.find((group) => belongs(group, part.identity, part.results));
+    const group = home ?? { identity: part.identity, results: [] };
+    if (home === undefined) groups.push(group);
+    group.identity = { ...part.identity, ...group.identity };
+    if (home === undefined) group.results.push(...part.results);
+    else addTo(home, part.results);
+    for (const name of namesOf(group.identity)) {
+      const list = byName.get(name) ?? [];
+      if (!list.includes(group)) byName.set(name, [...list, group]);
     }
   }
   return groups;

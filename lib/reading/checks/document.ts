@@ -27,19 +27,36 @@ function checkRepeats(samples: readonly (readonly ReadResult[])[], raise: Raise)
   }
 }
 
+type Rated = { readonly result: ReadResult; readonly rank: number; readonly value: number };
+
+function ratedGroups(samples: readonly (readonly ReadResult[])[]): readonly (readonly Rated[])[] {
+  const groups = new Map<string, Rated[]>();
+  for (const result of samples.flat()) {
+    const level = result.rating === null ? -1 : rank(result.rating);
+    if (level < 0 || result.value === null) continue;
+    const key = `${result.analyte}|${result.unit}|${result.method}`;
+    const group = groups.get(key) ?? [];
+    group.push({ result, rank: level, value: result.value });
+    groups.set(key, group);
+  }
+  return [...groups.values()];
+}
+
 /** A higher number with a lower rating than another sample of the same table is a question. */
 function checkRatings(samples: readonly (readonly ReadResult[])[], raise: Raise) {
-  const all = samples.flat().filter((result) => result.rating !== null && result.value !== null);
-  for (const result of all) {
-    const against = all.find((other) => {
-      if (other.analyte !== result.analyte || other.unit !== result.unit) return false;
-      const [mine, theirs] = [rank(result.rating ?? ''), rank(other.rating ?? '')];
-      return mine >= 0 && theirs >= 0 && mine > theirs && (result.value ?? 0) < (other.value ?? 0);
-    });
-    if (against === undefined) continue;
-    const text = `${result.printed} is rated ${result.rating}, while ${against.printed} is rated ${against.rating}.`;
-    raise(result, remark('rating-order', text));
-    raise(against, remark('rating-order', text));
+  for (const group of ratedGroups(samples)) {
+    const largest = RATINGS.map((_, level) =>
+      group
+        .filter((one) => one.rank === level)
+        .reduce<Rated | null>((best, one) => (best === null || one.value > best.value ? one : best), null),
+    );
+    for (const one of group) {
+      const against = largest.slice(0, one.rank).find((other) => other !== null && other.value > one.value);
+      if (against === undefined || against === null) continue;
+      const text = `${one.result.printed} is rated ${one.result.rating}, while ${against.result.printed} is rated ${against.result.rating}.`;
+      raise(one.result, remark('rating-order', text));
+      raise(against.result, remark('rating-order', text));
+    }
   }
 }
 

@@ -1,6 +1,7 @@
 import { type AnalyteKey, analyte, type MethodKey, methodsOf, type UnitKey } from '@/lib/domain/analytes';
 import { METHOD_SPELLINGS, NAMES, UNIT_SPELLINGS } from './dictionary';
 import { findWhole, normal } from './normal';
+import { remembered } from './remember';
 
 export type Label = {
   readonly analyte: AnalyteKey;
@@ -19,7 +20,7 @@ const NOISE =
   /\b(soil|test|result|results|value|level|available|avail|extractable|extr|exchangeable|exch|by|in|of|the|as|reported|measured|analysis|estimated|est|x|plant)\b/g;
 
 /** The unit a text carries, with the characters that say so. */
-export function unitIn(text: string): { unit: UnitKey; printed: string; rest: string } | null {
+export const unitIn = remembered((text: string): { unit: UnitKey; printed: string; rest: string } | null => {
   const plain = normal(text);
   for (const { unit, text: spelling } of UNIT_SPELLINGS) {
     const at = findWhole(plain, spelling);
@@ -28,7 +29,7 @@ export function unitIn(text: string): { unit: UnitKey; printed: string; rest: st
     return { unit, printed: printedUnit(text, spelling), rest };
   }
   return null;
-}
+});
 
 function printedUnit(text: string, spelling: string): string {
   const bare = text
@@ -51,16 +52,28 @@ function loose(text: string): string {
   return normal(text).replace(/-/g, ' ');
 }
 
+type MethodSpelling = { readonly method: MethodKey; readonly spelling: string; readonly wanted: string };
+const SPELLINGS = new Map<AnalyteKey, readonly MethodSpelling[]>();
+
+function spellingsOf(key: AnalyteKey): readonly MethodSpelling[] {
+  const known = SPELLINGS.get(key);
+  if (known !== undefined) return known;
+  const list = methodsOf(key)
+    .flatMap((method) =>
+      method.spellings.map((spelling) => ({ method: method.key, spelling, wanted: loose(spelling) })),
+    )
+    .filter((entry) => entry.wanted.length > 1);
+  SPELLINGS.set(key, list);
+  return list;
+}
+
 /** The method of that analyte which a text names, longest spelling first. */
 export function methodIn(key: AnalyteKey, text: string): { method: MethodKey; printed: string } | null {
   const plain = loose(text);
   let best: { method: MethodKey; printed: string; length: number } | null = null;
-  for (const method of methodsOf(key)) {
-    for (const spelling of method.spellings) {
-      const wanted = loose(spelling);
-      if (wanted.length < 2 || wanted.length <= (best?.length ?? 0)) continue;
-      if (findWhole(plain, wanted) >= 0) best = { method: method.key, printed: spelling, length: wanted.length };
-    }
+  for (const { method, spelling, wanted } of spellingsOf(key)) {
+    if (wanted.length <= (best?.length ?? 0)) continue;
+    if (findWhole(plain, wanted) >= 0) best = { method, printed: spelling, length: wanted.length };
   }
   return best;
 }
@@ -158,23 +171,25 @@ function formOf(key: AnalyteKey, text: string): { form: string | null; doubt: st
 /** A target range inside a label ("Phosphorus (25-50 ppm)") is no part of the name. */
 const RANGE_IN_LABEL = /\(\s*[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*[^)]*\)/g;
 
-function nameIn(printed: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null {
-  const raw = printed.replace(RANGE_IN_LABEL, ' ').trim();
-  const whole = lookUp(normal(raw), raw);
-  if (whole !== null) return { ...whole, strength: 1 };
-  const unit = unitIn(raw);
-  const withoutUnit = unit === null ? normal(raw) : unit.rest;
-  const second = unit === null ? null : lookUp(withoutUnit, raw);
-  if (second !== null) return { ...second, strength: 0.99 };
-  const withoutMethod = cutMethods(withoutUnit);
-  const third = lookUp(withoutMethod, raw);
-  if (third !== null) return { ...third, strength: 0.98 };
-  const bare = withoutMethod.replace(NOISE, ' ').replace(/\s+/g, ' ').trim();
-  const fourth = bare === withoutMethod ? null : lookUp(bare, raw);
-  if (fourth !== null) return { ...fourth, strength: 0.96 };
-  const same = twoNames(withoutUnit) ?? sameInAllParts(raw);
-  return same === null ? null : { analyte: same, strength: 0.97, ambiguous: null };
-}
+const nameIn = remembered(
+  (printed: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null => {
+    const raw = printed.replace(RANGE_IN_LABEL, ' ').trim();
+    const whole = lookUp(normal(raw), raw);
+    if (whole !== null) return { ...whole, strength: 1 };
+    const unit = unitIn(raw);
+    const withoutUnit = unit === null ? normal(raw) : unit.rest;
+    const second = unit === null ? null : lookUp(withoutUnit, raw);
+    if (second !== null) return { ...second, strength: 0.99 };
+    const withoutMethod = cutMethods(withoutUnit);
+    const third = lookUp(withoutMethod, raw);
+    if (third !== null) return { ...third, strength: 0.98 };
+    const bare = withoutMethod.replace(NOISE, ' ').replace(/\s+/g, ' ').trim();
+    const fourth = bare === withoutMethod ? null : lookUp(bare, raw);
+    if (fourth !== null) return { ...fourth, strength: 0.96 };
+    const same = twoNames(withoutUnit) ?? sameInAllParts(raw);
+    return same === null ? null : { analyte: same, strength: 0.97, ambiguous: null };
+  },
+);
 
 /**
  * What a label or column heading means. `text` is the heading's own words; `captions` are the words of merged captions

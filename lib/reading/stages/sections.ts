@@ -95,15 +95,20 @@ const EXTRACTANTS = METHODS.filter((method) =>
   ['M3', 'M1', 'mod_Morgan', 'Morgan', 'AB_DTPA', 'H3A', 'NH4OAc'].includes(method.key),
 );
 
+const LONG_NAMES = ANALYTES.map((entry) => ({
+  key: entry.key,
+  symbol: entry.symbol,
+  names: entry.spellings.filter((spelling) => spelling.length > 3).map((spelling) => normal(spelling)),
+}));
+
 function analytesNamed(text: string): AnalyteKey[] {
+  const plain = normal(text);
   const found = new Set<AnalyteKey>();
   const words = text.split(/[\s,;:&/()]+|\band\b/).map((word) => word.replace(/\.$/, ''));
-  for (const entry of ANALYTES) {
-    const symbol = entry.symbol;
-    const names = entry.spellings.filter((spelling) => spelling.length > 3).map((spelling) => normal(spelling));
+  for (const { key, symbol, names } of LONG_NAMES) {
     const bySymbol = words.includes(symbol) && symbol !== 'CaCO3';
-    const byName = names.some((name) => findWhole(normal(text), name) >= 0);
-    if (bySymbol || byName) found.add(entry.key);
+    const byName = names.some((name) => findWhole(plain, name) >= 0);
+    if (bySymbol || byName) found.add(key);
   }
   if (found.has('buffer_ph') && !/(^|[,;:&] ?|and )pH\b(?! buffer)/.test(text.replace(/buffer pH/gi, '')))
     found.delete('soil_ph_water');

@@ -59,30 +59,46 @@ export function storedBox(page: Upright, box: { x0: number; y0: number; x1: numb
   return [share(corners[0], w), share(corners[1], h), share(corners[2], w), share(corners[3], h)];
 }
 
+/** Words by their baseline in steps of two points, so that a neighbour is looked for on its own line only. */
+function byBaseline(words: readonly Placed[]): ReadonlyMap<number, Placed[]> {
+  const lines = new Map<number, Placed[]>();
+  for (const word of words) {
+    const step = Math.round(word.y1 / 2);
+    const line = lines.get(step);
+    if (line === undefined) lines.set(step, [word]);
+    else line.push(word);
+  }
+  return lines;
+}
+
+function continues(whole: Placed, other: Placed): boolean {
+  return (
+    other.x0 >= whole.x0 &&
+    Math.abs(other.x0 - whole.x1) < INSIDE_WORD * whole.size &&
+    Math.abs(other.y1 - whole.y1) < 0.12 * whole.size &&
+    Math.abs(other.size - whole.size) < 0.05 * whole.size
+  );
+}
+
 function joinPieces(words: readonly Placed[]): Placed[] {
   const sorted = [...words].sort((a, b) => a.y0 - b.y0 || a.x0 - b.x0);
-  const joined: Placed[] = [];
+  const lines = byBaseline(sorted);
   const used = new Set<Placed>();
-  for (const word of sorted) {
-    if (used.has(word)) continue;
-    let whole = word;
+  const joined: { first: Placed; whole: Placed }[] = [];
+  for (const first of sorted) {
+    if (used.has(first)) continue;
+    let whole = first;
     for (;;) {
-      const next = sorted.find(
-        (other) =>
-          !used.has(other) &&
-          other !== word &&
-          other.x0 >= whole.x0 &&
-          Math.abs(other.y1 - whole.y1) < 0.12 * whole.size &&
-          Math.abs(other.size - whole.size) < 0.05 * whole.size &&
-          Math.abs(other.x0 - whole.x1) < INSIDE_WORD * whole.size,
-      );
+      const step = Math.round(whole.y1 / 2);
+      const near = [step - 1, step, step + 1].flatMap((one) => lines.get(one) ?? []);
+      const next = near.find((other) => other !== first && !used.has(other) && continues(whole, other));
       if (next === undefined) break;
       used.add(next);
       whole = { ...whole, text: whole.text + next.text, x1: next.x1, y0: Math.min(whole.y0, next.y0) };
     }
-    joined.push(whole);
+    joined.push({ first, whole });
   }
-  return joined.filter((word) => !used.has(word));
+  return joined.filter(({ first }) => !used.has(first)).map(({ whole }) => whole);
 }
 
 /**
