@@ -65,7 +65,6 @@ export const addressInput = z.strictObject({ email: emailSchema });
 export const addressAnswer = z.object({ email: z.string() });
 
 export const linkInput = z.strictObject({ token: linkTokenSchema });
-export const verificationSchema = z.object({ email: z.string(), name: z.string() });
 export const verifiedAnswer = z.object({
   email: z.string(),
   /** What became of the invitation that came with the sign-up. */

@@ -1,5 +1,6 @@
 import { and, eq } from 'drizzle-orm';
 import { invitation } from '@/db/schema';
+import { asInvitationId } from '@/lib/domain/ids';
 import { notFound, Problem } from '@/lib/errors';
 import { invitationInput } from '@/lib/schemas/sites';
 import { siteVerb } from '../verb';
@@ -8,7 +9,7 @@ export const revokeInvitation = siteVerb({
   act: 'site.manage',
   input: invitationInput,
   run: async ({ ctx, tx, siteId, input, audit }) => {
-    const here = and(eq(invitation.siteId, siteId), eq(invitation.id, input.invitationId));
+    const here = and(eq(invitation.siteId, siteId), eq(invitation.id, asInvitationId(input.invitationId)));
     const [row] = await tx
       .update(invitation)
       .set({ state: 'revoked', answeredAt: ctx.now })

@@ -63,7 +63,6 @@ function Remove({ path, member, onChanged }: { path: string; member: Member; onC
   return (
     <ConfirmButton
       size="small"
-      look="destructive"
       title={`Remove ${member.name}?`}
       sentence="They see nothing of this site from now on. What they recorded stays, under their name."
       confirmLabel={`Remove ${member.name}`}
