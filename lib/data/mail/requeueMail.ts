@@ -4,14 +4,17 @@ import { outbox } from '@/db/schema';
 import { enqueue, withPeople } from '../transaction';
 import { workerVerb } from '../verb';
 
-const WAIT_MS = 5 * 60 * 1000;
+const WAIT_SECONDS = 5 * 60;
 
-/** Messages whose job was lost or gave up while the mail service was down get a new job; sending twice is closed by the key. */
+/**
+ * Messages whose job was lost or gave up while the mail service was down get a new job; sending twice is closed by the
+ * key. However often this runs, a message gets one new job in five minutes: a long outage must not pile them up.
+ */
 export const requeueMail = workerVerb({
   input: z.strictObject({}),
   run: ({ ctx }) =>
     withPeople(async (tx) => {
-      const before = new Date(ctx.now.getTime() - WAIT_MS);
+      const before = new Date(ctx.now.getTime() - WAIT_SECONDS * 1000);
       const rows = await tx
         .select({ id: outbox.id })
         .from(outbox)
@@ -23,7 +26,8 @@ export const requeueMail = workerVerb({
         )
         .orderBy(outbox.createdAt)
         .limit(200);
-      for (const row of rows) await enqueue(tx, 'send-mail', { id: row.id }, { singletonKey: row.id });
+      const once = { singletonSeconds: WAIT_SECONDS };
+      for (const row of rows) await enqueue(tx, 'send-mail', { id: row.id }, { ...once, singletonKey: row.id });
       return rows.length;
     }),
 });

@@ -3,7 +3,7 @@ import PgBoss from 'pg-boss';
 export const QUEUE_SCHEMA = 'queue';
 
 export type ExecuteSql = (text: string, values: unknown[]) => Promise<{ rows: Record<string, unknown>[] }>;
-export type SendOptions = { singletonKey?: string; startAfter?: Date };
+export type SendOptions = { singletonKey?: string; singletonSeconds?: number; startAfter?: Date };
 
 const untouched: ExecuteSql = () => Promise.reject(new Error('A job is sent inside a transaction, never beside it.'));
 
@@ -24,7 +24,13 @@ export type QueueDefinition = { name: string; deadLetter: string; expireInSecond
 
 /** Creates the queue's own tables and the queues; the only step that may, so it runs as the owner. */
 export async function prepareQueue(ownerUrl: string, queues: QueueDefinition[], appRole: string): Promise<void> {
-  const boss = new PgBoss({ connectionString: ownerUrl, schema: QUEUE_SCHEMA, supervise: false, schedule: false, max: 1 });
+  const boss = new PgBoss({
+    connectionString: ownerUrl,
+    schema: QUEUE_SCHEMA,
+    supervise: false,
+    schedule: false,
+    max: 1,
+  });
   await boss.start();
   try {
     for (const queue of queues) {
@@ -43,7 +49,10 @@ export async function prepareQueue(ownerUrl: string, queues: QueueDefinition[], 
     // The role comes from our own settings, not from a person; identifiers cannot be bound as parameters.
     const db = boss.getDb();
     await db.executeSql(`GRANT USAGE ON SCHEMA ${QUEUE_SCHEMA} TO ${appRole}`, []);
-    await db.executeSql(`GRANT SELECT, INSERT, UPDATE, DELETE ON ALL TABLES IN SCHEMA ${QUEUE_SCHEMA} TO ${appRole}`, []);
+    await db.executeSql(
+      `GRANT SELECT, INSERT, UPDATE, DELETE ON ALL TABLES IN SCHEMA ${QUEUE_SCHEMA} TO ${appRole}`,
+      [],
+    );
   } finally {
     await boss.stop({ graceful: false, close: true });
   }
