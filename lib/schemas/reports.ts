@@ -90,7 +90,7 @@ export const reportSchema = z.object({
   pages: z.number().nullable(),
   pagesRead: z.number(),
   revision: z.number(),
-  /** Why nothing was taken from the file, in words. */
+  /** Why nothing was taken from the file, or what it waits for, in words. */
   refusal: remarkSchema.nullable(),
   warnings: z.array(remarkSchema),
   laboratory: z.object({ id: z.string(), name: z.string() }).nullable(),

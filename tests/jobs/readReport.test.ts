@@ -2,6 +2,7 @@ import { asc, eq } from 'drizzle-orm';
 import { afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { laboratory, readingRow, recommendation, report, reportSample } from '@/db/schema';
 import { bringBack } from '@/lib/data/reports/bringBack';
+import { getReport } from '@/lib/data/reports/getReport';
 import { readAgain } from '@/lib/data/reports/readAgain';
 import { setAside } from '@/lib/data/reports/setAside';
 import { takeByHand } from '@/lib/data/reports/takeByHand';
@@ -229,7 +230,17 @@ describe('reading a report', () => {
     const id = await uploaded();
     await tellStore({ fail: 10, method: 'GET' });
     await expect(run(id, answering(twoSamples()))).rejects.toMatchObject({ reason: 'file-store' });
+    await giveUp(id);
+    const said = await getReport({ ctx: await ctxAs(here.people.viewer), input: { siteId: here.id, reportId: id } });
+    expect([said.state, said.refusal?.sentence]).toEqual([
+      'received',
+      expect.stringContaining('once the store is back'),
+    ]);
     await calmStore();
+    await world.moveClock(181);
+    await sweepUploads(await ctxWorker());
+    await world.moveClock(0);
+    expect(await jobsFor(id)).toHaveLength(2);
     await run(id, answering(twoSamples()));
     expect((await stand(id)).row).toMatchObject({ state: 'in-review', refusalCode: null });
   });

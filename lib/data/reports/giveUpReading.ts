@@ -7,10 +7,16 @@ import { audit } from '../audit';
 import { withSite } from '../transaction';
 import { workerVerb } from '../verb';
 
+/** What a reading is released with while the file store does not answer. */
+export const STORE_DOWN = 'file-store';
+
 const SENTENCE =
   'This file was tried several times and could not be read. It is kept; type its numbers in beside the page, or let it be read again later.';
 
-/** No try is left: the report says so instead of waiting for ever. */
+/**
+ * No try is left: the report says so instead of waiting for ever. A store that is down is nobody's fault and passes: such
+ * a report stays received, and the sweep asks for it again every few minutes.
+ */
 export const giveUpReading = workerVerb({
   input: z.strictObject({ siteId: idSchema, id: idSchema }),
   run: ({ ctx, input }): Promise<void> => {
@@ -24,7 +30,14 @@ export const giveUpReading = workerVerb({
           refusalSentence: sql`coalesce(${report.refusalSentence}, ${SENTENCE})`,
           version: sql`${report.version} + 1`,
         })
-        .where(and(eq(report.siteId, siteId), eq(report.id, input.id), inArray(report.state, ['received', 'reading'])))
+        .where(
+          and(
+            eq(report.siteId, siteId),
+            eq(report.id, input.id),
+            inArray(report.state, ['received', 'reading']),
+            sql`${report.refusalCode} is distinct from ${STORE_DOWN}`,
+          ),
+        )
         .returning({ id: report.id });
       if (rows.length > 0)
         await audit(tx, ctx, siteId, { act: 'report.give-up', objectKind: 'report', objectId: input.id });

@@ -4,6 +4,7 @@ import { laboratory, report, reportSample } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
 import type { Report } from '@/lib/schemas/reports';
 import { namesOf } from '../people/names';
+import { STORE_DOWN } from './giveUpReading';
 
 /** After this a report that nobody reads is worth a word: the worker may not be running. */
 const LONG_WAIT_MS = 60_000;
@@ -20,7 +21,8 @@ function toReport(
   now: Date,
 ): Report {
   const who = (id: string) => ({ id, name: names.get(id) ?? 'somebody who has left' });
-  const refused = row.state === 'unreadable' || row.state === 'not-soil';
+  const waits = row.state === 'received' && row.refusalCode === STORE_DOWN;
+  const refused = row.state === 'unreadable' || row.state === 'not-soil' || waits;
   return {
     id: row.id,
     origin: row.origin,

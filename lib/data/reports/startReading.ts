@@ -21,7 +21,13 @@ export const startReading = workerVerb({
       const lost = new Date(ctx.now.getTime() - LOST_AFTER_MS);
       const [row] = await tx
         .update(report)
-        .set({ state: 'reading', readingStartedAt: ctx.now, pagesRead: 0 })
+        .set({
+          state: 'reading',
+          readingStartedAt: ctx.now,
+          pagesRead: 0,
+          refusalCode: null,
+          refusalSentence: null,
+        })
         .where(
           and(
             eq(report.siteId, input.siteId),

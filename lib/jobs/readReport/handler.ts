@@ -1,4 +1,4 @@
-import { giveUpReading } from '@/lib/data/reports/giveUpReading';
+import { giveUpReading, STORE_DOWN } from '@/lib/data/reports/giveUpReading';
 import { noteProgress } from '@/lib/data/reports/noteProgress';
 import { releaseReading } from '@/lib/data/reports/releaseReading';
 import { saveReading } from '@/lib/data/reports/saveReading';
@@ -18,8 +18,14 @@ export type ReadFile = (input: {
 
 /** What the grower is told if no later try goes better. */
 function whatWentWrong(error: unknown): { code: string; sentence: string } {
-  if (error instanceof Problem && (error.reason === 'file-store' || error.reason === 'file-changed')) {
-    return { code: error.reason, sentence: `${error.sentence} The file was not read; let it be read again later.` };
+  if (error instanceof Problem && error.reason === 'file-store') {
+    return {
+      code: STORE_DOWN,
+      sentence: 'The file store is not answering, so this file waits. It is read once the store is back.',
+    };
+  }
+  if (error instanceof Problem && error.reason === 'file-changed') {
+    return { code: error.reason, sentence: `${error.sentence} Send the file again, or let it be read again later.` };
   }
   if (error instanceof Problem && error.code === 'not-found') {
     return {
