@@ -105,7 +105,9 @@ export function PlanDrawing(props: PlanDrawingProps) {
         onDragOver={(event) => event.preventDefault()}
         onDrop={(event) => {
           event.preventDefault();
-          if (takesFiles && event.dataTransfer.files.length > 0) props.say('Not sent. Let the file go over a plot.');
+          event.stopPropagation();
+          if (takesFiles && event.dataTransfer.files.length > 0)
+            props.onDropFiles?.(null, [...event.dataTransfer.files]);
         }}
       >
         <title>{`Plan of ${props.siteName}`}</title>

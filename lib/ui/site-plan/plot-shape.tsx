@@ -4,7 +4,7 @@ import type { DragEvent, KeyboardEvent, PointerEvent } from 'react';
 import { cx } from '../cx';
 import { labelSpot } from './geometry';
 import type { DrawingSize } from './plan-furniture';
-import { fitText, lastTestText, plotArea, plotPhrase } from './plot-words';
+import { fitText, lastTestText, plotArea, plotPhrase, waitingText } from './plot-words';
 import type { LengthUnit, PlanOutline, PlanPlot } from './types';
 import { type PlanView, toDrawing } from './viewport';
 
@@ -99,7 +99,7 @@ function PlotLabel({ plot, outline, view, size, unit, dropTarget }: PlotShapePro
   const upload = plot.uploads?.[0];
   const lines = dropTarget
     ? ['Let go here']
-    : [plotArea(plot, outline, unit), ...testLines(plot, width), plot.crop ?? '', upload?.text ?? ''];
+    : [plotArea(plot, outline, unit), ...testLines(plot, width), plot.crop ?? '', upload?.text ?? waitingText(plot)];
   const room = Math.max(0, Math.floor((height - 18) / LINE));
   const shown = lines
     .map((line) => fitText(line, width, 14))

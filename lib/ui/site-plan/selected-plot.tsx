@@ -1,6 +1,7 @@
 'use client';
 
 import { Upload } from 'lucide-react';
+import { LinkButton } from '../actions/link-button';
 import { FileButton } from '../files/file-button';
 import { placeAt } from './geometry';
 import { PlotForm } from './plot-form';
@@ -42,6 +43,11 @@ export function SelectedPlot(props: SelectedPlotProps) {
             {[plotArea(plot, outline, unit), lastTestText(plot), plot.crop].filter(Boolean).join(' · ')}
           </p>
         </div>
+        {props.editHref ? (
+          <LinkButton look="quiet" href={props.editHref(plot.id)}>
+            Edit<span className="sr-only"> {plot.name}</span>
+          </LinkButton>
+        ) : null}
         {canUpload && onDropFiles ? (
           <FileButton
             multiple

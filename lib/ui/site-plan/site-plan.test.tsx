@@ -190,12 +190,52 @@ describe('files', () => {
     expect(onDropFiles.mock.calls[0]?.[1][0].name).toBe('spring.pdf');
   });
 
-  it('let go beside every plot are not sent, and that is said', () => {
+  it('let go beside every plot go to the site', () => {
     const onDropFiles = vi.fn();
     render(<Held onDropFiles={onDropFiles} />);
     fireEvent.drop(screen.getByTestId('site-plan-drawing'), carried());
+    expect(onDropFiles.mock.calls).toEqual([[null, [expect.objectContaining({ name: 'spring.pdf' })]]]);
+  });
+
+  it('let go over a row of the list go to its plot, also one that is not drawn', () => {
+    const onDropFiles = vi.fn();
+    render(<Held onDropFiles={onDropFiles} />);
+    fireEvent.drop(screen.getByRole('link', { name: 'Far field' }), carried());
+    expect(onDropFiles.mock.calls[0]?.[0]).toBe('far');
+  });
+
+  it('a viewer lets go are sent nowhere', () => {
+    const onDropFiles = vi.fn();
+    render(<Held onDropFiles={onDropFiles} canUpload={false} />);
+    fireEvent.drop(shape(/North/), carried());
+    fireEvent.drop(screen.getByTestId('site-plan-drawing'), carried());
+    fireEvent.drop(screen.getByRole('link', { name: 'Far field' }), carried());
     expect(onDropFiles).not.toHaveBeenCalled();
-    expect(screen.getByTestId('site-plan-said').textContent).toContain('over a plot');
+  });
+
+  it('show beside their plot how far they are and what comes next', () => {
+    const plots = PLOTS.map((plot) =>
+      plot.id === 'south'
+        ? {
+            ...plot,
+            waiting: { count: 2, href: '/reports' },
+            uploads: [
+              {
+                fileName: 'spring.pdf',
+                text: '3 samples to review',
+                share: null,
+                link: { href: '/r', label: 'Review' },
+              },
+            ],
+          }
+        : plot,
+    );
+    render(<Held plots={plots} />);
+    expect(screen.getByRole('link', { name: '2 reports to review for South bed' }).getAttribute('href')).toBe(
+      '/reports',
+    );
+    expect(screen.getByRole('link', { name: 'Review spring.pdf' }).getAttribute('href')).toBe('/r');
+    expect(shape(/South bed/).getAttribute('aria-label')).toContain('2 reports to review');
   });
 
   it('are picked by a button in the list, and a viewer has none', () => {

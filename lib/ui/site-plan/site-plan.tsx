@@ -3,6 +3,7 @@
 import { Maximize, PencilRuler, Square, Undo2, ZoomIn, ZoomOut } from 'lucide-react';
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { Button } from '../actions/button';
+import { ACCEPTED_FILES } from '../files/upload-item';
 import { outlineOf, overlaps } from './geometry';
 import { PlanDrawing } from './plan-drawing';
 import { PlanList } from './plan-list';
@@ -13,7 +14,6 @@ import { usePlanDrafts } from './use-plan-drafts';
 import type { DrawMode } from './use-plan-pointer';
 import { fitView, type PlanView, zoomView } from './viewport';
 
-const ACCEPT = '.pdf,.csv,.tsv,.txt,.xlsx,.xls,.png,.jpg,.jpeg';
 const NEW_PLOT = outlineOf({ x: 1, y: 1, width: 6, height: 3 });
 const FIRST_SIZE = { width: 900, height: 600 };
 
@@ -190,7 +190,7 @@ export function SitePlan(props: SitePlanProps) {
             plot={selected}
             outline={selectedOutline}
             overlapping={overlapping.map((plot) => plot.name)}
-            accept={ACCEPT}
+            accept={ACCEPTED_FILES}
             onNumbers={(outline) => drafts.commit(selected, outline)}
           />
         ) : null}
@@ -198,7 +198,7 @@ export function SitePlan(props: SitePlanProps) {
       <p role="status" aria-live="polite" className="min-h-6 text-sm text-clay" data-testid="site-plan-said">
         {said}
       </p>
-      <PlanList {...props} outlineOf={drafts.outlineOf} accept={ACCEPT} />
+      <PlanList {...props} outlineOf={drafts.outlineOf} accept={ACCEPTED_FILES} />
     </div>
   );
 }

@@ -14,6 +14,8 @@ export interface PlanUpload {
   readonly text: string;
   /** 0 to 1; null while the amount is not known. */
   readonly share: number | null;
+  /** The next step, where there is one: review what was read, answer a question. */
+  readonly link?: { readonly href: string; readonly label: string };
 }
 
 export interface PlanPlot {
@@ -23,9 +25,12 @@ export interface PlanPlot {
   readonly outline: PlanOutline | null;
   /** Typed area wins over the outline, and the plan says so. */
   readonly typedAreaM2?: number;
-  readonly lastTest?: { readonly date: string; readonly ph: string | null };
+  /** `phDate` where the pH comes from an older test than the last. */
+  readonly lastTest?: { readonly date: string; readonly ph: string | null; readonly phDate?: string };
   readonly crop?: string;
   readonly uploads?: readonly PlanUpload[];
+  /** Reports that wait for somebody to review them. */
+  readonly waiting?: { readonly count: number; readonly href: string };
 }
 
 export interface SitePlanProps {
@@ -41,10 +46,13 @@ export interface SitePlanProps {
   readonly plotHref: (plotId: string) => string;
   /** Called with the plot's address in place of following the link, for client-side navigation. */
   readonly onOpen?: (plotId: string) => void;
+  /** Where a plot's facts are edited; left out for who may not. */
+  readonly editHref?: (plotId: string) => string;
   readonly canEdit: boolean;
   readonly canUpload: boolean;
   /** Rejected: the plan shows the old outline again and says so. */
   readonly onChangeOutline?: (plotId: string, outline: PlanOutline) => Promise<void>;
   readonly onCreate?: (outline: PlanOutline) => void;
-  readonly onDropFiles?: (plotId: string, files: readonly File[]) => void;
+  /** Null: let go over the plan but over no plot. */
+  readonly onDropFiles?: (plotId: string | null, files: readonly File[]) => void;
 }

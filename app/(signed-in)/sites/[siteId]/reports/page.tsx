@@ -1,0 +1,40 @@
+import type { Metadata } from 'next';
+import { orNotFound, pagePerson } from '@/app/_server/context';
+import { can } from '@/lib/access/table';
+import { listPlots } from '@/lib/data/plots/listPlots';
+import { listReports } from '@/lib/data/reports/listReports';
+import { getSite } from '@/lib/data/sites/getSite';
+import { Inbox } from './_components/inbox';
+import { isFilter } from './_components/report-states';
+
+export const metadata: Metadata = { title: 'Reports' };
+
+type PageProps = {
+  params: Promise<{ siteId: string }>;
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
+};
+
+export default async function ReportsPage({ params, searchParams }: PageProps) {
+  const { siteId } = await params;
+  const { show } = await searchParams;
+  const { ctx, person } = await pagePerson(`/sites/${siteId}/reports`);
+  const site = await orNotFound(getSite({ ctx, input: { siteId } }));
+  const [reports, live, archived] = await Promise.all([
+    listReports({ ctx, input: { siteId } }),
+    listPlots({ ctx, input: { siteId } }),
+    listPlots({ ctx, input: { siteId, archived: 'yes' } }),
+  ]);
+  const asked = typeof show === 'string' ? show : undefined;
+  return (
+    <Inbox
+      site={{ id: site.id, name: site.name }}
+      timeZone={person.timeZone}
+      plots={[...live.plots, ...archived.plots].map(({ id, name }) => ({ id, name }))}
+      first={reports}
+      shown={isFilter(asked) ? asked : 'all'}
+      personId={person.id}
+      mayWork={can(site.role, 'reading.work')}
+      mayDecide={can(site.role, 'reading.decide')}
+    />
+  );
+}

@@ -1,0 +1,56 @@
+'use client';
+
+import { useEffect, useRef } from 'react';
+import { useAnnounce } from '../feedback/announce';
+import { outcomeText, type UploadItem } from './upload-item';
+import { UploadRow, type UploadRowProps } from './upload-row';
+
+type UploadListProps = Pick<UploadRowProps, 'reportHref' | 'store' | 'mayType'> & {
+  readonly items: readonly UploadItem[];
+};
+
+/** Every file sent since the page was opened: what is happening to it, and what to do next. */
+export function UploadList({ items, ...row }: UploadListProps) {
+  useSpoken(items);
+  if (items.length === 0) return null;
+  return (
+    <ul aria-label="Files on their way" className="border-y border-fallow bg-white">
+      {items.map((item) => (
+        <li key={item.id} className="border-b border-horizon-5 last:border-0">
+          <UploadRow item={item} {...row} />
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+/** Finishing and failing are said without moving the focus; the bar itself is not read out byte by byte. */
+function useSpoken(items: readonly UploadItem[]) {
+  const announce = useAnnounce();
+  const said = useRef(new Map<string, string>());
+  useEffect(() => {
+    for (const item of items) {
+      const sentence = spoken(item);
+      if (sentence === null || said.current.get(item.id) === sentence) continue;
+      said.current.set(item.id, sentence);
+      announce(sentence, { visible: false });
+    }
+  }, [announce, items]);
+}
+
+function spoken({ file, stage }: UploadItem): string | null {
+  switch (stage.kind) {
+    case 'kept':
+      return `${file.name} is sent and kept.`;
+    case 'settled':
+      return `${file.name}: ${outcomeText(stage.report)}.`;
+    case 'seen-before':
+      return `${file.name} was sent before.`;
+    case 'refused':
+      return `${file.name}: ${stage.title}. ${stage.detail}`;
+    case 'pausing':
+      return `${file.name}: the connection was lost. It is sent again.`;
+    default:
+      return null;
+  }
+}
