@@ -69,6 +69,7 @@ function settleUnit(
     return { unit, printed: unitPrinted, doubts: [doubt] };
   }
   if (unit !== null) return { unit, printed: unitPrinted, doubts: [] };
+  if (candidate.method === 'index') return { unit: 'index', printed: null, doubts: [] };
   if (statements.unit !== null && entry.unit === 'mg/kg') {
     return { unit: statements.unit.unit, printed: statements.unit.printed, doubts: [] };
   }
@@ -97,7 +98,7 @@ export function settle(candidate: Candidate, statements: Statements): ReadResult
     qualifier: candidate.value.qualifier,
     unit,
     unitPrinted: printed,
-    form: candidate.label.form,
+    form: unit === 'index' ? null : candidate.label.form,
     method,
     methodPrinted: candidate.methodPrinted ?? stated?.printed ?? null,
     rating: candidate.rating,

@@ -8,13 +8,12 @@ export {
   type AnalyteMethod,
   isMethodKey,
   METHODS,
-  type Method,
   type MethodKey,
   methodLabel,
   methodsOf,
 } from './methods';
-export { isUnitKey, UNIT_KEYS, UNITS, type Unit, type UnitBasis, type UnitKey, unitOf } from './units';
-export { NOT_ANALYSED, QUALIFIERS, type Qualifier, RATINGS, type RatingClass } from './words';
+export { isUnitKey, UNITS, type UnitKey, unitOf } from './units';
+export { NOT_ANALYSED, QUALIFIERS, type Qualifier, RATINGS } from './words';
 
 export type Analyte = {
   readonly key: AnalyteKey;

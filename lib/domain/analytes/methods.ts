@@ -117,7 +117,7 @@ export type AnalyteMethod = {
   readonly source: string;
 };
 
-export type Method = {
+type Method = {
   readonly key: MethodKey;
   readonly label: string;
   readonly spellings: readonly string[];

@@ -2,7 +2,7 @@
  * The closed list of units a result can carry. The number on the page is never converted here: `key` only settles the
  * spelling. `basis` says what one divides by, because mass, volume and area results are charted only with their like.
  */
-export type UnitBasis = 'mass' | 'volume' | 'area' | 'charge' | 'share' | 'index' | 'none';
+type UnitBasis = 'mass' | 'volume' | 'area' | 'charge' | 'share' | 'index' | 'none';
 
 const ROWS = [
   [
@@ -77,7 +77,7 @@ const ROWS = [
 
 export type UnitKey = (typeof ROWS)[number][0];
 
-export type Unit = {
+type Unit = {
   readonly key: UnitKey;
   readonly label: string;
   readonly basis: UnitBasis;
@@ -96,8 +96,6 @@ export const UNITS: readonly Unit[] = ROWS.map(([key, label, basis, text]) => ({
   basis,
   spellings: spellingsOf(text),
 }));
-
-export const UNIT_KEYS: readonly UnitKey[] = ROWS.map((row) => row[0]);
 
 const BY_KEY: ReadonlyMap<string, Unit> = new Map(UNITS.map((unit) => [unit.key, unit]));
 

@@ -59,7 +59,7 @@ export const NOT_ANALYSED: readonly string[] = [
   'none requested',
 ];
 
-export type RatingClass = 'very_low' | 'low' | 'medium' | 'optimum' | 'high' | 'very_high' | 'excessive';
+type RatingClass = 'very_low' | 'low' | 'medium' | 'optimum' | 'high' | 'very_high' | 'excessive';
 
 /** Rating words, without bare digits and without letters that are more often something else. */
 export const RATINGS: readonly {

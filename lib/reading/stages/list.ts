@@ -56,11 +56,17 @@ function roleHeader(line: CellLine, above: CellLine | undefined): RoleHeader | n
       (joined === null ? null : roleOf(joined, first)) ??
       roleOf(cell.phrase.text, first) ??
       (unit === null ? null : 'result');
-    if (role === null) continue;
-    spans.push({ x0: cell.phrase.x0, x1: cell.phrase.x1, role, heading: joined ?? cell.phrase.text });
+    // A heading that says nothing we know still has a column of its own; its numbers must not go to a neighbour.
+    spans.push({
+      x0: cell.phrase.x0,
+      x1: cell.phrase.x1,
+      role: role ?? 'unknown',
+      heading: joined ?? cell.phrase.text,
+    });
   }
-  const telling = spans.filter((span) => span.role !== 'analyte').length;
-  const enough = spans.length >= 2 && telling >= 1 && spans.length >= 0.6 * line.cells.length;
+  const known = spans.filter((span) => span.role !== 'unknown');
+  const telling = known.filter((span) => span.role !== 'analyte').length;
+  const enough = known.length >= 2 && telling >= 1 && known.length >= 0.6 * line.cells.length;
   return enough ? { line, spans: settleDates(spans) } : null;
 }
 
@@ -150,7 +156,7 @@ function choose(found: readonly Found[]): { taken: Found[]; doubts: Remark[]; po
 /** A label on this line, or one whose words went on from the line above or to the line below. */
 function labelAt(lines: readonly CellLine[], at: number, cell: PageCell, next: PageCell | undefined): Label | null {
   if (cell.meaning.kind === 'value' || cell.meaning.kind === 'range') return null;
-  const own = readLabel(cell.phrase.text.replace(/[:=]\s*$/, '').replace(/\.{3,}\s*$/, ''));
+  const own = readLabel(cell.phrase.text.replace(/[:=]\s*$/, '').replace(/\s*\.{3,}\s*$/, ''));
   if (own !== null) return own;
   if (cell.meaning.kind !== 'text' || next?.meaning.kind !== 'value') return null;
   for (const side of [-1, 1]) {

@@ -53,20 +53,15 @@ export function adviceOfLines(
   zones: readonly ZoneBox[],
   sampleId: (line: CellLine) => string | null,
 ): ReadRecommendation[] {
+  let header: CellLine | null = null;
   return lines.flatMap((line) => {
+    if (header !== null && header.line.page !== line.line.page) header = null;
+    const unit = zoneOf(line, zones)?.unit ?? null;
+    if (line.values === 0 && line.cells.length >= 3) header = line;
+    const table = header === null ? [] : adviceOfRow(line, header, unit, sampleId(line));
+    if (table.length > 0) return table;
     const text = line.cells.map((cell) => cell.phrase.text).join(' ');
-    const first = line.cells[0]?.phrase;
-    const zone = zones.find(
-      (one) =>
-        one.zone === 'recommendation' &&
-        one.page === line.line.page.number &&
-        first !== undefined &&
-        first.x0 >= one.x0 &&
-        first.x0 < one.x1 &&
-        first.y0 > one.y0 &&
-        first.y0 < one.y1,
-    );
-    const found = fromText(text, zone?.unit ?? null);
+    const found = fromText(text, line.cells.length <= 2 ? unit : null);
     if (found === null) return [];
     const box = {
       x0: Math.min(...line.cells.map((cell) => cell.phrase.x0)),
@@ -75,6 +70,42 @@ export function adviceOfLines(
       y1: line.line.y1,
     };
     return [{ sampleId: sampleId(line), ...found, page: line.line.page.number, box: storedBox(line.line.page, box) }];
+  });
+}
+
+function zoneOf(line: CellLine, zones: readonly ZoneBox[]): ZoneBox | undefined {
+  const first = line.cells[0]?.phrase;
+  if (first === undefined) return undefined;
+  const page = line.line.page.number;
+  const advice = zones.filter((one) => one.zone === 'recommendation' && one.page === page);
+  return advice.find((one) => first.x0 >= one.x0 && first.x0 < one.x1 && first.y0 > one.y0 && first.y0 < one.y1);
+}
+
+/** A row of a table of advice: each number goes with the heading it stands under. */
+function adviceOfRow(
+  line: CellLine,
+  header: CellLine,
+  unit: UnitKey | null,
+  sampleId: string | null,
+): ReadRecommendation[] {
+  const numbers = line.cells.filter((cell) => cell.meaning.kind === 'value');
+  const [first] = line.cells;
+  if (numbers.length < 2 || first === undefined) return [];
+  const name = first.meaning.kind === 'value' ? sampleId : first.phrase.text;
+  return numbers.flatMap((cell) => {
+    const over = header.cells.find((one) => one.phrase.x0 < cell.phrase.x1 && one.phrase.x1 > cell.phrase.x0);
+    if (over === undefined || cell.meaning.kind !== 'value') return [];
+    return [
+      {
+        sampleId: name,
+        item: over.phrase.text,
+        amount: cell.meaning.value,
+        printed: cell.phrase.text,
+        unit: cell.meaning.unit ?? unitIn(over.phrase.text)?.unit ?? unit,
+        page: line.line.page.number,
+        box: storedBox(line.line.page, cell.phrase),
+      },
+    ];
   });
 }
 

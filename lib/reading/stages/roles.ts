@@ -10,7 +10,8 @@ export type Role =
   | 'difference'
   | 'recommendation'
   | 'analyte'
-  | 'date';
+  | 'date'
+  | 'unknown';
 
 const ROLES: readonly (readonly [Role, RegExp])[] = [
   ['unit', /^(units?|uom|measured in)$/i],
@@ -23,7 +24,7 @@ const ROLES: readonly (readonly [Role, RegExp])[] = [
   ['rating', /^(rating|interpretation|status|class|category|rank|level rating|soil level|rtg\.?)$/i],
   [
     'result',
-    /^((your|soil|lab|laboratory|test|this|current|present|new|actual|amount) )*(results?|found|level( found)?|value( found)?|values|test|soil test|measured|actual|reading|current|concentration|amount|analysis result|this (year|test|sample))$/i,
+    /^((your|soil|lab|laboratory|test|this|current|present|new|actual|amount) )*(results?|found|level( found)?|value( found)?|values|test|soil test|measured|actual|reading|current|concentration|amount|analysis result|your (soil|garden|bed|plot|sample)|this (year|test|sample))$/i,
   ],
   [
     'analyte',
