@@ -22,7 +22,7 @@ export const withdrawReport = siteVerb({
       withdrawnReason: reason,
     });
     const mine = await tx
-      .select({ id: reportSample.id, plotId: reportSample.plotId })
+      .select({ id: reportSample.id, plotId: reportSample.plotId, sampleId: reportSample.sampleId })
       .from(reportSample)
       .where(and(eq(reportSample.siteId, siteId), eq(reportSample.reportId, reportId)));
     const plotIds = [...new Set(mine.flatMap((one) => (one.plotId === null ? [] : [one.plotId])))];
@@ -51,11 +51,23 @@ export const withdrawReport = siteVerb({
         { reason: 'same-as-leans' },
       );
     }
-    const gone = await tx
-      .update(result)
-      .set({ supersededAt: ctx.now, supersededReason: reason })
-      .where(and(eq(result.siteId, siteId), eq(result.reportId, reportId), isNull(result.supersededAt)))
-      .returning({ id: result.id });
+    // Through the bags, which the index of live results begins with; a table of many years is not searched.
+    const bags = [...new Set(mine.flatMap((one) => (one.sampleId === null ? [] : [one.sampleId])))];
+    const gone =
+      bags.length === 0
+        ? []
+        : await tx
+            .update(result)
+            .set({ supersededAt: ctx.now, supersededReason: reason })
+            .where(
+              and(
+                eq(result.siteId, siteId),
+                inArray(result.sampleId, bags),
+                eq(result.reportId, reportId),
+                isNull(result.supersededAt),
+              ),
+            )
+            .returning({ id: result.id });
     const detail = { reason, results: gone.length };
     await audit({ act: 'report.withdraw', objectKind: 'report', objectId: reportId, detail });
     for (const plotId of plotIds) {

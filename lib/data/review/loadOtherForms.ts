@@ -71,7 +71,14 @@ export async function loadOtherForms(
       : await tx
           .select()
           .from(readingRow)
-          .where(and(eq(readingRow.siteId, siteId), inArray(readingRow.reportSampleId, ids)));
+          .where(
+            and(
+              eq(readingRow.siteId, siteId),
+              // Implied by the samples, and what the index knows.
+              inArray(readingRow.reportId, [...new Set(others.map((other) => other.report.id))]),
+              inArray(readingRow.reportSampleId, ids),
+            ),
+          );
   const forms: OtherForms = new Map();
   for (const sample of asked) {
     const mine = rows.filter((row) => row.reportSampleId === sample.id);
