@@ -51,10 +51,14 @@ export function CellNotes({ view, id, toTheRight = false }: { view: CellView; id
         </p>
       ) : null}
       {doubts.map((doubt) => (
-        <p key={doubt.code} className={`${LINE} text-ochre`}>
-          <Eye aria-hidden="true" className={ICON} />
+        <p key={doubt.code} className={`${LINE} ${doubt.mustMend ? 'text-iron' : 'text-ochre'}`}>
+          {doubt.mustMend ? (
+            <CircleAlert aria-hidden="true" className={ICON} />
+          ) : (
+            <Eye aria-hidden="true" className={ICON} />
+          )}
           <span>
-            <b>doubtful:</b> {doubt.sentence}
+            <b>{doubt.mustMend ? 'to mend:' : 'doubtful:'}</b> {doubt.sentence}
           </span>
         </p>
       ))}

@@ -27,6 +27,12 @@ export function faultOf(column: GridColumn, value: string): string | null {
   return null;
 }
 
+/** The column as this row sees it: a row may have choices of its own. */
+export function columnFor(column: GridColumn | undefined, row: GridRow | undefined): GridColumn | undefined {
+  const own = column && row?.options?.[column.id];
+  return own ? { ...column, options: own } : column;
+}
+
 export function labelOf(column: GridColumn, value: string): string {
   if (column.kind !== 'select') return value;
   return column.options?.find((one) => one.value === value)?.label ?? value;

@@ -1,4 +1,4 @@
-import { isEditable, labelOf } from './cell-value';
+import { columnFor, isEditable, labelOf } from './cell-value';
 import { cellKey, type Overlay, type OverlayCell } from './overlay';
 import type { GridCellState, GridColumn, GridDoubt, GridRow } from './types';
 
@@ -11,6 +11,7 @@ export interface CellView {
   readonly state: OverlayCell['state'];
   readonly doubts: readonly GridDoubt[];
   readonly editable: boolean;
+  readonly subtitle: string | undefined;
   /** "pH, Value": what a field or cell is called. */
   readonly name: string;
 }
@@ -25,9 +26,11 @@ export function viewOf(input: {
   readonly header: GridColumn | undefined;
   readonly readOnly: boolean;
 }): CellView {
-  const { row, column, overlay, header, readOnly } = input;
+  const { row, overlay, header, readOnly } = input;
+  const column = columnFor(input.column, row) ?? input.column;
   const over = overlay.get(cellKey(row.id, column.id));
-  const rowName = header ? labelOf(header, shownValue(overlay, row, header.id)) || 'row without a name' : '';
+  const named = header ? labelOf(header, shownValue(overlay, row, header.id)) || 'row without a name' : '';
+  const rowName = row.subtitle ? `${named}, ${row.subtitle}` : named;
   const value = shownValue(overlay, row, column.id);
   return {
     rowId: row.id,
@@ -38,12 +41,23 @@ export function viewOf(input: {
     // A value just typed is no longer the one that was doubted.
     doubts: over ? NO_DOUBTS : (row.doubts?.[column.id] ?? NO_DOUBTS),
     editable: isEditable(column, row, readOnly),
-    name: column.id === header?.id ? column.header : `${rowName}, ${column.header}`,
+    subtitle: column.id === header?.id ? row.subtitle : undefined,
+    name:
+      column.id !== header?.id
+        ? `${rowName}, ${column.header}`
+        : row.subtitle
+          ? `${column.header}, ${row.subtitle}`
+          : column.header,
   };
 }
 
 export function shownValue(overlay: Overlay, row: GridRow, columnId: string): string {
   return overlay.get(cellKey(row.id, columnId))?.value ?? row.cells[columnId] ?? '';
+}
+
+/** A doubt that "It is right" can end. */
+export function acceptable(view: Pick<CellView, 'doubts'>): boolean {
+  return view.doubts.length > 0 && !view.doubts.some((doubt) => doubt.mustMend);
 }
 
 export function needsAttention(view: Pick<CellView, 'doubts' | 'state'>): boolean {

@@ -6,7 +6,7 @@ import { Button } from '../actions/button';
 import type { GridBodyProps } from './body-props';
 import { CellNotes, type ConflictActions, ConflictChoice, hasNotes } from './cell-notes';
 import { rowHeaderOf } from './cell-value';
-import { type CellView, viewOf } from './cell-view';
+import { acceptable, type CellView, viewOf } from './cell-view';
 import type { GridRow } from './types';
 
 type CardsProps = GridBodyProps & { readonly onRemoveRow?: ((rowId: string) => void) | undefined };
@@ -42,6 +42,7 @@ function Card({ row, rowIndex, ...props }: CardsProps & { row: GridRow; rowIndex
         <h3 className="text-base">
           <span className="mr-2 font-figures text-sm font-normal text-clay">{rowIndex + 1}</span>
           {title}
+          {row.subtitle ? <span className="ml-2 text-sm font-normal text-clay">{row.subtitle}</span> : null}
         </h3>
         {row.place ? <span className="text-xs text-clay">{row.place}</span> : null}
       </div>
@@ -140,7 +141,7 @@ function CardField({ view, version, at, onFocus, edits, onAcceptDoubt }: FieldPr
       {view.state.kind === 'conflict' ? (
         <ConflictChoice view={view} conflict={view.state} actions={actions} inGrid={false} />
       ) : null}
-      {view.doubts.length > 0 && onAcceptDoubt ? (
+      {acceptable(view) && onAcceptDoubt ? (
         <Button look="quiet" size="small" className="mt-1" onClick={() => onAcceptDoubt(cell)}>
           It is right<span className="sr-only">, {view.name}</span>
         </Button>

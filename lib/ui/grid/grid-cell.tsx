@@ -25,6 +25,7 @@ export const GridCell = memo(function GridCell(props: GridCellProps) {
   const notesId = useId();
   const noted = hasNotes(view);
   const bad = view.state.kind === 'invalid' || view.state.kind === 'error' || view.state.kind === 'conflict';
+  const mend = view.doubts.some((doubt) => doubt.mustMend);
   const doubtful = view.doubts.length > 0;
   const Tag = isRowHeader ? 'th' : 'td';
   return (
@@ -43,7 +44,7 @@ export const GridCell = memo(function GridCell(props: GridCellProps) {
         'scroll-mt-40 scroll-mb-24 focus-visible:z-10 focus-visible:outline-offset-[-3px] focus-visible:shadow-none',
         isRowHeader && 'border-l-4 pl-2 font-semibold',
         isRowHeader && (activeRow ? 'border-l-gley' : 'border-l-transparent'),
-        cellGround(selected, bad, doubtful, view.editable, activeRow),
+        cellGround(selected, bad || mend, doubtful, view.editable, activeRow),
         !view.editable && !isRowHeader && 'text-clay',
       )}
     >
@@ -68,7 +69,13 @@ export const GridCell = memo(function GridCell(props: GridCellProps) {
               {rowIndex + 1}
             </span>
           ) : null}
-          {view.shown}
+          {view.subtitle ? (
+            <span className="min-w-0">
+              {view.shown} <span className="inline-block text-xs font-normal text-clay">{view.subtitle}</span>
+            </span>
+          ) : (
+            view.shown
+          )}
         </span>
       )}
       {noted ? <CellNotes view={view} id={notesId} toTheRight={view.column.kind === 'number'} /> : null}

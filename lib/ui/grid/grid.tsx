@@ -5,14 +5,14 @@ import { useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '../actions/button';
 import type { GridBodyProps } from './body-props';
 import { rowHeaderOf } from './cell-value';
-import { needsAttention, viewOf } from './cell-view';
+import { acceptable, needsAttention, viewOf } from './cell-view';
 import { GridCards } from './grid-cards';
 import { GridTable } from './grid-table';
 import { GridToolbar } from './grid-toolbar';
 import { nextDoubtful } from './navigate';
 import { planFillDown } from './paste-plan';
 import { type GridPoint, heightOf } from './rectangle';
-import type { GridProps } from './types';
+import type { GridCounts, GridProps } from './types';
 import { useGridCursor } from './use-grid-cursor';
 import { useGridEdits } from './use-grid-edits';
 import { useLatest } from './use-latest';
@@ -74,6 +74,7 @@ export function Grid(props: GridProps) {
     cursor.refocus();
   };
 
+  useCounts(counts, props.onCounts);
   useAltN(goToDoubtful);
   useLeaveGuard(counts.saving + counts.failed + counts.invalid > 0);
 
@@ -157,9 +158,12 @@ function CellLine({ body }: { body: GridBodyProps }) {
       </span>
       {row.place ? <span className="text-clay">{row.place}</span> : null}
       {view.doubts.length > 0 ? (
-        <span className="text-ochre">Doubtful: {view.doubts.map((doubt) => doubt.sentence).join('; ')}</span>
+        <span className={acceptable(view) ? 'text-ochre' : 'text-iron'}>
+          {acceptable(view) ? 'Doubtful: ' : 'To mend: '}
+          {view.doubts.map((doubt) => doubt.sentence).join(' ')}
+        </span>
       ) : null}
-      {view.doubts.length > 0 && onAcceptDoubt ? (
+      {acceptable(view) && onAcceptDoubt ? (
         <Button
           look="quiet"
           size="small"
@@ -189,6 +193,14 @@ function useAltN(go: () => void): void {
     window.addEventListener('keydown', onKey);
     return () => window.removeEventListener('keydown', onKey);
   }, [latest]);
+}
+
+function useCounts({ saving, failed, conflicts, invalid }: GridCounts, tell: GridProps['onCounts']): void {
+  const latest = useLatest(tell);
+  useEffect(
+    () => latest.current?.({ saving, failed, conflicts, invalid }),
+    [latest, saving, failed, conflicts, invalid],
+  );
 }
 
 function useLeaveGuard(unsaved: boolean): void {

@@ -9,7 +9,7 @@ export interface OverlayCell {
   /** The server's value and version when the edit was made: a change of either means the server has caught up. */
   readonly base: string;
   readonly baseVersion: number | null;
-  readonly state: GridCellState | { readonly kind: 'invalid'; readonly sentence: string };
+  readonly state: GridCellState;
 }
 
 export type Overlay = ReadonlyMap<string, OverlayCell>;

@@ -23,6 +23,8 @@ export interface GridColumn {
 export interface GridDoubt {
   readonly code: string;
   readonly sentence: string;
+  /** No soil can show this: it cannot be waved through, only mended. */
+  readonly mustMend?: boolean;
 }
 
 export type GridCellState =
@@ -36,10 +38,24 @@ export type GridCellState =
       /** The row's version that holds their value; sent back with "keep mine". */
       readonly version?: number;
     }
-  | { readonly kind: 'error'; readonly sentence: string };
+  | { readonly kind: 'error'; readonly sentence: string }
+  /** Refused for what it says; sending it again would not help. */
+  | { readonly kind: 'invalid'; readonly sentence: string };
+
+/** How many cells are not settled; what leaves the page open until they are. */
+export interface GridCounts {
+  readonly saving: number;
+  readonly failed: number;
+  readonly conflicts: number;
+  readonly invalid: number;
+}
 
 export interface GridRow {
   readonly id: string;
+  /** Tells rows of one name apart (the sample); shown beside the name and said with it. */
+  readonly subtitle?: string;
+  /** Choices of this row alone, by column id, in place of the column's. */
+  readonly options?: Readonly<Record<string, readonly GridOption[]>>;
   /** Cell text by column id; a missing entry is an empty cell. */
   readonly cells: Readonly<Record<string, string>>;
   readonly doubts?: Readonly<Record<string, readonly GridDoubt[]>>;
@@ -101,6 +117,8 @@ export interface GridProps {
   readonly onTakeTheirs?: (cell: GridCellRef) => void;
   /** With it, a doubtful cell can be marked as checked: button "It is right" and Ctrl+Enter. */
   readonly onAcceptDoubt?: (cell: GridCellRef) => void;
+  /** Told whenever the number of unsettled cells changes. */
+  readonly onCounts?: (counts: GridCounts) => void;
   readonly readOnly?: boolean;
   /** Said when there are no rows. */
   readonly emptyText?: string;

@@ -1,7 +1,7 @@
 'use client';
 
 import { useCallback, useLayoutEffect, useRef, useState } from 'react';
-import { faultOf, tidyValue } from './cell-value';
+import { columnFor, faultOf, tidyValue } from './cell-value';
 import {
   type CellChange,
   changesFor,
@@ -97,6 +97,8 @@ export function useGridEdits(input: Input): GridEdits {
         const failed = outcomes.filter((one) => one.state.kind === 'error').length;
         if (conflicts > 0)
           latest.current.say(`${plural(conflicts, 'value', 'values')} changed by somebody else. Choose which to keep.`);
+        const refused = outcomes.flatMap((one) => (one.state.kind === 'invalid' ? [one.state.sentence] : []));
+        if (refused[0]) latest.current.say(`Not saved: ${refused[0]}`);
         if (failed > 0) latest.current.say(`${plural(failed, 'value', 'values')} not saved. The text is kept.`);
       } catch {
         const outcomes = edits.map(({ rowId, columnId }) => ({ rowId, columnId, state: FAILED }));
@@ -122,8 +124,8 @@ export function useGridEdits(input: Input): GridEdits {
       const changes: CellChange[] = [];
       const edits: GridEdit[] = [];
       for (const { rowId, columnId, value, seen } of wanted) {
-        const column = columnOf(columnId);
         const row = rowOf(rowId);
+        const column = columnFor(columnOf(columnId), row);
         if (!column || !row) continue;
         const before = seen?.before ?? valueAt(rowId, columnId);
         const after = tidyValue(column, value);

@@ -13,7 +13,7 @@ import {
 import type { GridBodyProps } from './body-props';
 import type { LeaveEditor } from './cell-editor';
 import { labelOf } from './cell-value';
-import type { CellView } from './cell-view';
+import { acceptable, type CellView } from './cell-view';
 import { formatTsv, parseTsv } from './delimited';
 import { commandFor, type GridCommand } from './key-map';
 import { moveFrom, nextEditable } from './navigate';
@@ -123,7 +123,7 @@ export function useGridKeys(input: Input) {
   const acceptDoubt = useCallback(() => {
     const { cursor, onAcceptDoubt } = latest.current;
     const view = viewAt(cursor.active);
-    if (view && view.doubts.length > 0) onAcceptDoubt?.({ rowId: view.rowId, columnId: view.column.id });
+    if (view && acceptable(view)) onAcceptDoubt?.({ rowId: view.rowId, columnId: view.column.id });
   }, [latest, viewAt]);
 
   const run = useCallback(

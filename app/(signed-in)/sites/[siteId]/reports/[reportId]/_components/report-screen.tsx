@@ -1,0 +1,74 @@
+'use client';
+
+import { useEffect, useRef } from 'react';
+import type { Role } from '@/lib/access/table';
+import type { Report } from '@/lib/schemas/reports';
+import type { Review } from '@/lib/schemas/review';
+import { useAnnounce } from '@/lib/ui/feedback/announce';
+import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
+import { Skeleton } from '@/lib/ui/feedback/skeleton';
+import { NotRead } from './not-read';
+import { ReadingProgress } from './reading-progress';
+import { ReportHead } from './report-head';
+import { hasReview, isWaiting } from './report-words';
+import { ReviewScreen } from './review-screen';
+import { useReport } from './use-report';
+
+export type ReportScreenProps = {
+  siteId: string;
+  role: Role;
+  personId: string;
+  units: 'us' | 'metric';
+  today: string;
+  firstReport: Report;
+  firstReview: Review | null;
+};
+
+/** One report in whatever state it is; follows the state as it changes. */
+export function ReportScreen(props: ReportScreenProps) {
+  const { siteId, role, personId, firstReport, firstReview } = props;
+  const path = `/sites/${siteId}/reports/${firstReport.id}`;
+  const live = useReport(path, { report: firstReport, review: firstReview });
+  const { report, review } = live;
+  useSayNewState(report, personId);
+  return (
+    <>
+      <ReportHead path={path} siteId={siteId} report={report} role={role} personId={personId} refresh={live.refresh} />
+      {live.problem ? (
+        <div className="page-wrap max-w-[110rem]! pb-4">
+          <ProblemNotice problem={live.problem} />
+        </div>
+      ) : null}
+      {isWaiting(report.state) ? <ReadingProgress report={report} siteId={siteId} /> : null}
+      {report.state === 'unreadable' || report.state === 'not-soil' ? (
+        <NotRead path={path} report={report} role={role} refresh={live.refresh} />
+      ) : null}
+      {hasReview(report.state) ? (
+        review ? (
+          <ReviewScreen {...props} path={path} live={live} review={review} report={report} />
+        ) : live.problem ? null : (
+          <div className="page-wrap max-w-[110rem]! py-6">
+            <Skeleton label="Fetching the values" shape="table" rows={8} />
+          </div>
+        )
+      ) : null}
+    </>
+  );
+}
+
+/** A state that changed by itself (the reader, another person) is said, and the focus stays where it is. */
+function useSayNewState(report: Report, personId: string): void {
+  const announce = useAnnounce();
+  const before = useRef(report.state);
+  const { state, confirmedBy } = report;
+  useEffect(() => {
+    const was = before.current;
+    before.current = state;
+    if (was === state) return;
+    if (isWaiting(was) && state === 'in-review') announce('The report is read. Check its values beside the page.');
+    if (isWaiting(was) && (state === 'unreadable' || state === 'not-soil')) announce('The report could not be read.');
+    if (state === 'confirmed' && confirmedBy && confirmedBy.id !== personId) {
+      announce(`${confirmedBy.name} confirmed this report.`, { tone: 'look' });
+    }
+  }, [state, confirmedBy, personId, announce]);
+}

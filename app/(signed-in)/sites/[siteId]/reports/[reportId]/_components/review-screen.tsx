@@ -1,0 +1,110 @@
+'use client';
+
+import { useEffect, useRef, useState } from 'react';
+import { can } from '@/lib/access/table';
+import type { Report } from '@/lib/schemas/reports';
+import type { Blocker, Review } from '@/lib/schemas/review';
+import { Button } from '@/lib/ui/actions/button';
+import type { Problem } from '@/lib/ui/api';
+import { Notice } from '@/lib/ui/feedback/notice';
+import type { GridCounts } from '@/lib/ui/grid/types';
+import { Advice } from './advice';
+import { ConfirmBar } from './confirm-bar';
+import { ConfirmedNotice } from './confirmed-notice';
+import { depthUnit } from './depth-units';
+import { LaboratoryField } from './laboratory-field';
+import type { ReportScreenProps } from './report-screen';
+import { sampleFieldId } from './sample-card';
+import { SamplesStrip } from './samples-strip';
+import type { LiveReport } from './use-report';
+import { ValuesPane } from './values-pane';
+
+const NONE_OPEN: GridCounts = { saving: 0, failed: 0, conflicts: 0, invalid: 0 };
+
+type ScreenProps = ReportScreenProps & { path: string; live: LiveReport; review: Review; report: Report };
+
+/** Samples above, the page beside its values, the confirmation below. */
+export function ReviewScreen({ siteId, role, units, today, path, live, review, report }: ScreenProps) {
+  const readOnly = report.state !== 'in-review';
+  const [counts, setCounts] = useState(NONE_OPEN);
+  const [separate, setSeparate] = useState<ReadonlySet<string>>(new Set());
+  const [faster, setFaster] = useState<Problem | null>(null);
+  const [goTo, setGoTo] = useState<{ rowId: string; key: number } | null>(null);
+  const place = { path, review, live, readOnly };
+  const setSeparateFor = (id: string, on: boolean) =>
+    setSeparate((now) => new Set([...now].filter((one) => one !== id).concat(on ? [id] : [])));
+  const show = (blocker: Blocker) => {
+    if (blocker.rowId) return setGoTo((now) => ({ rowId: blocker.rowId ?? '', key: (now?.key ?? 0) + 1 }));
+    const field = blocker.code === 'no-day' ? 'day' : blocker.code === 'no-plot' ? 'plot' : 'card';
+    document.getElementById(sampleFieldId(blocker.reportSampleId ?? '', field))?.focus();
+  };
+  return (
+    <>
+      <div className="page-wrap max-w-[110rem]! grid gap-4 pb-6">
+        {faster ? <Faster problem={faster} onShow={() => live.refresh().then(() => setFaster(null))} /> : null}
+        {report.state === 'confirmed' ? <ConfirmedNotice siteId={siteId} review={review} report={report} /> : null}
+        {report.state === 'set-aside' ? (
+          <Notice title="Set aside">
+            Nothing of it counts. File and rows are kept; an owner or adviser can bring it back.
+          </Notice>
+        ) : null}
+        {report.state === 'in-review' && report.withdrawnReason ? (
+          <Notice tone="look" title="The confirmation was withdrawn">
+            {report.withdrawnReason}
+          </Notice>
+        ) : null}
+        {report.warnings.length > 0 && report.state === 'in-review' ? (
+          <Notice tone="look" title="What the reader noticed">
+            <ul>
+              {report.warnings.map((warning) => (
+                <li key={`${warning.code} ${warning.sentence}`}>{warning.sentence}</li>
+              ))}
+            </ul>
+          </Notice>
+        ) : null}
+        <LaboratoryField {...place} report={report} />
+      </div>
+      <SamplesStrip {...place} unit={depthUnit(units)} today={today} separate={separate} onSeparate={setSeparateFor} />
+      <ValuesPane {...place} report={report} goTo={goTo} onCounts={setCounts} />
+      <Advice review={review} />
+      {report.state === 'in-review' ? (
+        <ConfirmBar
+          path={path}
+          review={review}
+          decides={can(role, 'reading.decide')}
+          counts={counts}
+          separate={separate}
+          onShow={show}
+          onConfirmed={live.refresh}
+          onFaster={setFaster}
+          refresh={live.refresh}
+        />
+      ) : null}
+    </>
+  );
+}
+
+/** Two confirmed at once: who was first, and the way to what they confirmed. */
+function Faster({ problem, onShow }: { problem: Problem; onShow: () => void }) {
+  const box = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    box.current?.focus();
+    box.current?.scrollIntoView({ block: 'center' });
+  }, []);
+  return (
+    <div ref={box} tabIndex={-1} data-testid="faster">
+      <Notice
+        tone="look"
+        title={problem.title}
+        live
+        action={
+          <Button look="quiet" onClick={onShow}>
+            Show it as it stands now
+          </Button>
+        }
+      >
+        {problem.detail} Your confirmation was not counted a second time, and nothing is doubled.
+      </Notice>
+    </div>
+  );
+}

@@ -1,0 +1,82 @@
+'use client';
+
+import Link from 'next/link';
+import type { Review } from '@/lib/schemas/review';
+import { Button } from '@/lib/ui/actions/button';
+import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
+import { useSubmit } from '@/lib/ui/use-submit';
+import type { DepthUnit } from './depth-units';
+import { SAMPLE_ROW, SampleCard } from './sample-card';
+import { SampleFacts } from './sample-facts';
+import type { LiveReport } from './use-report';
+
+type StripProps = {
+  path: string;
+  review: Review;
+  live: LiveReport;
+  readOnly: boolean;
+  unit: DepthUnit;
+  today: string;
+  separate: ReadonlySet<string>;
+  onSeparate: (sampleId: string, on: boolean) => void;
+};
+
+/** Each sample of the report: which plot, which day, how deep. */
+export function SamplesStrip(props: StripProps) {
+  const { path, review, live, readOnly, unit, today, separate, onSeparate } = props;
+  const { send, busy, problem } = useSubmit();
+  const siteId = path.split('/')[2] ?? '';
+  const add = async () => {
+    if ((await send(`${path}/samples`, { body: {} })).ok) await live.refresh();
+  };
+  return (
+    <section aria-labelledby="samples-title" className="border-t border-horizon-5 py-4">
+      <div className="page-wrap max-w-[110rem]!">
+        <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1">
+          <h2 id="samples-title" className="text-xl">
+            {review.samples.length === 1 ? 'The sample' : `${review.samples.length} samples`}
+          </h2>
+          {readOnly ? null : (
+            <Button look="quiet" size="small" busy={busy} onClick={() => void add()}>
+              Add a sample
+            </Button>
+          )}
+        </div>
+        <ProblemNotice problem={problem} />
+        {review.plots.length === 0 && !readOnly ? (
+          <p className="mt-2">
+            There is no plot on this site yet.{' '}
+            <Link className="text-link inline-block py-1 font-semibold" href={`/sites/${siteId}`}>
+              Draw one on the ground
+            </Link>
+            ; this review waits.
+          </p>
+        ) : null}
+        {readOnly ? null : (
+          <div aria-hidden="true" className={`${SAMPLE_ROW} mt-2 text-xs font-semibold text-clay max-lg:hidden`}>
+            <span>As printed</span>
+            <span>Plot</span>
+            <span>Taken on</span>
+            <span>Depth, {unit}</span>
+            <span>Cores</span>
+            <span>Bag</span>
+          </div>
+        )}
+        <ul>
+          {review.samples.map((sample) =>
+            readOnly ? (
+              <SampleFacts key={sample.id} sample={sample} review={review} unit={unit} />
+            ) : (
+              <SampleCard
+                key={sample.id}
+                {...{ path, sample, review, live, unit, today }}
+                separate={separate.has(sample.id)}
+                onSeparate={(on) => onSeparate(sample.id, on)}
+              />
+            ),
+          )}
+        </ul>
+      </div>
+    </section>
+  );
+}
