@@ -21,7 +21,7 @@ const need = (name: string): string => {
 };
 
 const ONE_PAGE = 'fixtures/reports/main-job/last-spring.pdf';
-const SIX_PAGES = need('BENCH_SIX_PAGES');
+const SIX_PAGES = 'fixtures/reports/matrix/six-pages.pdf';
 const RATIO_GOAL = 1.5;
 const YEARS = [2022, 2023, 2024, 2025, 2026];
 const ANALYTES = [

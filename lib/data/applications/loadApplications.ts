@@ -1,4 +1,4 @@
-import { and, asc, eq, isNull, type SQL } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, type SQL } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { application, planIntent, planLine } from '@/db/schema';
 import type { PersonId, SiteId } from '@/lib/domain/ids';
@@ -18,7 +18,14 @@ export async function loadApplications(
     .innerJoin(planLine, and(eq(planLine.siteId, siteId), eq(planLine.id, application.planLineId)))
     .where(and(eq(application.siteId, siteId), isNull(application.supersededAt), only))
     .orderBy(asc(application.appliedOn), asc(application.recordedAt));
-  const intents = await tx.select().from(planIntent).where(eq(planIntent.siteId, siteId));
+  const planIds = rows.map((row) => row.application.planId);
+  const intents =
+    planIds.length === 0
+      ? []
+      : await tx
+          .select()
+          .from(planIntent)
+          .where(and(eq(planIntent.siteId, siteId), inArray(planIntent.planId, planIds)));
   const names = await namesOf(
     tx,
     rows.map((row) => row.application.recordedBy),

@@ -1,7 +1,7 @@
 import { and, desc, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import type { Transaction } from '@/db/client';
-import { effectCheck } from '@/db/schema';
+import { effectCheck, site } from '@/db/schema';
 import { checkEffect, type EffectOutcome } from '@/lib/domain/effects';
 import { asSiteId, type SiteId } from '@/lib/domain/ids';
 import { idSchema } from '@/lib/schemas/parts';
@@ -47,6 +47,8 @@ export const recheckEffects = workerVerb({
   run: ({ ctx, input }) => {
     const siteId = asSiteId(input.siteId);
     return withSite(siteId, async (tx) => {
+      // One recheck of a site at a time: two that look at once would both find the verdict new.
+      await tx.select({ id: site.id }).from(site).where(eq(site.id, siteId)).for('update');
       const picture = await loadPicture(tx, siteId, ctx.now);
       if (!picture.plots.some((plot) => plot.id === input.id)) return { changed: 0 };
       let changed = 0;

@@ -1,17 +1,21 @@
 import { and, desc, eq, isNull, ne, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { application, type ReminderRuleKind, reminder, reminderRule, sample, site } from '@/db/schema';
+import { application, type ReminderRuleKind, reminder, reminderRule, result, sample, site } from '@/db/schema';
 import { asDay } from '@/lib/domain/days';
 import type { SiteId } from '@/lib/domain/ids';
 import { nextDue } from '@/lib/domain/reminders';
 import type { Ctx } from '../context';
+
+/** A bag whose results were all withdrawn was never a test; one that has none yet is on its way to be one. */
+const stillCounts = sql`(exists (select from ${result} where ${result.siteId} = ${sample.siteId} and ${result.sampleId} = ${sample.id} and ${result.supersededAt} is null)
+  or not exists (select from ${result} where ${result.siteId} = ${sample.siteId} and ${result.sampleId} = ${sample.id}))`;
 
 export async function factsForRules(tx: Transaction, siteId: SiteId, plotId: string) {
   const [place] = await tx.select({ warmMonths: site.warmMonths }).from(site).where(eq(site.id, siteId));
   const samples = await tx
     .select({ takenOn: sample.takenOn })
     .from(sample)
-    .where(and(eq(sample.siteId, siteId), eq(sample.plotId, plotId)))
+    .where(and(eq(sample.siteId, siteId), eq(sample.plotId, plotId), stillCounts))
     .orderBy(desc(sample.takenOn))
     .limit(1);
   const spread = await tx
