@@ -125,3 +125,4 @@ export const suggestChangeAnswer = z.object({
   /** Why there is none. */
   sentence: z.string().nullable(),
 });
+export type SuggestChangeAnswer = z.infer<typeof suggestChangeAnswer>;

@@ -29,6 +29,7 @@ export function SignedInFrame({ sites, name, children }: SignedInFrameProps) {
           ? [
               { href: at, label: 'Ground', icon: 'ground' },
               { href: `${at}/reports`, label: 'Reports', icon: 'reports', waiting: open.inReview },
+              { href: `${at}/effects`, label: 'Effects', icon: 'effects' },
               { href: `${at}/reminders`, label: 'Reminders', icon: 'reminders' },
               { href: `${at}/members`, label: 'People', icon: 'people' },
               { href: `${at}/settings`, label: 'Settings', icon: 'settings' },

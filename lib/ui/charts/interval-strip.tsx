@@ -6,14 +6,14 @@ import type { IntervalStripProps } from './types';
 
 /** The strip in words; what a screen reader hears and what stands under the drawing. */
 export function intervalSentence(props: IntervalStripProps): string {
-  const { analyte, planned, change, half, oneAndHalf, comparedWith } = props;
+  const { analyte, planned, plannedWord = 'planned', change, half, oneAndHalf, comparedWith } = props;
   const more = changeDecimals(analyte);
   const [zoneLow, zoneHigh] = zoneOf(planned, half, oneAndHalf);
   const seen = withUnit(formatSigned(change.estimate, more), analyte.unit);
   const than = comparedWith === undefined ? '' : `, ${comparedWith}`;
   return (
     `Change of ${analyte.label} seen${than}: ${seen}, 90% interval ${formatRange(change.low, change.high, more, true)}. ` +
-    `Planned: ${withUnit(formatSigned(planned, more), analyte.unit)}; ` +
+    `${plannedWord === 'due' ? 'Due by then' : 'Planned'}: ${withUnit(formatSigned(planned, more), analyte.unit)}; ` +
     `half to one and a half times that is ${formatRange(zoneLow, zoneHigh, more, true)}.`
   );
 }
@@ -24,7 +24,7 @@ function zoneOf(planned: number, half: number, oneAndHalf: number | null): reado
 
 /** The change seen against the change planned, on one scale with "no change". */
 export function IntervalStrip(props: IntervalStripProps) {
-  const { analyte, planned, change, half, oneAndHalf, hideSentence = false } = props;
+  const { analyte, planned, plannedWord = 'planned', change, half, oneAndHalf, hideSentence = false } = props;
   const [zoneLow, zoneHigh] = zoneOf(planned, half, oneAndHalf);
   const more = changeDecimals(analyte);
   const scale = stripScale([0, planned, half, oneAndHalf, change.estimate, change.low, change.high], {
@@ -42,7 +42,7 @@ export function IntervalStrip(props: IntervalStripProps) {
         <StripUpright scale={scale} value={0} top={top} bottom={bottom} />
         <StripUpright scale={scale} value={planned} top={top - 4} bottom={bottom} dashed colour={INK.gley} />
         <StripWord scale={scale} value={planned} y={14} colour={INK.gley}>
-          {`planned ${formatSigned(planned, more)}`}
+          {`${plannedWord} ${formatSigned(planned, more)}`}
         </StripWord>
         <IntervalBar scale={scale} y={middle} low={change.low} high={change.high} />
         <StripDot scale={scale} value={change.estimate} y={middle} />

@@ -98,6 +98,8 @@ export interface IntervalStripProps {
   readonly analyte: ChartAnalyte;
   /** Signed, in the unit shown: −0.5 = half a pH unit down was planned. */
   readonly planned: number;
+  /** What stands at the planned change; "due" where only a part of the plan was due by the test. */
+  readonly plannedWord?: 'planned' | 'due';
   /** The change seen with its 90 % interval, signed. */
   readonly change: Interval;
   /** Half and one and a half times the plan on this scale, signed; null = no bound (planned falls on a log scale). */

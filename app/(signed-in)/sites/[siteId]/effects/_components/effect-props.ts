@@ -60,8 +60,17 @@ export function notesOf(outcome: Judged): string[] {
     .filter((sentence) => !elsewhere.has(sentence) && !(second !== undefined && sentence.endsWith(second)));
 }
 
-export const stripProps = (outcome: JudgedEffect, analyte: ChartAnalyte, reading?: Reading): IntervalStripProps =>
-  stripOfEffect(outcome, analyte, reading);
+/** The sentences name both figures from a tenth of the plan on; so does the drawing. */
+const DIFFERS_BY = 0.1;
+
+export function stripProps(
+  outcome: JudgedEffect & Pick<Judged, 'planned'>,
+  analyte: ChartAnalyte,
+  reading?: Reading,
+): IntervalStripProps {
+  const differs = Math.abs(outcome.intended - outcome.planned) > DIFFERS_BY * Math.abs(outcome.planned);
+  return { ...stripOfEffect(outcome, analyte, reading), ...(differs ? { plannedWord: 'due' } : {}) };
+}
 
 export function printedTest(test: Pick<TestPoint, 'value' | 'qualifier' | 'unit'>, decimals: number): string {
   const number = formatNumber(test.value, decimals);

@@ -22,7 +22,7 @@ export default async function PlotLayout({ children, params }: PlotParams & { ch
         above={{ href: `/sites/${siteId}`, label: 'The ground' }}
         lead={plotLead(plot, person.units)}
       />
-      <div className="page-wrap grid gap-4 print:hidden">
+      <div className="page-wrap grid gap-4 pb-2 print:hidden">
         {plot.archivedAt === null ? null : (
           <Notice title="This plot is archived">
             Its history stays and can be read. Bring it back on the ground page before recording anything new.

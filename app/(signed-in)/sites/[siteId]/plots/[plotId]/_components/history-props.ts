@@ -45,7 +45,11 @@ const driftPoints = (siteId: string, series: SeriesAnswer): DriftPoint[] =>
   series.points.map((point) => driftPoint(siteId, point));
 
 export const driftAmendments = (history: Pick<HistoryAnswer, 'amendments'>): DriftAmendment[] =>
-  history.amendments.map(({ id, on, label, detail }) => ({ id, on, label, detail }));
+  history.amendments.map(({ id, on, label, detail }) => {
+    // The label ends with the amount that the detail begins with; once is enough.
+    const amount = label.slice(label.lastIndexOf(', ') + 2);
+    return { id, on, label, detail: detail.startsWith(`${amount} `) ? detail.slice(amount.length + 1) : detail };
+  });
 
 export const fileSlug = (text: string): string =>
   text

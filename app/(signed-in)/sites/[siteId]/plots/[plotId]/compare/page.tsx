@@ -43,7 +43,7 @@ export default async function ComparePage({ params, searchParams }: PlotParams &
         </Stretch>
       ) : (
         <Layers>
-          <Compared answer={view.answer} siteId={siteId} />
+          <Compared answer={view.answer} siteId={siteId} hemisphere={view.hemisphere} />
         </Layers>
       )}
     </>

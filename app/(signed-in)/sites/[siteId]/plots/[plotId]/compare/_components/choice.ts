@@ -1,10 +1,10 @@
 import { asDay, civil, daysBetween } from '@/lib/domain/days';
-import { isSameSeason } from '@/lib/domain/sampling';
+import { type Hemisphere, isSameSeason, seasonOf } from '@/lib/domain/sampling';
 import type { Result } from '@/lib/schemas/results';
 
 /** Which two tests stand side by side. The choice lives in the address: ?analyte=…&a=…&b=… */
 
-type ComparableTest = {
+export type ComparableTest = {
   readonly id: string;
   readonly plotId: string;
   readonly plotName: string;
@@ -13,11 +13,8 @@ type ComparableTest = {
   readonly laboratory: string | null;
 };
 
-export type { ComparableTest };
-
 export type Choice = { readonly analyte: string; readonly a: string; readonly b: string };
 export type Preset = { readonly label: string; readonly a: string; readonly b: string };
-type Hemisphere = 'north' | 'south';
 
 type Row = Pick<
   Result,
@@ -54,18 +51,15 @@ export function testsOf(results: readonly Row[], plotNames: ReadonlyMap<string, 
   }));
 }
 
-const NORTH = ['winter', 'spring', 'summer', 'fall'] as const;
-
-/** "spring 2026"; December belongs to the winter of the year that follows. */
-export function seasonOf(day: string, hemisphere: Hemisphere): string {
+/** "Spring 2026"; December belongs to the winter or summer of the year that follows. */
+export function seasonWords(day: string, hemisphere: Hemisphere): string {
   const { year, month } = civil(asDay(day));
-  const quarter = Math.floor((month % 12) / 3);
-  const name = NORTH[hemisphere === 'north' ? quarter : (quarter + 2) % 4] ?? '';
-  return `${name} ${month === 12 ? year + 1 : year}`;
+  const season = seasonOf(asDay(day), hemisphere);
+  return `${season.charAt(0).toUpperCase()}${season.slice(1)} ${month === 12 ? year + 1 : year}`;
 }
 
 const MOST_NEIGHBOURS = 3;
-const LAST_SEASON_WITHIN_DAYS = 300;
+const HALF_A_YEAR = 180;
 
 export function presetsFor(tests: readonly ComparableTest[], plotId: string, hemisphere: Hemisphere): Preset[] {
   const mine = tests.filter((test) => test.plotId === plotId);
@@ -79,11 +73,12 @@ export function presetsFor(tests: readonly ComparableTest[], plotId: string, hem
   const earlier = mine.filter((test) => test.takenOn < newest.takenOn);
   const gap = (test: ComparableTest) => daysBetween(asDay(test.takenOn), asDay(newest.takenOn));
   const same = (test: ComparableTest) => isSameSeason(asDay(test.takenOn), asDay(newest.takenOn));
-  const named = (test: ComparableTest) => seasonOf(test.takenOn, hemisphere);
-  const lastSeason = earlier.find((test) => !same(test) && gap(test) <= LAST_SEASON_WITHIN_DAYS);
-  if (lastSeason) offer(`This ${named(newest)} with last ${named(lastSeason)}`, lastSeason, newest);
-  const lastYear = earlier.find((test) => same(test) && gap(test) > 180);
-  if (lastYear) offer(`This ${named(newest)} with ${named(lastYear)}`, lastYear, newest);
+  const named = (test: ComparableTest) => seasonWords(test.takenOn, hemisphere);
+  const withEarlier = (test: ComparableTest) => `${named(newest)} with ${named(test).toLowerCase()}`;
+  const lastSeason = earlier.find((test) => !same(test));
+  if (lastSeason) offer(withEarlier(lastSeason), lastSeason, newest);
+  const lastYear = earlier.find((test) => same(test) && gap(test) > HALF_A_YEAR);
+  if (lastYear) offer(withEarlier(lastYear), lastYear, newest);
   offer('The newest with the one before', earlier[0], newest);
   const neighbours = tests.filter((test) => test.plotId !== plotId && test.takenOn === newest.takenOn);
   for (const neighbour of neighbours.slice(0, MOST_NEIGHBOURS)) {

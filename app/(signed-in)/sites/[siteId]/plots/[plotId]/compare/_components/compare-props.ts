@@ -1,9 +1,11 @@
+import type { Hemisphere } from '@/lib/domain/sampling';
 import type { CompareAnswer } from '@/lib/schemas/effects';
 import { formatDay, formatNumber, withUnit } from '@/lib/ui/charts/numbers';
 import type { ChartAnalyte, CompareStripProps, CompareTest } from '@/lib/ui/charts/types';
 import type { RefusalBoxProps } from '@/lib/ui/verdict/types';
 import { helpFor } from '../../../../effects/_components/refusal-help';
 import { shortLabel } from '../../_components/history-props';
+import { seasonWords } from './choice';
 
 /** From the comparison's answer to what is drawn or refused. */
 
@@ -30,10 +32,10 @@ export function compareAnalyte(answer: CompareAnswer): ChartAnalyte {
   };
 }
 
-function side(answer: CompareAnswer, test: Side): CompareTest {
+function side(answer: CompareAnswer, test: Side, hemisphere: Hemisphere): CompareTest {
   const samePlot = answer.a.plotId === answer.b.plotId;
   return {
-    label: samePlot ? formatDay(test.takenOn) : test.plotName,
+    label: samePlot ? seasonWords(test.takenOn, hemisphere) : test.plotName,
     takenOn: test.takenOn,
     value: test.value,
     printed: printedValue(test, answer.decimals),
@@ -44,13 +46,13 @@ function side(answer: CompareAnswer, test: Side): CompareTest {
 }
 
 /** null where the two may not be compared: then both values stand side by side without a common scale. */
-export function compareProps(answer: CompareAnswer): CompareStripProps | null {
+export function compareProps(answer: CompareAnswer, hemisphere: Hemisphere): CompareStripProps | null {
   const { outcome } = answer;
   if (!outcome.ok) return null;
   return {
     analyte: compareAnalyte(answer),
-    earlier: side(answer, answer.a),
-    later: side(answer, answer.b),
+    earlier: side(answer, answer.a, hemisphere),
+    later: side(answer, answer.b, hemisphere),
     outcome: {
       kind: 'difference',
       difference: { estimate: outcome.difference, low: bound(outcome.lo), high: bound(outcome.hi) },

@@ -1,4 +1,5 @@
 import Link from 'next/link';
+import type { Hemisphere } from '@/lib/domain/sampling';
 import type { CompareAnswer } from '@/lib/schemas/effects';
 import { CompareStrip } from '@/lib/ui/charts/compare-strip';
 import { changeDecimals, formatDay, formatRange, withUnit } from '@/lib/ui/charts/numbers';
@@ -7,10 +8,12 @@ import { type Column, DataTable } from '@/lib/ui/show/data-table';
 import { RefusalBox } from '@/lib/ui/verdict/refusal-box';
 import { compareAnalyte, compareProps, printedValue, refusalProps, shownUnit } from './compare-props';
 
+type ComparedProps = { answer: CompareAnswer; siteId: string; hemisphere: Hemisphere };
+
 /** What the two tests say to each other: a sentence, the drawing, the numbers. */
-export function Compared({ answer, siteId }: { answer: CompareAnswer; siteId: string }) {
+export function Compared({ answer, siteId, hemisphere }: ComparedProps) {
   const refusal = refusalProps(answer);
-  const strip = compareProps(answer);
+  const strip = compareProps(answer, hemisphere);
   const { outcome } = answer;
   return (
     <>

@@ -28,6 +28,7 @@ export async function loadComparison(siteId: string, plotId: string, asked: Aske
   const { pair, replaced } = pairFor(asked, tests, plotId);
   const choice: Choice | null = pair === null ? null : { analyte: analyte.key, ...pair };
   return {
+    hemisphere: site.hemisphere,
     analytes,
     analyte,
     tests,
@@ -37,5 +38,3 @@ export async function loadComparison(siteId: string, plotId: string, asked: Aske
     answer: choice === null ? null : await orNotFound(compareResults({ ctx, input: { siteId, ...choice } })),
   };
 }
-
-export type Comparison = NonNullable<Awaited<ReturnType<typeof loadComparison>>>;
