@@ -35,6 +35,12 @@ export const dueAnswer = z.object({
 export type DueAnswer = z.infer<typeof dueAnswer>;
 export const dueListAnswer = z.object({ today: z.string(), due: z.array(dueAnswer) });
 
+/** What a person may choose to get or not; mail about the account itself is not optional. */
+export const mailPreferencesAnswer = z.object({
+  preferences: z.array(z.object({ kind: z.string(), wanted: z.boolean() })),
+});
+export type MailPreferences = z.infer<typeof mailPreferencesAnswer>;
+
 export const closeReminderInput = z.strictObject({ reminderId: idSchema });
 export const snoozeInput = z.strictObject({ reminderId: idSchema, until: daySchema });
 

@@ -27,6 +27,8 @@ export const todayVerdictAnswer = z.object({
   plotName: z.string(),
   verdict: z.enum(VERDICTS),
   sentence: z.string(),
+  /** The cheapest way to settle an open verdict. */
+  settledBy: z.string().nullable(),
   computedAt: momentSchema,
 });
 export type TodayVerdict = z.infer<typeof todayVerdictAnswer>;

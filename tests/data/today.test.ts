@@ -1,5 +1,5 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { membership, report } from '@/db/schema';
+import { membership, report, reportSample } from '@/db/schema';
 import { recordApplication } from '@/lib/data/applications/recordApplication';
 import { removeApplication } from '@/lib/data/applications/removeApplication';
 import { recheckEffects } from '@/lib/data/effects/recheckEffects';
@@ -86,8 +86,8 @@ describe('the first page', () => {
       uploadedAt: new Date('2026-04-20T14:00:00Z'),
       ...(state === 'unreadable' ? { refusalCode: 'locked', refusalSentence: 'This file is locked.' } : {}),
     });
-    await withSite(site.id, (tx) =>
-      tx
+    await withSite(site.id, async (tx) => {
+      const rows = await tx
         .insert(report)
         .values([
           file('reading', 'c.pdf'),
@@ -97,12 +97,19 @@ describe('the first page', () => {
           file('confirmed', 'x.pdf'),
           file('in-review', 'a.pdf'),
           file('received', 'f.pdf'),
-        ]),
-    );
+        ])
+        .returning();
+      const inReview = rows.find((row) => row.state === 'in-review')?.id ?? '';
+      const bag = { siteId: site.id, reportId: inReview, plotId: north };
+      await tx.insert(reportSample).values([
+        { ...bag, ordinal: 1 },
+        { ...bag, ordinal: 2 },
+      ]);
+    });
     const [here] = (await todayOf(site.people.owner)).sites;
-    expect(here?.reports.slice(0, 2).map((one) => [one.fileName, one.refusal])).toEqual([
-      ['a.pdf', null],
-      ['b.pdf', 'This file is locked.'],
+    expect(here?.reports.slice(0, 2).map((one) => [one.fileName, one.samples, one.refusal])).toEqual([
+      ['a.pdf', 2, null],
+      ['b.pdf', 0, 'This file is locked.'],
     ]);
     expect(here?.reports.slice(2).map((one) => one.state)).not.toContain('confirmed');
     expect([here?.reports.length, here?.moreReports]).toEqual([5, 1]);

@@ -3,7 +3,7 @@ import { z } from 'zod';
 import { mailPreference } from '@/db/schema';
 import { personVerb } from '../verb';
 
-export const OPTIONAL_MAIL = ['reminder', 'report-ready'] as const;
+export const OPTIONAL_MAIL = ['reminder'] as const;
 
 export const getMailPreferences = personVerb({
   input: z.strictObject({}),

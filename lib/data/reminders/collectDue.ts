@@ -55,7 +55,7 @@ async function dueOnSite(tx: Transaction, siteId: SiteId, ids: string[], now: Da
   const found: { reader: MailReader; notice: DueNotice }[] = [];
   for (const reader of readers) {
     const hour = hourOf(now, reader.timeZone);
-    if (hour < reader.mailHour || hour >= QUIET_FROM_HOUR) continue;
+    if (hour < reader.mailHour || hour >= Math.max(QUIET_FROM_HOUR, reader.mailHour + 1)) continue;
     const rows = await loadDue(
       tx,
       siteId,

@@ -29,10 +29,12 @@ async function waitingReports(tx: Transaction, siteId: SiteId, now: Date): Promi
       pages: report.pages,
       pagesRead: report.pagesRead,
       refusal: report.refusalSentence,
-      samples: sql<number>`(select count(*)::int from ${reportSample} where ${reportSample.siteId} = ${siteId} and ${reportSample.reportId} = ${report.id})`,
+      samples: count(reportSample.id),
     })
     .from(report)
+    .leftJoin(reportSample, and(eq(reportSample.siteId, siteId), eq(reportSample.reportId, report.id)))
     .where(and(eq(report.siteId, siteId), inArray(report.state, [...WAITING])))
+    .groupBy(report.siteId, report.id)
     .orderBy(
       sql`case ${report.state} when 'in-review' then 0 when 'unreadable' then 1 when 'not-soil' then 1 else 2 end`,
       desc(report.uploadedAt),

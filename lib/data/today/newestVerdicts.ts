@@ -8,7 +8,10 @@ import type { TodayVerdict } from '@/lib/schemas/today';
 
 const SHOWN = 3;
 const verdictSchema = z.enum(VERDICTS);
-const outcomeSchema = z.object({ sentences: z.array(z.string()).min(1) });
+const outcomeSchema = z.object({
+  sentences: z.array(z.string()).min(1),
+  settle: z.array(z.object({ text: z.string() })),
+});
 
 /**
  * The verdicts that changed last, as they were kept. Only the latest word on an intention counts: a verdict that was
@@ -50,6 +53,7 @@ export async function newestVerdicts(tx: Transaction, siteId: SiteId): Promise<T
       ...row,
       verdict: word.data,
       sentence: said.data.sentences[0] ?? '',
+      settledBy: said.data.settle[0]?.text ?? null,
       computedAt: computedAt.toISOString(),
     });
     if (shown.length === SHOWN) break;

@@ -60,7 +60,7 @@ function afterSpreading(reaction: 'lime' | 'sulfur', facts: DueFacts): Due {
   if (facts.lastSampleOn !== null && facts.lastSampleOn >= half.day) {
     return none('already-sampled', `Sampled on ${dayInWords(facts.lastSampleOn)}, after ${spread} had time to act.`);
   }
-  return { ok: true, dueOn: half.day, sentence: `Half of ${spread} can have acted by now: a sample can show it.` };
+  return { ok: true, dueOn: half.day, sentence: `Half of ${spread} can have acted by that day: a sample can show it.` };
 }
 
 export function nextDue(facts: DueFacts): Due {

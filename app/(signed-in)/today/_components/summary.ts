@@ -1,0 +1,21 @@
+import type { Today } from '@/lib/schemas/today';
+import { isResting } from '../../_components/due-words';
+
+const counted = (n: number, one: string, many: string): string[] => (n === 0 ? [] : [`${n} ${n === 1 ? one : many}`]);
+
+/** One sentence over all sites: what asks for this person today. */
+export function summaryOf({ today, sites }: Today): string {
+  if (sites.length === 0) return '';
+  const due = sites.flatMap((site) => site.due).filter((one) => one.inDays <= 0 && !isResting(one, today)).length;
+  const soon = sites.flatMap((site) => site.due).filter((one) => one.inDays > 0 && !isResting(one, today)).length;
+  const review = sites.flatMap((site) => site.reports).filter((one) => one.state === 'in-review').length;
+  const parts = [
+    ...counted(due, 'sample is due', 'samples are due'),
+    ...counted(soon, 'comes due within a month', 'come due within a month'),
+    ...counted(review, 'report waits for you to confirm it', 'reports wait for you to confirm them'),
+  ];
+  if (parts.length === 0) return 'Nothing is due.';
+  const last = parts.pop() ?? '';
+  const text = parts.length > 0 ? `${parts.join(', ')} and ${last}` : last;
+  return `${text}.`;
+}

@@ -1,0 +1,68 @@
+import Link from 'next/link';
+import type { TodayReport } from '@/lib/schemas/today';
+import { type Status, StatusWord } from '@/lib/ui/feedback/status-word';
+import { inWords } from '../../_components/due-words';
+
+const samples = (n: number) => (n === 1 ? '1 sample' : `${n} samples`);
+
+export function standing(report: TodayReport): { status: Status; words: string } {
+  switch (report.state) {
+    case 'in-review':
+      return {
+        status: 'needs-you',
+        words: report.samples > 0 ? `${samples(report.samples)} to confirm` : 'To confirm',
+      };
+    case 'unreadable':
+      return { status: 'failed', words: 'Could not be read' };
+    case 'not-soil':
+      return { status: 'failed', words: 'Not a soil report' };
+    case 'reading':
+      return {
+        status: 'working',
+        words: report.pages ? `Being read, page ${report.pagesRead} of ${report.pages}` : 'Being read',
+      };
+    default:
+      return { status: 'waiting', words: report.waitingLong ? 'Still waiting to be read' : 'Waiting to be read' };
+  }
+}
+
+type WaitingReportsProps = { siteId: string; reports: readonly TodayReport[]; more: number };
+
+export function WaitingReports({ siteId, reports, more }: WaitingReportsProps) {
+  return (
+    <>
+      <ul className="border-y border-horizon-5">
+        {reports.map((report) => {
+          const { status, words } = standing(report);
+          return (
+            <li key={report.id} className="border-b border-horizon-5 py-3 last:border-0">
+              <p className="flex flex-wrap items-baseline gap-x-4">
+                <Link
+                  href={`/sites/${siteId}/reports/${report.id}`}
+                  className="text-link inline-flex min-h-8 min-w-0 items-center font-semibold"
+                >
+                  <span className="min-w-0 break-all">{report.fileName ?? 'Report typed in by hand'}</span>
+                </Link>
+                <StatusWord status={status}>{words}</StatusWord>
+                <span className="text-sm text-clay">sent {inWords(report.uploadedAt.slice(0, 10))}</span>
+              </p>
+              {report.refusal ? <p className="max-w-measure text-clay">{report.refusal}</p> : null}
+              {report.waitingLong ? (
+                <p className="max-w-measure text-clay">
+                  The file is safe. The process that reads may not be running; it takes the file up when it is.
+                </p>
+              ) : null}
+            </li>
+          );
+        })}
+      </ul>
+      {more > 0 ? (
+        <p className="pt-2">
+          <Link href={`/sites/${siteId}/reports`} className="text-link inline-flex min-h-(--target) items-center">
+            {more} more in the reports of this site
+          </Link>
+        </p>
+      ) : null}
+    </>
+  );
+}
