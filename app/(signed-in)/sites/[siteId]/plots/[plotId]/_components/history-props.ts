@@ -88,7 +88,8 @@ export const miniSeries = (history: HistoryAnswer, siteId: string): MiniSeries[]
   history.series.map((series) => ({
     analyte: chartAnalyte(series),
     points: driftPoints(siteId, series),
-    band: series.band,
+    // There is room for the figures only; the large chart names crop and source.
+    band: series.band && { ...series.band, label: series.band.label.split(',')[0] ?? series.band.label },
     href: `?analyte=${encodeURIComponent(series.analyte)}`,
   }));
 

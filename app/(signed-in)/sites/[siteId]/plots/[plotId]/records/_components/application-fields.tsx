@@ -81,14 +81,15 @@ type ApplicationFieldsProps = {
 
 export function ApplicationFields(props: ApplicationFieldsProps) {
   const { start, watched, onWatch, units, today, plotAreaM2, planned = false, children } = props;
+  const shown = watchStart(start, units);
   const known = material(watched.material);
   const wholePlot =
     plotAreaM2 === null
       ? 'This plot has no area yet.'
       : `The whole plot is ${areaText(plotAreaM2, units)} ${areaUnit(units)}.`;
   return (
-    <div className="@container grid gap-6">
-      <div className="grid gap-6 @3xl:grid-cols-[minmax(0,1fr)_minmax(0,24rem)] @3xl:gap-8">
+    <div className="@container">
+      <div className="grid gap-6 @3xl:grid-cols-[minmax(0,1fr)_minmax(0,24rem)] @3xl:gap-x-8">
         <div className="grid content-start gap-6">
           <SelectField
             name="material"
@@ -121,7 +122,7 @@ export function ApplicationFields(props: ApplicationFieldsProps) {
               label="Area treated"
               unit={areaUnit(units)}
               hint={wholePlot}
-              defaultValue={watched.area}
+              defaultValue={shown.area}
               onChange={(event) => onWatch({ area: event.currentTarget.value })}
             />
             <NumberField
@@ -130,43 +131,45 @@ export function ApplicationFields(props: ApplicationFieldsProps) {
               unit={depthUnit(units)}
               hint="0 when it was left on top."
               optional
-              defaultValue={watched.depth}
+              defaultValue={shown.depth}
               onChange={(event) => onWatch({ depth: event.currentTarget.value })}
             />
           </div>
         </div>
-        <MaterialFacts
-          material={known.ok ? known.material : null}
-          rate={rateOf(watched, plotAreaM2, units)}
-          units={units}
-        />
-      </div>
-      <div className="grid max-w-measure gap-6">
-        {planned ? (
-          <NumberField
-            name="plannedAmount"
-            label="Amount planned, if it was another"
-            hint="In the same unit of weight. A plan spread short is then judged by what was really spread."
-            optional
+        <div className="@3xl:col-start-2 @3xl:row-span-2 @3xl:row-start-1">
+          <MaterialFacts
+            material={known.ok ? known.material : null}
+            rate={rateOf(watched, plotAreaM2, units)}
+            units={units}
           />
-        ) : null}
-        <DateField name="appliedOn" label="Day" defaultValue={start.appliedOn} max={today} />
-        {children}
-        <TextField
-          name="method"
-          label="How it was spread"
-          hint="Broadcast and raked in, say, or with a drop spreader."
-          optional
-          defaultValue={start.method}
-        />
-        <TextField
-          name="soilCondition"
-          label="The soil that day"
-          hint="Dry, moist, wet; cold or warm."
-          optional
-          defaultValue={start.soilCondition}
-        />
-        <TextAreaField name="note" label="Note" optional rows={3} defaultValue={start.note} />
+        </div>
+        <div className="grid content-start gap-6">
+          {planned ? (
+            <NumberField
+              name="plannedAmount"
+              label="Amount planned, if it was another"
+              hint="In the same unit of weight. A plan spread short is then judged by what was really spread."
+              optional
+            />
+          ) : null}
+          <DateField name="appliedOn" label="Day" defaultValue={start.appliedOn} max={today} />
+          {children}
+          <TextField
+            name="method"
+            label="How it was spread"
+            hint="Broadcast and raked in, say, or with a drop spreader."
+            optional
+            defaultValue={start.method}
+          />
+          <TextField
+            name="soilCondition"
+            label="The soil that day"
+            hint="Dry, moist, wet; cold or warm."
+            optional
+            defaultValue={start.soilCondition}
+          />
+          <TextAreaField name="note" label="Note" optional rows={3} defaultValue={start.note} />
+        </div>
       </div>
     </div>
   );
