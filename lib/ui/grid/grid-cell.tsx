@@ -71,7 +71,7 @@ export const GridCell = memo(function GridCell(props: GridCellProps) {
           ) : null}
           {view.subtitle ? (
             <span className="min-w-0">
-              {view.shown} <span className="inline-block text-xs font-normal text-clay">{view.subtitle}</span>
+              {view.shown} <span className="block text-xs font-normal text-clay">{view.subtitle}</span>
             </span>
           ) : (
             view.shown

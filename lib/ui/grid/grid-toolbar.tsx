@@ -2,17 +2,12 @@
 
 import { ArrowDownToLine, Eye, Plus, Redo2, Trash2, Undo2 } from 'lucide-react';
 import { Button } from '../actions/button';
+import type { GridCounts } from './types';
 
 export interface GridToolbarProps {
-  /** On a narrow screen undo and redo show their sign alone, so that the bar keeps to one line. */
+  /** On a narrow screen the buttons of rows stand with the rows, so that the bar keeps to one line. */
   readonly compact: boolean;
   readonly doubtful: number;
-  readonly counts: {
-    readonly saving: number;
-    readonly failed: number;
-    readonly conflicts: number;
-    readonly invalid: number;
-  };
   readonly canUndo: boolean;
   readonly canRedo: boolean;
   readonly readOnly: boolean;
@@ -24,11 +19,10 @@ export interface GridToolbarProps {
   readonly onFillDown?: (() => void) | undefined;
   readonly onAddRow?: (() => void) | undefined;
   readonly onRemoveRows?: (() => void) | undefined;
-  readonly onRetry: () => void;
 }
 
 export function GridToolbar(props: GridToolbarProps) {
-  const { doubtful, counts, readOnly } = props;
+  const { doubtful, readOnly } = props;
   return (
     <fieldset className="flex min-w-0 flex-wrap items-center gap-2">
       <legend className="sr-only">Grid tools</legend>
@@ -48,23 +42,23 @@ export function GridToolbar(props: GridToolbarProps) {
             look="quiet"
             size="small"
             icon={<Undo2 aria-hidden="true" className="size-4" />}
-            className={props.compact ? 'gap-0!' : ''}
+            className="gap-0!"
             onClick={props.onUndo}
             unavailable={!props.canUndo && 'nothing to undo'}
             aria-keyshortcuts="Control+Z"
           >
-            <span className={props.compact ? 'sr-only' : ''}>Undo</span>
+            <span className="sr-only">Undo</span>
           </Button>
           <Button
             look="quiet"
             size="small"
             icon={<Redo2 aria-hidden="true" className="size-4" />}
-            className={props.compact ? 'gap-0!' : ''}
+            className="gap-0!"
             onClick={props.onRedo}
             unavailable={!props.canRedo && 'nothing to redo'}
             aria-keyshortcuts="Control+Y"
           >
-            <span className={props.compact ? 'sr-only' : ''}>Redo</span>
+            <span className="sr-only">Redo</span>
           </Button>
           {props.onFillDown ? (
             <Button
@@ -99,20 +93,25 @@ export function GridToolbar(props: GridToolbarProps) {
           ) : null}
         </>
       )}
-      {/* A line of its own: the rows under it must not move when the sentence or a button grows. */}
-      <p className="min-h-9 basis-full content-center text-sm text-clay" data-testid="grid-saved">
-        {stateSentence(counts)}
-        {counts.failed > 0 ? (
-          <Button look="plain" size="small" onClick={props.onRetry}>
-            Try again
-          </Button>
-        ) : null}
-      </p>
     </fieldset>
   );
 }
 
-function stateSentence(counts: GridToolbarProps['counts']): string {
+/** How much of it is saved; beside the line of the active cell, so that no row moves when the sentence grows. */
+export function SavedLine({ counts, onRetry }: { counts: GridCounts; onRetry: () => void }) {
+  return (
+    <p className="ml-auto min-h-9 content-center text-sm text-clay" data-testid="grid-saved">
+      {stateSentence(counts)}
+      {counts.failed > 0 ? (
+        <Button look="plain" size="small" onClick={onRetry}>
+          Try again
+        </Button>
+      ) : null}
+    </p>
+  );
+}
+
+function stateSentence(counts: GridCounts): string {
   const parts = [
     counts.failed > 0 && `${counts.failed} not saved, the text is kept`,
     counts.invalid > 0 && `${counts.invalid} to mend before saving`,

@@ -8,7 +8,7 @@ import { rowHeaderOf } from './cell-value';
 import { acceptable, needsAttention, viewOf } from './cell-view';
 import { GridCards } from './grid-cards';
 import { GridTable } from './grid-table';
-import { GridToolbar } from './grid-toolbar';
+import { GridToolbar, SavedLine } from './grid-toolbar';
 import { nextDoubtful } from './navigate';
 import { planFillDown } from './paste-plan';
 import { type GridPoint, heightOf } from './rectangle';
@@ -107,7 +107,6 @@ export function Grid(props: GridProps) {
         <GridToolbar
           compact={narrow}
           doubtful={doubtful}
-          counts={counts}
           canUndo={edits.canUndo}
           canRedo={edits.canRedo}
           readOnly={readOnly}
@@ -118,9 +117,11 @@ export function Grid(props: GridProps) {
           onFillDown={narrow ? undefined : fillDown}
           onAddRow={props.onAddRow}
           onRemoveRows={narrow || !onRemoveRows || removable.length === 0 ? undefined : removeRows}
-          onRetry={edits.retry}
         />
-        {narrow || rows.length === 0 ? null : <CellLine body={body} />}
+        <div className="flex flex-wrap items-start gap-x-4">
+          {narrow || rows.length === 0 ? null : <CellLine body={body} />}
+          {readOnly ? null : <SavedLine counts={counts} onRetry={edits.retry} />}
+        </div>
       </div>
       {rows.length === 0 ? (
         <p className="border border-dashed border-fallow bg-silt p-4">
@@ -152,7 +153,7 @@ function CellLine({ body }: { body: GridBodyProps }) {
   if (!row || !column) return null;
   const view = viewOf({ row, column, overlay: edits.overlay, header: rowHeaderOf(columns), readOnly });
   return (
-    <div className="flex min-h-9 flex-wrap items-center gap-x-3 gap-y-1 text-sm">
+    <div className="flex min-h-9 min-w-0 flex-1 basis-80 flex-wrap items-center gap-x-3 gap-y-1 text-sm">
       <span className="font-semibold">
         Row {cursor.active.row + 1}: {column.id === rowHeaderOf(columns)?.id ? view.shown : view.name}
       </span>

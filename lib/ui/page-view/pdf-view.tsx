@@ -26,7 +26,10 @@ function OpenedPdf({ bytes, ...props }: PaneProps & { bytes: Uint8Array }) {
   const pane = useRef<HTMLElement>(null);
   const paneWidth = usePaneWidth(pane, pdf.kind === 'ready');
   const [page, setPage] = useState(1);
-  const [zoomAt, setZoomAt] = useState(1);
+  const [chosenZoom, setZoomAt] = useState<number | null>(null);
+
+  // A letter page in a narrow pane would be too small to read against: it starts larger, and the row in focus is in sight.
+  const zoomAt = chosenZoom ?? (paneWidth === 0 || paneWidth > 620 ? 1 : paneWidth > 450 ? 2 : 3);
 
   const wantedPage = props.marks.find((mark) => mark.rowId === props.highlightedRowId)?.page ?? null;
   const { highlightedRowId } = props;

@@ -25,13 +25,8 @@ export function Advice({ review }: { review: Review }) {
               <ul className="mt-1 border-t border-horizon-5">
                 {group.items.map((one) => (
                   <li key={one.id} className="flex flex-wrap justify-between gap-x-4 border-b border-horizon-5 py-1.5">
-                    <span>{one.item}</span>
-                    <span className="font-figures">
-                      {one.printed} {one.unit ?? ''}
-                      {one.page === null ? null : (
-                        <span className="ml-3 font-text text-sm text-clay">page {one.page}</span>
-                      )}
-                    </span>
+                    <span className="min-w-0">{one.printed || one.item}</span>
+                    {one.page === null ? null : <span className="text-sm text-clay">page {one.page}</span>}
                   </li>
                 ))}
               </ul>

@@ -38,8 +38,7 @@ export function LaboratoryField({ path, review, report, live, readOnly }: Labora
         <SelectField
           name="laboratory"
           label="Laboratory"
-          hint={printed ? `Printed: ${printed}` : undefined}
-          className="w-full sm:w-96"
+          className="w-full sm:w-auto sm:grid-cols-[auto_20rem] sm:items-center sm:gap-x-4"
           prompt="Not given"
           options={[
             ...review.laboratories.map((one) => ({ value: one.id, label: one.name })),
@@ -70,9 +69,13 @@ export function LaboratoryField({ path, review, report, live, readOnly }: Labora
               Use this name
             </Button>
           </form>
-        ) : printed && !report.laboratory ? (
+        ) : printed && report.laboratory?.name === printed ? (
+          <p className="self-center text-sm text-clay">as printed</p>
+        ) : printed && report.laboratory ? (
+          <p className="self-center text-sm text-clay">printed: {printed}</p>
+        ) : printed ? (
           <Button look="quiet" busy={busy} onClick={() => void save({ laboratoryName: printed })}>
-            Use the printed name
+            Use the printed name: {printed}
           </Button>
         ) : null}
       </div>

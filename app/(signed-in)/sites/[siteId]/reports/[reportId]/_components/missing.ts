@@ -37,7 +37,7 @@ export function valuesToConfirm(review: Pick<Review, 'samples' | 'rows'>): numbe
 
 export function unsettledSentence(counts: { saving: number; failed: number; conflicts: number; invalid: number }) {
   const parts = [
-    counts.invalid > 0 && `${counted(counts.invalid, 'value')} to mend`,
+    counts.invalid > 0 && `${counted(counts.invalid, 'typed value')} refused`,
     counts.conflicts > 0 && `${counted(counts.conflicts, 'cell')} with two values`,
     counts.failed > 0 && `${counted(counts.failed, 'change')} not saved`,
     counts.saving > 0 && `${counted(counts.saving, 'change')} being saved`,

@@ -1,5 +1,5 @@
 import { ANALYTES, analyte, isAnalyteKey, METHODS, methodsOf, UNITS } from '@/lib/domain/analytes';
-import { FORMS, type Review, type ReviewRow, type ReviewSample } from '@/lib/schemas/review';
+import type { Review, ReviewRow, ReviewSample } from '@/lib/schemas/review';
 import { readValueText, VALUE_TEXT_REASONS } from '@/lib/schemas/valueText';
 import type { GridColumn, GridDoubt, GridOption, GridRow } from '@/lib/ui/grid/types';
 import type { PageMark } from '@/lib/ui/page-view/types';
@@ -18,6 +18,8 @@ const ALL_METHODS: readonly GridOption[] = [
   NOT_GIVEN,
   ...METHODS.map((method) => ({ value: method.key, label: method.label })),
 ];
+/** As what the number is given: the element itself, its oxide, its ion. */
+const FORMS = ['element', 'P2O5', 'K2O', 'NO3', 'SO4', 'CaO', 'MgO'] as const;
 const FORM_OPTIONS: readonly GridOption[] = [NOT_GIVEN, ...FORMS.map((form) => ({ value: form, label: form }))];
 
 /** The words of one cell as the grid holds them. */
@@ -77,12 +79,12 @@ export function placeOf(row: ReviewRow): string {
   return 'Entered by hand';
 }
 
-/** What the page says: the laboratory's own words, number and unit. */
+/** What the page says: the laboratory's own words, number and unit, each once. */
 export function printedWords(row: ReviewRow): string {
   if (row.state === 'added') return '';
   const value = row.original?.printed ?? row.printed;
-  const method = row.methodPrinted ? ` (${row.methodPrinted})` : '';
-  return [row.label, `${value}${row.unitPrinted ? ` ${row.unitPrinted}` : ''}${method}`].filter(Boolean).join(': ');
+  const unit = row.unitPrinted && !row.label.includes(row.unitPrinted) ? ` ${row.unitPrinted}` : '';
+  return [row.label, `${value}${unit}`].filter(Boolean).join(': ');
 }
 
 export function toGridRow(row: ReviewRow, subtitle: string | undefined): GridRow {
@@ -123,7 +125,7 @@ export function columnsFor(rows: readonly ReviewRow[], readOnly: boolean): reado
     options: FORM_OPTIONS,
     widthClass: 'w-24',
   };
-  const printed: GridColumn = { id: 'printed', header: 'On the page', kind: 'readonly', widthClass: 'w-40' };
+  const printed: GridColumn = { id: 'printed', header: 'On the page', kind: 'readonly', widthClass: 'w-36' };
   const columns: GridColumn[] = [
     {
       id: 'analyte',
@@ -131,7 +133,7 @@ export function columnsFor(rows: readonly ReviewRow[], readOnly: boolean): reado
       kind: 'select',
       options: ANALYTE_OPTIONS,
       rowHeader: true,
-      widthClass: 'w-48',
+      widthClass: 'w-44',
       // An empty analyte cannot be saved, and the list has no such line.
       validate: (value) => (isAnalyteKey(value) ? null : 'Not one of the choices. Press Enter and pick one.'),
     },
@@ -139,11 +141,11 @@ export function columnsFor(rows: readonly ReviewRow[], readOnly: boolean): reado
       id: 'value',
       header: 'Value',
       kind: 'number',
-      widthClass: 'w-28',
+      widthClass: 'w-40',
       validate: (value) => valueFault(value, known),
     },
-    { id: 'unit', header: 'Unit', kind: 'select', options: UNIT_OPTIONS, widthClass: 'w-28' },
-    { id: 'method', header: 'Method', kind: 'select', options: ALL_METHODS, widthClass: 'w-36' },
+    { id: 'unit', header: 'Unit', kind: 'select', options: UNIT_OPTIONS, widthClass: 'w-24' },
+    { id: 'method', header: 'Method', kind: 'select', options: ALL_METHODS, widthClass: 'w-32' },
     ...(anyForm ? [form] : []),
     ...(anyPrinted ? [printed] : []),
   ];

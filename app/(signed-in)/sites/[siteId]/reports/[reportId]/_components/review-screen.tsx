@@ -12,7 +12,6 @@ import { Advice } from './advice';
 import { ConfirmBar } from './confirm-bar';
 import { ConfirmedNotice } from './confirmed-notice';
 import { depthUnit } from './depth-units';
-import { LaboratoryField } from './laboratory-field';
 import type { ReportScreenProps } from './report-screen';
 import { sampleFieldId } from './sample-card';
 import { SamplesStrip } from './samples-strip';
@@ -40,7 +39,7 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
   };
   return (
     <>
-      <div className="page-wrap max-w-[110rem]! grid gap-4 pb-6">
+      <div className="page-wrap max-w-[110rem]! grid gap-4 pb-4 empty:hidden">
         {faster ? <Faster problem={faster} onShow={() => live.refresh().then(() => setFaster(null))} /> : null}
         {report.state === 'confirmed' ? <ConfirmedNotice siteId={siteId} review={review} report={report} /> : null}
         {report.state === 'set-aside' ? (
@@ -62,9 +61,15 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
             </ul>
           </Notice>
         ) : null}
-        <LaboratoryField {...place} report={report} />
       </div>
-      <SamplesStrip {...place} unit={depthUnit(units)} today={today} separate={separate} onSeparate={setSeparateFor} />
+      <SamplesStrip
+        {...place}
+        report={report}
+        unit={depthUnit(units)}
+        today={today}
+        separate={separate}
+        onSeparate={setSeparateFor}
+      />
       <ValuesPane {...place} report={report} goTo={goTo} onCounts={setCounts} />
       <Advice review={review} />
       {report.state === 'in-review' ? (

@@ -4,7 +4,7 @@ import type { Review, ReviewSample } from '@/lib/schemas/review';
 import { Button } from '@/lib/ui/actions/button';
 import { Notice } from '@/lib/ui/feedback/notice';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
-import { SelectField } from '@/lib/ui/fields/select-field';
+import { ChoiceField } from './choice-field';
 import { DepthFields } from './depth-fields';
 import type { DepthUnit } from './depth-units';
 import { DraftField } from './draft-field';
@@ -34,8 +34,11 @@ const BAGS = [
   { value: '2', label: 'Second bag of the plot' },
 ];
 
+/** The heads of the columns stand above; below their width each field has its own label. */
+const FIELD = 'content-start max-lg:text-sm lg:[&>label]:sr-only';
+
 export const SAMPLE_ROW =
-  'grid gap-x-4 gap-y-3 sm:grid-cols-2 lg:grid-cols-[minmax(9rem,1.3fr)_minmax(10rem,1.5fr)_10rem_9.5rem_5rem_minmax(8rem,1fr)_6.5rem]';
+  'grid grid-cols-2 gap-x-4 gap-y-3 lg:grid-cols-[minmax(11rem,1.5fr)_minmax(10rem,1.4fr)_10rem_9rem_4.5rem_minmax(8rem,1fr)_6.5rem]';
 
 /** One sample as the report prints it, and what it is to this site: plot, day, depth, bag. */
 export function SampleCard(props: SampleCardProps) {
@@ -56,16 +59,16 @@ export function SampleCard(props: SampleCardProps) {
           <LeftOut sample={sample} name={name} onTake={() => void saves.save({ leftOutReason: null })} />
         ) : (
           <>
-            <SelectField
+            <ChoiceField
               id={sampleFieldId(sample.id, 'plot')}
               name={`plot-${sample.id}`}
               label="Plot"
               aria-label={`Plot of ${name}`}
               prompt="Choose a plot"
-              className="max-lg:text-sm lg:[&>label]:sr-only"
+              className={`max-sm:col-span-2 ${FIELD}`}
               options={plotOptions(review.plots, review.report.droppedOnPlotId)}
               value={sample.plotId ?? ''}
-              onChange={(event) => void saves.save({ plotId: event.currentTarget.value || null })}
+              onSave={(id) => saves.save({ plotId: id || null })}
             />
             <DraftField
               id={sampleFieldId(sample.id, 'day')}
@@ -74,7 +77,7 @@ export function SampleCard(props: SampleCardProps) {
               label="Taken on"
               aria-label={`Day ${name} was taken`}
               max={today}
-              className="max-lg:text-sm lg:[&>label]:sr-only"
+              className={FIELD}
               value={sample.takenOn ?? ''}
               onSave={(text) => saves.save({ takenOn: text || null })}
             />
@@ -84,27 +87,27 @@ export function SampleCard(props: SampleCardProps) {
               label="Cores"
               aria-label={`Cores of ${name}`}
               inputMode="numeric"
-              className="max-lg:text-sm lg:[&>label]:sr-only"
+              className={FIELD}
               value={sample.cores === null ? '' : String(sample.cores)}
               onSave={(text) => {
                 if (text !== '' && !/^\d{1,3}$/.test(text)) return { refused: 'Write a number, like 12.' };
                 return saves.save({ cores: text === '' ? null : Number(text) });
               }}
             />
-            <SelectField
+            <ChoiceField
               name={`bag-${sample.id}`}
               label="Bag"
               aria-label={`Bag of ${name}`}
-              className="max-lg:text-sm lg:[&>label]:sr-only"
+              className={FIELD}
               options={
                 sample.composite > 2
                   ? [...BAGS, { value: String(sample.composite), label: `Bag ${sample.composite}` }]
                   : BAGS
               }
               value={String(sample.composite)}
-              onChange={(event) => void saves.save({ composite: Number(event.currentTarget.value) })}
+              onSave={(bag) => saves.save({ composite: Number(bag) })}
             />
-            <div className="content-center">
+            <div className="self-start max-lg:self-end lg:pt-1">
               <ReasonButton
                 label="Leave out"
                 about={name}
@@ -143,21 +146,38 @@ export function SampleIdentity({ sample }: { sample: ReviewSample }) {
   const name = sampleLabel(sample);
   const facts = [
     sample.printedName && sample.printedName !== name ? `sample ${sample.printedName}` : null,
-    sample.labNumber && sample.labNumber !== name ? `no. ${sample.labNumber}` : null,
     sample.sampledPrinted ? `sampled ${sample.sampledPrinted}` : null,
     sample.reportedOn ? `reported ${onDay(sample.reportedOn)}` : sample.reportedPrinted,
   ].filter((one) => one !== null);
   return (
-    <div className="min-w-0 sm:max-lg:col-span-2">
-      <h3 className="text-base leading-tight break-words">{name}</h3>
-      {facts.length > 0 ? <p className="text-sm text-clay">{facts.join(', ')}</p> : null}
+    <div className="min-w-0 max-lg:col-span-2">
+      <h3 className="text-base leading-tight break-words">
+        {name}
+        {sample.labNumber && sample.labNumber !== name ? (
+          <span className="ml-2 inline-block font-text text-sm font-normal tracking-normal text-clay">
+            no. {sample.labNumber}
+          </span>
+        ) : null}
+      </h3>
+      {facts.length > 0 ? (
+        <p className="text-sm text-clay">
+          {facts.map((fact, at) => (
+            <span key={fact}>
+              <span className="inline-block">
+                {fact}
+                {at < facts.length - 1 ? ',' : ''}
+              </span>{' '}
+            </span>
+          ))}
+        </p>
+      ) : null}
     </div>
   );
 }
 
 function LeftOut({ sample, name, onTake }: { sample: ReviewSample; name: string; onTake: () => void }) {
   return (
-    <div className="flex flex-wrap items-center gap-x-4 gap-y-1 lg:col-span-6">
+    <div className="col-span-2 flex flex-wrap items-center gap-x-4 gap-y-1 lg:col-span-6">
       <p className="min-w-0 flex-1">
         <span className="font-semibold">Left out:</span> {sample.leftOutReason}
       </p>

@@ -1,11 +1,13 @@
 'use client';
 
 import Link from 'next/link';
+import type { Report } from '@/lib/schemas/reports';
 import type { Review } from '@/lib/schemas/review';
 import { Button } from '@/lib/ui/actions/button';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { useSubmit } from '@/lib/ui/use-submit';
 import type { DepthUnit } from './depth-units';
+import { LaboratoryField } from './laboratory-field';
 import { SAMPLE_ROW, SampleCard } from './sample-card';
 import { SampleFacts } from './sample-facts';
 import type { LiveReport } from './use-report';
@@ -13,6 +15,7 @@ import type { LiveReport } from './use-report';
 type StripProps = {
   path: string;
   review: Review;
+  report: Report;
   live: LiveReport;
   readOnly: boolean;
   unit: DepthUnit;
@@ -23,7 +26,7 @@ type StripProps = {
 
 /** Each sample of the report: which plot, which day, how deep. */
 export function SamplesStrip(props: StripProps) {
-  const { path, review, live, readOnly, unit, today, separate, onSeparate } = props;
+  const { path, review, report, live, readOnly, unit, today, separate, onSeparate } = props;
   const { send, busy, problem } = useSubmit();
   const siteId = path.split('/')[2] ?? '';
   const add = async () => {
@@ -32,7 +35,8 @@ export function SamplesStrip(props: StripProps) {
   return (
     <section aria-labelledby="samples-title" className="border-t border-horizon-5 py-4">
       <div className="page-wrap max-w-[110rem]!">
-        <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1">
+        <LaboratoryField {...{ path, review, live, readOnly, report }} />
+        <div className="mt-3 flex flex-wrap items-center justify-between gap-x-6 gap-y-1">
           <h2 id="samples-title" className="text-xl">
             {review.samples.length === 1 ? 'The sample' : `${review.samples.length} samples`}
           </h2>
