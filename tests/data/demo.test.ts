@@ -13,6 +13,8 @@ import { loadPicture } from '@/lib/data/effects/loadPicture';
 import { signIn } from '@/lib/data/people/signIn';
 import { listDue } from '@/lib/data/reminders/listDue';
 import { listReports } from '@/lib/data/reports/listReports';
+import { confirmReport } from '@/lib/data/results/confirmReport';
+import { editRow } from '@/lib/data/review/editRow';
 import { getReview } from '@/lib/data/review/getReview';
 import { listMySites } from '@/lib/data/sites/listMySites';
 import { withSite } from '@/lib/data/transaction';
@@ -258,5 +260,23 @@ describe('where the demo may go', () => {
     } finally {
       rmSync(folder, { recursive: true, force: true });
     }
+  });
+});
+
+describe('the review that waits', () => {
+  it('is mended and confirmed in two steps; then the sulfur of the summer has its verdict and its reminder is done', async () => {
+    const here = siteId('Sloe Bank');
+    const ctx = await adviser();
+    const [waiting] = (await listReports({ ctx, input: { siteId: here, state: 'in-review' } })).reports;
+    if (!waiting) throw new Error('No review waits.');
+    const at = { siteId: here, reportId: waiting.id };
+    const bad = (await getReview({ ctx, input: at })).rows.find(({ printed }) => printed === '65');
+    if (!bad) throw new Error('Nothing is to be mended.');
+    await editRow({ ctx, input: { ...at, rowId: bad.id, version: bad.version, value: '6.5' } });
+    expect((await confirmReport({ ctx, input: at })).results).toBe(4 * 13);
+    const check = (await checksOf('Sloe Bank')).find(({ applications }) => applications[0]?.appliedOn === '2026-08-01');
+    expect(check?.outcome.ok && check.outcome.after.day).toBe('2026-11-14');
+    const { due } = await listDue({ ctx, input: { siteId: here } });
+    expect(due.filter(({ kind }) => kind === 'after-sulfur')).toEqual([]);
   });
 });
