@@ -35,6 +35,18 @@ describe('DriftChart on the server', () => {
     expect(words(page({ finding: 'pH falls by 0.2 a year.' }))).not.toContain('Fewer than four tests');
   });
 
+  it('keeps a finding that stands above it as the name of the figure only', () => {
+    const html = page({ hideFinding: true });
+    const id = /<figure[^>]*aria-labelledby="([^"]+)"/.exec(html)?.[1];
+    expect(html).toContain(`<p id="${id}" class="sr-only">`);
+  });
+
+  it('leads from the row of a test to where it can be read', () => {
+    const html = page({ points: phBroken.map((point) => ({ ...point, href: `/reports/${point.id}` })) });
+    expect(html.match(/<a href="\/reports\/p\d"/g)).toHaveLength(phBroken.length);
+    expect(page()).not.toContain('<a ');
+  });
+
   it('with nothing to draw shows the shape of what will come and offers no download', () => {
     const html = page({ points: [], amendments: [] });
     expect(words(html)).toContain('No test to draw yet');

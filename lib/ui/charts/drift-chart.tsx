@@ -47,7 +47,10 @@ export function DriftChart(props: DriftChartProps) {
   };
 
   return (
-    <figure className="@container grid min-w-0 gap-3 break-inside-avoid" aria-labelledby={findingId}>
+    <figure
+      className="@container grid min-w-0 grid-cols-[minmax(0,1fr)] gap-3 break-inside-avoid"
+      aria-labelledby={findingId}
+    >
       <p
         id={findingId}
         className={hideFinding ? 'sr-only' : cx('max-w-measure text-lg leading-snug', drawn && 'print:hidden')}
@@ -88,7 +91,7 @@ export function DriftChart(props: DriftChartProps) {
         </div>
       )}
       {rows.length > 0 && (
-        <div className="grid gap-2">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-2">
           <ShowNumbers>
             <DriftTable title={title} rows={rows} analyte={analyte} {...worded} />
           </ShowNumbers>

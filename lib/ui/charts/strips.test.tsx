@@ -52,6 +52,11 @@ describe('IntervalStrip', () => {
     );
   });
 
+  it('says what was due where the plan had not all reacted', () => {
+    expect(intervalSentence({ ...fall, plannedWord: 'due' })).toContain('Due by then: −0.50;');
+    expect(renderToStaticMarkup(<IntervalStrip {...fall} plannedWord="due" />)).toContain('due −0.50');
+  });
+
   it('says an open zone and an open interval', () => {
     const open = intervalSentence({ ...fall, oneAndHalf: null, change: { estimate: -0.4, low: null, high: -0.1 } });
     expect(open).toContain('90% interval \u22120.10 or less');
@@ -73,6 +78,11 @@ describe('CompareStrip', () => {
       'Fall 2025 (2 Oct 2025) 6.9; Spring 2026 (14 Apr 2026) 6.6. Difference \u22120.30, 90% interval \u22120.66 to +0.06. ' +
         'Not more than the noise of two tests: it may be nothing. The interval is wider for another season.',
     );
+  });
+
+  it('calls the zero of two plots no difference', () => {
+    expect(renderToStaticMarkup(<CompareStrip {...compare} />)).toContain('no change');
+    expect(renderToStaticMarkup(<CompareStrip {...compare} zeroWord="no difference" />)).not.toContain('no change');
   });
 
   it('draws no difference when the comparison is refused', () => {

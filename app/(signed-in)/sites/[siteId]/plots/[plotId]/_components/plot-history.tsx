@@ -50,7 +50,7 @@ export function PlotHistory({ siteId, siteName, first, mayUpload, mayRecord }: P
         </div>
       </Layer>
       <Layer depth="chart">
-        <div className="grid gap-5" id="chart">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-5" id="chart">
           <SelectField
             name="analyte"
             label="Analyte"
