@@ -2,6 +2,7 @@ import { Problem } from '@/lib/errors';
 import { confirmInput } from '@/lib/schemas/review';
 import { lockPlots } from '../plots/lockPlots';
 import { refreshReminders } from '../reminders/refreshReminders';
+import { holdReportsOf } from '../reports/holdReportsOf';
 import { moveReport } from '../reports/moveReport';
 import { blockersOf } from '../review/blockers';
 import { loadOtherForms } from '../review/loadOtherForms';
@@ -31,6 +32,8 @@ export const confirmReport = siteVerb({
     const { samples, rows } = await loadReview(tx, siteId, reportId);
     const counted = samples.filter((sample) => sample.leftOutReason === null);
     const plotIds = [...new Set(counted.flatMap((sample) => (sample.plotId === null ? [] : [sample.plotId])))];
+    const leansOn = counted.flatMap((sample) => (sample.sameAsId === null ? [] : [sample.sameAsId]));
+    await holdReportsOf(tx, siteId, leansOn);
     await lockPlots(tx, siteId, plotIds);
     const forms = await loadOtherForms(tx, siteId, row, samples, rows);
     const blockers = blockersOf({ samples, rows, forms, separateAnalyses });

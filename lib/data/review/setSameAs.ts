@@ -29,6 +29,10 @@ export const setSameAs = siteVerb({
       if (other.leftOut !== null || (other.state !== 'in-review' && other.state !== 'confirmed')) {
         throw chained('That sample gives no results, so this one cannot lean on it.');
       }
+    }
+    const row = await writeSample(tx, siteId, { reportId, reportSampleId, version }, { sameAsId });
+    if (sameAsId !== null) {
+      // After the write: whoever was about to lean on this sample held it until now, and is seen here.
       const leaning = await tx
         .select({ id: reportSample.id })
         .from(reportSample)
@@ -36,7 +40,6 @@ export const setSameAs = siteVerb({
         .limit(1);
       if (leaning.length > 0) throw chained('Another sample is marked as the same as this one. Take that back first.');
     }
-    const row = await writeSample(tx, siteId, { reportId, reportSampleId, version }, { sameAsId });
     const detail = { reportId, sameAsId };
     await audit({ act: 'sample.same-as', objectKind: 'report-sample', objectId: reportSampleId, detail });
     return toSample(row);
