@@ -25,6 +25,23 @@ describe('useApi', () => {
     expect(ask).not.toHaveBeenCalled();
   });
 
+  it('asks again where an earlier visit left something older than what the server rendered', async () => {
+    const ask = vi.fn().mockImplementation(() => Promise.resolve(answer([ask.mock.calls.length])));
+    vi.stubGlobal('fetch', ask);
+    const kept = new Map();
+    const sameVisit = ({ children }: { children: ReactNode }) => (
+      <SWRConfig value={{ provider: () => kept, dedupingInterval: 0 }}>{children}</SWRConfig>
+    );
+    const visit = () => renderHook(() => useApi<number[]>('/plots', { fallback: [0] }), { wrapper: sameVisit });
+    const first = visit();
+    expect(first.result.current.data).toEqual([0]);
+    await act(() => first.result.current.reload());
+    expect(first.result.current.data).toEqual([1]);
+    first.unmount();
+    const second = visit();
+    await waitFor(() => expect(second.result.current.data).toEqual([2]));
+  });
+
   it('keeps the last good answer beside a later problem', async () => {
     const ask = vi
       .fn()

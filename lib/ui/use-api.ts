@@ -1,6 +1,6 @@
 'use client';
 
-import useSWR from 'swr';
+import useSWR, { useSWRConfig } from 'swr';
 import { apiPath, callApi, type Problem } from './api';
 
 class ProblemError extends Error {
@@ -32,10 +32,14 @@ export type UseApiOptions<T> = {
 
 /** Reads a route and keeps it fresh. A null path asks nothing. The last good answer stays while a later one fails. */
 export function useApi<T>(path: string | null, { fallback, refreshMs = 0 }: UseApiOptions<T> = {}): UseApi<T> {
-  const { data, error, isLoading, mutate } = useSWR<T, unknown>(path === null ? null : apiPath(path), fetcher<T>, {
+  const key = path === null ? null : apiPath(path);
+  const { cache } = useSWRConfig();
+  // What an earlier visit left behind is shown before the fallback, so it must not be taken for fresh.
+  const kept = key !== null && cache.get(key)?.data !== undefined;
+  const { data, error, isLoading, mutate } = useSWR<T, unknown>(key, fetcher<T>, {
     ...(fallback === undefined ? {} : { fallbackData: fallback }),
     refreshInterval: typeof refreshMs === 'number' ? refreshMs : (latest) => refreshMs(latest),
-    revalidateOnMount: fallback === undefined,
+    revalidateOnMount: fallback === undefined || kept,
     // callApi has already tried again where trying again is safe.
     shouldRetryOnError: false,
   });

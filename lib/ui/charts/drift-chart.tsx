@@ -47,10 +47,7 @@ export function DriftChart(props: DriftChartProps) {
   };
 
   return (
-    <figure
-      className="@container grid min-w-0 grid-cols-[minmax(0,1fr)] gap-3 break-inside-avoid"
-      aria-labelledby={findingId}
-    >
+    <figure className="@container grid min-w-0 grid-cols-[minmax(0,1fr)] gap-3" aria-labelledby={findingId}>
       <p
         id={findingId}
         className={hideFinding ? 'sr-only' : cx('max-w-measure text-lg leading-snug', drawn && 'print:hidden')}
@@ -78,7 +75,7 @@ export function DriftChart(props: DriftChartProps) {
       </figcaption>
       {drawn && (
         // On paper the picture stands in for the chart, whose width is that of the screen.
-        <div className="hidden print:block [&>svg]:h-auto [&>svg]:w-full">
+        <div className="hidden break-inside-avoid print:block [&>svg]:h-auto [&>svg]:w-full">
           <DriftPicture
             ref={picture}
             title={title}
