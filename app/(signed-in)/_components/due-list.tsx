@@ -24,6 +24,8 @@ const RESTS = [
   { key: 'month', days: 30, label: 'In a month' },
 ] as const;
 
+const whenDrawn = (then: () => void) => requestAnimationFrame(() => requestAnimationFrame(then));
+
 /** Samples that are due, soonest first, on the first page and on the site's own. */
 export function DueList({ due, today, focusId, onChanged }: DueListProps) {
   return (
@@ -51,9 +53,8 @@ function DueRow({ due, today, focusId, onChanged }: Omit<DueListProps, 'due'> & 
       return result;
     }
     announce(`Noted: ${due.plotName} is sampled. Nobody is reminded of it again.`, { tone: 'saved' });
-    await onChanged();
-    // After the dialog has given the focus back to a button that is going away.
-    requestAnimationFrame(() => document.getElementById(focusId)?.focus());
+    // The dialog closes first and gives the focus back; then the row goes, and the heading takes it.
+    void onChanged().then(() => whenDrawn(() => document.getElementById(focusId)?.focus()));
     return result;
   };
   const rest = async (days: number) => {

@@ -3,6 +3,13 @@ import { Wordmark } from './logo';
 
 export type FooterLink = { href: string; label: string };
 
+/** At the foot of every page that names no others. */
+export const GUIDE_LINKS: readonly FooterLink[] = [
+  { href: '/guide', label: 'Guide' },
+  { href: '/guide/method', label: 'How verdicts are made' },
+  { href: '/guide/trust', label: 'What you can rely on' },
+];
+
 export function Footer({ links }: { links: readonly FooterLink[] }) {
   return (
     <footer data-frame="footer" className="on-peat mt-16 text-chalk">

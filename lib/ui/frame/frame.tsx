@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
 import type { NavItem } from './current-item';
-import { Footer, type FooterLink } from './footer';
+import { Footer, type FooterLink, GUIDE_LINKS } from './footer';
 import { Wordmark } from './logo';
 import { NavBar, NavRow } from './nav';
 import { SkipLink } from './skip-link';
@@ -28,7 +28,7 @@ export function Frame({
   phoneNav,
   siteSwitcher,
   account,
-  footerLinks = [],
+  footerLinks = GUIDE_LINKS,
   strip,
   children,
 }: FrameProps) {

@@ -1,6 +1,6 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
-import { Footer, type FooterLink } from './footer';
+import { Footer, type FooterLink, GUIDE_LINKS } from './footer';
 import { Wordmark } from './logo';
 import { SkipLink } from './skip-link';
 import { SoilColumn } from './soil-column';
@@ -15,7 +15,7 @@ type PublicFrameProps = {
 };
 
 /** For everyone who is not signed in. */
-export function PublicFrame({ links = [], footerLinks = [], shape = 'form', children }: PublicFrameProps) {
+export function PublicFrame({ links = [], footerLinks = GUIDE_LINKS, shape = 'form', children }: PublicFrameProps) {
   return (
     <div className="flex min-h-dvh flex-col">
       <SkipLink />
