@@ -80,7 +80,7 @@ export function outcomesOf(edits: readonly GridEdit[], settled: Settled): GridEd
 }
 
 /** The review with some rows as the server now has them; an answer that was overtaken changes nothing. */
-export function withRows(review: Review, rows: readonly ReviewRow[]): Review {
+export function withRows<R extends Pick<Review, 'rows'>>(review: R, rows: readonly ReviewRow[]): R {
   const fresh = new Map(rows.map((row) => [row.id, row]));
   const known = new Set(review.rows.map((row) => row.id));
   return {

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef, useState } from 'react';
+import { type ReactNode, useEffect, useRef, useState } from 'react';
 import { can } from '@/lib/access/table';
 import type { Report } from '@/lib/schemas/reports';
 import type { Blocker, Review } from '@/lib/schemas/review';
@@ -28,7 +28,14 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
   const [counts, setCounts] = useState(NONE_OPEN);
   const [separate, setSeparate] = useState<ReadonlySet<string>>(new Set());
   const [faster, setFaster] = useState<Problem | null>(null);
+  /** This person confirmed, or asked to see what another one confirmed: the answer takes the focus. */
+  const [settled, setSettled] = useState(false);
   const [goTo, setGoTo] = useState<{ rowId: string; key: number } | null>(null);
+  const afterwards = async (then?: () => void) => {
+    setSettled(true);
+    await live.refresh();
+    then?.();
+  };
   const place = { path, review, live, readOnly };
   const setSeparateFor = (id: string, on: boolean) =>
     setSeparate((now) => new Set([...now].filter((one) => one !== id).concat(on ? [id] : [])));
@@ -40,14 +47,18 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
   return (
     <>
       <div className="page-wrap max-w-[110rem]! grid gap-4 pb-4 empty:hidden">
-        {faster ? <Faster problem={faster} onShow={() => live.refresh().then(() => setFaster(null))} /> : null}
-        {report.state === 'confirmed' ? <ConfirmedNotice siteId={siteId} review={review} report={report} /> : null}
+        {faster ? <Faster problem={faster} onShow={() => void afterwards(() => setFaster(null))} /> : null}
+        {report.state === 'confirmed' ? (
+          <TakesFocus when={settled}>
+            <ConfirmedNotice siteId={siteId} review={review} report={report} />
+          </TakesFocus>
+        ) : null}
         {report.state === 'set-aside' ? (
           <Notice title="Set aside">
             Nothing of it counts. File and rows are kept; an owner or adviser can bring it back.
           </Notice>
         ) : null}
-        {report.state === 'in-review' && report.withdrawnReason ? (
+        {report.state === 'in-review' && report.withdrawnReason && !faster ? (
           <Notice tone="look" title="The confirmation was withdrawn">
             {report.withdrawnReason}
           </Notice>
@@ -80,7 +91,7 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
           counts={counts}
           separate={separate}
           onShow={show}
-          onConfirmed={live.refresh}
+          onConfirmed={() => afterwards()}
           onFaster={setFaster}
           refresh={live.refresh}
         />
@@ -89,15 +100,25 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
   );
 }
 
-/** Two confirmed at once: who was first, and the way to what they confirmed. */
-function Faster({ problem, onShow }: { problem: Problem; onShow: () => void }) {
+/** Holds the focus once its content is what was just asked for; the button that asked is gone by then. */
+function TakesFocus({ when, children, ...rest }: { when: boolean; children: ReactNode; 'data-testid'?: string }) {
   const box = useRef<HTMLDivElement>(null);
   useEffect(() => {
-    box.current?.focus();
+    if (!when) return;
+    box.current?.focus({ preventScroll: true });
     box.current?.scrollIntoView({ block: 'center' });
-  }, []);
+  }, [when]);
   return (
-    <div ref={box} tabIndex={-1} data-testid="faster">
+    <div ref={box} tabIndex={-1} {...rest}>
+      {children}
+    </div>
+  );
+}
+
+/** Two confirmed at once: who was first, and the way to what they confirmed. */
+function Faster({ problem, onShow }: { problem: Problem; onShow: () => void }) {
+  return (
+    <TakesFocus when data-testid="faster">
       <Notice
         tone="look"
         title={problem.title}
@@ -108,8 +129,8 @@ function Faster({ problem, onShow }: { problem: Problem; onShow: () => void }) {
           </Button>
         }
       >
-        {problem.detail} Your confirmation was not counted a second time, and nothing is doubled.
+        {problem.detail} Yours was not counted a second time, and nothing is doubled.
       </Notice>
-    </div>
+    </TakesFocus>
   );
 }

@@ -35,7 +35,8 @@ export function useReport(path: string, first: First): LiveReport {
   const asked = reportAnswer.data ?? first.report;
   const reviewAnswer = useApi<Review>(hasReview(asked.state) ? `${path}/review` : null, {
     ...(first.review ? { fallback: first.review } : {}),
-    refreshMs: (latest) => (latest?.report.state === 'in-review' ? WHILE_REVIEWED_MS : 0),
+    // Before the first answer of its own nothing is known here, so it asks.
+    refreshMs: (latest) => (latest && latest.report.state !== 'in-review' ? 0 : WHILE_REVIEWED_MS),
   });
   const review = hasReview(asked.state) ? (reviewAnswer.data ?? null) : null;
   const report = review && review.report.version >= asked.version ? review.report : asked;
