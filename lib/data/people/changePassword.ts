@@ -9,7 +9,10 @@ import { forgiveTries, spendTry } from './limiter';
 import { mailPasswordChanged } from './mails';
 import { fitsPassword, hashPassword } from './passwordHash';
 import { assertGoodPassword } from './passwordRules';
-import { closeAllSessions, closeSession, openSession } from './session';
+import { closeAllSessions, closeSession, isSharedComputer, openSession } from './session';
+
+const changedElsewhere = () =>
+  new Problem('conflict', 'The password was changed somewhere else a moment ago. Sign in with that one.');
 
 /** Asks for the current password, mails the owner, and gives this browser a new session in place of its old one. */
 export const changePassword = openPersonVerb({
@@ -25,19 +28,26 @@ export const changePassword = openPersonVerb({
     }
     await forgiveTries(me.email);
     const passwordHash = await hashPassword(input.password);
-    await withPeople(async (tx) => {
+    const sharedComputer = await withPeople(async (tx) => {
       const changed = await tx
         .update(person)
         .set({ passwordHash })
         .where(and(eq(person.id, row.id), eq(person.passwordHash, row.passwordHash)))
         .returning({ id: person.id });
       if (changed.length === 0) {
-        throw new Problem('conflict', 'The password was changed somewhere else a moment ago. Sign in with that one.');
+        throw changedElsewhere();
       }
       if (input.endOtherSessions) await closeAllSessions(tx, row.id, sessionId);
       await mailPasswordChanged(tx, ctx, row, input.endOtherSessions ? 'others' : 'none');
+      return isSharedComputer(tx, sessionId);
     });
     await closeSession(ctx, sessionId);
-    return openSession(ctx, row.id, { sharedComputer: false, userAgent: input.userAgent });
+    const opened = await openSession(
+      ctx,
+      { personId: row.id, passwordHash },
+      { sharedComputer, userAgent: input.userAgent },
+    );
+    if (!opened) throw changedElsewhere();
+    return opened;
   },
 });

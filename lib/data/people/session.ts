@@ -1,9 +1,10 @@
-import { and, eq, ne } from 'drizzle-orm';
+import { and, eq, isNull, ne } from 'drizzle-orm';
 import { Cookie } from 'lucia';
 import type { Transaction } from '@/db/client';
-import { session } from '@/db/schema';
+import { person, session } from '@/db/schema';
 import { asPersonId } from '@/lib/domain/ids';
 import { type Actor, type Ctx, databaseNow } from '../context';
+import { withPeople } from '../transaction';
 import { luciaAt, SESSION_COOKIE } from './lucia';
 import { hashSecret, newSecret } from './secrets';
 
@@ -18,18 +19,39 @@ function cookie(value: string, maxAge: number | undefined): string {
   return new Cookie(SESSION_COOKIE, value, maxAge === undefined ? attributes : { ...attributes, maxAge }).serialize();
 }
 
+/**
+ * For whoever has just shown this password. Null when it was changed meanwhile: the look after the writing waits for a
+ * change under way, and a change that comes later finds the session and ends it.
+ */
 export async function openSession(
   ctx: Ctx,
-  personId: string,
+  shown: { personId: string; passwordHash: string },
   options: { sharedComputer: boolean; userAgent: string | null },
-): Promise<OpenedSession> {
+): Promise<OpenedSession | null> {
   const secret = newSecret(ctx);
+  const sessionId = hashSecret(secret);
   await luciaAt(ctx.now).createSession(
-    personId,
+    shown.personId,
     { createdAt: ctx.now, sharedComputer: options.sharedComputer, userAgent: options.userAgent },
-    { sessionId: hashSecret(secret) },
+    { sessionId },
   );
+  const still = await withPeople((tx) =>
+    tx
+      .select({ id: person.id })
+      .from(person)
+      .where(and(eq(person.id, shown.personId), eq(person.passwordHash, shown.passwordHash), isNull(person.disabledAt)))
+      .for('share'),
+  );
+  if (still.length === 0) {
+    await closeSession(ctx, sessionId);
+    return null;
+  }
   return { setCookie: cookie(secret, options.sharedComputer ? undefined : ABSOLUTE_SECONDS) };
+}
+
+export async function isSharedComputer(tx: Transaction, sessionId: string): Promise<boolean> {
+  const [row] = await tx.select({ shared: session.sharedComputer }).from(session).where(eq(session.id, sessionId));
+  return row?.shared ?? false;
 }
 
 export const blankCookie = (): OpenedSession => ({ setCookie: cookie('', 0) });
