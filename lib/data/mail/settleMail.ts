@@ -1,8 +1,19 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, type SQL, sql } from 'drizzle-orm';
+import type { PgColumn } from 'drizzle-orm/pg-core';
 import { z } from 'zod';
 import { outbox } from '@/db/schema';
 import { withPeople } from '../transaction';
 import { workerVerb } from '../verb';
+
+/** Links in these letters open something; once a letter has left, or never will, its body is not kept. */
+const carriesSecret = sql`${outbox.kind} in ('verify-address', 'reset-password', 'reminder')`;
+const unlessSecret = <T extends PgColumn>(column: T, blank: SQL) =>
+  sql`case when ${carriesSecret} then ${blank} else ${column} end`;
+const WITHOUT_BODY = {
+  html: unlessSecret(outbox.html, sql`''`),
+  text: unlessSecret(outbox.text, sql`''`),
+  headers: unlessSecret(outbox.headers, sql`'{}'::jsonb`),
+};
 
 /** Writes down what the provider said. */
 export const settleMail = workerVerb({
@@ -13,16 +24,16 @@ export const settleMail = workerVerb({
   ]),
   run: ({ ctx, input }) =>
     withPeople(async (tx) => {
-      const change =
-        input.answer === 'sent'
-          ? { state: 'sent' as const, sentAt: ctx.now, providerId: input.providerId, lastError: null }
-          : {
-              state: input.answer === 'refused' ? ('failed' as const) : ('queued' as const),
-              lastError: input.sentence,
-            };
+      const change = {
+        sent: () => ({ state: 'sent' as const, sentAt: ctx.now, ...WITHOUT_BODY }),
+        later: () => ({ state: 'queued' as const }),
+        refused: () => ({ state: 'failed' as const, ...WITHOUT_BODY }),
+      }[input.answer]();
+      const said =
+        input.answer === 'sent' ? { providerId: input.providerId, lastError: null } : { lastError: input.sentence };
       await tx
         .update(outbox)
-        .set(change)
+        .set({ ...change, ...said })
         .where(and(eq(outbox.id, input.id), eq(outbox.state, 'sending')));
     }),
 });
