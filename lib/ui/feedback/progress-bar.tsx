@@ -12,7 +12,7 @@ export function ProgressBar({ label, percent, valueText }: ProgressBarProps) {
   return (
     <div className="grid gap-1">
       <p className="flex flex-wrap justify-between gap-x-4 text-sm">
-        <span className="font-semibold">{label}</span>
+        <span className="min-w-0 font-semibold break-words">{label}</span>
         <span className="text-clay">{valueText}</span>
       </p>
       <div

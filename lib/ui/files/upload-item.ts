@@ -74,7 +74,7 @@ export const pauseBefore = (attempt: number): number => 800 * 3 ** (attempt - 2)
 
 export function megabytes(bytes: number): string {
   const value = bytes / 1024 / 1024;
-  return value < 0.1 ? `${Math.max(1, Math.round(bytes / 1024))} KB` : `${value.toFixed(1).replace(/\.0$/, '')} MB`;
+  return value < 0.1 ? `${Math.ceil(bytes / 1024)} KB` : `${value.toFixed(1).replace(/\.0$/, '')} MB`;
 }
 
 /** "1.2 of 3.4 MB": the unit once where it is the same. */

@@ -1,26 +1,39 @@
 'use client';
 
 import { useEffect, useRef } from 'react';
+import { Button } from '../actions/button';
 import { useAnnounce } from '../feedback/announce';
-import { outcomeText, type UploadItem } from './upload-item';
+import { counted, isUnderWay, outcomeText, type UploadItem } from './upload-item';
 import { UploadRow, type UploadRowProps } from './upload-row';
 
-type UploadListProps = Pick<UploadRowProps, 'reportHref' | 'store' | 'mayType'> & {
+type UploadListProps = Pick<UploadRowProps, 'reportHref' | 'mayType'> & {
   readonly items: readonly UploadItem[];
+  readonly store: UploadRowProps['store'] & { readonly clear: () => void };
 };
 
 /** Every file sent since the page was opened: what is happening to it, and what to do next. */
 export function UploadList({ items, ...row }: UploadListProps) {
   useSpoken(items);
   if (items.length === 0) return null;
+  const done = items.filter((item) => !isUnderWay(item) && item.stage.kind !== 'kept').length;
   return (
-    <ul aria-label="Files on their way" className="border-y border-fallow bg-white">
-      {items.map((item) => (
-        <li key={item.id} className="border-b border-horizon-5 last:border-0">
-          <UploadRow item={item} {...row} />
-        </li>
-      ))}
-    </ul>
+    <section aria-label="Files on their way" className="border border-fallow bg-white">
+      <div className="flex flex-wrap items-center justify-between gap-x-4 border-b border-fallow bg-silt pl-4">
+        <h2 className="py-2 font-sans text-base font-semibold">{counted(items.length, 'file')} on their way</h2>
+        {done > 1 ? (
+          <Button look="plain" className="text-sm" onClick={row.store.clear}>
+            Clear the {done} that are done
+          </Button>
+        ) : null}
+      </div>
+      <ul>
+        {items.map((item) => (
+          <li key={item.id} className="border-b border-horizon-5 last:border-0">
+            <UploadRow item={item} {...row} />
+          </li>
+        ))}
+      </ul>
+    </section>
   );
 }
 

@@ -1,5 +1,6 @@
 'use client';
 
+import { X } from 'lucide-react';
 import { useEffect, useState } from 'react';
 import { Button } from '../actions/button';
 import { LinkButton } from '../actions/link-button';
@@ -32,12 +33,23 @@ export type UploadRowProps = {
 export function UploadRow({ item, store, reportHref, mayType }: UploadRowProps) {
   const { file, stage } = item;
   const bar = barOf(item);
+  const mayLeave = !isUnderWay(item) && stage.kind !== 'kept';
   return (
-    <div className="grid gap-2 px-4 py-3" data-stage={stage.kind}>
+    <div className="relative grid gap-1.5 px-4 py-3" data-stage={stage.kind}>
+      {mayLeave ? (
+        <button
+          type="button"
+          className="absolute top-0.5 right-0.5 grid size-(--target) place-items-center rounded-sm text-clay hover:bg-silt hover:text-humus"
+          aria-label={`Take ${file.name} off this list`}
+          onClick={() => store.dismiss(item.id)}
+        >
+          <X aria-hidden className="size-5" />
+        </button>
+      ) : null}
       {bar ? (
         <ProgressBar label={file.name} percent={bar.percent} valueText={bar.text} />
       ) : (
-        <p className="flex flex-wrap items-baseline gap-x-4">
+        <p className="flex flex-wrap items-baseline gap-x-4 pr-10">
           <span className="min-w-0 font-semibold break-all">{file.name}</span>
           <StatusWord status={markOf(stage)}>{wordOf(stage)}</StatusWord>
         </p>
@@ -57,6 +69,9 @@ export function UploadRow({ item, store, reportHref, mayType }: UploadRowProps) 
 function Said({ stage }: { stage: UploadStage }) {
   const slow = useSlow(stage);
   if (stage.kind === 'refused') return <p className="max-w-measure">{stage.detail}</p>;
+  if (stage.kind === 'cancelled') {
+    return <p className="max-w-measure">If it had arrived already, it stands among the reports.</p>;
+  }
   if (stage.kind === 'seen-before') {
     return (
       <p className="max-w-measure">
@@ -102,11 +117,6 @@ function useSlow(stage: UploadStage): boolean {
 function Ways({ item, store, reportHref, mayType }: UploadRowProps) {
   const { stage, file, id } = item;
   const name = <span className="sr-only"> {file.name}</span>;
-  const away = (
-    <Button look="plain" onClick={() => store.dismiss(id)}>
-      Take off this list<span className="sr-only">: {file.name}</span>
-    </Button>
-  );
   if (isUnderWay(item)) {
     return (
       <Button look="quiet" onClick={() => store.cancel(id)}>
@@ -122,33 +132,24 @@ function Ways({ item, store, reportHref, mayType }: UploadRowProps) {
           <Button look="quiet" onClick={() => store.sendAsRevision(id)}>
             Send as a new revision
           </Button>
-          {away}
         </>
       );
     case 'settled':
       return (
-        <>
-          <LinkButton href={reportHref(stage.reportId)} look={stage.report.state === 'in-review' ? 'primary' : 'quiet'}>
-            {stage.report.state === 'in-review' ? reviewLabel(stage.report.samples.all) : `Open ${file.name}`}
-          </LinkButton>
-          {away}
-        </>
+        <LinkButton href={reportHref(stage.reportId)} look={stage.report.state === 'in-review' ? 'primary' : 'quiet'}>
+          {stage.report.state === 'in-review' ? reviewLabel(stage.report.samples.all) : `Open ${file.name}`}
+        </LinkButton>
       );
     case 'refused':
     case 'cancelled':
-      return (
-        <>
-          {stage.kind === 'cancelled' || stage.mayRetry ? (
-            <Button look="quiet" onClick={() => store.retry(id)}>
-              Send{name} again
-            </Button>
-          ) : (
-            <LinkButton look="quiet" href={mayType}>
-              Type the report in
-            </LinkButton>
-          )}
-          {away}
-        </>
+      return stage.kind === 'cancelled' || stage.mayRetry ? (
+        <Button look="quiet" onClick={() => store.retry(id)}>
+          Send{name} again
+        </Button>
+      ) : (
+        <LinkButton look="quiet" href={mayType}>
+          Type the report in
+        </LinkButton>
       );
     default:
       return null;

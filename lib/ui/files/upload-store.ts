@@ -28,7 +28,7 @@ const pause = (ms: number, signal: AbortSignal) =>
     });
   });
 
-const WORLD: UploadWorld = { send: uploadApi, ask: callApi, pause, now: Date.now };
+export const REAL_WORLD: UploadWorld = { send: uploadApi, ask: callApi, pause, now: Date.now };
 
 const AT_ONCE = 2;
 const ASK_EVERY_MS = 1_000;
@@ -49,7 +49,7 @@ export class UploadStore {
 
   constructor(
     private readonly siteId: string,
-    private readonly world: UploadWorld = WORLD,
+    private readonly world: UploadWorld = REAL_WORLD,
   ) {}
 
   readonly subscribe = (listener: () => void): (() => void) => {
@@ -92,6 +92,11 @@ export class UploadStore {
     if (item && !isUnderWay(item)) this.show(this.items.filter((one) => one.id !== id));
   };
 
+  /** Takes off what needs no more watching; what is under way or being read stays. */
+  readonly clear = (): void => {
+    this.show(this.items.filter((item) => isUnderWay(item) || item.stage.kind === 'kept'));
+  };
+
   private queue(id: string, change: Partial<UploadItem>) {
     this.show(this.items.map((item) => (item.id === id ? { ...item, ...change, stage: { kind: 'queued' } } : item)));
     this.work();
@@ -123,7 +128,7 @@ export class UploadStore {
       }
       // A revision that may have arrived must not be sent twice by itself: each sending makes another.
       if (!mayPass(result.problem) || attempt === ATTEMPTS || item.asRevision) {
-        this.set(item.id, refusal(result.problem, item.asRevision));
+        this.set(item.id, refusal(result.problem, item));
         break;
       }
       this.set(item.id, { kind: 'pausing', attempt });
@@ -212,11 +217,15 @@ function formOf(item: UploadItem): FormData {
 const reportOf = ({ stage }: UploadItem): string | null =>
   stage.kind === 'kept' || stage.kind === 'settled' ? stage.reportId : null;
 
-function refusal(problem: Problem, asRevision: boolean): UploadStage {
+function refusal(problem: Problem, { file: { name: fileName }, asRevision }: UploadItem): UploadStage {
   if (!mayPass(problem)) {
     // The file itself was looked at and not taken; sending it again changes nothing.
     const mayRetry = problem.status === 401 || problem.status === 429 || problem.status >= 500;
-    return { kind: 'refused', title: problem.title, detail: problem.detail, mayRetry };
+    // The sentence may begin with the name that already stands above it.
+    const detail = problem.detail.startsWith(`${fileName}: `)
+      ? problem.detail.slice(fileName.length + 2)
+      : problem.detail;
+    return { kind: 'refused', title: 'Not taken', detail, mayRetry };
   }
   const detail = asRevision
     ? 'The connection broke, and the revision may have arrived. Look in the list of reports before you send it again.'

@@ -15,6 +15,7 @@ type PlanListProps = Pick<
   readonly unit: LengthUnit;
   readonly outlineOf: (plot: PlanPlot) => PlanOutline | null;
   readonly accept: string;
+  readonly className?: string;
 };
 
 /** The same plots as a list: for a phone, for a screen reader, and for who would rather read. */
@@ -41,7 +42,7 @@ export function PlanList(props: PlanListProps) {
     };
   };
   return (
-    <ul className="grid content-start border-t border-fallow/60" aria-label="Plots">
+    <ul className={cx('border-t border-fallow/60', props.className)} aria-label="Plots">
       {props.plots.map((plot) => (
         <li
           key={plot.id}

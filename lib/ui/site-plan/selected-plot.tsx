@@ -26,7 +26,7 @@ export function SelectedPlot(props: SelectedPlotProps) {
     >
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
         <div className="min-w-0 flex-1 basis-48">
-          <h3 className="text-lg">
+          <h2 className="text-lg break-words">
             <a
               href={props.plotHref(plot.id)}
               className="text-link"
@@ -38,7 +38,7 @@ export function SelectedPlot(props: SelectedPlotProps) {
             >
               Open {plot.name}
             </a>
-          </h3>
+          </h2>
           <p className="text-sm text-clay">
             {[plotArea(plot, outline, unit), lastTestText(plot), plot.crop].filter(Boolean).join(' · ')}
           </p>

@@ -3,6 +3,7 @@
 import { Maximize, PencilRuler, Square, Undo2, ZoomIn, ZoomOut } from 'lucide-react';
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { Button } from '../actions/button';
+import { cx } from '../cx';
 import { ACCEPTED_FILES } from '../files/upload-item';
 import { outlineOf, overlaps } from './geometry';
 import { PlanDrawing } from './plan-drawing';
@@ -88,7 +89,7 @@ export function SitePlan(props: SitePlanProps) {
           <>
             <Button
               look={mode === 'rectangle' ? 'primary' : 'quiet'}
-              size="small"
+              className="min-h-(--target) text-sm"
               aria-pressed={mode === 'rectangle'}
               icon={<Square aria-hidden="true" className="size-4" />}
               onClick={() => toggle('rectangle')}
@@ -97,7 +98,7 @@ export function SitePlan(props: SitePlanProps) {
             </Button>
             <Button
               look={mode === 'free' ? 'primary' : 'quiet'}
-              size="small"
+              className="min-h-(--target) text-sm"
               aria-pressed={mode === 'free'}
               icon={<PencilRuler aria-hidden="true" className="size-4" />}
               onClick={() => toggle('free')}
@@ -106,7 +107,7 @@ export function SitePlan(props: SitePlanProps) {
             </Button>
             <Button
               look={mode === 'numbers' ? 'primary' : 'quiet'}
-              size="small"
+              className="min-h-(--target) text-sm"
               aria-expanded={mode === 'numbers'}
               onClick={() => toggle('numbers')}
             >
@@ -114,7 +115,7 @@ export function SitePlan(props: SitePlanProps) {
             </Button>
             <Button
               look="quiet"
-              size="small"
+              className="min-h-(--target) text-sm"
               icon={<Undo2 aria-hidden="true" className="size-4" />}
               onClick={drafts.undo}
               unavailable={!drafts.canUndo && 'nothing to undo'}
@@ -126,8 +127,7 @@ export function SitePlan(props: SitePlanProps) {
         <span className="ml-auto flex gap-2">
           <Button
             look="quiet"
-            size="small"
-            className="gap-0!"
+            className="min-w-(--target) gap-0! px-2"
             icon={<ZoomOut aria-hidden="true" className="size-4" />}
             onClick={() => setOwnView(zoomView(view, 1 / 1.4))}
           >
@@ -135,8 +135,7 @@ export function SitePlan(props: SitePlanProps) {
           </Button>
           <Button
             look="quiet"
-            size="small"
-            className="gap-0!"
+            className="min-w-(--target) gap-0! px-2"
             icon={<ZoomIn aria-hidden="true" className="size-4" />}
             onClick={() => setOwnView(zoomView(view, 1.4, centreOfSelected(selectedOutline)))}
           >
@@ -144,7 +143,7 @@ export function SitePlan(props: SitePlanProps) {
           </Button>
           <Button
             look="quiet"
-            size="small"
+            className="text-sm"
             icon={<Maximize aria-hidden="true" className="size-4" />}
             onClick={() => setOwnView(null)}
             unavailable={ownView === null && 'all of it is shown'}
@@ -167,38 +166,46 @@ export function SitePlan(props: SitePlanProps) {
           />
         </div>
       ) : null}
-      <div>
-        <PlanDrawing
-          {...props}
-          svg={svg}
-          view={view}
-          size={size}
-          mode={mode === 'numbers' ? 'none' : mode}
-          drafts={drafts}
-          onView={setOwnView}
-          onDrawn={created}
-          say={setSaid}
-        />
-        {plots.length === 0 ? (
-          <p className="border border-t-0 border-fallow bg-silt px-4 py-3 text-sm">
-            No plot yet. Each will stand here to scale, with its area, its last test and its pH.
-          </p>
-        ) : null}
-        {selected && selectedOutline ? (
-          <SelectedPlot
+      <div
+        className={cx(
+          'grid items-start gap-x-8 gap-y-3',
+          (plots.length > 0 || props.aside) && 'lg:grid-cols-[minmax(0,1fr)_22rem] lg:grid-rows-[auto_1fr]',
+        )}
+      >
+        {props.aside ? <div className="min-w-0 lg:col-start-2">{props.aside}</div> : null}
+        <div className="min-w-0 lg:col-start-1 lg:row-span-2 lg:row-start-1">
+          <PlanDrawing
             {...props}
-            plot={selected}
-            outline={selectedOutline}
-            overlapping={overlapping.map((plot) => plot.name)}
-            accept={ACCEPTED_FILES}
-            onNumbers={(outline) => drafts.commit(selected, outline)}
+            svg={svg}
+            view={view}
+            size={size}
+            mode={mode === 'numbers' ? 'none' : mode}
+            drafts={drafts}
+            onView={setOwnView}
+            onDrawn={created}
+            say={setSaid}
           />
-        ) : null}
+          {plots.length === 0 && !canEdit ? (
+            <p className="border border-t-0 border-fallow bg-silt px-4 py-3 text-sm">
+              No plot yet. Each will stand here to scale, with its area, its last test and its pH.
+            </p>
+          ) : null}
+          {selected && selectedOutline ? (
+            <SelectedPlot
+              {...props}
+              plot={selected}
+              outline={selectedOutline}
+              overlapping={overlapping.map((plot) => plot.name)}
+              accept={ACCEPTED_FILES}
+              onNumbers={(outline) => drafts.commit(selected, outline)}
+            />
+          ) : null}
+          <p role="status" aria-live="polite" className="mt-2 min-h-6 text-sm text-clay" data-testid="site-plan-said">
+            {said}
+          </p>
+        </div>
+        <PlanList {...props} className="lg:col-start-2" outlineOf={drafts.outlineOf} accept={ACCEPTED_FILES} />
       </div>
-      <p role="status" aria-live="polite" className="min-h-6 text-sm text-clay" data-testid="site-plan-said">
-        {said}
-      </p>
-      <PlanList {...props} outlineOf={drafts.outlineOf} accept={ACCEPTED_FILES} />
     </div>
   );
 }

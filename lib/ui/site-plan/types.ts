@@ -1,3 +1,5 @@
+import type { ReactNode } from 'react';
+
 /** Metres from the plan's lower left, y up. */
 export interface PlanPoint {
   readonly x: number;
@@ -33,6 +35,9 @@ export interface PlanPlot {
   readonly waiting?: { readonly count: number; readonly href: string };
 }
 
+/** Thrown by `onChangeOutline` when whoever throws it says the reason elsewhere on the page. */
+export class ToldElsewhere extends Error {}
+
 export interface SitePlanProps {
   readonly siteName: string;
   readonly plots: readonly PlanPlot[];
@@ -53,6 +58,8 @@ export interface SitePlanProps {
   /** Rejected: the plan shows the old outline again and says so. */
   readonly onChangeOutline?: (plotId: string, outline: PlanOutline) => Promise<void>;
   readonly onCreate?: (outline: PlanOutline) => void;
+  /** Stands beside the plan and above the list: files on their way, say. */
+  readonly aside?: ReactNode;
   /** Null: let go over the plan but over no plot. */
   readonly onDropFiles?: (plotId: string | null, files: readonly File[]) => void;
 }

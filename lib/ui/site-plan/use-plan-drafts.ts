@@ -1,7 +1,7 @@
 'use client';
 
 import { useCallback, useEffect, useState } from 'react';
-import type { PlanOutline, PlanPlot, SitePlanProps } from './types';
+import { type PlanOutline, type PlanPlot, type SitePlanProps, ToldElsewhere } from './types';
 
 interface Draft {
   readonly outline: PlanOutline;
@@ -66,9 +66,9 @@ export function usePlanDrafts(
           return draft?.outline === outline ? new Map(now).set(plot.id, { ...draft, saved: true }) : now;
         });
         say(told);
-      } catch {
+      } catch (error) {
         dropPreview(plot.id);
-        say(`${plot.name} was not saved and stands where it was. Try again.`);
+        say(error instanceof ToldElsewhere ? '' : `${plot.name} was not saved and stands where it was. Try again.`);
       }
     },
     [dropPreview, onChangeOutline, preview, say],

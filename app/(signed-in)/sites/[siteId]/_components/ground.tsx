@@ -85,7 +85,7 @@ export function Ground({ site, unit, first }: GroundProps) {
                 Add a plot
               </LinkButton>
             ) : null}
-            <LinkButton look="plain" href={`${home}/targets`}>
+            <LinkButton look="quiet" href={`${home}/targets`}>
               Target sets
             </LinkButton>
           </>
@@ -96,15 +96,7 @@ export function Ground({ site, unit, first }: GroundProps) {
         {outlines.conflict ? (
           <OutlineConflictNotice conflict={outlines.conflict} unit={unit} onSettle={outlines.settle} />
         ) : null}
-        <div id={ON_THEIR_WAY} className="scroll-mt-4">
-          <UploadList
-            items={items}
-            store={store}
-            reportHref={(id) => `${home}/reports/${id}`}
-            mayType={`${home}/reports/new`}
-          />
-        </div>
-        {list.length === 0 ? <FirstPlot home={home} mayEdit={mayEdit} /> : null}
+        {list.length === 0 && mayEdit ? <FirstPlot home={home} /> : null}
         <SitePlan
           siteName={site.name}
           plots={shown}
@@ -116,6 +108,18 @@ export function Ground({ site, unit, first }: GroundProps) {
           onOpen={(id) => router.push(`${home}/plots/${id}`)}
           canEdit={mayEdit}
           canUpload={mayUpload}
+          aside={
+            items.length === 0 ? null : (
+              <div id={ON_THEIR_WAY} className="scroll-mt-4">
+                <UploadList
+                  items={items}
+                  store={store}
+                  reportHref={(id) => `${home}/reports/${id}`}
+                  mayType={`${home}/reports/new`}
+                />
+              </div>
+            )
+          }
           {...(mayUpload ? { onDropFiles: send } : {})}
           {...(mayEdit
             ? {

@@ -16,7 +16,9 @@ export function planPlots(
     const waiting = inReview.filter((report) => isAbout(report, plot.id));
     const href =
       waiting.length === 1 && waiting[0] ? `/sites/${siteId}/reports/${waiting[0].id}` : `/sites/${siteId}/reports`;
-    const own = uploads.filter((item) => item.plotId === plot.id).map((item) => planUpload(siteId, item));
+    const own = uploads
+      .filter((item) => item.plotId === plot.id && !standsBelow(item, waiting))
+      .map((item) => planUpload(siteId, item));
     return {
       id: plot.id,
       name: plot.name,
@@ -36,6 +38,10 @@ export function isAbout(report: Pick<Report, 'samples' | 'droppedOnPlotId'>, plo
     ? report.samples.plotIds.includes(plotId)
     : report.droppedOnPlotId === plotId;
 }
+
+/** Once a file stands among the reports to review, saying so twice helps nobody. */
+const standsBelow = ({ stage }: UploadItem, waiting: readonly Report[]): boolean =>
+  stage.kind === 'settled' && waiting.some((report) => report.id === stage.reportId);
 
 function lastTest({ takenOn, ph }: NonNullable<Plot['lastTest']>): NonNullable<PlanPlot['lastTest']> {
   return ph === null ? { date: takenOn, ph: null } : { date: takenOn, ph: ph.printed, phDate: ph.takenOn };

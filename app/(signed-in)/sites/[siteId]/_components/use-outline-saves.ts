@@ -3,7 +3,7 @@
 import { useCallback, useRef, useState } from 'react';
 import { type Plot, plotSchema } from '@/lib/schemas/plots';
 import { callApi, type Problem } from '@/lib/ui/api';
-import type { PlanOutline } from '@/lib/ui/site-plan/types';
+import { type PlanOutline, ToldElsewhere } from '@/lib/ui/site-plan/types';
 
 export type OutlineConflict = { readonly plotId: string; readonly mine: PlanOutline; readonly current: Plot };
 
@@ -37,7 +37,7 @@ export function useOutlineSaves(siteId: string, plots: readonly Plot[], onSaved:
       const current = plotOf(result.problem);
       if (current) setConflict({ plotId, mine: outline, current });
       else setProblem(result.problem);
-      throw new Error(result.problem.code);
+      throw new ToldElsewhere(result.problem.code);
     },
     [onSaved, siteId],
   );
