@@ -2,9 +2,10 @@ import { eq } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
 import { POST } from '@/app/api/v1/mail/unsubscribe/route';
 import { mailPreference, token } from '@/db/schema';
+import { lookAtUnsubscribe } from '@/lib/data/mail/lookAtUnsubscribe';
 import { hashSecret } from '@/lib/data/people/secrets';
 import { withPeople } from '@/lib/data/transaction';
-import { makePerson, type TestPerson, useWorld } from '../support/factory';
+import { ctxNobody, makePerson, type TestPerson, useWorld } from '../support/factory';
 
 useWorld();
 
@@ -80,5 +81,19 @@ describe('[E 70] one-click unsubscribe', () => {
       expect((await answer.json()).detail).toContain('no longer works');
     }
     expect(await wantedBy(who)).toEqual([]);
+  });
+
+  it('looking at the page behind the link changes nothing, and says what stands', async () => {
+    const who = await makePerson();
+    const secret = await linkOf(who);
+    const look = async () => lookAtUnsubscribe({ ctx: await ctxNobody(), input: { token: secret } });
+    expect(await look()).toEqual({ name: who.name, stopped: false });
+    expect(await wantedBy(who)).toEqual([]);
+    await press(secret);
+    expect(await look()).toEqual({ name: who.name, stopped: true });
+    const ended = await linkOf(await makePerson(), new Date(Date.now() - 1000));
+    await expect(lookAtUnsubscribe({ ctx: await ctxNobody(), input: { token: ended } })).rejects.toMatchObject({
+      code: 'gone',
+    });
   });
 });

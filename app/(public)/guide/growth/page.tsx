@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import { DefinitionList } from '@/lib/ui/show/definition-list';
-import { GuidePage, Part, Points } from '../_components/guide-page';
+import { GuidePage, Part, Points, Steps } from '../_components/guide-page';
 
 export const metadata: Metadata = { title: 'Running it for more people' };
 
@@ -43,7 +43,7 @@ export default function GrowthPage() {
         />
       </Part>
       <Part title="In which order to grow">
-        <Points>
+        <Steps>
           <li>First move the database to a managed one, with backups that you have restored once.</li>
           <li>Then the files to an object store that keeps versions.</li>
           <li>
@@ -54,7 +54,7 @@ export default function GrowthPage() {
             Then a second web process. Mind the number of database connections: each process opens at most as many as
             DATABASE_POOL says, and a worker a few more for the queue.
           </li>
-        </Points>
+        </Steps>
       </Part>
       <Part title="What is not done">
         <Points>

@@ -13,12 +13,26 @@ type Letter = z.infer<typeof mailActionsAnswer>;
 type Item = Letter['reminders'][number];
 type Action = 'snooze-two-weeks' | 'already-sampled';
 
+const ACTIONS: readonly Action[] = ['already-sampled', 'snooze-two-weeks'];
+const LABELS: Record<Action, string> = {
+  'already-sampled': 'Already sampled',
+  'snooze-two-weeks': 'Ask again in two weeks',
+};
 const DONE: Record<Action, string> = {
   'already-sampled': 'Noted. Nobody on this site is reminded of it again.',
   'snooze-two-weeks': 'Noted. You hear of it again in two weeks; the others on this site still do as before.',
 };
 
-export function LetterReminders({ token, chosen, letter }: { token: string; chosen: string | null; letter: Letter }) {
+type LetterRemindersProps = {
+  token: string;
+  /** The plot whose link was followed comes first. */
+  chosen: string | null;
+  /** What that link promised; it is offered first, never done by looking. */
+  wish: Action;
+  letter: Letter;
+};
+
+export function LetterReminders({ token, chosen, wish, letter }: LetterRemindersProps) {
   const items = [...letter.reminders].sort((a, b) => Number(b.id === chosen) - Number(a.id === chosen));
   if (items.length === 0) {
     return (
@@ -34,16 +48,21 @@ export function LetterReminders({ token, chosen, letter }: { token: string; chos
     <ul className="mt-6 grid gap-8">
       {items.map((item) => (
         <li key={item.id}>
-          <LetterReminder token={token} item={item} />
+          <LetterReminder token={token} item={item} first={item.id === chosen ? wish : 'already-sampled'} />
         </li>
       ))}
     </ul>
   );
 }
 
-function LetterReminder({ token, item }: { token: string; item: Item }) {
+type LetterReminderProps = { token: string; item: Item; first: Action };
+
+function LetterReminder({ token, item, first }: LetterReminderProps) {
   const { send, busy, problem } = useSubmit();
   const [done, setDone] = useState<Action>();
+  const offered = ACTIONS.filter((action) => action !== 'already-sampled' || item.mayClose).sort(
+    (a, b) => Number(b === first) - Number(a === first),
+  );
   const act = async (action: Action) => {
     const result = await send('/mail/actions', { body: { token, reminderId: item.id, action } });
     if (result.ok) setDone(action);
@@ -65,14 +84,17 @@ function LetterReminder({ token, item }: { token: string; item: Item }) {
           </Notice>
         ) : item.open ? (
           <div className="flex flex-wrap gap-3">
-            {item.mayClose ? (
-              <Button busy={busy} onClick={() => act('already-sampled')}>
-                Already sampled
+            {offered.map((action) => (
+              <Button
+                key={action}
+                look={action === offered[0] ? 'primary' : 'quiet'}
+                busy={busy}
+                aria-describedby={`plot-${item.id}`}
+                onClick={() => act(action)}
+              >
+                {LABELS[action]}
               </Button>
-            ) : null}
-            <Button look="quiet" busy={busy} onClick={() => act('snooze-two-weeks')}>
-              Ask again in two weeks
-            </Button>
+            ))}
           </div>
         ) : (
           <Notice>This one is already closed; nothing more is sent for it.</Notice>
