@@ -1,3 +1,4 @@
+import './withoutEval';
 import { z } from 'zod';
 
 export type PlanPoint = { x: number; y: number };
