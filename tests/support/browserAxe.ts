@@ -1,0 +1,38 @@
+import { AxeBuilder } from '@axe-core/playwright';
+import type { Page } from 'playwright-core';
+
+/** Throws with every breach axe finds on the page as it stands, each with its elements; target sizes included. */
+export async function assertAccessible(page: Page, where: string): Promise<void> {
+  const axe = new AxeBuilder({ page }).setLegacyMode(true).options({ rules: { 'target-size': { enabled: true } } });
+  const { violations } = await axe.analyze();
+  if (violations.length === 0) return;
+  const lines = violations.flatMap(({ id, help, nodes }) => [
+    `${id}: ${help}`,
+    ...nodes.map(({ target, html, failureSummary = '' }) => {
+      const why = failureSummary.split('\n').slice(1).join(' ').trim();
+      return `    ${target.join(' ')}\n      ${html.slice(0, 200)}\n      ${why}`;
+    }),
+  ]);
+  const width = page.viewportSize()?.width;
+  throw new Error(`axe on ${where} at ${width} px:\n${lines.join('\n')}`);
+}
+
+/** Throws when the page can be scrolled sideways; a table in a box of its own may. */
+export async function assertNoSidewaysScroll(page: Page, where: string): Promise<void> {
+  const found = await page.evaluate(() => {
+    const { scrollWidth, clientWidth } = document.documentElement;
+    if (scrollWidth <= clientWidth) return null;
+    const isHeld = (element: Element | null): boolean =>
+      element !== null &&
+      element !== document.body &&
+      (/auto|scroll|hidden|clip/.test(getComputedStyle(element).overflowX) || isHeld(element.parentElement));
+    const wide = [...document.querySelectorAll('body *')].filter(
+      (element) => element.getBoundingClientRect().right > clientWidth + 1 && !isHeld(element.parentElement),
+    );
+    const named = wide.slice(-3).map((element) => element.outerHTML.slice(0, 160));
+    return { scrollWidth, clientWidth, named };
+  });
+  if (!found) return;
+  const { scrollWidth, clientWidth, named } = found;
+  throw new Error(`${where} is ${scrollWidth} px wide on ${clientWidth} px:\n${named.join('\n')}`);
+}
