@@ -29,6 +29,8 @@ export function proxy(request: NextRequest) {
   const headers = new Headers(request.headers);
   // The framework reads the nonce from here and puts it on its own scripts.
   headers.set('content-security-policy', policy);
+  // Always written here, whatever came in: where a sign-in leads back to (app/_server/context.ts).
+  headers.set('x-loamline-page', request.nextUrl.pathname + request.nextUrl.search);
   const response = NextResponse.next({ request: { headers } });
   response.headers.set('content-security-policy', policy);
   if (settings.APP_ORIGIN.startsWith('https:')) {

@@ -1,5 +1,5 @@
-import { cookies } from 'next/headers';
-import { notFound as showNotFound, redirect } from 'next/navigation';
+import { cookies, headers } from 'next/headers';
+import { redirect, notFound as showNotFound } from 'next/navigation';
 import { cache } from 'react';
 import { type Ctx, makeContext, type SignedIn } from '@/lib/data/context';
 import { SESSION_COOKIE } from '@/lib/data/people/lucia';
@@ -12,9 +12,17 @@ export const pageContext = cache(async (): Promise<Ctx> => {
   return makeContext(await actorOfCookie(cookie));
 });
 
+/** Where the proxy writes down which page was asked for: a layout does not know it, and must not lead back elsewhere. */
+const PAGE_ASKED_FOR = 'x-loamline-page';
+
+async function toSignIn(next: string): Promise<never> {
+  const asked = (await headers()).get(PAGE_ASKED_FOR) ?? next;
+  redirect(`/sign-in?next=${encodeURIComponent(asked)}`);
+}
+
 export async function pagePerson(next: string): Promise<{ ctx: Ctx; person: SignedIn }> {
   const ctx = await pageContext();
-  if (ctx.actor.kind !== 'person') redirect(`/sign-in?next=${encodeURIComponent(next)}`);
+  if (ctx.actor.kind !== 'person') return toSignIn(next);
   return { ctx, person: ctx.actor.person };
 }
 
@@ -24,7 +32,7 @@ export async function orNotFound<T>(reading: Promise<T>): Promise<T> {
     return await reading;
   } catch (error) {
     if (error instanceof Problem && (error.code === 'not-found' || error.code === 'forbidden')) showNotFound();
-    if (error instanceof Problem && error.code === 'not-signed-in') redirect('/sign-in');
+    if (error instanceof Problem && error.code === 'not-signed-in') return toSignIn('/today');
     throw error;
   }
 }

@@ -1,7 +1,8 @@
 'use client';
 
 import { X } from 'lucide-react';
-import { createContext, type ReactNode, useCallback, useContext, useEffect, useMemo, useState } from 'react';
+import { createContext, type ReactNode, useCallback, useContext, useEffect, useMemo, useRef, useState } from 'react';
+import { cx } from '../cx';
 import { type Tone, ToneMark, toneWord } from './tone';
 
 type Message = { id: number; text: string; tone: Tone };
@@ -27,6 +28,8 @@ export function AnnounceProvider({ children }: { children: ReactNode }) {
   }, []);
   const dismiss = useCallback((id: number) => setShown((list) => list.filter((m) => m.id !== id)), []);
 
+  const { list, atTop } = useOutOfTheWay();
+
   // The same sentence twice is two announcements: a no-break space makes the text differ.
   const again = spoken.turn % 2 === 0 ? '' : '\u00a0';
   return (
@@ -39,8 +42,12 @@ export function AnnounceProvider({ children }: { children: ReactNode }) {
         {spoken.now && spoken.now + again}
       </div>
       <section
+        ref={list}
         aria-label="Messages"
-        className="no-print pointer-events-none fixed inset-x-3 bottom-[calc(var(--bar-bottom)+0.75rem)] z-50 grid justify-items-start gap-2 sm:left-6 sm:right-auto"
+        className={cx(
+          'no-print pointer-events-none fixed inset-x-3 z-50 grid justify-items-start gap-2 sm:left-6 sm:right-auto',
+          atTop ? 'top-3' : 'bottom-[calc(var(--bar-bottom)+0.75rem)]',
+        )}
       >
         {shown.map((message) => (
           <Toast key={message.id} message={message} onDismiss={dismiss} />
@@ -48,6 +55,32 @@ export function AnnounceProvider({ children }: { children: ReactNode }) {
       </section>
     </AnnounceContext.Provider>
   );
+}
+
+/** A message that would lie over what has the focus goes to the other end of the window. */
+function useOutOfTheWay() {
+  const list = useRef<HTMLElement>(null);
+  const [atTop, setAtTop] = useState(false);
+  useEffect(() => {
+    const look = () => {
+      const box = list.current?.getBoundingClientRect();
+      const at = document.activeElement;
+      if (!box || box.height === 0 || !at || at === document.body || list.current?.contains(at)) return;
+      const { top, bottom, left, right } = at.getBoundingClientRect();
+      const isUnder = top < box.bottom && bottom > box.top && left < box.right && right > box.left;
+      if (isUnder) setAtTop((now) => !now);
+    };
+    // The focus scrolls its element into view first.
+    const later = () => requestAnimationFrame(look);
+    document.addEventListener('focusin', later);
+    const watch = new ResizeObserver(look);
+    if (list.current) watch.observe(list.current);
+    return () => {
+      document.removeEventListener('focusin', later);
+      watch.disconnect();
+    };
+  }, []);
+  return { list, atTop };
 }
 
 function Toast({ message, onDismiss }: { message: Message; onDismiss: (id: number) => void }) {
