@@ -1,4 +1,4 @@
-import { and, desc, eq } from 'drizzle-orm';
+import { desc, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import type { Transaction } from '@/db/client';
 import { effectCheck, site } from '@/db/schema';
@@ -13,18 +13,29 @@ import { loadPicture } from './loadPicture';
 
 const answerOf = (outcome: EffectOutcome): string => (outcome.ok ? outcome.verdict : outcome.answer);
 
-async function keepIfChanged(tx: Transaction, ctx: Ctx, siteId: SiteId, question: EffectQuestion): Promise<boolean> {
-  const [planIntentId] = question.intentIds;
-  if (!planIntentId) return false;
-  const outcome = checkEffect(question.input);
-  const [last] = await tx
-    .select({ verdict: effectCheck.verdict, ruleVersion: effectCheck.ruleVersion })
+type Kept = { verdict: string; ruleVersion: string };
+
+/** The last word on every intention of the site. */
+async function lastWords(tx: Transaction, siteId: SiteId): Promise<Map<string, Kept>> {
+  const rows = await tx
+    .selectDistinctOn([effectCheck.planIntentId], {
+      id: effectCheck.planIntentId,
+      verdict: effectCheck.verdict,
+      ruleVersion: effectCheck.ruleVersion,
+    })
     .from(effectCheck)
-    .where(and(eq(effectCheck.siteId, siteId), eq(effectCheck.planIntentId, planIntentId)))
-    .orderBy(desc(effectCheck.computedAt))
-    .limit(1);
-  if (last?.verdict === answerOf(outcome) && last.ruleVersion === outcome.ruleVersion) return false;
-  await tx.insert(effectCheck).values({
+    .where(eq(effectCheck.siteId, siteId))
+    .orderBy(effectCheck.planIntentId, desc(effectCheck.computedAt));
+  return new Map(rows.map((row) => [row.id, row]));
+}
+
+function changedCheck(ctx: Ctx, siteId: SiteId, question: EffectQuestion, kept: ReadonlyMap<string, Kept>) {
+  const [planIntentId] = question.intentIds;
+  if (!planIntentId) return null;
+  const outcome = checkEffect(question.input);
+  const last = kept.get(planIntentId);
+  if (last?.verdict === answerOf(outcome) && last.ruleVersion === outcome.ruleVersion) return null;
+  return {
     siteId,
     plotId: question.input.plotId,
     planIntentId,
@@ -37,8 +48,7 @@ async function keepIfChanged(tx: Transaction, ctx: Ctx, siteId: SiteId, question
     verdict: answerOf(outcome),
     ruleVersion: outcome.ruleVersion,
     computedAt: ctx.now,
-  });
-  return true;
+  };
 }
 
 /** Keeps the history of verdicts. One plot's new result can serve another as a control, so the whole site is looked at. */
@@ -47,17 +57,17 @@ export const recheckEffects = workerVerb({
   run: ({ ctx, input }) => {
     const siteId = asSiteId(input.siteId);
     return withSite(siteId, async (tx) => {
-      // One recheck of a site at a time: two that look at once would both find the verdict new.
-      await tx.select({ id: site.id }).from(site).where(eq(site.id, siteId)).for('update');
+      // One recheck of a site at a time: two that look at once would both find the verdict new. The weaker lock lets
+      // everybody else write meanwhile: a new row of the site only asks that the site stays.
+      await tx.select({ id: site.id }).from(site).where(eq(site.id, siteId)).for('no key update');
       const picture = await loadPicture(tx, siteId, ctx.now);
       if (!picture.plots.some((plot) => plot.id === input.id)) return { changed: 0 };
-      let changed = 0;
-      for (const plot of picture.plots) {
-        for (const question of effectQuestions(picture, plot.id)) {
-          if (await keepIfChanged(tx, ctx, siteId, question)) changed += 1;
-        }
-      }
-      return { changed };
+      const kept = await lastWords(tx, siteId);
+      const changed = picture.plots
+        .flatMap((plot) => effectQuestions(picture, plot.id))
+        .flatMap((question) => changedCheck(ctx, siteId, question, kept) ?? []);
+      if (changed.length > 0) await tx.insert(effectCheck).values(changed);
+      return { changed: changed.length };
     });
   },
 });

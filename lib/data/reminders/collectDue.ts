@@ -30,16 +30,21 @@ export type DueNotice = {
 };
 export type DueLetter = { reader: MailReader; today: Day; notices: DueNotice[] };
 
-async function lastSampleOf(tx: Transaction, siteId: SiteId, plotId: string): Promise<DueNotice['lastSample']> {
-  const [row] = await tx
-    .select()
+/** The newest bag of each plot of a site. */
+async function lastSamples(tx: Transaction, siteId: SiteId): Promise<Map<string, DueNotice['lastSample']>> {
+  const { plotId, cores, depthFromCm, depthToCm, takenOn } = sample;
+  const rows = await tx
+    .selectDistinctOn([plotId], { plotId, cores, depthFromCm, depthToCm })
     .from(sample)
-    .where(and(eq(sample.siteId, siteId), eq(sample.plotId, plotId)))
-    .orderBy(desc(sample.takenOn))
-    .limit(1);
-  if (!row) return null;
+    .where(eq(sample.siteId, siteId))
+    .orderBy(plotId, desc(takenOn));
   const number = (text: string | null) => (text === null ? null : Number(text));
-  return { cores: row.cores, depthFromCm: number(row.depthFromCm), depthToCm: number(row.depthToCm) };
+  return new Map(
+    rows.map((row) => [
+      row.plotId,
+      { cores: row.cores, depthFromCm: number(row.depthFromCm), depthToCm: number(row.depthToCm) },
+    ]),
+  );
 }
 
 async function dueOnSite(tx: Transaction, siteId: SiteId, ids: string[], now: Date) {
@@ -52,6 +57,7 @@ async function dueOnSite(tx: Transaction, siteId: SiteId, ids: string[], now: Da
     members.map((member) => member.personId),
     'reminder',
   );
+  const samples = await lastSamples(tx, siteId);
   const found: { reader: MailReader; notice: DueNotice }[] = [];
   for (const reader of readers) {
     const hour = hourOf(now, reader.timeZone);
@@ -74,7 +80,7 @@ async function dueOnSite(tx: Transaction, siteId: SiteId, ids: string[], now: Da
         dueOn: asDay(row.dueOn),
         noticeOn,
         reason: row.reason,
-        lastSample: await lastSampleOf(tx, siteId, row.plotId),
+        lastSample: samples.get(row.plotId) ?? null,
       };
       found.push({ reader, notice });
     }
@@ -104,7 +110,8 @@ export const collectDue = workerVerb({
     }
     const open: DueLetter[] = [];
     for (const letter of letters.values()) {
-      const told = await withPeople((tx) => noticesSent(tx, letter.reader.id));
+      const about = letter.notices.map((notice) => notice.reminderId);
+      const told = await withPeople((tx) => noticesSent(tx, letter.reader.id, about));
       const notices = letter.notices.filter((notice) => !told.has(`${notice.reminderId} ${notice.noticeOn}`));
       if (notices.length > 0) open.push({ ...letter, notices });
     }

@@ -3,7 +3,7 @@ import { z } from 'zod';
 import { plot, reminderRule } from '@/db/schema';
 import { REMINDER_KINDS, type RuleAnswer } from '@/lib/schemas/reminders';
 import { siteVerb } from '../verb';
-import { dueFor, factsForRules } from './refreshReminders';
+import { dueFor, factsForRules } from './factsForRules';
 
 /** Every plot with every kind of rule, set or not, and the day each would come due. */
 export const listRules = siteVerb({
@@ -16,9 +16,14 @@ export const listRules = siteVerb({
       .where(and(eq(plot.siteId, siteId), isNull(plot.archivedAt)))
       .orderBy(asc(plot.name));
     const set = await tx.select().from(reminderRule).where(eq(reminderRule.siteId, siteId));
+    const factsOf = await factsForRules(
+      tx,
+      siteId,
+      plots.map((one) => one.id),
+    );
     const rules: RuleAnswer[] = [];
     for (const one of plots) {
-      const facts = await factsForRules(tx, siteId, one.id);
+      const facts = factsOf(one.id);
       for (const kind of REMINDER_KINDS) {
         const row = set.find((rule) => rule.plotId === one.id && rule.kind === kind);
         const due = dueFor(kind, facts);

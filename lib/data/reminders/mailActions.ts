@@ -1,4 +1,4 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, inArray } from 'drizzle-orm';
 import { membership, reminder } from '@/db/schema';
 import { can } from '@/lib/access/table';
 import { addDays } from '@/lib/domain/days';
@@ -28,14 +28,14 @@ export const showMailActions = publicVerb({
   run: async ({ ctx, input }) => {
     const letter = await letterOf(ctx, input.token);
     const shown = [];
-    for (const { siteId, reminderId } of letter.reminders) {
+    for (const [siteId, ids] of letter.reminders) {
       const rows = await withSite(siteId, async (tx) => {
         const [member] = await tx
           .select({ role: membership.role })
           .from(membership)
           .where(and(eq(membership.siteId, siteId), eq(membership.personId, letter.personId)));
         if (!member) return [];
-        const due = await loadDue(tx, siteId, letter.personId, eq(reminder.id, reminderId));
+        const due = await loadDue(tx, siteId, letter.personId, inArray(reminder.id, ids));
         return due.map(({ state, snoozedUntil: _, ...row }) => ({
           ...row,
           siteId: siteId as string,
@@ -54,22 +54,23 @@ export const doMailAction = publicVerb({
   input: mailActionInput,
   run: async ({ ctx, input }) => {
     const letter = await letterOf(ctx, input.token);
-    const item = letter.reminders.find((one) => one.reminderId === input.reminderId);
-    if (!item) throw notFound();
-    await withSite(item.siteId, async (tx) => {
+    const { reminderId } = input;
+    const siteId = [...letter.reminders].find(([, ids]) => ids.includes(reminderId))?.[0];
+    if (!siteId) throw notFound();
+    await withSite(siteId, async (tx) => {
       const [member] = await tx
         .select({ role: membership.role })
         .from(membership)
-        .where(and(eq(membership.siteId, item.siteId), eq(membership.personId, letter.personId)));
+        .where(and(eq(membership.siteId, siteId), eq(membership.personId, letter.personId)));
       if (!member) throw notFound();
       if (input.action === 'snooze-two-weeks') {
         const until = addDays(dayOf(ctx.now, letter.timeZone), 14);
-        return snoozeInSite(tx, item.siteId, letter.personId, item.reminderId, until);
+        return snoozeInSite(tx, siteId, letter.personId, reminderId, until);
       }
       if (!can(member.role, 'reminder.already-sampled')) {
         throw new Problem('forbidden', 'Somebody who works on this site can say that the sample is taken.');
       }
-      return closeInSite(tx, ctx, item.siteId, letter.personId, item.reminderId);
+      return closeInSite(tx, ctx, siteId, letter.personId, reminderId);
     });
     return { done: true as const };
   },

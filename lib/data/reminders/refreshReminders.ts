@@ -1,37 +1,9 @@
-import { and, desc, eq, isNull, ne, sql } from 'drizzle-orm';
+import { and, eq, ne, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { application, type ReminderRuleKind, reminder, reminderRule, result, sample, site } from '@/db/schema';
-import { asDay } from '@/lib/domain/days';
+import { reminder, reminderRule } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
-import { nextDue } from '@/lib/domain/reminders';
 import type { Ctx } from '../context';
-
-/** A bag whose results were all withdrawn was never a test; one that has none yet is on its way to be one. */
-const stillCounts = sql`(exists (select from ${result} where ${result.siteId} = ${sample.siteId} and ${result.sampleId} = ${sample.id} and ${result.supersededAt} is null)
-  or not exists (select from ${result} where ${result.siteId} = ${sample.siteId} and ${result.sampleId} = ${sample.id}))`;
-
-export async function factsForRules(tx: Transaction, siteId: SiteId, plotId: string) {
-  const [place] = await tx.select({ warmMonths: site.warmMonths }).from(site).where(eq(site.id, siteId));
-  const samples = await tx
-    .select({ takenOn: sample.takenOn })
-    .from(sample)
-    .where(and(eq(sample.siteId, siteId), eq(sample.plotId, plotId), stillCounts))
-    .orderBy(desc(sample.takenOn))
-    .limit(1);
-  const spread = await tx
-    .select({ appliedOn: application.appliedOn, material: application.material })
-    .from(application)
-    .where(and(eq(application.siteId, siteId), eq(application.plotId, plotId), isNull(application.supersededAt)))
-    .orderBy(desc(application.appliedOn));
-  return {
-    warmMonths: place?.warmMonths ?? [],
-    lastSampleOn: samples[0] ? asDay(samples[0].takenOn) : null,
-    applications: spread.map((row) => ({ appliedOn: asDay(row.appliedOn), reaction: row.material.reaction })),
-  };
-}
-
-export const dueFor = (kind: ReminderRuleKind, facts: Awaited<ReturnType<typeof factsForRules>>) =>
-  nextDue({ kind, ...facts });
+import { dueFor, factsForRules } from './factsForRules';
 
 /**
  * Brings the open reminder of every rule of a plot in line with what is known now. Called in the transaction of whatever
@@ -43,7 +15,7 @@ export async function refreshReminders(tx: Transaction, ctx: Ctx, siteId: SiteId
     .from(reminderRule)
     .where(and(eq(reminderRule.siteId, siteId), eq(reminderRule.plotId, plotId)));
   if (rules.length === 0) return;
-  const facts = await factsForRules(tx, siteId, plotId);
+  const facts = (await factsForRules(tx, siteId, [plotId]))(plotId);
   for (const rule of rules) {
     const due = rule.active ? dueFor(rule.kind, facts) : null;
     const ofRule = and(eq(reminder.siteId, siteId), eq(reminder.ruleId, rule.id), eq(reminder.state, 'open'));

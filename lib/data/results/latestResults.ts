@@ -14,10 +14,11 @@ export const latestResults = siteVerb({
     const ofPlot = input.plotId
       ? sql`r.plot_id = ${input.plotId}`
       : sql`r.plot_id in (select p.id from ${plot} p where p.site_id = ${siteId} and p.archived_at is null)`;
-    const newest = sql`(${result.plotId}, ${result.analyte}, ${result.takenOn}) in (
-      select r.plot_id, r.analyte, max(r.taken_on) from ${result} r
-      where r.site_id = ${siteId} and r.superseded_at is null and ${ofPlot}
-      group by r.plot_id, r.analyte)`;
+    const newest = sql`${result.id} in (
+      select ranked.id from (
+        select r.id, rank() over (partition by r.plot_id, r.analyte order by r.taken_on desc) as place from ${result} r
+        where r.site_id = ${siteId} and r.superseded_at is null and ${ofPlot}) ranked
+      where ranked.place = 1)`;
     return { results: await loadResults(tx, siteId, newest) };
   },
 });

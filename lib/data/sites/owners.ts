@@ -6,7 +6,7 @@ import { Problem } from '@/lib/errors';
 
 /** Whoever takes ownership away queues here: two owners leaving at once would otherwise each see the other still there. */
 export async function queueForOwners(tx: Transaction, siteId: SiteId): Promise<void> {
-  await tx.select({ id: site.id }).from(site).where(eq(site.id, siteId)).for('update');
+  await tx.select({ id: site.id }).from(site).where(eq(site.id, siteId)).for('no key update');
 }
 
 /** True in SQL when this row is no owner, or another owner remains. */
