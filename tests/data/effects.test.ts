@@ -150,6 +150,20 @@ describe('what was spread, and whether it worked', () => {
     expect([one?.status, two?.status].sort()).toEqual(['fulfilled', 'rejected']);
     const after = (await listApplications({ ctx: helper, input: { siteId: site.id } })).applications;
     expect(after.map((fresh) => [fresh.amountPrinted, fresh.intents[0]?.fullChange])).toEqual([['8 lb', -0.5]]);
+    expect(after[0]?.plannedKg).toBeCloseTo(9 * 0.45359237, 9);
+  });
+
+  it('a slip mended in the amount is no departure from a plan that the record made itself', async () => {
+    const ctx = await ctxAs(site.people.owner);
+    const material = { key: 'elemental-sulfur-90' };
+    const common = { siteId: site.id, material, amountUnit: 'lb' as const, appliedOn: '2025-05-01' };
+    const { id } = await recordApplication({ ctx, input: { ...common, plotId: untreated, amount: 90, intents: [] } });
+    await correctApplication({
+      ctx,
+      input: { ...common, applicationId: id, amount: 9, reason: 'one nought too many' },
+    });
+    const { applications } = await listApplications({ ctx, input: { siteId: site.id, plotId: untreated } });
+    expect(applications.map((row) => [row.amountPrinted, row.plannedKg / row.amountKg])).toEqual([['9 lb', 1]]);
   });
 
   it('refuses a day that has not come', async () => {
