@@ -42,7 +42,7 @@ function Card({ row, rowIndex, ...props }: CardsProps & { row: GridRow; rowIndex
         <h3 className="text-base">
           <span className="mr-2 font-figures text-sm font-normal text-clay">{rowIndex + 1}</span>
           {title}
-          {row.subtitle ? <span className="ml-2 text-sm font-normal text-clay">{row.subtitle}</span> : null}
+          {row.subtitle ? <span className="ml-2 font-text text-sm font-normal text-clay">{row.subtitle}</span> : null}
         </h3>
         {row.place ? <span className="text-xs text-clay">{row.place}</span> : null}
       </div>

@@ -3,6 +3,7 @@
 import { Plus } from 'lucide-react';
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '../actions/button';
+import { cx } from '../cx';
 import type { GridBodyProps } from './body-props';
 import { rowHeaderOf } from './cell-value';
 import { acceptable, needsAttention, viewOf } from './cell-view';
@@ -103,7 +104,12 @@ export function Grid(props: GridProps) {
   };
   return (
     <div className="grid min-w-0 gap-2" data-testid="grid">
-      <div className="sticky top-0 z-20 -mx-1 grid gap-1 border-b-2 border-gley bg-chalk px-1 py-2">
+      <div
+        className={cx(
+          'sticky top-0 z-20 -mx-1 gap-1 border-b-2 border-gley bg-chalk px-1 py-2',
+          narrow ? 'flex flex-wrap items-center justify-between' : 'grid',
+        )}
+      >
         <GridToolbar
           compact={narrow}
           doubtful={doubtful}

@@ -83,12 +83,13 @@ export function ConfirmBar(props: ConfirmBarProps) {
           </div>
           {decides ? (
             <Button
+              className="max-sm:w-full"
               busy={busy}
               busyLabel="Confirming"
               unavailable={lacks.length > 0 && `still missing: ${lacks.join(', ')}`}
               onClick={() => void confirm()}
             >
-              Confirm {counted(values, 'value')}
+              Confirm{values > 0 ? ` ${counted(values, 'value')}` : ''}
             </Button>
           ) : (
             <p className="font-semibold">

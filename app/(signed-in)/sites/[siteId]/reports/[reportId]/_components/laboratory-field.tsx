@@ -69,7 +69,7 @@ export function LaboratoryField({ path, review, report, live, readOnly }: Labora
               Use this name
             </Button>
           </form>
-        ) : printed && report.laboratory?.name === printed ? (
+        ) : report.origin === 'typed' ? null : printed && report.laboratory?.name === printed ? (
           <p className="self-center text-sm text-clay">as printed</p>
         ) : printed && report.laboratory ? (
           <p className="self-center text-sm text-clay">printed: {printed}</p>

@@ -10,6 +10,10 @@ describe('missingOf', () => {
     );
     expect(found.map((one) => one.sentence)).toEqual(['2 samples without a plot', '1 value to mend']);
   });
+  it('tells a sample without rows from a row without a value', () => {
+    const found = missingOf([makeBlocker('no-value'), makeBlocker('no-value', { rowId: 'p' })], new Set());
+    expect(found.map((one) => one.sentence)).toEqual(['1 sample without values', '1 row without a value']);
+  });
   it('leaves out a likeness that was said to be a second analysis', () => {
     expect(missingOf([makeBlocker('same-analysis')], new Set(['sample-1']))).toEqual([]);
     expect(missingOf([makeBlocker('no-day')], new Set(['sample-1']))).toHaveLength(1);

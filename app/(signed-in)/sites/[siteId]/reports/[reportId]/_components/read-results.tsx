@@ -1,4 +1,4 @@
-import { analyte, isAnalyteKey, isMethodKey, methodLabel, unitOf } from '@/lib/domain/analytes';
+import { ANALYTE_KEYS, analyte, isAnalyteKey, isMethodKey, methodLabel, unitOf } from '@/lib/domain/analytes';
 import type { Report } from '@/lib/schemas/reports';
 import type { Result } from '@/lib/schemas/results';
 import { StatusWord } from '@/lib/ui/feedback/status-word';
@@ -31,7 +31,9 @@ export function ReadResults({ siteId, report, results, plotNames }: ReadProps) {
         {report.state === 'confirmed' ? (
           <div className="grid gap-8">
             {samples.map((key) => {
-              const rows = results.filter((one) => `${one.sampleId} ${one.analysis}` === key);
+              const rows = results
+                .filter((one) => `${one.sampleId} ${one.analysis}` === key)
+                .sort((a, b) => placeOf(a) - placeOf(b));
               const [first] = rows;
               if (!first) return null;
               const where = plotNames.get(first.plotId) ?? 'A plot that is archived';
@@ -72,3 +74,7 @@ export function ReadResults({ siteId, report, results, plotNames }: ReadProps) {
 }
 
 const labelOf = (key: string) => (isAnalyteKey(key) ? analyte(key).label : key);
+
+/** The fixed order in which every list shows the analytes. */
+const ORDER: readonly string[] = ANALYTE_KEYS;
+const placeOf = (row: Result) => ORDER.indexOf(row.analyte);

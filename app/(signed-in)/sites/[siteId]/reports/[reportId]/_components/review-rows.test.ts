@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { makeRow } from '@/tests/support/review-rows';
-import { columnsFor, doubtsOf, placeOf, printedWords, stableOrder, toGridRow, valueFault } from './review-rows';
+import { makeReviewSample, makeRow } from '@/tests/support/review-rows';
+import { columnsFor, doubtsOf, placeOf, printedWords, stableOrder, toGridRow, twinOf, valueFault } from './review-rows';
 
 describe('doubtsOf', () => {
   it('puts each doubt at the cell it is about', () => {
@@ -97,5 +97,21 @@ describe('columns', () => {
     const options = toGridRow(makeRow('a'), undefined).options?.method ?? [];
     expect(options.map((one) => one.value)).toContain('1:1_water');
     expect(options.map((one) => one.value)).not.toContain('M3');
+  });
+});
+
+describe('twinOf', () => {
+  const first = makeReviewSample('a', { ordinal: 1 });
+  it('finds the earlier sample of the same plot, day and bag', () => {
+    const second = makeReviewSample('b', { ordinal: 2 });
+    expect(twinOf(second, [first, second])).toBe(first);
+    expect(twinOf(first, [first, second])).toBeUndefined();
+  });
+  it('is none for another bag, another day, or a sample left out', () => {
+    const bag = makeReviewSample('b', { ordinal: 2, composite: 2 });
+    expect(twinOf(bag, [first, bag])).toBeUndefined();
+    const out = { ...first, leftOutReason: 'not ours' };
+    const second = makeReviewSample('b', { ordinal: 2 });
+    expect(twinOf(second, [out, second])).toBeUndefined();
   });
 });

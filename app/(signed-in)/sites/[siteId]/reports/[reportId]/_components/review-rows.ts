@@ -31,6 +31,20 @@ export function cellText(row: ReviewRow, cell: CellId): string {
 export const sampleLabel = (sample: Pick<ReviewSample, 'fieldName' | 'printedName' | 'labNumber' | 'ordinal'>) =>
   sample.fieldName ?? sample.printedName ?? sample.labNumber ?? `Sample ${sample.ordinal}`;
 
+/** An earlier sample of this report that names the same bag. */
+export function twinOf(sample: ReviewSample, all: readonly ReviewSample[]): ReviewSample | undefined {
+  if (sample.plotId === null || sample.takenOn === null || sample.sameAsId !== null) return undefined;
+  return all.find(
+    (one) =>
+      one.ordinal < sample.ordinal &&
+      one.leftOutReason === null &&
+      one.sameAsId === null &&
+      one.plotId === sample.plotId &&
+      one.takenOn === sample.takenOn &&
+      one.composite === sample.composite,
+  );
+}
+
 /** The methods of this analyte, and the row's own if it is another. */
 function methodOptions(row: ReviewRow): readonly GridOption[] {
   if (row.analyte === null || !isAnalyteKey(row.analyte)) return ALL_METHODS;

@@ -12,7 +12,7 @@ import { OtherForms } from './other-forms';
 import { plotOptions } from './plot-options';
 import { ReasonButton } from './reason-button';
 import { onDay } from './report-words';
-import { sampleLabel } from './review-rows';
+import { sampleLabel, twinOf } from './review-rows';
 import type { LiveReport } from './use-report';
 import { useSampleSaves } from './use-sample-saves';
 
@@ -31,7 +31,7 @@ export type SampleCardProps = {
 
 const BAGS = [
   { value: '1', label: 'First bag' },
-  { value: '2', label: 'Second bag of the plot' },
+  { value: '2', label: 'Second bag' },
 ];
 
 /** The heads of the columns stand above; below their width each field has its own label. */
@@ -46,6 +46,7 @@ export function SampleCard(props: SampleCardProps) {
   const saves = useSampleSaves(path, sample, live);
   const name = sampleLabel(sample);
   const out = sample.leftOutReason !== null;
+  const twin = twinOf(sample, review.samples);
   return (
     <li
       id={sampleFieldId(sample.id, 'card')}
@@ -125,6 +126,12 @@ export function SampleCard(props: SampleCardProps) {
       {!out && sample.composite > 1 ? (
         <p className="text-sm text-clay">
           A second bag of the same plot and day shows how far two samples of one plot differ: a field duplicate.
+        </p>
+      ) : null}
+      {twin && !out ? (
+        <p className="text-sm text-ochre">
+          {sampleLabel(twin)} has the same plot, day and bag: the two would count as two analyses of one bag. If {name}{' '}
+          is from another bag, choose it under Bag.
         </p>
       ) : null}
       {saves.problem?.reason === 'stale-version' ? (

@@ -24,10 +24,14 @@ type StripProps = {
   onSeparate: (sampleId: string, on: boolean) => void;
 };
 
+const MOST_IN_SIGHT = 8;
+
 /** Each sample of the report: which plot, which day, how deep. */
 export function SamplesStrip(props: StripProps) {
   const { path, review, report, live, readOnly, unit, today, separate, onSeparate } = props;
   const { send, busy, problem } = useSubmit();
+  // Many samples scroll in a frame of their own, so that the values stay within reach.
+  const long = review.samples.length > MOST_IN_SIGHT;
   const siteId = path.split('/')[2] ?? '';
   const add = async () => {
     if ((await send(`${path}/samples`, { body: {} })).ok) await live.refresh();
@@ -58,7 +62,7 @@ export function SamplesStrip(props: StripProps) {
         ) : null}
         {readOnly ? null : (
           <div aria-hidden="true" className={`${SAMPLE_ROW} mt-2 text-xs font-semibold text-clay max-lg:hidden`}>
-            <span>As printed</span>
+            <span>{report.origin === 'typed' ? 'Sample' : 'As printed'}</span>
             <span>Plot</span>
             <span>Taken on</span>
             <span>Depth, {unit}</span>
@@ -66,7 +70,10 @@ export function SamplesStrip(props: StripProps) {
             <span>Bag</span>
           </div>
         )}
-        <ul>
+        <ul
+          {...(long ? { tabIndex: 0, 'aria-labelledby': 'samples-title' } : {})}
+          className={long ? 'max-h-[60vh] overflow-y-auto border-y border-fallow px-2' : undefined}
+        >
           {review.samples.map((sample) =>
             readOnly ? (
               <SampleFacts key={sample.id} sample={sample} review={review} unit={unit} />

@@ -97,7 +97,7 @@ export function ValuesPane({ path, review, live, readOnly, report, goTo, onCount
         <div className={cx('grid min-w-0 gap-3', side === 'page' && !noFile && 'max-lg:hidden')}>
           <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-1">
             <h2 id={headingId} className="text-xl">
-              {readOnly ? 'Values' : 'Check the values'}
+              {readOnly ? 'Values' : noFile ? 'Type the values in' : 'Check the values'}
             </h2>
             {noFile ? (
               <p className="text-sm text-clay">Entered by hand: there is no file behind these values.</p>
@@ -135,7 +135,7 @@ export function ValuesPane({ path, review, live, readOnly, report, goTo, onCount
         </div>
       </div>
       {noFile ? null : (
-        <div className="pointer-events-none sticky bottom-[calc(var(--bar-bottom)+0.5rem)] z-10 mt-3 flex justify-end px-4 md:bottom-28 lg:hidden">
+        <div className="pointer-events-none sticky bottom-[calc(var(--bar-bottom)+0.5rem)] z-30 mt-3 flex justify-end px-4 md:bottom-24 lg:hidden">
           <Button
             className="pointer-events-auto shadow-lift"
             icon={
