@@ -1,5 +1,5 @@
 import { and, eq, ne } from 'drizzle-orm';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { membership, outbox } from '@/db/schema';
 import { queueMail } from '@/lib/data/mail/queueMail';
 import { setRule } from '@/lib/data/reminders/setRule';
@@ -13,6 +13,8 @@ import { startWorker, type WorkerProcess } from '../support/workerProcess';
  * [E 69] The real worker process against the mail service's protocol: a letter leaves once, whatever dies in between.
  * One worker serves several tests, since starting a process is what takes the time.
  */
+// A process takes a few seconds to start, and several times that on a machine that runs all tests at once.
+vi.setConfig({ testTimeout: 120_000 });
 const world = useWorld();
 const started: WorkerProcess[] = [];
 let mail: Awaited<ReturnType<typeof startMailService>>;
@@ -85,7 +87,7 @@ describe('a letter', () => {
       'the mail service has taken the letter',
       () => lettersTo(who),
       (letters) => letters.length === 1,
-      20_000,
+      60_000,
     );
     await first.killHard();
     mail.letAnswersGo();

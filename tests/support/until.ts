@@ -5,7 +5,7 @@ export async function until<T>(
   what: string,
   look: () => Promise<T> | T,
   isThere: (seen: T) => boolean,
-  withinMs = 15_000,
+  withinMs = 40_000,
 ): Promise<T> {
   const deadline = Date.now() + withinMs;
   for (;;) {

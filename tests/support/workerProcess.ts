@@ -35,7 +35,7 @@ export function startWorker(env: Record<string, string>): WorkerProcess {
         'the worker is ready',
         () => said,
         (text) => text.includes('worker ready'),
-        20_000,
+        60_000,
       ),
     killHard: async () => {
       child.kill('SIGKILL');

@@ -1,8 +1,7 @@
-import { and, desc, eq, gt, inArray } from 'drizzle-orm';
-import { outbox } from '@/db/schema';
 import { Problem } from '@/lib/errors';
 import type { Today } from '@/lib/schemas/today';
 import type { Ctx, SignedIn } from '../context';
+import { lettersTo } from '../mail/lettersTo';
 import { lookAtInvitation } from '../sites/lookAtInvitation';
 import { withPeople } from '../transaction';
 
@@ -15,22 +14,12 @@ const MOST = 5;
  */
 export async function invitationsForMe(ctx: Ctx, person: SignedIn): Promise<Today['invitations']> {
   if (!person.verified) return [];
+  const since = new Date(ctx.now.getTime() - VALID_MS);
   const letters = await withPeople((tx) =>
-    tx
-      .select({ text: outbox.text })
-      .from(outbox)
-      .where(
-        and(
-          inArray(outbox.toAddress, [...new Set([person.email, person.email.toLowerCase()])]),
-          eq(outbox.kind, 'invitation'),
-          gt(outbox.createdAt, new Date(ctx.now.getTime() - VALID_MS)),
-        ),
-      )
-      .orderBy(desc(outbox.createdAt))
-      .limit(MOST),
+    lettersTo(tx, { address: person.email, kind: 'invitation', since, most: MOST }),
   );
   const found: Today['invitations'] = [];
-  for (const { text } of letters) {
+  for (const text of letters) {
     const token = /\/invitation\/([\w-]{43})/.exec(text)?.[1];
     if (!token) continue;
     try {
