@@ -3,7 +3,7 @@
 import { useEffect, useRef } from 'react';
 import { Button } from '../actions/button';
 import { useAnnounce } from '../feedback/announce';
-import { counted, isUnderWay, outcomeText, type UploadItem } from './upload-item';
+import { isUnderWay, outcomeText, type UploadItem } from './upload-item';
 import { UploadRow, type UploadRowProps } from './upload-row';
 
 type UploadListProps = Pick<UploadRowProps, 'reportHref' | 'mayType'> & {
@@ -17,9 +17,9 @@ export function UploadList({ items, ...row }: UploadListProps) {
   if (items.length === 0) return null;
   const done = items.filter((item) => !isUnderWay(item) && item.stage.kind !== 'kept').length;
   return (
-    <section aria-label="Files on their way" className="border border-fallow bg-white">
+    <section aria-label="Files sent" className="border border-fallow bg-white">
       <div className="flex flex-wrap items-center justify-between gap-x-4 border-b border-fallow bg-silt pl-4">
-        <h2 className="py-2 font-sans text-base font-semibold">{counted(items.length, 'file')} on their way</h2>
+        <h2 className="py-2 font-sans text-base font-semibold">Files sent</h2>
         {done > 1 ? (
           <Button look="plain" className="text-sm" onClick={row.store.clear}>
             Clear the {done} that are done

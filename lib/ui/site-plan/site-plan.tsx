@@ -173,7 +173,13 @@ export function SitePlan(props: SitePlanProps) {
         )}
       >
         {props.aside ? <div className="min-w-0 lg:col-start-2">{props.aside}</div> : null}
-        <div className="min-w-0 lg:col-start-1 lg:row-span-2 lg:row-start-1">
+        <div
+          className={cx(
+            'min-w-0 lg:col-start-1 lg:row-span-2 lg:row-start-1',
+            // Beside a long list the plan stays in sight, to let files go over it; with its panel open it may be too high for that.
+            !selected && 'lg:sticky lg:top-4',
+          )}
+        >
           <PlanDrawing
             {...props}
             svg={svg}

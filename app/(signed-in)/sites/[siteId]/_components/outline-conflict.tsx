@@ -17,6 +17,7 @@ export function OutlineConflictNotice({ conflict, unit, onSettle }: Props) {
   const [busy, setBusy] = useState(false);
   const mine = outlineText(conflict.mine, unit);
   const theirs = outlineText(conflict.current.outline, unit);
+  const apart = theirs !== mine && theirs !== outlineText(conflict.before, unit);
   const settle = async (choice: 'mine' | 'theirs') => {
     if (busy) return;
     setBusy(true);
@@ -26,7 +27,7 @@ export function OutlineConflictNotice({ conflict, unit, onSettle }: Props) {
   return (
     <VersionConflict
       subject={conflict.current.name}
-      differences={mine === theirs ? [] : [{ field: 'Place and size', yours: mine, theirs }]}
+      differences={apart ? [{ field: 'Place and size', yours: mine, theirs }] : []}
       busy={busy}
       onKeepTheirs={() => void settle('theirs')}
       onSaveYours={() => void settle('mine')}

@@ -3,7 +3,7 @@ import { changedFields, PLOT_FIELDS, type PlotField, type PlotValues } from './p
 import { targetOptions } from './target-options';
 import type { Difference } from './version-conflict';
 
-/** Fields this person changed that now hold something else: only there must somebody choose. */
+/** Fields that both changed, and not to the same: only there must somebody choose. */
 export function plotDifferences(
   mine: PlotValues,
   before: PlotValues,
@@ -18,7 +18,7 @@ export function plotDifferences(
     return value;
   };
   return changedFields(mine, before)
-    .filter((field) => mine[field].trim() !== theirs[field].trim())
+    .filter((field) => theirs[field].trim() !== before[field].trim() && mine[field].trim() !== theirs[field].trim())
     .map((field) => ({
       field: PLOT_FIELDS[field],
       yours: said(field, mine[field]),

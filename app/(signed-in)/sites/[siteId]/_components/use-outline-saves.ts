@@ -5,7 +5,12 @@ import { type Plot, plotSchema } from '@/lib/schemas/plots';
 import { callApi, type Problem } from '@/lib/ui/api';
 import { type PlanOutline, ToldElsewhere } from '@/lib/ui/site-plan/types';
 
-export type OutlineConflict = { readonly plotId: string; readonly mine: PlanOutline; readonly current: Plot };
+export type OutlineConflict = {
+  readonly plotId: string;
+  readonly mine: PlanOutline;
+  readonly before: PlanOutline | null;
+  readonly current: Plot;
+};
 
 /** Only a plot that was refused for its version comes with what stands there now. */
 export function plotOf(problem: Problem): Plot | null {
@@ -24,7 +29,7 @@ export function useOutlineSaves(siteId: string, plots: readonly Plot[], onSaved:
   const [problem, setProblem] = useState<Problem>();
 
   const write = useCallback(
-    async (plotId: string, outline: PlanOutline, version: number) => {
+    async (plotId: string, outline: PlanOutline, version: number, before: PlanOutline | null) => {
       const body = { version, outline };
       const result = await callApi<Plot>(`/sites/${siteId}/plots/${plotId}`, { method: 'PATCH', body });
       if (result.ok) {
@@ -35,7 +40,7 @@ export function useOutlineSaves(siteId: string, plots: readonly Plot[], onSaved:
         return;
       }
       const current = plotOf(result.problem);
-      if (current) setConflict({ plotId, mine: outline, current });
+      if (current) setConflict({ plotId, mine: outline, before, current });
       else setProblem(result.problem);
       throw new ToldElsewhere(result.problem.code);
     },
@@ -48,8 +53,9 @@ export function useOutlineSaves(siteId: string, plots: readonly Plot[], onSaved:
       const next = before
         .catch(() => undefined)
         .then(() => {
-          const shown = plots.find((plot) => plot.id === plotId)?.version ?? 0;
-          return write(plotId, outline, Math.max(shown, versions.current.get(plotId) ?? 0));
+          const shown = plots.find((plot) => plot.id === plotId);
+          const version = Math.max(shown?.version ?? 0, versions.current.get(plotId) ?? 0);
+          return write(plotId, outline, version, shown?.outline ?? null);
         });
       running.current.set(plotId, next);
       return next;
@@ -65,7 +71,9 @@ export function useOutlineSaves(siteId: string, plots: readonly Plot[], onSaved:
       onSaved(conflict.current);
       setConflict(null);
       if (choice === 'mine')
-        await write(conflict.plotId, conflict.mine, conflict.current.version).catch(() => undefined);
+        await write(conflict.plotId, conflict.mine, conflict.current.version, conflict.current.outline).catch(
+          () => undefined,
+        );
     },
     [conflict, onSaved, write],
   );

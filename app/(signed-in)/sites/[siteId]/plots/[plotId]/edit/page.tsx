@@ -8,7 +8,6 @@ import { listPlots } from '@/lib/data/plots/listPlots';
 import { getSite } from '@/lib/data/sites/getSite';
 import { listTargets } from '@/lib/data/targets/listTargets';
 import { Stretch } from '@/lib/ui/frame/layers';
-import { PageTitle } from '@/lib/ui/frame/page-title';
 import { ArchivedNotice, ArchivePlot } from '../../../_components/archive-plot';
 import { PlotEditor } from '../../../_components/plot-editor';
 
@@ -28,17 +27,14 @@ export default async function EditPlotPage({ params }: Params) {
   ]);
   const unit = lengthUnit(person.units);
   return (
-    <>
-      <PageTitle title={`Edit ${plot.name}`} above={{ href: `/sites/${siteId}`, label: site.name }} />
-      <Stretch>
-        {plot.archivedAt ? (
-          <ArchivedNotice siteId={siteId} plot={plot} />
-        ) : (
-          <PlotEditor siteId={siteId} unit={unit} year={year} targets={targets} plot={plot}>
-            <ArchivePlot siteId={siteId} plot={plot} />
-          </PlotEditor>
-        )}
-      </Stretch>
-    </>
+    <Stretch title={`Edit ${plot.name}`}>
+      {plot.archivedAt ? (
+        <ArchivedNotice siteId={siteId} plot={plot} />
+      ) : (
+        <PlotEditor siteId={siteId} unit={unit} year={year} targets={targets} plot={plot}>
+          <ArchivePlot siteId={siteId} plot={plot} />
+        </PlotEditor>
+      )}
+    </Stretch>
   );
 }
