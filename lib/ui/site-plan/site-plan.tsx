@@ -169,7 +169,7 @@ export function SitePlan(props: SitePlanProps) {
       <div
         className={cx(
           'grid items-start gap-x-8 gap-y-3',
-          (plots.length > 0 || props.aside) && 'lg:grid-cols-[minmax(0,1fr)_22rem] lg:grid-rows-[auto_1fr]',
+          (plots.length > 0 || Boolean(props.aside)) && 'lg:grid-cols-[minmax(0,1fr)_22rem] lg:grid-rows-[auto_1fr]',
         )}
       >
         {props.aside ? <div className="min-w-0 lg:col-start-2">{props.aside}</div> : null}
