@@ -1,4 +1,4 @@
-import { and, eq, ne } from 'drizzle-orm';
+import { and, eq, ne, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { membership, outbox } from '@/db/schema';
 import { queueMail } from '@/lib/data/mail/queueMail';
@@ -53,6 +53,14 @@ async function reminderDue(dueOn: string, lastSampled: string): Promise<TestPers
 }
 
 const rowsTo = (who: TestPerson) => withPeople((tx) => tx.select().from(outbox).where(eq(outbox.toAddress, who.email)));
+const waitingToWrite = async () => {
+  const rows = await withPeople((tx) =>
+    tx.execute<{ n: number }>(
+      sql`select count(*)::int as n from pg_locks where relation = 'outbox'::regclass and not granted`,
+    ),
+  );
+  return rows[0]?.n ?? 0;
+};
 const stateTo = async (who: TestPerson) => (await rowsTo(who)).map((row) => row.state).join();
 const lettersTo = async (who: TestPerson) => (await mail.letters()).filter((letter) => letter.to.includes(who.email));
 const sent = (who: TestPerson) =>
@@ -68,10 +76,17 @@ describe('a letter', () => {
   it('is one though two workers sweep at the same time', async () => {
     await at('2027-04-11T12:00:00Z');
     const who = await reminderDue('2027-04-11', '2026-04-11');
+    const gate = await world.owner().reserve();
+    await gate`begin`;
+    await gate`lock table outbox in exclusive mode`;
     const both = [worker(), worker()];
+    // Both have found the reminder due and stand before the same insert.
+    await until('both are about to write the letter', waitingToWrite, (waiting) => waiting === 2, 60_000);
+    await gate`commit`;
+    gate.release();
     await Promise.all(both.map((one) => one.ready()));
     await sent(who);
-    // Each swept on its start; one that is asked to stop finishes its sweep and its job first.
+    // One that is asked to stop finishes its sweep and its job first.
     for (const one of both) one.askToStop();
     expect(await Promise.all(both.map((one) => one.ended()))).toEqual([0, 0]);
     expect(await stateTo(who)).toBe('sent');
