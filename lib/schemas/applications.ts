@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { isAnalyteKey } from '@/lib/domain/analytes';
-import { daySchema, idSchema } from './parts';
+import { daySchema, idSchema, lineSchema, notesSchema } from './parts';
 
 export const AMOUNT_UNITS = ['lb', 'oz', 'kg', 'g'] as const;
 export type AmountUnit = (typeof AMOUNT_UNITS)[number];
@@ -9,26 +9,32 @@ export type AmountUnit = (typeof AMOUNT_UNITS)[number];
 export const KG_PER: Record<AmountUnit, number> = { lb: 0.45359237, oz: 0.45359237 / 16, kg: 1, g: 0.001 };
 
 const analyteSchema = z.string().refine(isAnalyteKey, 'This is not an analyte Loamline knows.');
+/** May be empty: said or not said. */
+const shortSchema = notesSchema(120).transform((text) => text.replace(/\s+/g, ' ').trim());
+const reasonSchema = lineSchema(300, 'Say why in a few words; the history keeps it.').refine(
+  (text) => text.length >= 3,
+  'Say why in a few words; the history keeps it.',
+);
 const positive = (most: number, sentence: string) => z.number(sentence).positive(sentence).max(most, sentence);
 
 export const intentSchema = z.strictObject({
   analyte: analyteSchema,
-  unit: z.string().max(40).nullable(),
+  unit: lineSchema(40, 'The unit is empty.').nullable(),
   /** Signed change once the reaction is complete. */
   fullChange: z
     .number('Give the change meant, with its sign: -0.5 lowers pH by half a unit.')
     .min(-100000)
     .max(100000)
     .refine((change) => change !== 0, 'A change of nothing cannot be checked.'),
-  low: z.number().nullable(),
-  high: z.number().nullable(),
-  source: z.string().max(300),
+  low: z.number().min(-100000).max(100000).nullable(),
+  high: z.number().min(-100000).max(100000).nullable(),
+  source: notesSchema(300),
 });
 
 export const materialSchema = z.union([
   z.strictObject({ key: z.string().min(1).max(80) }),
   z.strictObject({
-    name: z.string().trim().min(1, 'Name the material.').max(120),
+    name: lineSchema(120, 'Name the material.'),
     reaction: z.enum(['sulfur', 'lime', 'soluble-salt']).nullable(),
     affects: z.array(analyteSchema).max(40),
   }),
@@ -43,9 +49,9 @@ export const applicationFields = {
   appliedOn: daySchema,
   areaM2: positive(1000000, 'Give the area, more than nothing.').optional(),
   depthCm: z.number().min(0).max(100, 'Deeper than a metre is not spreading.').optional(),
-  method: z.string().trim().max(120).optional(),
-  soilCondition: z.string().trim().max(120).optional(),
-  note: z.string().trim().max(2000).optional(),
+  method: shortSchema.optional(),
+  soilCondition: shortSchema.optional(),
+  note: notesSchema(2000).optional(),
 };
 
 export const recordApplicationInput = z.strictObject({
@@ -57,12 +63,12 @@ export const recordApplicationInput = z.strictObject({
 export const correctApplicationInput = z.strictObject({
   applicationId: idSchema,
   ...applicationFields,
-  reason: z.string().trim().min(3, 'Say why in a few words; the history keeps it.').max(300),
+  reason: reasonSchema,
 });
 
 export const removeApplicationInput = z.strictObject({
   applicationId: idSchema,
-  reason: z.string().trim().min(3, 'Say why in a few words; the history keeps it.').max(300),
+  reason: reasonSchema,
 });
 
 export const applicationAnswer = z.object({

@@ -5,7 +5,7 @@ import { POST as signInRoute, DELETE as signOutRoute } from '@/app/api/v1/sessio
 import { person } from '@/db/schema';
 import { database } from '@/lib/data/database';
 import { env } from '@/lib/env';
-import { cookieFor, makePerson, type TestPerson, useWorld } from '../support/factory';
+import { cookieFor, makePerson, makePlot, makeSite, type TestPerson, useWorld } from '../support/factory';
 import { GOOD_PASSWORD, signUpConfirmed } from '../support/people';
 import { allRoutes, callRoute } from './routes';
 
@@ -54,7 +54,7 @@ describe('[E 23] a request that changes something and carries our cookie', () =>
     expect(await nameOf(who)).toBe(who.name);
   });
 
-  it('gets no leave for another origin to read the answer', async () => {
+  it('[E 29] gets no leave for another origin to read the answer', async () => {
     const who = await makePerson();
     const headers = {
       cookie: await cookieFor(who),
@@ -63,6 +63,64 @@ describe('[E 23] a request that changes something and carries our cookie', () =>
     };
     const response = await updateMeRoute(ask(headers), none);
     expect([...response.headers.keys()].filter((name) => name.startsWith('access-control'))).toEqual([]);
+  });
+});
+
+describe('[E 63] a name that stands there twice', () => {
+  const rename = async (query: string, body: string) => {
+    const who = await makePerson();
+    const headers = {
+      cookie: await cookieFor(who),
+      'sec-fetch-site': 'same-origin',
+      'content-type': 'application/json',
+    };
+    const url = `http://127.0.0.1:3000/api/v1/people/me${query}`;
+    const { status } = await updateMeRoute(new Request(url, { method: 'PATCH', headers, body }), none);
+    return { status, changed: (await nameOf(who)) !== who.name };
+  };
+
+  it.each([
+    ['in the query', '?name=One&name=Two', '{}'],
+    ['in query and body', '?name=One', '{"name":"Two"}'],
+  ])('%s is refused', async (_, query, body) => {
+    expect(await rename(query, body)).toEqual({ status: 422, changed: false });
+  });
+
+  it('in path and body is refused', async () => {
+    const [route] = (await allRoutes()).filter((one) => /\/plots\/\[plotId\]\/archive$/.test(one.path));
+    if (!route) throw new Error('The route is not there.');
+    const { id, people } = await makeSite();
+    const plotId = await makePlot(id);
+    const response = await callRoute(
+      route,
+      { siteId: id, plotId },
+      {
+        body: JSON.stringify({ plotId, version: 1 }),
+        headers: { cookie: await cookieFor(people.owner), 'content-type': 'application/json' },
+      },
+    );
+    expect(response.status).toBe(422);
+  });
+});
+
+describe('[E 51] a character no text of the database can hold', () => {
+  it('is refused with a sentence, not taken for a fault of ours', async () => {
+    const { id, people } = await makeSite();
+    const [route] = (await allRoutes()).filter(
+      (one) => one.method === 'PUT' && /\/targets\/\[targetKey\]$/.test(one.path),
+    );
+    if (!route) throw new Error('The route is not there.');
+    const bands = [{ analyte: 'soil_ph_water', low: 6, high: 7 }];
+    const response = await callRoute(
+      route,
+      { siteId: id, targetKey: 'own-\u0000' },
+      {
+        body: JSON.stringify({ version: 1, name: 'Mine', bands }),
+        headers: { cookie: await cookieFor(people.owner), 'content-type': 'application/json' },
+      },
+    );
+    expect(response.status).toBe(422);
+    expect(((await response.json()) as { detail: string }).detail).toContain('invisible character');
   });
 });
 

@@ -66,3 +66,11 @@ export function readQuery(url: URL): Record<string, string> {
   }
   return Object.fromEntries(seen);
 }
+
+/** Path, query and body beside each other: a name that stands in two of them is refused, since a reader would have to guess. */
+export function joinInput(...parts: readonly Record<string, unknown>[]): Record<string, unknown> {
+  const names = parts.flatMap((part) => Object.keys(part));
+  const twice = names.find((name, at) => names.indexOf(name) !== at);
+  if (twice !== undefined) throw new Problem('invalid', `The parameter ${twice} stands there twice.`);
+  return Object.assign({}, ...parts);
+}

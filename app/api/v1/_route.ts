@@ -3,7 +3,7 @@ import type { z } from 'zod';
 import type { Ctx } from '@/lib/data/context';
 import type { Guard } from '@/lib/data/verb';
 import { Problem } from '@/lib/errors';
-import { assertSameOrigin, contextOf, readJson, readQuery } from './_guard';
+import { assertSameOrigin, contextOf, joinInput, readJson, readQuery } from './_guard';
 import { problemResponse } from './_problem';
 
 type Params = { params: Promise<Record<string, string>> };
@@ -42,9 +42,7 @@ export function route<R, A extends z.ZodType>(spec: Spec<R, A>): RouteHandler {
         throw new Problem('invalid', 'The body must be a JSON object.');
       }
       const input = {
-        ...readQuery(new URL(request.url)),
-        ...body,
-        ...(await params),
+        ...joinInput(readQuery(new URL(request.url)), { ...body }, await params),
         ...spec.extra?.(request),
       };
       const call = spec.verb as unknown as (call: { ctx: Ctx; input: unknown }) => Promise<R>;

@@ -1,7 +1,6 @@
 import { application, plan, planIntent, planLine } from '@/db/schema';
-import { Problem } from '@/lib/errors';
 import { recordApplicationInput } from '@/lib/schemas/applications';
-import { getPlotInSite } from '../plots/getPlotInSite';
+import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { refreshReminders } from '../reminders/refreshReminders';
 import { enqueue } from '../transaction';
 import { siteVerb } from '../verb';
@@ -13,13 +12,7 @@ export const recordApplication = siteVerb({
   act: 'record.add',
   input: recordApplicationInput,
   run: async ({ ctx, tx, siteId, person, input, audit }) => {
-    const plotRow = await getPlotInSite(tx, siteId, input.plotId);
-    if (plotRow.archivedAt) {
-      throw new Problem(
-        'conflict',
-        'This plot is archived. Bring it back on the ground page, then record what was spread.',
-      );
-    }
+    const plotRow = await getLivePlotInSite(tx, siteId, input.plotId);
     const material = freezeMaterial(input.material);
     const columns = columnsOf(plotRow, input, ctx, person.timeZone);
     const [planRow] = await tx

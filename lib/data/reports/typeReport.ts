@@ -2,7 +2,8 @@ import { report, reportSample } from '@/db/schema';
 import { typeReportInput } from '@/lib/schemas/reports';
 import { assertDayCame } from '../dayCame';
 import { laboratoryOf } from '../laboratories/laboratoryOf';
-import { getPlotInSite } from '../plots/getPlotInSite';
+import { getLivePlotInSite } from '../plots/getLivePlotInSite';
+import { assertDepths } from '../review/assertDepths';
 import { siteVerb } from '../verb';
 import { type StateAnswer, stateAnswer } from './reportAnswer';
 
@@ -12,8 +13,11 @@ export const typeReport = siteVerb({
   input: typeReportInput,
   run: async ({ ctx, tx, siteId, person, input, audit }): Promise<StateAnswer> => {
     for (const sample of input.samples) {
-      if (sample.plotId) await getPlotInSite(tx, siteId, sample.plotId);
       assertDayCame(ctx, person, sample.takenOn, 'takenOn');
+      assertDepths(sample.depthFromCm, sample.depthToCm);
+    }
+    for (const plotId of new Set(input.samples.map((sample) => sample.plotId))) {
+      if (plotId) await getLivePlotInSite(tx, siteId, plotId);
     }
     const [row] = await tx
       .insert(report)

@@ -2,11 +2,10 @@ import { and, desc, eq } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { report } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
-import { Problem } from '@/lib/errors';
 import { log } from '@/lib/log';
 import { type UploadAnswer, uploadInput } from '@/lib/schemas/reports';
 import { deleteFile, putFile, sha256 } from '@/lib/services/storage/storage';
-import { getPlotInSite } from '../plots/getPlotInSite';
+import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { enqueue, isUniqueViolation } from '../transaction';
 import { siteWorkVerb } from '../workVerb';
 import { cleanFileName, endingOf } from './cleanFileName';
@@ -56,11 +55,7 @@ export const uploadReport = siteWorkVerb({
     const { contentType } = sniffUpload(bytes, fileName);
     const hash = sha256(bytes);
     const seen = await inSite(async ({ tx }) => {
-      if (plotId && (await getPlotInSite(tx, siteId, plotId)).archivedAt) {
-        throw new Problem('conflict', 'This plot is archived. Bring it back, or send the report to the site instead.', {
-          reason: 'archived',
-        });
-      }
+      if (plotId) await getLivePlotInSite(tx, siteId, plotId);
       return newestOf(tx, siteId, hash);
     });
     if (seen && !asRevision) return seenBefore(seen);

@@ -2,7 +2,7 @@ import { and, eq, sql } from 'drizzle-orm';
 import { reportSample } from '@/db/schema';
 import { addSampleInput } from '@/lib/schemas/review';
 import { assertDayCame } from '../dayCame';
-import { getPlotInSite } from '../plots/getPlotInSite';
+import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { siteVerb } from '../verb';
 import { reportInReview } from './reportInReview';
 import { type SampleAnswer, toSample } from './sampleStore';
@@ -14,7 +14,7 @@ export const addSample = siteVerb({
   run: async ({ ctx, tx, siteId, person, input, audit }): Promise<SampleAnswer> => {
     const { reportId, name, labNumber, plotId, takenOn } = input;
     await reportInReview(tx, siteId, reportId, 'update');
-    if (plotId) await getPlotInSite(tx, siteId, plotId);
+    if (plotId) await getLivePlotInSite(tx, siteId, plotId);
     assertDayCame(ctx, person, takenOn, 'takenOn');
     const [last] = await tx
       .select({ ordinal: sql<number>`coalesce(max(${reportSample.ordinal}), 0)::int` })

@@ -1,18 +1,12 @@
-import { Problem } from '@/lib/errors';
 import { setSampleInput } from '@/lib/schemas/review';
 import { assertDayCame } from '../dayCame';
-import { getPlotInSite } from '../plots/getPlotInSite';
+import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { siteVerb } from '../verb';
+import { assertDepths } from './assertDepths';
 import { reportInReview } from './reportInReview';
 import { getSampleInReport, type SampleAnswer, toSample, writeSample } from './sampleStore';
 
 const text = (value: number | null | undefined) => (value === null || value === undefined ? value : String(value));
-
-function assertDepths(from: string | null, to: string | null): void {
-  if (from === null || to === null || Number(from) < Number(to)) return;
-  const sentence = 'The depth must end deeper than it begins.';
-  throw new Problem('invalid', sentence, { fields: { depthToCm: sentence } });
-}
 
 /** Which plot, which day, how deep; or left out with a reason. */
 export const setSample = siteVerb({
@@ -22,14 +16,7 @@ export const setSample = siteVerb({
     const { reportId, reportSampleId, version, depthFromCm, depthToCm, ...plain } = input;
     await reportInReview(tx, siteId, reportId);
     const before = await getSampleInReport(tx, siteId, reportId, reportSampleId);
-    if (plain.plotId && plain.plotId !== before.plotId) {
-      const plot = await getPlotInSite(tx, siteId, plain.plotId);
-      if (plot.archivedAt) {
-        throw new Problem('conflict', `${plot.name} is archived. Bring it back first, or choose another plot.`, {
-          reason: 'archived',
-        });
-      }
-    }
+    if (plain.plotId && plain.plotId !== before.plotId) await getLivePlotInSite(tx, siteId, plain.plotId);
     assertDayCame(ctx, person, plain.takenOn, 'takenOn');
     const depths = {
       ...(depthFromCm === undefined ? {} : { depthFromCm: text(depthFromCm) ?? null }),
