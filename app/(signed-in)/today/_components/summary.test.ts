@@ -52,6 +52,9 @@ describe('the day in a sentence', () => {
       '2 samples are due, 1 comes due within a month and 1 report waits for you to confirm it.',
     );
   });
+  it('names the samples when only later ones are there', () => {
+    expect(summaryOf(today({ due: [due(12)] }))).toBe('1 sample comes due within a month.');
+  });
   it('does not count what this person put off', () => {
     expect(summaryOf(today({ due: [due(-8, '2026-05-04'), due(-1)] }))).toBe('1 sample is due.');
   });

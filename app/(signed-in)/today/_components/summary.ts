@@ -11,7 +11,9 @@ export function summaryOf({ today, sites }: Today): string {
   const review = sites.flatMap((site) => site.reports).filter((one) => one.state === 'in-review').length;
   const parts = [
     ...counted(due, 'sample is due', 'samples are due'),
-    ...counted(soon, 'comes due within a month', 'come due within a month'),
+    ...(due > 0
+      ? counted(soon, 'comes due within a month', 'come due within a month')
+      : counted(soon, 'sample comes due within a month', 'samples come due within a month')),
     ...counted(review, 'report waits for you to confirm it', 'reports wait for you to confirm them'),
   ];
   if (parts.length === 0) return 'Nothing is due.';
