@@ -93,6 +93,12 @@ describe('columns', () => {
     expect(ids([makeRow('a', { form: 'element' })])).not.toContain('form');
     expect(ids([makeRow('a', { form: 'P2O5' })])).toContain('form');
   });
+  it('leave out what is on the page where nothing is', () => {
+    const typed = makeRow('a', { state: 'added', label: '', printed: '6.4' });
+    const gone = makeRow('b', { state: 'removed', label: '', printed: '' });
+    expect(columnsFor([typed, gone], false).map((column) => column.id)).not.toContain('printed');
+    expect(columnsFor([makeRow('c')], false).map((column) => column.id)).toContain('printed');
+  });
   it("offer the methods of the row's own analyte", () => {
     const options = toGridRow(makeRow('a'), undefined).options?.method ?? [];
     expect(options.map((one) => one.value)).toContain('1:1_water');

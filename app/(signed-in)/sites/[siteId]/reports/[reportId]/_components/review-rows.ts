@@ -131,7 +131,7 @@ const ELEMENT_ONLY = new Set([null, '', 'element']);
 export function columnsFor(rows: readonly ReviewRow[], readOnly: boolean): readonly GridColumn[] {
   const known = knownTexts(rows);
   const anyForm = rows.some((row) => !ELEMENT_ONLY.has(row.form) || row.state === 'added');
-  const anyPrinted = rows.some((row) => row.state !== 'added');
+  const anyPrinted = rows.some((row) => printedWords(row) !== '');
   const form: GridColumn = {
     id: 'form',
     header: 'Given as',

@@ -12,8 +12,6 @@ import { withRows } from './review-edits';
 const WHILE_READING_MS = 2_100;
 const WHILE_REVIEWED_MS = 20_000;
 
-export type ReportPlace = { readonly siteId: string; readonly reportId: string; readonly path: string };
-
 export type LiveReport = {
   readonly report: Report;
   readonly review: Review | null;
