@@ -18,7 +18,6 @@ const SWEEPS: readonly Sweep[] = [
 ];
 
 export function startSweeps(): { stop: () => Promise<void> } {
-  let running: Promise<void> = Promise.resolve();
   const sweepAll = async () => {
     for (const sweep of SWEEPS) {
       try {
@@ -28,14 +27,19 @@ export function startSweeps(): { stop: () => Promise<void> } {
       }
     }
   };
-  const timer = setInterval(() => {
-    running = running.then(sweepAll);
-  }, env().SWEEP_SECONDS * 1000);
-  running = sweepAll();
+  // A round that takes longer than the pause is not followed by all those it missed.
+  let running: Promise<void> | null = null;
+  const tick = () => {
+    running ??= sweepAll().finally(() => {
+      running = null;
+    });
+  };
+  const timer = setInterval(tick, env().SWEEP_SECONDS * 1000);
+  tick();
   return {
-    stop: () => {
+    stop: async () => {
       clearInterval(timer);
-      return running;
+      await running;
     },
   };
 }

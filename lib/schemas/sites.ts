@@ -100,9 +100,11 @@ export const invitationLookSchema = z.object({
 export type InvitationLook = z.infer<typeof invitationLookSchema>;
 export const acceptedSchema = z.object({ siteId: idSchema });
 
+/** Moment and id: what one act wrote down twice has one moment, and a page may end between the two. */
+const auditMark = z.string().regex(/^\d{4}-\d\d-\d\dT[\d:.]+Z_[\da-f-]{36}$/, 'This is not a mark of this list.');
 export const auditInput = z.strictObject({
-  /** Events before this moment; the last line of the page before. */
-  before: momentSchema.optional(),
+  /** Events before this one; the mark that came with the page before. */
+  before: auditMark.optional(),
 });
 export const auditListSchema = z.object({
   events: z.array(
@@ -117,6 +119,6 @@ export const auditListSchema = z.object({
     }),
   ),
   /** Ask for the next page with this; null at the end. */
-  before: momentSchema.nullable(),
+  before: auditMark.nullable(),
 });
 export type AuditList = z.infer<typeof auditListSchema>;

@@ -1,4 +1,4 @@
-import { and, eq, gt } from 'drizzle-orm';
+import { and, eq, gt, isNull } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { person, type TokenPurpose, token } from '@/db/schema';
 import { Problem } from '@/lib/errors';
@@ -11,7 +11,14 @@ export async function readLinkToken(tx: Transaction, ctx: Ctx, secret: string, p
     .select({ personId: token.personId, payload: token.payload, name: person.name, timeZone: person.timeZone })
     .from(token)
     .innerJoin(person, eq(person.id, token.personId))
-    .where(and(eq(token.id, hashSecret(secret)), eq(token.purpose, purpose), gt(token.expiresAt, ctx.now)));
+    .where(
+      and(
+        eq(token.id, hashSecret(secret)),
+        eq(token.purpose, purpose),
+        gt(token.expiresAt, ctx.now),
+        isNull(person.disabledAt),
+      ),
+    );
   if (!row)
     throw new Problem(
       'gone',

@@ -26,7 +26,9 @@ export async function closeInSite(
     if (known.length === 0) throw notFound();
     throw new Problem('conflict', 'This reminder is already closed; nothing more is sent for it.');
   }
-  await audit(tx, ctx, siteId, { act: 'reminder.done', objectKind: 'reminder', objectId: reminderId });
+  // From a letter nobody is signed in: who it was written to stands in the detail.
+  const detail = { personId };
+  await audit(tx, ctx, siteId, { act: 'reminder.done', objectKind: 'reminder', objectId: reminderId, detail });
 }
 
 /** "Already sampled": closed for everybody on the site. */

@@ -7,6 +7,8 @@ import { enqueue, withSite } from '../transaction';
 import { workerVerb } from '../verb';
 
 const STALE_AFTER_MS = 180_000;
+/** The next sweep takes the rest. */
+const MOST = 200;
 
 /**
  * Reports that wait for longer than three minutes are asked for once more: a job may be lost with a restored queue, a
@@ -17,7 +19,7 @@ export const requeueUploads = workerVerb({
   run: async ({ ctx }): Promise<number> => {
     const before = new Date(ctx.now.getTime() - STALE_AFTER_MS);
     const stale = await database().execute<{ site_id: string; report_id: string }>(
-      sql`select site_id, report_id from stale_uploads(${before.toISOString()}::timestamptz)`,
+      sql`select site_id, report_id from stale_uploads(${before.toISOString()}::timestamptz) limit ${MOST}`,
     );
     let asked = 0;
     for (const { site_id: siteId, report_id: id } of stale) {

@@ -52,10 +52,10 @@ export const confirmReport = siteVerb({
       objectId: reportId,
       detail: { results, plotIds, separateAnalyses },
     });
-    for (const plotId of plotIds) {
-      await refreshReminders(tx, ctx, siteId, plotId);
-      await enqueue(tx, 'recheck-effects', { siteId, id: plotId });
-    }
+    for (const plotId of plotIds) await refreshReminders(tx, ctx, siteId, plotId);
+    // One is enough: the recheck looks at the whole site, since a plot can serve another as its control.
+    const [anyPlot] = plotIds;
+    if (anyPlot) await enqueue(tx, 'recheck-effects', { siteId, id: anyPlot });
     return { reportId, state: 'confirmed', results, plotIds };
   },
 });

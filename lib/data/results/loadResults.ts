@@ -3,8 +3,12 @@ import { alias } from 'drizzle-orm/pg-core';
 import type { Transaction } from '@/db/client';
 import { laboratory, result, sample } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
+import { Problem } from '@/lib/errors';
 import type { Result } from '@/lib/schemas/results';
 import { namesOf } from '../people/names';
+
+/** Beyond this an answer is no list any more; it is refused rather than cut, so that nobody takes a part for the whole. */
+const MOST = 50_000;
 
 const replaced = alias(result, 'replaced');
 
@@ -30,7 +34,11 @@ export async function loadResults(tx: Transaction, siteId: SiteId, only?: SQL): 
     .leftJoin(laboratory, and(eq(laboratory.siteId, siteId), eq(laboratory.id, result.laboratoryId)))
     .leftJoin(replaced, and(eq(replaced.siteId, siteId), eq(replaced.id, result.supersedesId)))
     .where(and(eq(result.siteId, siteId), isNull(result.supersededAt), only))
-    .orderBy(desc(result.takenOn), asc(result.plotId), asc(result.analyte), asc(result.analysis), asc(result.id));
+    .orderBy(desc(result.takenOn), asc(result.plotId), asc(result.analyte), asc(result.analysis), asc(result.id))
+    .limit(MOST + 1);
+  if (rows.length > MOST) {
+    throw new Problem('too-large', `These are more than ${MOST} results. Ask for one plot, one analyte or some years.`);
+  }
   const names = await namesOf(
     tx,
     rows.map((row) => row.result.confirmedBy),

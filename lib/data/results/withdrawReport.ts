@@ -70,10 +70,10 @@ export const withdrawReport = siteVerb({
             .returning({ id: result.id });
     const detail = { reason, results: gone.length };
     await audit({ act: 'report.withdraw', objectKind: 'report', objectId: reportId, detail });
-    for (const plotId of plotIds) {
-      await refreshReminders(tx, ctx, siteId, plotId);
-      await enqueue(tx, 'recheck-effects', { siteId, id: plotId });
-    }
+    for (const plotId of plotIds) await refreshReminders(tx, ctx, siteId, plotId);
+    // One is enough: the recheck looks at the whole site, since a plot can serve another as its control.
+    const [anyPlot] = plotIds;
+    if (anyPlot) await enqueue(tx, 'recheck-effects', { siteId, id: anyPlot });
     return stateAnswer(row);
   },
 });

@@ -2,15 +2,17 @@ import { and, eq, sql } from 'drizzle-orm';
 import { membership } from '@/db/schema';
 import { asMembershipId } from '@/lib/domain/ids';
 import { changeRoleInput } from '@/lib/schemas/sites';
-import { siteVerb } from '../verb';
+import { mayHere, siteVerb } from '../verb';
 import { getMemberInSite } from './getMemberInSite';
 import { lastOwner, ownerRemains, queueForOwners } from './owners';
 
 export const changeRole = siteVerb({
   act: 'site.manage',
   input: changeRoleInput,
-  run: async ({ tx, siteId, input, audit }) => {
+  run: async ({ ctx, tx, siteId, input, audit }) => {
     await queueForOwners(tx, siteId);
+    // Asked again after the wait: whoever was before me may have taken my own right away.
+    await mayHere(tx, ctx, siteId, 'site.manage');
     const before = await getMemberInSite(tx, siteId, asMembershipId(input.memberId));
     const [row] = await tx
       .update(membership)

@@ -33,7 +33,12 @@ export const invite = siteVerb({
   act: 'site.manage',
   input: inviteInput,
   run: async ({ ctx, tx, siteId, person, input, audit }) => {
-    const [here] = await tx.select({ name: site.name, timeZone: site.timeZone }).from(site).where(eq(site.id, siteId));
+    // Invitations of a site queue here: many at once would each find the day's number not reached.
+    const [here] = await tx
+      .select({ name: site.name, timeZone: site.timeZone })
+      .from(site)
+      .where(eq(site.id, siteId))
+      .for('no key update');
     if (!here) throw notFound();
     const known = await findPerson(tx, input.email);
     if (known && (await isMember(tx, siteId, known.id))) {

@@ -1,10 +1,15 @@
-import { and, desc, eq, lt } from 'drizzle-orm';
+import { and, desc, eq, type SQL, sql } from 'drizzle-orm';
 import { auditEvent } from '@/db/schema';
 import { type AuditList, auditInput } from '@/lib/schemas/sites';
 import { namesOf } from '../people/names';
 import { siteVerb } from '../verb';
 
 const PAGE = 50;
+
+function olderThan(mark: string | undefined): SQL | undefined {
+  const [at, id] = mark?.split('_') ?? [];
+  return at && id ? sql`(${auditEvent.at}, ${auditEvent.id}) < (${at}::timestamptz, ${id}::uuid)` : undefined;
+}
 
 export const listAudit = siteVerb({
   act: 'site.manage',
@@ -13,7 +18,7 @@ export const listAudit = siteVerb({
     const rows = await tx
       .select()
       .from(auditEvent)
-      .where(and(eq(auditEvent.siteId, siteId), ...(input.before ? [lt(auditEvent.at, new Date(input.before))] : [])))
+      .where(and(eq(auditEvent.siteId, siteId), olderThan(input.before)))
       .orderBy(desc(auditEvent.at), desc(auditEvent.id))
       .limit(PAGE + 1);
     const page = rows.slice(0, PAGE);
@@ -21,6 +26,7 @@ export const listAudit = siteVerb({
       tx,
       page.flatMap((row) => (row.personId ? [row.personId] : [])),
     );
+    const last = page.at(-1);
     return {
       events: page.map((row) => ({
         id: row.id,
@@ -31,7 +37,7 @@ export const listAudit = siteVerb({
         objectId: row.objectId,
         detail: row.detail,
       })),
-      before: rows.length > PAGE ? (page.at(-1)?.at.toISOString() ?? null) : null,
+      before: last && rows.length > PAGE ? `${last.at.toISOString()}_${last.id}` : null,
     };
   },
 });

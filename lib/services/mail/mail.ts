@@ -15,6 +15,8 @@ export type MailAnswer =
   | { ok: true; providerId: string }
   | { ok: false; reason: 'refused' | 'later'; sentence: string };
 
+const AGAIN = new Set([401, 403, 408, 409, 429]);
+
 let client: Resend | undefined;
 
 /** One mail to the provider. "refused" is final for this address or body; "later" may be tried again with the same key. */
@@ -39,6 +41,11 @@ export async function sendMail(mail: OutgoingMail): Promise<MailAnswer> {
   );
   if (data) return { ok: true, providerId: data.id };
   const status = error?.statusCode ?? 0;
-  const final = status >= 400 && status < 500 && status !== 429 && status !== 408 && status !== 409;
-  return { ok: false, reason: final ? 'refused' : 'later', sentence: error?.message ?? 'The mail service did not answer.' };
+  // 401 and 403 are about our own key or sender: once that is put right, the letter goes.
+  const final = status >= 400 && status < 500 && !AGAIN.has(status);
+  return {
+    ok: false,
+    reason: final ? 'refused' : 'later',
+    sentence: error?.message ?? 'The mail service did not answer.',
+  };
 }
