@@ -23,5 +23,5 @@ export default {
   reactStrictMode: true,
   productionBrowserSourceMaps: false,
   turbopack: { root: import.meta.dirname },
-  serverExternalPackages: ['@napi-rs/canvas', 'pdfjs-dist', '@node-rs/argon2', 'postgres', 'pg', 'pg-boss'],
+  serverExternalPackages: ['pdfjs-dist', '@node-rs/argon2', 'postgres', 'pg', 'pg-boss'],
 };

@@ -112,7 +112,9 @@ export const application = pgTable(
     primaryKey({ columns: [t.siteId, t.id] }),
     foreignKey({ columns: [t.siteId, t.plotId], foreignColumns: [plot.siteId, plot.id] }).onDelete('cascade'),
     foreignKey({ columns: [t.siteId, t.planId], foreignColumns: [plan.siteId, plan.id] }).onDelete('cascade'),
-    foreignKey({ columns: [t.siteId, t.planLineId], foreignColumns: [planLine.siteId, planLine.id] }).onDelete('cascade'),
+    foreignKey({ columns: [t.siteId, t.planLineId], foreignColumns: [planLine.siteId, planLine.id] }).onDelete(
+      'cascade',
+    ),
     index('application_site_plot_day_idx').on(t.siteId, t.plotId, t.appliedOn.desc()),
     siteRowsOnly('application'),
   ],
@@ -134,7 +136,9 @@ export const effectCheck = pgTable(
   (t) => [
     primaryKey({ columns: [t.siteId, t.id] }),
     foreignKey({ columns: [t.siteId, t.plotId], foreignColumns: [plot.siteId, plot.id] }).onDelete('cascade'),
-    foreignKey({ columns: [t.siteId, t.planIntentId], foreignColumns: [planIntent.siteId, planIntent.id] }).onDelete('cascade'),
+    foreignKey({ columns: [t.siteId, t.planIntentId], foreignColumns: [planIntent.siteId, planIntent.id] }).onDelete(
+      'cascade',
+    ),
     index('effect_check_site_intent_idx').on(t.siteId, t.planIntentId, t.computedAt.desc()),
     siteRowsOnly('effect_check'),
   ],
@@ -176,7 +180,9 @@ export const reminder = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.siteId, t.id] }),
-    foreignKey({ columns: [t.siteId, t.ruleId], foreignColumns: [reminderRule.siteId, reminderRule.id] }).onDelete('cascade'),
+    foreignKey({ columns: [t.siteId, t.ruleId], foreignColumns: [reminderRule.siteId, reminderRule.id] }).onDelete(
+      'cascade',
+    ),
     foreignKey({ columns: [t.siteId, t.plotId], foreignColumns: [plot.siteId, plot.id] }).onDelete('cascade'),
     uniqueIndex('reminder_site_rule_due_key').on(t.siteId, t.ruleId, t.dueOn),
     index('reminder_open_due_idx').on(t.dueOn).where(sql`state = 'open'`),
@@ -194,7 +200,9 @@ export const reminderSnooze = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.siteId, t.id] }),
-    foreignKey({ columns: [t.siteId, t.reminderId], foreignColumns: [reminder.siteId, reminder.id] }).onDelete('cascade'),
+    foreignKey({ columns: [t.siteId, t.reminderId], foreignColumns: [reminder.siteId, reminder.id] }).onDelete(
+      'cascade',
+    ),
     uniqueIndex('reminder_snooze_site_reminder_person_key').on(t.siteId, t.reminderId, t.personId),
     siteRowsOnly('reminder_snooze'),
   ],

@@ -13,4 +13,10 @@ export const siteColumns = {
 const inThisSite = sql`site_id = nullif(current_setting('app.site_id', true), '')::uuid`;
 
 export const siteRowsOnly = (table: string) =>
-  pgPolicy(`${table}_site_rows`, { as: 'permissive', for: 'all', to: 'public', using: inThisSite, withCheck: inThisSite });
+  pgPolicy(`${table}_site_rows`, {
+    as: 'permissive',
+    for: 'all',
+    to: 'public',
+    using: inThisSite,
+    withCheck: inThisSite,
+  });

@@ -35,7 +35,9 @@ export const site = pgTable(
     planHeightM: numeric('plan_height_m').notNull().default('25'),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
-  () => [pgPolicy('site_site_rows', { as: 'permissive', for: 'all', to: 'public', using: thisSite, withCheck: thisSite })],
+  () => [
+    pgPolicy('site_site_rows', { as: 'permissive', for: 'all', to: 'public', using: thisSite, withCheck: thisSite }),
+  ],
 );
 
 export const membership = pgTable(
@@ -75,9 +77,7 @@ export const invitation = pgTable(
   (t) => [
     primaryKey({ columns: [t.siteId, t.id] }),
     foreignKey({ columns: [t.siteId], foreignColumns: [site.id] }).onDelete('cascade'),
-    uniqueIndex('invitation_site_open_email_key')
-      .on(t.siteId, sql`lower(${t.email})`)
-      .where(sql`state = 'open'`),
+    uniqueIndex('invitation_site_open_email_key').on(t.siteId, sql`lower(${t.email})`).where(sql`state = 'open'`),
     siteRowsOnly('invitation'),
   ],
 );
@@ -123,9 +123,7 @@ export const plot = pgTable(
   (t) => [
     primaryKey({ columns: [t.siteId, t.id] }),
     foreignKey({ columns: [t.siteId], foreignColumns: [site.id] }).onDelete('cascade'),
-    uniqueIndex('plot_site_name_key')
-      .on(t.siteId, sql`lower(${t.name})`)
-      .where(sql`archived_at is null`),
+    uniqueIndex('plot_site_name_key').on(t.siteId, sql`lower(${t.name})`).where(sql`archived_at is null`),
     siteRowsOnly('plot'),
   ],
 );
@@ -183,7 +181,9 @@ export const target = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.siteId, t.id] }),
-    foreignKey({ columns: [t.siteId, t.targetSetId], foreignColumns: [targetSet.siteId, targetSet.id] }).onDelete('cascade'),
+    foreignKey({ columns: [t.siteId, t.targetSetId], foreignColumns: [targetSet.siteId, targetSet.id] }).onDelete(
+      'cascade',
+    ),
     uniqueIndex('target_site_set_analyte_key').on(t.siteId, t.targetSetId, t.analyte),
     siteRowsOnly('target'),
   ],

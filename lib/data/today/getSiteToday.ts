@@ -89,7 +89,7 @@ export const getSiteToday = siteVerb({
       next: all.find((one) => one.inDays > SHOWN_FROM_DAYS) ?? null,
       reports,
       moreReports: Math.max(0, counts.waiting - reports.length),
-      verdicts: await newestVerdicts(tx, siteId),
+      verdicts: await newestVerdicts(tx, siteId, ctx.now),
     };
   },
 });

@@ -1,62 +1,54 @@
-import { and, desc, eq, exists, isNull } from 'drizzle-orm';
-import { z } from 'zod';
+import { and, desc, eq, isNull } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { application, effectCheck, planIntent, plot } from '@/db/schema';
-import { VERDICTS } from '@/lib/domain/effects';
+import { effectCheck, plot } from '@/db/schema';
+import { checkEffect } from '@/lib/domain/effects';
 import type { SiteId } from '@/lib/domain/ids';
 import type { TodayVerdict } from '@/lib/schemas/today';
+import { effectQuestions } from '../effects/assemble';
+import { loadPicture } from '../effects/loadPicture';
 
 const SHOWN = 3;
-const verdictSchema = z.enum(VERDICTS);
-const outcomeSchema = z.object({
-  sentences: z.array(z.string()).min(1),
-  settle: z.array(z.object({ text: z.string() })),
-});
 
-/**
- * The verdicts that changed last, as they were kept. Only the latest word on an intention counts: a verdict that was
- * taken back since (a result withdrawn, say) is not news any more, nor is one on a record that was removed.
- */
-export async function newestVerdicts(tx: Transaction, siteId: SiteId): Promise<TodayVerdict[]> {
-  const latest = tx
-    .selectDistinctOn([effectCheck.planIntentId])
+/** When each kept verdict last changed, by the intention it answers. */
+async function keptSince(tx: Transaction, siteId: SiteId): Promise<Map<string, Date>> {
+  const rows = await tx
+    .selectDistinctOn([effectCheck.planIntentId], { intentId: effectCheck.planIntentId, at: effectCheck.computedAt })
     .from(effectCheck)
     .where(eq(effectCheck.siteId, siteId))
-    .orderBy(effectCheck.planIntentId, desc(effectCheck.computedAt))
-    .as('latest');
-  const stillSpread = tx
-    .select({ id: application.id })
-    .from(application)
-    .where(
-      and(eq(application.siteId, siteId), eq(application.planId, planIntent.planId), isNull(application.supersededAt)),
-    );
-  const rows = await tx
-    .select({
-      id: latest.id,
-      plotId: latest.plotId,
-      plotName: plot.name,
-      verdict: latest.verdict,
-      outcome: latest.outcome,
-      computedAt: latest.computedAt,
-    })
-    .from(latest)
-    .innerJoin(plot, and(eq(plot.siteId, siteId), eq(plot.id, latest.plotId), isNull(plot.archivedAt)))
-    .innerJoin(planIntent, and(eq(planIntent.siteId, siteId), eq(planIntent.id, latest.planIntentId)))
-    .where(exists(stillSpread))
-    .orderBy(desc(latest.computedAt));
-  const shown: TodayVerdict[] = [];
-  for (const { verdict, outcome, computedAt, ...row } of rows) {
-    const word = verdictSchema.safeParse(verdict);
-    const said = outcomeSchema.safeParse(outcome);
-    if (!word.success || !said.success) continue;
-    shown.push({
-      ...row,
-      verdict: word.data,
-      sentence: said.data.sentences[0] ?? '',
-      settledBy: said.data.settle[0]?.text ?? null,
-      computedAt: computedAt.toISOString(),
-    });
-    if (shown.length === SHOWN) break;
+    .orderBy(effectCheck.planIntentId, desc(effectCheck.computedAt));
+  return new Map(rows.map((row) => [row.intentId, row.at]));
+}
+
+/**
+ * The verdicts that changed last. Word and sentence are computed now, as on the effects page, so that both always say
+ * the same; only the order comes from what was kept.
+ */
+export async function newestVerdicts(tx: Transaction, siteId: SiteId, now: Date): Promise<TodayVerdict[]> {
+  const since = await keptSince(tx, siteId);
+  if (since.size === 0) return [];
+  const picture = await loadPicture(tx, siteId, now);
+  const open = await tx
+    .select({ id: plot.id })
+    .from(plot)
+    .where(and(eq(plot.siteId, siteId), isNull(plot.archivedAt)));
+  const isOpen = new Set(open.map((row) => row.id));
+  const verdicts: TodayVerdict[] = [];
+  for (const { id } of picture.plots) {
+    if (!isOpen.has(id)) continue;
+    for (const { input, intentIds } of effectQuestions(picture, id)) {
+      const outcome = checkEffect(input);
+      const [intentId] = intentIds;
+      if (!outcome.ok || !intentId) continue;
+      verdicts.push({
+        id: intentId,
+        plotId: id,
+        plotName: input.plotName,
+        verdict: outcome.verdict,
+        sentence: outcome.sentences[0] ?? '',
+        settledBy: outcome.settle[0]?.text ?? null,
+        computedAt: (since.get(intentId) ?? now).toISOString(),
+      });
+    }
   }
-  return shown;
+  return verdicts.sort((a, b) => b.computedAt.localeCompare(a.computedAt)).slice(0, SHOWN);
 }
