@@ -43,7 +43,7 @@ const press = (secret: string, headers: Record<string, string> = {}) =>
     { params: Promise.resolve({}) },
   );
 
-describe('[E 70] one-click unsubscribe', () => {
+describe('[E 23] one-click unsubscribe', () => {
   it('works from a mail program: a form body, a foreign origin, no cookie; and once more', async () => {
     const who = await makePerson();
     const other = await makePerson();

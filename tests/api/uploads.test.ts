@@ -182,7 +182,7 @@ describe('sending a report', () => {
     expect(body.fileName).toBe(kept);
   });
 
-  it('writes names into headers so that nothing breaks out of them', async () => {
+  it('[E 56] writes names into headers so that nothing breaks out of them', async () => {
     const { reportId } = await (await send(pdfBytes(), 'Frühling "2026"; x.pdf')).json();
     const got = await call(getFileRoute, { cookie: helper }, { siteId: here.id, reportId });
     expect(got.headers.get('content-disposition')).toBe(
@@ -220,7 +220,7 @@ describe('sending a report', () => {
     expect((await send(bytes, 'a.pdf', { plotId: randomUUID() })).status).toBe(404);
   });
 
-  it('opens the original for owner, adviser and helper only, and only on its own site', async () => {
+  it('[E 48] opens the original for owner, adviser and helper only, and only on its own site', async () => {
     const { reportId } = await (await send(pdfBytes(), 'a.pdf')).json();
     const at = async (cookie: string, siteId: string) =>
       (await call(getFileRoute, { cookie }, { siteId, reportId })).status;

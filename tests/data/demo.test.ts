@@ -247,7 +247,7 @@ describe('where the demo may go', () => {
     expect(await fingerprint()).toEqual(before);
   });
 
-  it('refuses any database but the one the start script has just made on this machine', () => {
+  it('[E 11] refuses any database but the one the start script has just made on this machine', () => {
     const folder = mkdtempSync(path.join(tmpdir(), 'demo-'));
     try {
       const file = path.join(folder, 'accounts.json');

@@ -89,6 +89,12 @@ describe('what was spread, and whether it worked', () => {
     ).toEqual({ changed: 0 });
   });
 
+  it('[E 45] finds nothing for a forged pair of site and plot', async () => {
+    const other = await makeSite('Elsewhere');
+    const forged = recheckEffects({ ctx: await ctxWorker(), input: { siteId: other.id, id: treated } });
+    expect(await forged).toEqual({ changed: 0 });
+  });
+
   it('compares spring with fall with a wider interval and says so', async () => {
     const ctx = await ctxAs(site.people.viewer);
     const spring = await compareResults({

@@ -1,10 +1,11 @@
+import { readdir, readFile } from 'node:fs/promises';
 import { sql } from 'drizzle-orm';
 import postgres from 'postgres';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { connect } from '@/db/client';
 import { plot } from '@/db/schema';
 import { database } from '@/lib/data/database';
-import { withSite } from '@/lib/data/transaction';
+import { enterSite, withSite } from '@/lib/data/transaction';
 import { makePlot, makeSite, type TestSite, useWorld } from '../support/factory';
 
 const world = useWorld();
@@ -30,7 +31,7 @@ describe('isolation of sites', () => {
     await makePlot(two.id, { name: 'Only there' });
   });
 
-  it('is enabled and forced on every table that carries a site', async () => {
+  it('[E 37] is enabled and forced on every table that carries a site', async () => {
     const rows = await world.owner()<{ relname: string; relrowsecurity: boolean; relforcerowsecurity: boolean }[]>`
       select c.relname, c.relrowsecurity, c.relforcerowsecurity
       from pg_class c join pg_attribute a on a.attrelid = c.oid
@@ -42,7 +43,7 @@ describe('isolation of sites', () => {
     expect(site?.held).toBe(true);
   });
 
-  it('puts the site first in every primary key, and lets foreign keys cross no site', async () => {
+  it('[E 42] puts the site first in every primary key, and lets foreign keys cross no site', async () => {
     const keys = await world.owner()<{ table: string; columns: string[] }[]>`
       select c.conrelid::regclass::text as table, array_agg(a.attname order by k.ord)::text[] as columns
       from pg_constraint c cross join unnest(c.conkey) with ordinality k(attnum, ord)
@@ -59,13 +60,13 @@ describe('isolation of sites', () => {
     expect(single).toEqual([]);
   });
 
-  it('shows nothing without a site, and only its own rows with one', async () => {
+  it('[E 41] shows nothing without a site, and only its own rows with one', async () => {
     expect(await database().select().from(plot)).toEqual([]);
     const names = await withSite(one.id, (tx) => tx.select({ name: plot.name }).from(plot));
     expect(names).toEqual([{ name: 'Only here' }]);
   });
 
-  it('refuses to write a row of another site and to point at one', async () => {
+  it('[E 42] refuses to write a row of another site and to point at one', async () => {
     const foreign = await makePlot(two.id);
     const insertThere = withSite(one.id, (tx) =>
       tx.insert(plot).values({ siteId: two.id, name: 'Planted', outline: [] }),
@@ -79,7 +80,7 @@ describe('isolation of sites', () => {
     expect(await codeOf(pointThere)).toBe('23503');
   });
 
-  it('holds for 2,000 interleaved transactions on 4 connections', async () => {
+  it('[E 39] holds for 2,000 interleaved transactions on 4 connections', async () => {
     const pool = connect(world.urls().appUrl, { max: 4, applicationName: 'stress' });
     const sites = [one, two];
     let wrong = 0;
@@ -102,6 +103,38 @@ describe('isolation of sites', () => {
   });
 });
 
+describe('[E 40] the site of a connection', () => {
+  it('is set in one place of the program, and only until the transaction ends', async () => {
+    const files: string[] = [];
+    for (const room of ['app', 'lib', 'db']) {
+      const found = await readdir(room, { recursive: true });
+      files.push(...found.filter((file) => /\.tsx?$/.test(file)).map((file) => `${room}/${file}`));
+    }
+    expect(files.length).toBeGreaterThan(300);
+    const setting: string[] = [];
+    for (const file of files) {
+      const text = await readFile(file, 'utf8');
+      if (/set_config|\bset\s+(session|local)\b|`\s*set\s+\w|set\s+app\./i.test(text)) setting.push(file);
+    }
+    expect(setting).toEqual(['lib/data/transaction.ts']);
+    const calls = (await readFile('lib/data/transaction.ts', 'utf8')).match(/set_config\([^)]*\)/g) ?? [];
+    expect(calls).toHaveLength(1);
+    expect(calls[0]).toMatch(/^set_config\('app\.site_id', .*, true\)$/);
+  });
+
+  it('does not stay behind for the next caller of that connection', async () => {
+    const pool = connect(world.urls().appUrl, { max: 1, applicationName: 'one-connection' });
+    const site = await makeSite('Third');
+    const setting = async () => [...(await pool.db.execute(sql`select current_setting('app.site_id', true) as id`))];
+    await pool.db.transaction(async (tx) => {
+      await enterSite(tx, site.id);
+      expect(await tx.select().from(plot)).toEqual([]);
+    });
+    expect(await setting()).toEqual([{ id: '' }]);
+    await pool.client.end();
+  });
+});
+
 describe('database roles', () => {
   let app: postgres.Sql;
   beforeAll(() => {
@@ -109,7 +142,7 @@ describe('database roles', () => {
   });
   afterAll(() => app.end());
 
-  it('the application may not bypass, define, truncate, or rewrite what is written once', async () => {
+  it('[E 38] the application may not bypass, define, truncate, or rewrite what is written once', async () => {
     const [role] = await app`select rolbypassrls, rolsuper, rolcreatedb from pg_roles where rolname = current_user`;
     expect(role).toEqual({ rolbypassrls: false, rolsuper: false, rolcreatedb: false });
     expect(await codeOf(app`truncate plot`)).toBe('42501');
@@ -121,7 +154,7 @@ describe('database roles', () => {
     expect(await codeOf(app`insert into clock_offset (seconds) values (5)`)).toBe('42501');
   });
 
-  it('exactly five functions cross sites, each pinned and owned by lookup, and lookup cannot log in', async () => {
+  it('[E 43] exactly five functions cross sites, each pinned and owned by lookup, and lookup cannot log in', async () => {
     const rows = await world.owner()<{ name: string; owner: string; config: string[] }[]>`
       select p.proname as name, r.rolname as owner, p.proconfig as config
       from pg_proc p join pg_roles r on r.oid = p.proowner
@@ -151,7 +184,7 @@ describe('database roles', () => {
     await backup.end();
   });
 
-  it('sites_of_person crosses sites and returns ids only', async () => {
+  it('[E 44] sites_of_person crosses sites and returns ids only', async () => {
     const mine = await makeSite('Mine');
     const rows = await app`select sites_of_person(${mine.people.viewer.id}) as id`;
     expect(rows.map((row) => row.id)).toEqual([mine.id]);

@@ -92,7 +92,7 @@ describe('members', () => {
     expect(owner.members.map((one) => one.email)).toContain(site.people.helper.email);
   });
 
-  it('are given another role by an owner, on the record', async () => {
+  it('[E 15] are given another role by an owner, on the record; it holds at their next request', async () => {
     const site = await makeSite();
     const id = await memberId(site.id, site.people.helper);
     const input = { siteId: site.id, memberId: id, role: 'adviser' as const };

@@ -113,7 +113,7 @@ const ASKED: Record<string, (ground: Ground) => Promise<unknown>> = {
 };
 /** The first takes nothing but the person, the second a file; `…InSite` fetch one row and are no verbs. */
 const NO_LIST = /^(getMe|getReportFile|get\w+InSite)$/;
-const MOST = 16;
+const MOST = 20;
 
 describe('the queries of a page', () => {
   let count: (work: () => Promise<unknown>) => Promise<number>;

@@ -307,7 +307,7 @@ describe('reading a report', () => {
     expect((await bringBack({ ctx: owner, input: theirs })).state).toBe('unreadable');
   });
 
-  it('finds nothing for a forged pair of site and report', async () => {
+  it('[E 45] finds nothing for a forged pair of site and report', async () => {
     const id = await uploaded();
     const other = await makeSite('Elsewhere');
     let calls = 0;

@@ -13,7 +13,7 @@ import { JOB_NAMES, type JobName, type JobPayload } from '@/lib/jobs/names';
 import { JOB_DEFINITIONS } from '@/lib/jobs/registry';
 import { ctxAs, ctxWorker, makePlot, makeSite, makeTest, useWorld } from '../support/factory';
 
-/** [E 65] Every job may be delivered twice: the second time, and a second worker at the same time, change nothing. */
+/** Every job may be delivered twice: the second time, and a second worker at the same time, change nothing. */
 const world = useWorld();
 let backup: postgres.Sql;
 beforeAll(() => {

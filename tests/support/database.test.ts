@@ -20,7 +20,7 @@ beforeAll(async () => {
 afterAll(() => database.drop());
 
 describe('the database roles', () => {
-  it('are what db/roles.sql says: only lookup and backup pass row-level security, nobody is more than that', async () => {
+  it('[E 38] are what db/roles.sql says: only lookup and backup pass row-level security, nobody is more than that', async () => {
     const sql = open(database.superuserUrl);
     const roles = await sql`
       select rolname, rolcanlogin, rolbypassrls, rolsuper or rolcreaterole or rolcreatedb or rolreplication as powerful
