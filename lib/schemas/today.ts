@@ -52,9 +52,13 @@ export const todaySiteAnswer = z.object({
 });
 export type TodaySite = z.infer<typeof todaySiteAnswer>;
 
-export const todayInvitationAnswer = invitationLookSchema
-  .pick({ siteName: true, role: true, invitedBy: true, expiresAt: true })
-  .extend({ token: z.string() });
+/** Without the link: that is in the letter only. */
+export const todayInvitationAnswer = invitationLookSchema.pick({
+  siteName: true,
+  role: true,
+  invitedBy: true,
+  expiresAt: true,
+});
 
 export const todayAnswer = z.object({
   /** In the reader's own zone. */

@@ -3,6 +3,8 @@ import { membership, report, reportSample } from '@/db/schema';
 import { recordApplication } from '@/lib/data/applications/recordApplication';
 import { removeApplication } from '@/lib/data/applications/removeApplication';
 import { recheckEffects } from '@/lib/data/effects/recheckEffects';
+import { claimMail } from '@/lib/data/mail/claimMail';
+import { settleMail } from '@/lib/data/mail/settleMail';
 import { setRule } from '@/lib/data/reminders/setRule';
 import { snoozeReminder } from '@/lib/data/reminders/snoozeReminder';
 import { acceptInvitation } from '@/lib/data/sites/acceptInvitation';
@@ -22,6 +24,7 @@ import {
   type TestSite,
   useWorld,
 } from '../support/factory';
+import { linkIn, mailsTo } from '../support/people';
 
 const world = useWorld();
 const ph = (value: string) => [{ analyte: 'soil_ph_water', value, unit: 'pH' }];
@@ -169,7 +172,14 @@ describe('the first page', () => {
     const unproven = await makePerson({ emailVerifiedAt: null });
     await invite({ ctx: await ctxAs(site.people.owner), input: { siteId, email: unproven.email, role: 'helper' } });
     expect((await todayOf(unproven)).invitations).toEqual([]);
-    const token = before.invitations[0]?.token ?? '';
+    const token = await linkIn(newcomer.email, 'invitation');
+    expect(JSON.stringify(before)).not.toContain(token);
+    const id = (await mailsTo(newcomer.email, 'invitation'))[0]?.id ?? '';
+    await claimMail({ ctx: await ctxWorker(), input: { id } });
+    const sent = { answer: 'sent' as const, id, providerId: 'p-1' };
+    await settleMail({ ctx: await ctxWorker(), input: sent });
+    expect((await mailsTo(newcomer.email, 'invitation'))[0]?.text).toBe('');
+    expect((await todayOf(newcomer)).invitations).toEqual(before.invitations);
     await acceptInvitation({ ctx: await ctxAs(newcomer), input: { token } });
     const after = await todayOf(newcomer);
     expect(after.invitations).toEqual([]);

@@ -2,13 +2,13 @@ import { and, desc, eq, gt, inArray } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { outbox } from '@/db/schema';
 
-/** Texts of the newest letters of one kind to an address, since a moment. Only for whoever has proven to read that address. */
+/** Keys of the newest letters of one kind to an address, since a moment. Only for whoever has proven to read that address. */
 export async function lettersTo(
   tx: Transaction,
   asked: { address: string; kind: string; since: Date; most: number },
 ): Promise<string[]> {
   const rows = await tx
-    .select({ text: outbox.text })
+    .select({ key: outbox.dedupeKey })
     .from(outbox)
     .where(
       and(
@@ -19,5 +19,5 @@ export async function lettersTo(
     )
     .orderBy(desc(outbox.createdAt))
     .limit(asked.most);
-  return rows.map((row) => row.text);
+  return rows.map((row) => row.key);
 }

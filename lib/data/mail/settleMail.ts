@@ -1,19 +1,11 @@
-import { and, eq, type SQL, sql } from 'drizzle-orm';
-import type { PgColumn } from 'drizzle-orm/pg-core';
+import { and, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import { outbox } from '@/db/schema';
 import { withPeople } from '../transaction';
 import { workerVerb } from '../verb';
 
-/** Links in these letters open something; once a letter has left, or never will, its body is not kept. */
-const carriesSecret = sql`${outbox.kind} in ('verify-address', 'reset-password', 'reminder')`;
-const unlessSecret = <T extends PgColumn>(column: T, blank: SQL) =>
-  sql`case when ${carriesSecret} then ${blank} else ${column} end`;
-const WITHOUT_BODY = {
-  html: unlessSecret(outbox.html, sql`''`),
-  text: unlessSecret(outbox.text, sql`''`),
-  headers: unlessSecret(outbox.headers, sql`'{}'::jsonb`),
-};
+/** Links in letters open something: once one has left, or never will, only its subject is kept. */
+const WITHOUT_BODY = { html: '', text: '', headers: {} };
 
 /** Writes down what the provider said. */
 export const settleMail = workerVerb({

@@ -1,5 +1,6 @@
 import { Problem } from '@/lib/errors';
 import { linkInput } from '@/lib/schemas/people';
+import { hashSecret } from '../people/secrets';
 import { personVerb } from '../verb';
 import { joinByInvitation } from './joinByInvitation';
 import { openInvitation } from './openInvitation';
@@ -8,7 +9,8 @@ import { openInvitation } from './openInvitation';
 export const acceptInvitation = personVerb({
   input: linkInput,
   run: async ({ ctx, tx, person, input }) => {
-    const { row, tokenHash, answeredMeanwhile } = await openInvitation(tx, ctx, input.token);
+    const tokenHash = hashSecret(input.token);
+    const { row, answeredMeanwhile } = await openInvitation(tx, ctx, tokenHash);
     if (row.email.toLowerCase() !== person.email.toLowerCase()) {
       throw new Problem(
         'conflict',

@@ -2,6 +2,7 @@ import { and, eq } from 'drizzle-orm';
 import { invitation } from '@/db/schema';
 import { linkInput } from '@/lib/schemas/people';
 import { audit } from '../audit';
+import { hashSecret } from '../people/secrets';
 import { withPeople } from '../transaction';
 import { publicVerb } from '../verb';
 import { openInvitation } from './openInvitation';
@@ -11,7 +12,7 @@ export const declineInvitation = publicVerb({
   input: linkInput,
   run: ({ ctx, input }) =>
     withPeople(async (tx) => {
-      const { siteId, row, answeredMeanwhile } = await openInvitation(tx, ctx, input.token);
+      const { siteId, row, answeredMeanwhile } = await openInvitation(tx, ctx, hashSecret(input.token));
       const declined = await tx
         .update(invitation)
         .set({ state: 'declined', answeredAt: ctx.now })

@@ -58,6 +58,7 @@ export const invite = siteVerb({
         ),
       );
     const secret = newSecret(ctx);
+    const tokenHash = hashSecret(secret);
     const expiresAt = new Date(ctx.now.getTime() + VALID_MS);
     const [row] = await tx
       .insert(invitation)
@@ -65,7 +66,7 @@ export const invite = siteVerb({
         siteId,
         email: input.email,
         role: input.role,
-        tokenHash: hashSecret(secret),
+        tokenHash,
         invitedBy: person.id,
         expiresAt,
         createdAt: ctx.now,
@@ -87,7 +88,8 @@ export const invite = siteVerb({
       declineUrl: appUrl(`/invitation/${secret}?answer=no`),
       expiresOn: new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeZone: here.timeZone }).format(expiresAt),
     });
-    await queueMail(tx, { personId: null, to: input.email, kind: 'invitation', dedupeKey: row.id, message });
+    // The key names the invitation to whoever shows it later; the secret leaves with the letter.
+    await queueMail(tx, { personId: null, to: input.email, kind: 'invitation', dedupeKey: tokenHash, message });
     await audit({
       act: 'invitation.sent',
       objectKind: 'invitation',

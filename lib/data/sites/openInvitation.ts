@@ -4,7 +4,6 @@ import { invitation } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
 import { Problem } from '@/lib/errors';
 import type { Ctx } from '../context';
-import { hashSecret } from '../people/secrets';
 import { enterSite } from '../transaction';
 import { siteOfInvitation } from './joinByInvitation';
 
@@ -18,9 +17,8 @@ const SENTENCES = {
 
 const gone = (why: keyof typeof SENTENCES) => new Problem('gone', SENTENCES[why], { reason: why });
 
-/** By the link's secret; enters its site. Throws 410 with the reason when it can no longer be answered. */
-export async function openInvitation(tx: Transaction, ctx: Ctx, secret: string) {
-  const tokenHash = hashSecret(secret);
+/** By the hash of the link's secret; enters its site. Throws 410 with the reason when it can no longer be answered. */
+export async function openInvitation(tx: Transaction, ctx: Ctx, tokenHash: string) {
   const siteId: SiteId | null = await siteOfInvitation(tx, tokenHash);
   if (!siteId) throw gone('unknown');
   await enterSite(tx, siteId);
@@ -31,5 +29,5 @@ export async function openInvitation(tx: Transaction, ctx: Ctx, secret: string) 
   if (!row) throw gone('unknown');
   if (row.state !== 'open') throw gone(row.state);
   if (row.expiresAt <= ctx.now) throw gone('expired');
-  return { siteId, tokenHash, row, answeredMeanwhile: () => gone('accepted') };
+  return { siteId, row, answeredMeanwhile: () => gone('accepted') };
 }

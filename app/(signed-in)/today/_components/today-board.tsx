@@ -73,17 +73,10 @@ function Invitations({ invitations }: { invitations: Today['invitations'] }) {
   return (
     <ul className="page-wrap grid gap-3 pb-4">
       {invitations.map((one) => (
-        <li key={one.token}>
-          <Notice
-            title={`${one.invitedBy} asks you to join ${one.siteName}`}
-            action={
-              <LinkButton href={`/invitation/${one.token}`} look="quiet">
-                Answer the invitation
-              </LinkButton>
-            }
-          >
-            As {ROLE_WORDS[one.role].a}. {ROLE_WORDS[one.role].may} The invitation stands until{' '}
-            {inWords(one.expiresAt.slice(0, 10))}.
+        <li key={`${one.siteName} ${one.expiresAt}`}>
+          <Notice title={`${one.invitedBy} asks you to join ${one.siteName}`}>
+            As {ROLE_WORDS[one.role].a}. {ROLE_WORDS[one.role].may} The letter with the link to answer was mailed to
+            you; it stands until {inWords(one.expiresAt.slice(0, 10))}.
           </Notice>
         </li>
       ))}
@@ -105,7 +98,7 @@ function FirstSite({ invited }: { invited: boolean }) {
       >
         A site is the ground you keep: its plots, their soil tests, and what was spread.{' '}
         {invited
-          ? 'Answer the invitation above, or open a site of your own.'
+          ? 'Answer the invitation in your mail, or open a site of your own.'
           : 'If somebody asks you to join theirs, it stands here and in your mail.'}
       </EmptyState>
     </Stretch>
