@@ -66,5 +66,6 @@ export function callRoute(
     ...(body === undefined ? {} : { body }),
   });
   const own = Object.fromEntries(route.params.map((name) => [name, params[name] ?? '']));
-  return route.handler(request, { params: Promise.resolve(own) });
+  // As the framework does: a path without a parameter comes with no params at all.
+  return route.handler(request, { params: Promise.resolve(route.params.length === 0 ? undefined : own) });
 }

@@ -6,7 +6,8 @@ import { Problem } from '@/lib/errors';
 import { assertSameOrigin, contextOf, joinInput, readJson, readQuery } from './_guard';
 import { problemResponse } from './_problem';
 
-type Params = { params: Promise<Record<string, string>> };
+/** A route without a parameter in its path is handed no params at all. */
+type Params = { params: Promise<Record<string, string> | undefined> };
 type Descriptor = {
   summary: string;
   guard: Guard;
@@ -42,7 +43,7 @@ export function route<R, A extends z.ZodType>(spec: Spec<R, A>): RouteHandler {
         throw new Problem('invalid', 'The body must be a JSON object.');
       }
       const input = {
-        ...joinInput(readQuery(new URL(request.url)), { ...body }, await params),
+        ...joinInput(readQuery(new URL(request.url)), { ...body }, (await params) ?? {}),
         ...spec.extra?.(request),
       };
       const call = spec.verb as unknown as (call: { ctx: Ctx; input: unknown }) => Promise<R>;
