@@ -66,6 +66,16 @@ describe('[E 23] a request that changes something and carries our cookie', () =>
   });
 });
 
+describe('a route without a parameter in its path', () => {
+  it('is handed no params by the framework, and works', async () => {
+    const who = await makePerson();
+    const headers = { cookie: await cookieFor(who), 'sec-fetch-site': 'same-origin' };
+    const { status } = await updateMeRoute(ask(headers), { params: Promise.resolve(undefined) });
+    expect(status).toBe(200);
+    expect(await nameOf(who)).toBe('Changed');
+  });
+});
+
 describe('[E 63] a name that stands there twice', () => {
   const rename = async (query: string, body: string) => {
     const who = await makePerson();
