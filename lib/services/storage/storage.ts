@@ -1,11 +1,5 @@
 import { createHash } from 'node:crypto';
-import {
-  DeleteObjectCommand,
-  GetObjectCommand,
-  NoSuchKey,
-  PutObjectCommand,
-  S3Client,
-} from '@aws-sdk/client-s3';
+import { DeleteObjectCommand, GetObjectCommand, NoSuchKey, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
 import { env } from '@/lib/env';
 import { Problem } from '@/lib/errors';
 
@@ -26,7 +20,10 @@ function s3(): S3Client {
 }
 
 const notAnswering = (kept: string) =>
-  new Problem('unavailable', `The file store is not answering. ${kept}`, { reason: 'file-store', retryAfterSeconds: 10 });
+  new Problem('unavailable', `The file store is not answering. ${kept}`, {
+    reason: 'file-store',
+    retryAfterSeconds: 10,
+  });
 
 export const sha256 = (bytes: Uint8Array): string => createHash('sha256').update(bytes).digest('hex');
 
@@ -42,7 +39,9 @@ export async function putFile(key: string, bytes: Uint8Array, contentType: strin
       }),
     );
   } catch (error) {
-    throw Object.assign(notAnswering('Nothing was saved; the file is still with you. Try again in a minute.'), { cause: error });
+    throw Object.assign(notAnswering('Nothing was saved; the file is still with you. Try again in a minute.'), {
+      cause: error,
+    });
   }
 }
 
@@ -58,7 +57,9 @@ export async function getFile(key: string, expectedSha256: string): Promise<Uint
     throw Object.assign(notAnswering('The numbers are safe; the page itself can be shown later.'), { cause: error });
   }
   if (sha256(bytes) !== expectedSha256) {
-    throw new Problem('unavailable', 'The file store gave back other bytes than were stored, so they are not used.', { reason: 'file-changed' });
+    throw new Problem('unavailable', 'The file store gave back other bytes than were stored, so they are not used.', {
+      reason: 'file-changed',
+    });
   }
   return bytes;
 }
