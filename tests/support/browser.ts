@@ -99,6 +99,8 @@ async function listen(context: BrowserContext, complaints: string[], expected: R
     });
   });
   context.on('page', (page) => {
+    // While somebody listens the browser asks the test for files; listening on and off could be too late for a press.
+    page.on('filechooser', () => undefined);
     const at = () => (page.url().startsWith(origin) ? page.url().slice(origin.length) : page.url());
     page.on('pageerror', (error) => complaints.push(`${at()}: uncaught ${error.stack ?? error.message}`));
     page.on('console', (message) => {

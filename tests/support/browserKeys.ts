@@ -72,13 +72,20 @@ export async function typeDay(page: Page, day: string): Promise<void> {
   await page.keyboard.type(`${month}${date}${year}`);
 }
 
-/** Picks an option of a closed list by typing the beginning of its name. */
+/** Picks an option of a closed list by typing as much of its name as tells it from the others. */
 export async function typeOption(target: Locator, option: string): Promise<void> {
-  const shown = () =>
-    target.evaluate((element) =>
-      element instanceof HTMLSelectElement ? element.selectedOptions[0]?.label : undefined,
-    );
-  await target.page().keyboard.type(option);
-  const chosen = await shown();
-  if (chosen !== option) throw new Error(`Typing ${option} chose ${chosen}.`);
+  const labels = await target.evaluate((element) =>
+    element instanceof HTMLSelectElement ? [...element.options].map(({ label }) => label) : [],
+  );
+  const others = labels.filter((label) => label !== option).map((label) => label.toLowerCase());
+  const lengths = [...option].map((_, at) => at + 1);
+  const enough = lengths.find((length) => {
+    const start = option.slice(0, length).toLowerCase();
+    return !others.some((label) => label.startsWith(start));
+  });
+  await target.page().keyboard.type(option.slice(0, enough ?? option.length));
+  const chosen = await target.evaluate((element) =>
+    element instanceof HTMLSelectElement ? element.selectedOptions[0]?.label : undefined,
+  );
+  if (chosen !== option) throw new Error(`Typing ${option} chose ${chosen}, of ${labels.join(', ')}.`);
 }
