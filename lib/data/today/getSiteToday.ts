@@ -1,15 +1,11 @@
 import { and, count, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { plot, reminder, report, reportSample, site } from '@/db/schema';
-import { can } from '@/lib/access/table';
-import { asDay, daysBetween } from '@/lib/domain/days';
+import { plot, report, reportSample, site } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
 import { notFound } from '@/lib/errors';
 import { nothingSchema } from '@/lib/schemas/parts';
-import type { DueAnswer } from '@/lib/schemas/reminders';
 import type { TodayReport, TodaySite } from '@/lib/schemas/today';
-import { dayOf } from '../days';
-import { loadDue } from '../reminders/loadDue';
+import { openDue } from '../reminders/openDue';
 import { siteVerb } from '../verb';
 import { newestVerdicts } from './newestVerdicts';
 
@@ -70,14 +66,7 @@ export const getSiteToday = siteVerb({
       .select({ n: count() })
       .from(plot)
       .where(and(eq(plot.siteId, siteId), isNull(plot.archivedAt)));
-    const today = dayOf(ctx.now, person.timeZone);
-    const open = await loadDue(tx, siteId, person.id, eq(reminder.state, 'open'));
-    const all: DueAnswer[] = open.map(({ state: _, ...row }) => ({
-      ...row,
-      siteId,
-      inDays: daysBetween(today, asDay(row.dueOn)),
-      mayClose: can(role, 'reminder.already-sampled'),
-    }));
+    const { due: all } = await openDue({ ctx, tx, siteId, person, role });
     const reports = await waitingReports(tx, siteId, ctx.now);
     const counts = await reportCounts(tx, siteId);
     return {
