@@ -7,7 +7,7 @@ import { assertSameOrigin, contextOf, joinInput, readJson, readQuery } from './_
 import { problemResponse } from './_problem';
 
 /** A route without a parameter in its path is handed no params at all. */
-type Params = { params: Promise<Record<string, string> | undefined> };
+export type RouteParams = { params: Promise<Record<string, string> | undefined> };
 type Descriptor = {
   summary: string;
   guard: Guard;
@@ -15,7 +15,7 @@ type Descriptor = {
   answer: z.ZodType;
   status: number;
 };
-export type RouteHandler = ((request: Request, params: Params) => Promise<Response>) & { descriptor: Descriptor };
+export type RouteHandler = ((request: Request, params: RouteParams) => Promise<Response>) & { descriptor: Descriptor };
 
 /** A verb of any guard: the wrapper hands it whatever came in, and the verb's own schema decides. */
 type AnyVerb<R> = { guard: Guard; schema: z.ZodType } & ((call: never) => Promise<R>);
@@ -33,7 +33,7 @@ type Spec<R, A extends z.ZodType> = {
 
 /** The one wrapper: same origin, session, input, verb, typed answer or problem+json. */
 export function route<R, A extends z.ZodType>(spec: Spec<R, A>): RouteHandler {
-  const handler = async (request: Request, { params }: Params): Promise<Response> => {
+  const handler = async (request: Request, { params }: RouteParams): Promise<Response> => {
     const requestId = randomUUID();
     try {
       assertSameOrigin(request);

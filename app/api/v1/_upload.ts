@@ -5,9 +5,7 @@ import type { Guard } from '@/lib/data/verb';
 import { Problem } from '@/lib/errors';
 import { assertSameOrigin, contextOf, joinInput, readQuery } from './_guard';
 import { problemResponse } from './_problem';
-import { json, type RouteHandler } from './_route';
-
-type Params = { params: Promise<Record<string, string> | undefined> };
+import { json, type RouteHandler, type RouteParams } from './_route';
 
 /** Boundaries, part headers and the small fields beside the file. */
 const FORM_ALLOWANCE = 64 * 1024;
@@ -88,7 +86,7 @@ export function uploadRoute<R, A extends z.ZodType>(spec: {
   largestBytes: number;
   status: (result: R) => number;
 }): RouteHandler {
-  const handler = async (request: Request, { params }: Params): Promise<Response> => {
+  const handler = async (request: Request, { params }: RouteParams): Promise<Response> => {
     const requestId = randomUUID();
     try {
       assertSameOrigin(request);
@@ -96,7 +94,7 @@ export function uploadRoute<R, A extends z.ZodType>(spec: {
       // Nobody signed in: no need to read 20 MB to say so.
       if (ctx.actor.kind !== 'person') throw new Problem('not-signed-in', 'Please sign in to go on.');
       const form = await readForm(request, spec.largestBytes);
-      const input = joinInput(readQuery(new URL(request.url)), await partsOf(form), (await params) ?? {});
+      const input = joinInput(readQuery(new URL(request.url)), await partsOf(form), (await params) ?? {} ?? {});
       const call = spec.verb as unknown as (call: { ctx: Ctx; input: unknown }) => Promise<R>;
       const result = await call({ ctx, input });
       return json(spec.answer.parse(result), spec.status(result));
