@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
-import { outbox, person } from '@/db/schema';
+import { outbox, person, token } from '@/db/schema';
 import { database } from '@/lib/data/database';
 import { claimMail } from '@/lib/data/mail/claimMail';
 import { settleMail } from '@/lib/data/mail/settleMail';
@@ -21,6 +21,14 @@ async function leave(email: string, kind: string, answer: 'sent' | 'later' | 're
   const [row] = await database().select().from(outbox).where(eq(outbox.id, mail.id));
   return row;
 }
+
+describe('[E 64] a link that was used', () => {
+  it('keeps nothing of what was typed at the sign-up', async () => {
+    const who = await signUpConfirmed();
+    const rows = await database().select().from(token).where(eq(token.personId, who.id));
+    expect(rows.map((row) => [row.purpose, row.usedAt !== null, row.payload])).toEqual([['verify-address', true, {}]]);
+  });
+});
 
 describe('[E 64] the secret of a mailed link', () => {
   it.each(['sent', 'refused'] as const)('is no longer in the database once the mail is %s', async (answer) => {

@@ -305,6 +305,11 @@ describe('reading a report', () => {
     expect(await problemOf(setAside({ ctx: helper, input: theirs }))).toMatchObject({ code: 'forbidden' });
     await setAside({ ctx: owner, input: theirs });
     expect((await bringBack({ ctx: owner, input: theirs })).state).toBe('unreadable');
+    const water = await uploadReport({ ctx: owner, input: { siteId: here.id, fileName: 'w.pdf', bytes: pdfBytes() } });
+    await run(water.reportId, answering(soilReading([], { kind: 'not-soil' })));
+    const wet = { siteId: here.id, reportId: water.reportId };
+    await setAside({ ctx: owner, input: wet });
+    expect((await bringBack({ ctx: owner, input: wet })).state).toBe('not-soil');
   });
 
   it('[E 45] finds nothing for a forged pair of site and report', async () => {

@@ -1,4 +1,4 @@
-import { and, eq, gt, isNull } from 'drizzle-orm';
+import { and, eq, gt, isNull, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { type TokenPurpose, token } from '@/db/schema';
 import { Problem } from '@/lib/errors';
@@ -62,11 +62,12 @@ export async function takeToken(tx: Transaction, ctx: Ctx, purpose: LinkPurpose,
   return row;
 }
 
+/** Ends every link of a kind, and lets go of what travelled with them: the hash of a password typed at a sign-up. */
 export async function dropTokens(tx: Transaction, ctx: Ctx, personId: string, purpose: LinkPurpose): Promise<void> {
   await tx
     .update(token)
-    .set({ usedAt: ctx.now })
-    .where(and(eq(token.personId, personId), eq(token.purpose, purpose), isNull(token.usedAt)));
+    .set({ usedAt: sql`coalesce(${token.usedAt}, ${ctx.now.toISOString()})`, payload: {} })
+    .where(and(eq(token.personId, personId), eq(token.purpose, purpose)));
 }
 
 export const goneLink = gone;

@@ -17,7 +17,8 @@ export const bringBack = siteVerb({
       .from(reportSample)
       .where(and(eq(reportSample.siteId, siteId), eq(reportSample.reportId, before.id)))
       .limit(1);
-    const state = samples.length > 0 || before.refusalCode === null ? 'in-review' : 'unreadable';
+    const refused = before.refusalCode === 'not-soil' ? 'not-soil' : 'unreadable';
+    const state = samples.length > 0 || before.refusalCode === null ? 'in-review' : refused;
     const row = await moveReport(tx, siteId, before.id, ['set-aside'], { state });
     await audit({ act: 'report.bring-back', objectKind: 'report', objectId: row.id });
     return stateAnswer(row);
