@@ -94,7 +94,7 @@ export function uploadRoute<R, A extends z.ZodType>(spec: {
       // Nobody signed in: no need to read 20 MB to say so.
       if (ctx.actor.kind !== 'person') throw new Problem('not-signed-in', 'Please sign in to go on.');
       const form = await readForm(request, spec.largestBytes);
-      const input = joinInput(readQuery(new URL(request.url)), await partsOf(form), (await params) ?? {} ?? {});
+      const input = joinInput(readQuery(new URL(request.url)), await partsOf(form), (await params) ?? {});
       const call = spec.verb as unknown as (call: { ctx: Ctx; input: unknown }) => Promise<R>;
       const result = await call({ ctx, input });
       return json(spec.answer.parse(result), spec.status(result));
