@@ -1,5 +1,6 @@
 import { AxeBuilder } from '@axe-core/playwright';
 import type { Page } from 'playwright-core';
+import { until } from './until';
 
 /** Throws with every breach axe finds on the page as it stands, each with its elements; target sizes included. */
 export async function assertAccessible(page: Page, where: string): Promise<void> {
@@ -17,22 +18,24 @@ export async function assertAccessible(page: Page, where: string): Promise<void>
   throw new Error(`axe on ${where} at ${width} px:\n${lines.join('\n')}`);
 }
 
-/** Throws when the page can be scrolled sideways; a table in a box of its own may. */
+/** Throws when the page can be scrolled sideways; a table in a box of its own may. What measures itself gets a moment to. */
 export async function assertNoSidewaysScroll(page: Page, where: string): Promise<void> {
-  const found = await page.evaluate(() => {
-    const { scrollWidth, clientWidth } = document.documentElement;
-    if (scrollWidth <= clientWidth) return null;
-    const isHeld = (element: Element | null): boolean =>
-      element !== null &&
-      element !== document.body &&
-      (/auto|scroll|hidden|clip/.test(getComputedStyle(element).overflowX) || isHeld(element.parentElement));
-    const wide = [...document.querySelectorAll('body *')].filter(
-      (element) => element.getBoundingClientRect().right > clientWidth + 1 && !isHeld(element.parentElement),
-    );
-    const named = wide.slice(-3).map((element) => element.outerHTML.slice(0, 160));
-    return { scrollWidth, clientWidth, named };
-  });
-  if (!found) return;
-  const { scrollWidth, clientWidth, named } = found;
-  throw new Error(`${where} is ${scrollWidth} px wide on ${clientWidth} px:\n${named.join('\n')}`);
+  const fits = (found: Overhang | null) => found === null;
+  await until(`${where} fits into its window`, () => page.evaluate(overhang), fits, 5_000);
+}
+
+type Overhang = { scrollWidth: number; clientWidth: number; named: string[] };
+
+/** Runs in the page: what sticks out of it, or null. */
+function overhang(): Overhang | null {
+  const { scrollWidth, clientWidth } = document.documentElement;
+  if (scrollWidth <= clientWidth) return null;
+  const isHeld = (element: Element | null): boolean =>
+    element !== null &&
+    element !== document.body &&
+    (/auto|scroll|hidden|clip/.test(getComputedStyle(element).overflowX) || isHeld(element.parentElement));
+  const wide = [...document.querySelectorAll('body *')].filter(
+    (element) => element.getBoundingClientRect().right > clientWidth + 1 && !isHeld(element.parentElement),
+  );
+  return { scrollWidth, clientWidth, named: wide.slice(-3).map((element) => element.outerHTML.slice(0, 160)) };
 }

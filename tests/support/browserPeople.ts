@@ -66,3 +66,12 @@ export async function takeFromMenu(page: Page, hands: Hands, menu: string | RegE
   await hands.press(button(page, menu));
   await hands.pressEntry(page.getByRole('menuitem', { name: entry }));
 }
+
+/** Goes to a place of the site by the links that are always there; on a phone some stand behind “More”. */
+export async function openPlace(page: Page, hands: Hands, place: string): Promise<void> {
+  const name = new RegExp(`^${place}\\b`);
+  const within = page.getByRole('navigation').getByRole('link', { name });
+  if ((await within.count()) > 0) return hands.press(within.first());
+  await hands.press(button(page, 'More'));
+  await hands.press(page.getByRole('dialog').getByRole('link', { name }));
+}
