@@ -2,7 +2,7 @@
 
 import { useRef, useState } from 'react';
 import { analyte, isAnalyteKey } from '@/lib/domain/analytes';
-import { centimetres, formatArea, formatMass, kilograms, squareMetres } from '@/lib/domain/units';
+import { centimetres, figures, formatArea, formatMass, kilograms, squareMetres, toInches } from '@/lib/domain/units';
 import type { ApplicationAnswer } from '@/lib/schemas/applications';
 import { Button } from '@/lib/ui/actions/button';
 import { formatDay, formatSigned, withUnit } from '@/lib/ui/charts/numbers';
@@ -12,7 +12,7 @@ import { Stretch } from '@/lib/ui/frame/layers';
 import { Timeline } from '@/lib/ui/show/timeline';
 import { useApi } from '@/lib/ui/use-api';
 import { shortLabel } from '../../_components/history-props';
-import { depthText, depthUnit, type Units } from './application-body';
+import { depthUnit, type Units } from './application-body';
 import { CorrectRecord, RemoveRecord } from './change-record';
 import { RecordForm } from './record-form';
 
@@ -132,7 +132,7 @@ export function recordWords(record: ApplicationAnswer, units: Units): string {
     parts.push(
       record.depthCm === 0
         ? 'left on top'
-        : `worked in ${depthText(centimetres(record.depthCm), units)} ${depthUnit(units)} deep`,
+        : `worked in ${figures(units === 'us' ? toInches(centimetres(record.depthCm)) : record.depthCm, 2)} ${depthUnit(units)} deep`,
     );
   }
   if (record.method !== '') parts.push(record.method);
