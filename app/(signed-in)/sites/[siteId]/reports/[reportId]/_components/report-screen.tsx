@@ -1,9 +1,7 @@
 'use client';
 
 import { useEffect, useRef } from 'react';
-import type { Role } from '@/lib/access/table';
 import type { Report } from '@/lib/schemas/reports';
-import type { Review } from '@/lib/schemas/review';
 import { useAnnounce } from '@/lib/ui/feedback/announce';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { Skeleton } from '@/lib/ui/feedback/skeleton';
@@ -12,17 +10,8 @@ import { ReadingProgress } from './reading-progress';
 import { ReportHead } from './report-head';
 import { hasReview, isWaiting } from './report-words';
 import { ReviewScreen } from './review-screen';
+import type { ReportScreenProps } from './screen-props';
 import { useReport } from './use-report';
-
-export type ReportScreenProps = {
-  siteId: string;
-  role: Role;
-  personId: string;
-  units: 'us' | 'metric';
-  today: string;
-  firstReport: Report;
-  firstReview: Review | null;
-};
 
 /** One report in whatever state it is; follows the state as it changes. */
 export function ReportScreen(props: ReportScreenProps) {

@@ -12,9 +12,9 @@ import { Advice } from './advice';
 import { ConfirmBar } from './confirm-bar';
 import { ConfirmedNotice } from './confirmed-notice';
 import { depthUnit } from './depth-units';
-import type { ReportScreenProps } from './report-screen';
 import { sampleFieldId } from './sample-card';
 import { SamplesStrip } from './samples-strip';
+import type { ReportScreenProps } from './screen-props';
 import type { LiveReport } from './use-report';
 import { ValuesPane } from './values-pane';
 
