@@ -105,7 +105,7 @@ describe('NumberField', () => {
 });
 
 describe('PasswordField', () => {
-  it('shows and hides the letters without losing them', async () => {
+  it('[E 6] shows and hides the letters without losing them', async () => {
     render(<PasswordField name="password" label="Password" autoComplete="new-password" />);
     const field = screen.getByLabelText('Password');
     await userEvent.type(field, 'four words in a row');
@@ -116,5 +116,15 @@ describe('PasswordField', () => {
     await userEvent.click(show);
     expect(field.getAttribute('type')).toBe('password');
     expect(field).toHaveProperty('value', 'four words in a row');
+  });
+
+  it('[E 6] takes a pasted password whole and tells managers what it is for', async () => {
+    render(<PasswordField name="password" label="Password" autoComplete="current-password" />);
+    const field = screen.getByLabelText('Password');
+    await userEvent.click(field);
+    await userEvent.paste('ｐａｓｔｅ "me" 🙂 whole, 8 words or 80');
+    expect(field).toHaveProperty('value', 'ｐａｓｔｅ "me" 🙂 whole, 8 words or 80');
+    expect(field.getAttribute('autocomplete')).toBe('current-password');
+    expect(field.hasAttribute('maxlength')).toBe(false);
   });
 });
