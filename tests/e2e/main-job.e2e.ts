@@ -86,7 +86,6 @@ async function review(page: Page, hands: Hands, file: string, mend?: Walk['mend'
   await passed(page, `the reports, before ${file}`);
   await hands.press(content(page).getByRole('link', { name: file }).first());
   await heading(page, 'Check the values').waitFor();
-  await page.waitForLoadState('networkidle');
   await passed(page, `the review of ${file}`);
   const laboratory = field(page, 'Laboratory');
   const useThis = button(page, 'Use the printed name');
@@ -102,6 +101,8 @@ async function review(page: Page, hands: Hands, file: string, mend?: Walk['mend'
   await page.getByText('Everything is there.').waitFor();
   await hands.press(confirm);
   await page.getByText(/^Confirmed by /).waitFor();
+  // The button that had the focus is gone; whoever goes on by keys must not be thrown back to the top.
+  await expect.poll(() => page.evaluate(() => document.activeElement !== document.body)).toBe(true);
   await passed(page, `${file}, confirmed`);
 }
 

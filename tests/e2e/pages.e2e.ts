@@ -31,9 +31,6 @@ function filled(route: string, parts: Readonly<Record<string, string>>): string 
 }
 
 async function assertFits(page: Page, place: string): Promise<void> {
-  await page.locator('#content').first().waitFor();
-  // What is fetched after the first paint belongs to the page too.
-  await page.waitForLoadState('networkidle');
   await assertAccessible(page, place);
   await page.setViewportSize(PHONE);
   await assertAccessible(page, place);
@@ -76,6 +73,22 @@ describe('Every page', () => {
     const { page } = await visitor({ viewport: WIDE });
     await go(page, filled(route, { token: tokens[route.split('/')[1] ?? ''] ?? '' }));
     await assertFits(page, route);
+  });
+
+  test('lets no script and no handler run that somebody brought into its text', async () => {
+    const { page, expectComplaint } = await visitor({ cookie: mine.cookies.owner });
+    expectComplaint(/script-src-elem refused inline|Executing inline script violates/);
+    expectComplaint(/script-src-attr refused inline|Executing inline event handler violates/);
+    const brought =
+      '<script>document.body.dataset.ran = "script"</script><img src="data:image/png,0" onerror="document.body.dataset.ran = this">';
+    await page.route(`**/sites/${mine.site.id}`, async (request) => {
+      const answer = await request.fetch();
+      await request.fulfill({ response: answer, body: (await answer.text()).replace('</body>', `${brought}</body>`) });
+    });
+    await go(page, `/sites/${mine.site.id}`);
+    await heading(page, 'Mill Lane').waitFor();
+    expect(await page.locator('img[onerror]').count()).toBe(1);
+    expect(await page.evaluate(() => document.body.dataset.ran ?? 'nothing')).toBe('nothing');
   });
 
   test('of a site looks to another site’s owner as if nothing were there, and so does a mixed address', async () => {

@@ -26,11 +26,13 @@ export type Visitor = {
   context: BrowserContext;
   /** Answers the test provokes on purpose; any other answer from 400 on fails it. */
   expectAnswers: (...statuses: number[]) => void;
+  /** What the test makes the browser complain of on purpose; that it does not fails the test too. */
+  expectComplaint: (words: RegExp) => void;
 };
 
 export type Browsing = { visitor: (options?: Options) => Promise<Visitor> };
 
-type Open = { context: BrowserContext; complaints: string[] };
+type Open = { context: BrowserContext; complaints: string[]; provoked: RegExp[] };
 
 /**
  * A browser for the tests of this file, a fresh profile for each visitor. An error on the console, a breach of the
@@ -48,7 +50,12 @@ export function useBrowser(): Browsing {
     open = [];
     if (task.result?.state === 'fail') await takePictures(task.name, mine);
     await Promise.all(mine.map(({ context }) => context.close()));
-    const complaints = mine.flatMap((one) => one.complaints);
+    const complaints = mine.flatMap((one) => [
+      ...one.complaints.filter((said) => !one.provoked.some((words) => words.test(said))),
+      ...one.provoked
+        .filter((words) => !one.complaints.some((said) => words.test(said)))
+        .map((words) => `never: ${words}`),
+    ]);
     if (complaints.length > 0) throw new Error(`The browser complained:\n${complaints.join('\n')}`);
   });
   afterAll(() => browser?.close());
@@ -67,7 +74,8 @@ export function useBrowser(): Browsing {
       context.setDefaultTimeout(STEP_MS);
       const expected = new Set<number>();
       const complaints: string[] = [];
-      open.push({ context, complaints });
+      const provoked: RegExp[] = [];
+      open.push({ context, complaints, provoked });
       await listen(context, complaints, expected);
       if (cookie) await takeCookie(context, cookie);
       const page = await context.newPage();
@@ -77,6 +85,7 @@ export function useBrowser(): Browsing {
         expectAnswers: (...statuses) => {
           for (const status of statuses) expected.add(status);
         },
+        expectComplaint: (words) => provoked.push(words),
       };
     },
   };

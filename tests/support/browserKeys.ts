@@ -44,26 +44,28 @@ export async function isAlive(target: Locator): Promise<void> {
 }
 
 async function assertFocusShows(target: Locator): Promise<void> {
-  const wrong = await target.evaluate((element) => {
-    const label = element instanceof HTMLInputElement ? element.labels?.[0] : null;
-    const shows = [element, label].some((one) => {
-      if (!one) return false;
-      const { outlineStyle, outlineWidth, boxShadow } = getComputedStyle(one);
-      return (outlineStyle !== 'none' && outlineWidth !== '0px') || boxShadow !== 'none';
-    });
-    if (!shows) return 'nothing shows that it has the focus';
-    const { left, top, width, height } = element.getBoundingClientRect();
-    const spots = [0.1, 0.5, 0.9].flatMap((x) => [0.1, 0.5, 0.9].map((y) => [left + x * width, top + y * height]));
-    const isSeen = spots.some(([x = 0, y = 0]) => {
-      const hit = document.elementFromPoint(x, y);
-      return (
-        hit !== null &&
-        (element.contains(hit) || hit === element.parentElement || (label && hit.closest('label') === label))
-      );
-    });
-    return isSeen ? null : `it is outside the window or covered, at ${left},${top} ${width}×${height}`;
+  // Messages that lie over what has the focus move away from it; that takes a frame.
+  const isWell = (wrong: string | null) => wrong === null;
+  await until(`${target} has the focus and can be seen`, () => target.evaluate(wrongWithFocus), isWell, 2_000);
+}
+
+/** Runs in the page: what keeps a person from seeing where the focus is, or null. */
+function wrongWithFocus(element: Element): string | null {
+  const label = element instanceof HTMLInputElement ? element.labels?.[0] : null;
+  const shows = [element, label].some((one) => {
+    if (!one) return false;
+    const { outlineStyle, outlineWidth, boxShadow } = getComputedStyle(one);
+    return (outlineStyle !== 'none' && outlineWidth !== '0px') || boxShadow !== 'none';
   });
-  if (wrong) throw new Error(`${target} has the focus, but ${wrong}.`);
+  if (!shows) return 'nothing shows that it has the focus';
+  const { left, top, width, height } = element.getBoundingClientRect();
+  const spots = [0.1, 0.5, 0.9].flatMap((x) => [0.1, 0.5, 0.9].map((y) => [left + x * width, top + y * height]));
+  const isSeen = spots.some(([x = 0, y = 0]) => {
+    const hit = document.elementFromPoint(x, y);
+    if (hit === null) return false;
+    return element.contains(hit) || hit === element.parentElement || (label && hit.closest('label') === label);
+  });
+  return isSeen ? null : `it is outside the window or covered, at ${left},${top} ${width}×${height}`;
 }
 
 /** Types a day into a date field, part by part as its locale orders them. */
