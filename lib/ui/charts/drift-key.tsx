@@ -1,3 +1,5 @@
+'use client';
+
 import type { DriftLayout } from './drift-layout';
 import { formatDay } from './numbers';
 import { INK } from './palette';

@@ -1,3 +1,5 @@
+'use client';
+
 import type { ReactNode, Ref } from 'react';
 import { type DriftLayout, driftLayout, type LayoutInput } from './drift-layout';
 import { DriftMarks } from './drift-marks';

@@ -1,3 +1,5 @@
+'use client';
+
 import { changeDecimals, formatDay, formatRange, withUnit } from './numbers';
 import { INK } from './palette';
 import { IntervalBar, StripAxis, StripDot, StripFrame, StripLink, StripWord, Zone } from './strip-parts';

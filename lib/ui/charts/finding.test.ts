@@ -12,7 +12,7 @@ describe('driftFinding', () => {
 
   it('claims no movement from one test', () => {
     expect(say(phHistory.slice(0, 1))).toBe(
-      'One test: pH 7.4 on 12 Apr 2022, over the target band. A second one, taken the same way, gives a difference.',
+      'One test: pH 7.4 on 12 Apr 2022, above the target band. A second one, taken the same way, gives a difference.',
     );
   });
 
@@ -37,7 +37,7 @@ describe('driftFinding', () => {
 
   it('keeps a limit a limit, and places it only where that is certain', () => {
     const one = driftFinding({ analyte: boron, points: boronHistory.slice(0, 1), band: boronBand });
-    expect(one).toContain('Boron < 0.1 ppm on 9 Apr 2023, under the target band');
+    expect(one).toContain('Boron < 0.1 ppm on 9 Apr 2023, below the target band');
     const wide = { ...boronBand, low: 0.05 };
     expect(driftFinding({ analyte: boron, points: boronHistory.slice(0, 1), band: wide })).not.toContain('target band');
   });

@@ -17,10 +17,10 @@ function bandWords(point: DriftPoint, band: TargetBand | null): string {
   if (band === null || (band.low === null && band.high === null) || point.qualifier === 'below-unknown') return '';
   if (point.qualifier === 'below' && (band.low === null || point.value > band.low)) return '';
   if (point.qualifier === 'above' && (band.high === null || point.value < band.high)) return '';
-  if (band.low !== null && point.value < band.low) return ', under the target band';
-  if (band.low !== null && point.qualifier === 'below') return ', under the target band';
-  if (band.high !== null && point.value > band.high) return ', over the target band';
-  if (band.high !== null && point.qualifier === 'above') return ', over the target band';
+  if (band.low !== null && point.value < band.low) return ', below the target band';
+  if (band.low !== null && point.qualifier === 'below') return ', below the target band';
+  if (band.high !== null && point.value > band.high) return ', above the target band';
+  if (band.high !== null && point.qualifier === 'above') return ', above the target band';
   return ', inside the target band';
 }
 

@@ -1,3 +1,5 @@
+'use client';
+
 import { changeDecimals, formatRange, formatSigned, withUnit } from './numbers';
 import { INK } from './palette';
 import { IntervalBar, StripAxis, StripDot, StripFrame, StripUpright, StripWord, Zone } from './strip-parts';

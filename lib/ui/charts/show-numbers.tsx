@@ -1,3 +1,5 @@
+'use client';
+
 import type { ReactNode } from 'react';
 
 /** The table behind a chart. Works without script; on paper it is always open. */

@@ -1,3 +1,5 @@
+'use client';
+
 import { driftFinding } from './finding';
 import { dayMs, formatDay, withUnit } from './numbers';
 import { INK } from './palette';

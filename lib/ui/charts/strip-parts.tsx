@@ -1,3 +1,5 @@
+'use client';
+
 import type { ReactNode } from 'react';
 import { INK } from './palette';
 import { anchorAt, type StripScale } from './strip-scale';

@@ -3,7 +3,8 @@
 import { X } from 'lucide-react';
 import { createContext, type ReactNode, useCallback, useContext, useEffect, useMemo, useRef, useState } from 'react';
 import { cx } from '../cx';
-import { type Tone, ToneMark, toneWord } from './tone';
+import { type Tone, toneWord } from './tone';
+import { ToneMark } from './tone-mark';
 
 type Message = { id: number; text: string; tone: Tone };
 type Announce = (text: string, options?: { tone?: Tone; visible?: boolean }) => void;

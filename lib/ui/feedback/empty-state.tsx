@@ -1,3 +1,5 @@
+'use client';
+
 import type { ReactNode } from 'react';
 
 export type EmptyShape = 'chart' | 'table' | 'plan' | 'list' | 'page';

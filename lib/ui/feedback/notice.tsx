@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { cx } from '../cx';
-import { type Tone, ToneMark, toneWord } from './tone';
+import { type Tone, toneWord } from './tone';
+import { ToneMark } from './tone-mark';
 
 type NoticeProps = {
   tone?: Tone;

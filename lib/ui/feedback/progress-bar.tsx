@@ -1,3 +1,5 @@
+'use client';
+
 type ProgressBarProps = {
   label: string;
   /** 0 to 100; undefined while the length is not known. */

@@ -2,7 +2,7 @@
 
 import { useEffect, useRef } from 'react';
 import type { Problem } from '../api';
-import { ToneMark } from '../feedback/tone';
+import { ToneMark } from '../feedback/tone-mark';
 import { fieldId } from './form-context';
 
 type ErrorSummaryProps = { problem?: Problem | undefined; errors: Record<string, string>; scope: string };

@@ -1,4 +1,4 @@
-import { ToneMark } from '../feedback/tone';
+import { ToneMark } from '../feedback/tone-mark';
 
 export function FieldError({ id, children }: { id: string; children: string | undefined }) {
   if (!children) return null;

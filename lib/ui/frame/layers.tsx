@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { cx } from '../cx';
+import { FoldMark } from './fold-mark';
 
 /** How much detail a layer holds, from the surface down. */
 export type Depth = 'verdict' | 'chart' | 'numbers' | 'page';
@@ -53,14 +54,6 @@ export function Layer({ depth, label, title, children, id, folded = false }: Lay
         </div>
       </div>
     </section>
-  );
-}
-
-function FoldMark() {
-  return (
-    <svg viewBox="0 0 16 16" className="size-4 flex-none text-gley group-open:rotate-90" aria-hidden="true" fill="none">
-      <path d="M5 2l6 6-6 6" stroke="currentColor" strokeWidth="2.4" strokeLinecap="round" strokeLinejoin="round" />
-    </svg>
   );
 }
 

@@ -1,3 +1,5 @@
+'use client';
+
 /** Decor beside the sign-in forms: one core under the line, and four years of readings that leave it. */
 export function SoilColumn({ className }: { className?: string }) {
   return (

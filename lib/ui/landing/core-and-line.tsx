@@ -1,3 +1,5 @@
+'use client';
+
 const label = { fontFamily: 'var(--font-text)', fontSize: 17, fill: '#211A16' } as const;
 const small = { fontFamily: 'var(--font-text)', fontSize: 15, fill: '#5A4E45' } as const;
 

@@ -1,12 +1,6 @@
-export type Tone = 'info' | 'look' | 'error' | 'saved';
+'use client';
 
-/** The word that always stands beside the mark, so that colour never carries the meaning alone. */
-export const toneWord: Record<Tone, string> = {
-  info: 'Note',
-  look: 'Look at this',
-  error: 'Not done',
-  saved: 'Saved',
-};
+import type { Tone } from './tone';
 
 /** One mark a tone, each with a shape of its own: a square, a flag on a stake, a broken line, a levelled line. */
 export function ToneMark({ tone, className }: { tone: Tone; className?: string }) {
