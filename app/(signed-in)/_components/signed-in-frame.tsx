@@ -2,6 +2,7 @@
 
 import { usePathname } from 'next/navigation';
 import type { ReactNode } from 'react';
+import { can } from '@/lib/access/table';
 import type { SiteSummary } from '@/lib/schemas/sites';
 import { Frame } from '@/lib/ui/frame/frame';
 import { SiteSwitcher } from '@/lib/ui/frame/site-switcher';
@@ -28,7 +29,12 @@ export function SignedInFrame({ sites, name, children }: SignedInFrameProps) {
         open
           ? [
               { href: at, label: 'Ground', icon: 'ground' },
-              { href: `${at}/reports`, label: 'Reports', icon: 'reports', waiting: open.inReview },
+              {
+                href: `${at}/reports`,
+                label: 'Reports',
+                icon: 'reports',
+                waiting: can(open.role, 'reading.work') ? open.inReview : 0,
+              },
               { href: `${at}/effects`, label: 'Effects', icon: 'effects' },
               { href: `${at}/reminders`, label: 'Reminders', icon: 'reminders' },
               { href: `${at}/members`, label: 'People', icon: 'people' },

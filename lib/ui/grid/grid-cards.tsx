@@ -68,6 +68,7 @@ function Card({ row, rowIndex, ...props }: CardsProps & { row: GridRow; rowIndex
           <Button
             look="plain"
             size="small"
+            className="-ml-3 min-h-(--target)"
             icon={<Trash2 aria-hidden="true" className="size-4" />}
             onClick={() => props.onRemoveRow?.(row.id)}
           >

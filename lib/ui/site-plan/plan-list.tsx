@@ -94,7 +94,7 @@ function PlanRow({ plot, unit, outlineOf, canUpload, onDropFiles, ...props }: Pl
         {props.editHref ? (
           <a
             href={props.editHref(plot.id)}
-            className="text-link inline-flex min-h-(--target) items-center px-2 text-sm font-semibold"
+            className="text-link -ml-2 inline-flex min-h-(--target) items-center px-2 text-sm font-semibold"
           >
             Edit<span className="sr-only"> {plot.name}</span>
           </a>

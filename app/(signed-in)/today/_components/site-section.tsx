@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { can } from '@/lib/access/table';
+import { ROLE_WORDS } from '@/lib/access/words';
 import type { TodaySite } from '@/lib/schemas/today';
 import { LinkButton } from '@/lib/ui/actions/link-button';
 import { EmptyState } from '@/lib/ui/feedback/empty-state';
@@ -30,7 +31,7 @@ export function SiteSection({ site, today, onChanged }: SiteSectionProps) {
             <span className="min-w-0 break-words">{site.name}</span>
           </Link>
         </h2>
-        <p className="text-clay">you are {site.role}</p>
+        <p className="text-clay">you are {ROLE_WORDS[site.role].a}</p>
       </div>
       <div className="grid gap-6">
         {site.due.length > 0 ? (
@@ -42,7 +43,7 @@ export function SiteSection({ site, today, onChanged }: SiteSectionProps) {
         {site.reports.length > 0 ? (
           <div>
             <h3 className="mb-2 text-lg">Reports</h3>
-            <WaitingReports siteId={site.id} reports={site.reports} more={site.moreReports} />
+            <WaitingReports siteId={site.id} role={site.role} reports={site.reports} more={site.moreReports} />
           </div>
         ) : null}
         {!asksForSomething(site) && !isNew(site) ? (
@@ -76,8 +77,9 @@ function FirstStep({ site }: { site: TodaySite }) {
       title="No soil test yet"
       action={can(site.role, 'reading.work') ? <LinkButton href={`/sites/${site.id}`}>Add a report</LinkButton> : null}
     >
-      Drop last year’s laboratory report onto a plot. It is read, and you check it against its page before anything
-      counts.
+      {can(site.role, 'reading.work')
+        ? 'Drop last year’s laboratory report onto a plot. It is read, and you check it against its page before anything counts.'
+        : 'The first confirmed report of this site puts its values here.'}
     </EmptyState>
   );
 }

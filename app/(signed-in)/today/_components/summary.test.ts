@@ -58,6 +58,11 @@ describe('the day in a sentence', () => {
   it('does not count what this person put off', () => {
     expect(summaryOf(today({ due: [due(-8, '2026-05-04'), due(-1)] }))).toBe('1 sample is due.');
   });
+  it('asks nobody for what their role may not do', () => {
+    expect(summaryOf(today({ role: 'adviser', reports: [review] }))).toBe('1 report waits for you to confirm it.');
+    expect(summaryOf(today({ role: 'helper', reports: [review] }))).toBe('1 report can be reviewed.');
+    expect(summaryOf(today({ role: 'viewer', reports: [review] }))).toBe('Nothing is due.');
+  });
   it('says so when there is nothing', () => {
     expect(summaryOf(today({}))).toBe('Nothing is due.');
     expect(summaryOf({ today: '2026-04-20', sites: [], invitations: [] })).toBe('');

@@ -1,17 +1,19 @@
 import Link from 'next/link';
+import type { Role } from '@/lib/access/table';
+import { can } from '@/lib/access/table';
 import type { TodayReport } from '@/lib/schemas/today';
 import { type Status, StatusWord } from '@/lib/ui/feedback/status-word';
 import { inWords } from '../../_components/due-words';
 
 const samples = (n: number) => (n === 1 ? '1 sample' : `${n} samples`);
 
-export function standing(report: TodayReport): { status: Status; words: string } {
+const asked = (n: number, what: string) => (n > 0 ? `${samples(n)} to ${what}` : `To ${what}`);
+
+export function standing(report: TodayReport, role: Role): { status: Status; words: string } {
   switch (report.state) {
     case 'in-review':
-      return {
-        status: 'needs-you',
-        words: report.samples > 0 ? `${samples(report.samples)} to confirm` : 'To confirm',
-      };
+      if (!can(role, 'reading.work')) return { status: 'waiting', words: 'Not confirmed yet' };
+      return { status: 'needs-you', words: asked(report.samples, can(role, 'reading.decide') ? 'confirm' : 'review') };
     case 'unreadable':
       return { status: 'failed', words: 'Could not be read' };
     case 'not-soil':
@@ -26,14 +28,14 @@ export function standing(report: TodayReport): { status: Status; words: string }
   }
 }
 
-type WaitingReportsProps = { siteId: string; reports: readonly TodayReport[]; more: number };
+type WaitingReportsProps = { siteId: string; role: Role; reports: readonly TodayReport[]; more: number };
 
-export function WaitingReports({ siteId, reports, more }: WaitingReportsProps) {
+export function WaitingReports({ siteId, role, reports, more }: WaitingReportsProps) {
   return (
     <>
       <ul className="border-y border-horizon-5">
         {reports.map((report) => {
-          const { status, words } = standing(report);
+          const { status, words } = standing(report, role);
           return (
             <li key={report.id} className="border-b border-horizon-5 py-3 last:border-0">
               <p className="flex flex-wrap items-baseline gap-x-4">
@@ -46,7 +48,9 @@ export function WaitingReports({ siteId, reports, more }: WaitingReportsProps) {
                 <StatusWord status={status}>{words}</StatusWord>
                 <span className="text-sm text-clay">sent {inWords(report.uploadedAt.slice(0, 10))}</span>
               </p>
-              {report.refusal ? <p className="max-w-measure text-clay">{report.refusal}</p> : null}
+              {report.refusal && can(role, 'reading.work') ? (
+                <p className="max-w-measure text-clay">{report.refusal}</p>
+              ) : null}
               {report.waitingLong ? (
                 <p className="max-w-measure text-clay">
                   The file is safe. The process that reads may not be running; it takes the file up when it is.

@@ -58,7 +58,10 @@ export function Ground({ site, unit, first }: GroundProps) {
     [list, plots.reload, year],
   );
   const outlines = useOutlineSaves(site.id, list, saved);
-  const shown = useMemo(() => planPlots(site.id, list, reports, items), [site.id, list, reports, items]);
+  const shown = useMemo(
+    () => planPlots(site.id, list, mayUpload ? reports : [], items),
+    [site.id, list, mayUpload, reports, items],
+  );
 
   const send = (plotId: string | null, files: readonly File[]) => {
     store.add(files, { plotId, plotName: list.find((plot) => plot.id === plotId)?.name ?? null });
@@ -170,6 +173,6 @@ export function Ground({ site, unit, first }: GroundProps) {
 function leadOf(plots: number, mayUpload: boolean): string | undefined {
   if (plots === 0) return undefined;
   return mayUpload
-    ? 'Drag a laboratory report onto the plot it is about. What it says is read, and nothing counts before you confirm it.'
+    ? 'Drag a laboratory report onto the plot it is about, or use the button beside its name. What it says is read; nothing counts before it is confirmed.'
     : 'Open a plot for its tests and their history.';
 }

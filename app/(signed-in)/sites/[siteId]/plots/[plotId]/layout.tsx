@@ -1,4 +1,6 @@
 import type { ReactNode } from 'react';
+import { can } from '@/lib/access/table';
+import { LinkButton } from '@/lib/ui/actions/link-button';
 import { LinkTabs } from '@/lib/ui/actions/link-tabs';
 import { Notice } from '@/lib/ui/feedback/notice';
 import { PageTitle } from '@/lib/ui/frame/page-title';
@@ -13,7 +15,7 @@ export async function generateMetadata({ params }: PlotParams) {
 
 export default async function PlotLayout({ children, params }: PlotParams & { children: ReactNode }) {
   const { siteId, plotId } = await params;
-  const { plot, person } = await openPlot(siteId, plotId);
+  const { plot, site, person } = await openPlot(siteId, plotId);
   const at = `/sites/${siteId}/plots/${plotId}`;
   return (
     <>
@@ -21,6 +23,13 @@ export default async function PlotLayout({ children, params }: PlotParams & { ch
         title={<span className="break-words">{plot.name}</span>}
         above={{ href: `/sites/${siteId}`, label: 'The ground' }}
         lead={plotLead(plot, person.units)}
+        actions={
+          can(site.role, 'ground.edit') ? (
+            <LinkButton look="quiet" className="print:hidden" href={`${at}/edit`}>
+              Edit the plot
+            </LinkButton>
+          ) : null
+        }
       />
       <div className="page-wrap grid gap-4 pb-2 print:hidden">
         {plot.archivedAt === null ? null : (

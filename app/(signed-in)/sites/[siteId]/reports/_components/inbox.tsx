@@ -142,7 +142,7 @@ export function Inbox({ site, timeZone, plots, first, shown, ...rights }: InboxP
 
 const NONE: Record<Filter, string> = {
   all: 'Nothing but what was set aside.',
-  review: 'Nothing waits for you.',
+  review: 'Nothing waits to be reviewed.',
   reading: 'Nothing is being read just now.',
   unreadable: 'Everything so far could be read.',
   confirmed: 'Nothing is confirmed yet.',

@@ -51,7 +51,7 @@ export function ReportRow(props: ReportRowProps) {
           {typed ? 'Begun' : 'Sent'} by {report.uploadedBy.name}, {props.sentOn}
           {onPlot(report, plotNames)}
         </p>
-        {report.refusal ? <p className="mt-1 max-w-measure">{report.refusal.sentence}</p> : null}
+        {report.refusal && props.mayWork ? <p className="mt-1 max-w-measure">{report.refusal.sentence}</p> : null}
         {report.withdrawnReason ? (
           <p className="mt-1 max-w-measure text-sm">Confirmation withdrawn: {report.withdrawnReason}</p>
         ) : null}

@@ -6,11 +6,9 @@ import { Button } from '@/lib/ui/actions/button';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { DataTable } from '@/lib/ui/show/data-table';
 import { useSubmit } from '@/lib/ui/use-submit';
+import { actInWords } from './act-words';
 
 type Event = AuditList['events'][number];
-
-/** `member.role-changed` reads as "member: role changed"; the words are the verbs' own. */
-const inWords = (act: string) => act.replace('.', ': ').replaceAll('-', ' ');
 
 export function AuditTrail({ siteId, first, timeZone }: { siteId: string; first: AuditList; timeZone: string }) {
   const [events, setEvents] = useState<readonly Event[]>(first.events);
@@ -39,7 +37,7 @@ export function AuditTrail({ siteId, first, timeZone }: { siteId: string; first:
           columns={[
             { key: 'at', head: 'When', cell: (event) => when.format(new Date(event.at)) },
             { key: 'who', head: 'Who', cell: (event) => event.person ?? 'Loamline itself' },
-            { key: 'act', head: 'What', rowHead: true, cell: (event) => inWords(event.act) },
+            { key: 'act', head: 'What', rowHead: true, cell: (event) => actInWords(event.act) },
           ]}
         />
       </div>

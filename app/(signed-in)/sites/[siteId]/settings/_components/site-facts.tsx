@@ -1,3 +1,4 @@
+import { ROLE_WORDS } from '@/lib/access/words';
 import type { Site } from '@/lib/schemas/sites';
 import { DefinitionList } from '@/lib/ui/show/definition-list';
 import { type LengthUnit, shownLength } from '../../../../_components/lengths';
@@ -19,7 +20,7 @@ export function SiteFacts({ site, unit, country }: Props) {
           said: `${shownLength(site.planWidthM, unit)} by ${shownLength(site.planHeightM, unit)} ${unit}`,
         },
         { term: 'Warm months', said: warm.length > 0 ? warm.join(', ') : 'none' },
-        { term: 'You are', said: site.role },
+        { term: 'You are', said: ROLE_WORDS[site.role].a },
       ]}
     />
   );

@@ -11,6 +11,9 @@ import { useSubmit } from '@/lib/ui/use-submit';
 import { missingOf, unsettledSentence, valuesToConfirm } from './missing';
 import { counted } from './report-words';
 
+/** Where the way down the phone's long list of values ends. */
+export const CONFIRM_ID = 'confirm';
+
 type ConfirmBarProps = {
   path: string;
   review: Review;
@@ -50,8 +53,10 @@ export function ConfirmBar(props: ConfirmBarProps) {
 
   return (
     <section
+      id={CONFIRM_ID}
+      tabIndex={-1}
       aria-label="Confirm"
-      className="no-print z-20 border-t-2 border-gley bg-chalk md:sticky md:bottom-0"
+      className="no-print z-20 border-t-2 border-gley bg-chalk outline-none md:sticky md:bottom-0"
       data-testid="confirm-bar"
     >
       <div className="page-wrap max-w-[110rem]! grid gap-2 py-3">

@@ -5,6 +5,7 @@ import { useEffect, useId, useMemo, useRef, useState } from 'react';
 import type { Report } from '@/lib/schemas/reports';
 import type { Review } from '@/lib/schemas/review';
 import { Button } from '@/lib/ui/actions/button';
+import { buttonClass } from '@/lib/ui/actions/button-style';
 import { Segmented } from '@/lib/ui/actions/segmented';
 import { cx } from '@/lib/ui/cx';
 import { SelectField } from '@/lib/ui/fields/select-field';
@@ -12,6 +13,7 @@ import { Grid } from '@/lib/ui/grid/grid';
 import type { GridCounts, GridFocusRequest } from '@/lib/ui/grid/types';
 import { useLatest } from '@/lib/ui/grid/use-latest';
 import { PageView } from '@/lib/ui/page-view/page-view';
+import { CONFIRM_ID } from './confirm-bar';
 import { originalHref, sourceOf } from './page-source';
 import { RemovedRows } from './removed-rows';
 import { reportTitle } from './report-words';
@@ -135,9 +137,18 @@ export function ValuesPane({ path, review, live, readOnly, report, goTo, onCount
         </div>
       </div>
       {noFile ? null : (
-        <div className="pointer-events-none sticky bottom-[calc(var(--bar-bottom)+0.5rem)] z-30 mt-3 flex justify-end px-4 md:bottom-24 lg:hidden">
+        <div className="pointer-events-none sticky bottom-[calc(var(--bar-bottom)+0.5rem)] z-30 mt-3 flex justify-between gap-3 px-4 md:bottom-24 lg:hidden">
+          {readOnly ? null : (
+            <a
+              href={`#${CONFIRM_ID}`}
+              className={cx(buttonClass('quiet'), 'pointer-events-auto shadow-lift md:hidden')}
+              onClick={() => setSide('values')}
+            >
+              Go to the end
+            </a>
+          )}
           <Button
-            className="pointer-events-auto shadow-lift"
+            className="pointer-events-auto ml-auto shadow-lift"
             icon={
               side === 'values' ? (
                 <FileText aria-hidden="true" className="size-5" />

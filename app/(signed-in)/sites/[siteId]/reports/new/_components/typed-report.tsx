@@ -78,7 +78,7 @@ export function TypedReport({ siteId, unit, plots, laboratories, today }: TypedR
               options={plots}
               prompt={plots.length > 0 ? 'Choose later' : 'No plot yet: choose later'}
             />
-            <DateField name={`day-${row}`} label="Day the sample was taken" max={today} optional />
+            <DateField name={`day-${row}`} label="Day it was taken" max={today} optional />
           </div>
           <div className="grid gap-4 sm:grid-cols-2">
             <TextField name={`name-${row}`} label="Name on the report" optional autoComplete="off" />
