@@ -20,7 +20,7 @@ export async function captureQueries(url: string, acts: Record<string, () => Pro
   let what = '';
   const logger = {
     logQuery: (text: string, values: unknown[]) => {
-      if (/^select/i.test(text) && /"result"/.test(text)) captured.push({ what, text, values });
+      if (/^select/i.test(text) && !/set_config/.test(text)) captured.push({ what, text, values });
     },
   };
   Object.assign(globalThis, { loamlineDatabase: { db: drizzle(client, { schema, logger }), client } });
@@ -53,7 +53,7 @@ export async function explainAll(url: string, siteId: string, captured: readonly
     const clean = !scanned.has('result') && !scanned.has('no plan');
     const rest = [...scanned].filter((table) => table !== 'result');
     line(
-      `EXPLAIN ${what} (${statements} statements over result)`,
+      `EXPLAIN ${what} (${statements} statements)`,
       `${clean ? 'no sequential scan of result' : 'SEQUENTIAL SCAN OF RESULT'}${rest.length ? `; small tables scanned: ${rest.join(', ')}` : ''}  ${verdict(clean)}`,
     );
   }
