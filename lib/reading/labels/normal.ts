@@ -19,6 +19,8 @@ export function normal(text: string): string {
 
 /** Control and bidirectional characters never reach the grid or a sentence. */
 export function clean(text: string): string {
+  // Nearly every word is plain printable ASCII and needs no cleaning.
+  if (/^[!-~]+$/.test(text)) return text;
   return (
     text
       // biome-ignore lint/suspicious/noControlCharactersInRegex: these are what is being removed

@@ -28,18 +28,21 @@ const BETWEEN_PHRASES = 0.66;
 /** Words whose middles differ by less than this share of the smaller type stand on one line. */
 const SAME_LINE = 0.38;
 
+/** The smallest box around some words, and their largest type. */
+function around(words: readonly Placed[]) {
+  const box = { x0: Infinity, y0: Infinity, x1: -Infinity, y1: -Infinity, size: -Infinity };
+  for (const word of words) {
+    if (word.x0 < box.x0) box.x0 = word.x0;
+    if (word.y0 < box.y0) box.y0 = word.y0;
+    if (word.x1 > box.x1) box.x1 = word.x1;
+    if (word.y1 > box.y1) box.y1 = word.y1;
+    if (word.size > box.size) box.size = word.size;
+  }
+  return box;
+}
+
 export function phraseOf(page: Upright, line: number, words: readonly Placed[]): Phrase {
-  return {
-    page,
-    line,
-    words,
-    text: words.map((word) => word.text).join(' '),
-    x0: Math.min(...words.map((word) => word.x0)),
-    y0: Math.min(...words.map((word) => word.y0)),
-    x1: Math.max(...words.map((word) => word.x1)),
-    y1: Math.max(...words.map((word) => word.y1)),
-    size: Math.max(...words.map((word) => word.size)),
-  };
+  return { page, line, words, text: words.map((word) => word.text).join(' '), ...around(words) };
 }
 
 function middle(word: Placed): number {
@@ -72,14 +75,7 @@ export function linesOf(page: Upright): Line[] {
       run.push(word);
     }
     if (run.length > 0) phrases.push(phraseOf(page, index, run));
-    return {
-      page,
-      index,
-      phrases,
-      text: phrases.map((phrase) => phrase.text).join('  '),
-      y0: Math.min(...words.map((word) => word.y0)),
-      y1: Math.max(...words.map((word) => word.y1)),
-      size: Math.max(...words.map((word) => word.size)),
-    };
+    const { y0, y1, size } = around(words);
+    return { page, index, phrases, text: phrases.map((phrase) => phrase.text).join('  '), y0, y1, size };
   });
 }

@@ -80,6 +80,20 @@ function continues(whole: Placed, other: Placed): boolean {
   );
 }
 
+function nextPiece(
+  whole: Placed,
+  first: Placed,
+  lines: ReadonlyMap<number, readonly Placed[]>,
+  used: ReadonlySet<Placed>,
+): Placed | undefined {
+  const step = Math.round(whole.y1 / 2);
+  for (let at = step - 1; at <= step + 1; at++) {
+    const next = lines.get(at)?.find((other) => other !== first && continues(whole, other) && !used.has(other));
+    if (next !== undefined) return next;
+  }
+  return undefined;
+}
+
 function joinPieces(words: readonly Placed[]): Placed[] {
   const sorted = [...words].sort((a, b) => a.y0 - b.y0 || a.x0 - b.x0);
   const lines = byBaseline(sorted);
@@ -89,9 +103,7 @@ function joinPieces(words: readonly Placed[]): Placed[] {
     if (used.has(first)) continue;
     let whole = first;
     for (;;) {
-      const step = Math.round(whole.y1 / 2);
-      const near = [step - 1, step, step + 1].flatMap((one) => lines.get(one) ?? []);
-      const next = near.find((other) => other !== first && !used.has(other) && continues(whole, other));
+      const next = nextPiece(whole, first, lines, used);
       if (next === undefined) break;
       used.add(next);
       whole = { ...whole, text: whole.text + next.text, x1: next.x1, y0: Math.min(whole.y0, next.y0) };
