@@ -22,7 +22,13 @@ const ROUND = [
 export default async function LandingPage() {
   if ((await pageContext()).actor.kind === 'person') redirect('/today');
   return (
-    <PublicFrame shape="open" links={[{ href: '/sign-in', label: 'Sign in' }]}>
+    <PublicFrame
+      shape="open"
+      links={[
+        { href: '/guide', label: 'Guide' },
+        { href: '/sign-in', label: 'Sign in' },
+      ]}
+    >
       <Hero
         title="Did it work?"
         lead="Loamline keeps every soil test of every plot, what you spread in between, and says plainly whether the change you meant is the change that came."

@@ -8,7 +8,7 @@ export default async function SignedInLayout({ children }: { children: ReactNode
   const { ctx, person } = await pagePerson('/today');
   const { sites } = await listMySites({ ctx, input: {} });
   return (
-    <SignedInFrame sites={sites} name={person.name}>
+    <SignedInFrame sites={sites} name={person.name} paper={person.paper}>
       {children}
     </SignedInFrame>
   );

@@ -15,10 +15,10 @@ const STANDING = {
   viewer: 'You read',
 } as const;
 
-type SignedInFrameProps = { sites: readonly SiteSummary[]; name: string; children: ReactNode };
+type SignedInFrameProps = { sites: readonly SiteSummary[]; name: string; paper: 'letter' | 'a4'; children: ReactNode };
 
 /** One frame for all pages, so that going from site to site redraws nothing above the line but the words. */
-export function SignedInFrame({ sites, name, children }: SignedInFrameProps) {
+export function SignedInFrame({ sites, name, paper, children }: SignedInFrameProps) {
   const id = /^\/sites\/([^/]+)/.exec(usePathname())?.[1];
   const open = sites.find((site) => site.id === id);
   const at = `/sites/${open?.id}`;
@@ -57,6 +57,7 @@ export function SignedInFrame({ sites, name, children }: SignedInFrameProps) {
         ) : null
       }
       account={<AccountMenu name={name} />}
+      paper={paper}
     >
       {children}
     </Frame>

@@ -47,7 +47,11 @@ export function DriftChart(props: DriftChartProps) {
   };
 
   return (
-    <figure className="@container grid min-w-0 grid-cols-[minmax(0,1fr)] gap-3" aria-labelledby={findingId}>
+    <figure
+      className="@container grid min-w-0 grid-cols-[minmax(0,1fr)] gap-3 print:block"
+      aria-labelledby={findingId}
+      data-runs-on
+    >
       <p
         id={findingId}
         className={hideFinding ? 'sr-only' : cx('max-w-measure text-lg leading-snug', drawn && 'print:hidden')}

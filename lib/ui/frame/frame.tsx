@@ -18,6 +18,8 @@ type FrameProps = {
   footerLinks?: readonly FooterLink[];
   /** A strip above everything: the session is about to end, changes are waiting. */
   strip?: ReactNode;
+  /** What this person prints on. */
+  paper?: 'letter' | 'a4';
   children: ReactNode;
 };
 
@@ -30,11 +32,12 @@ export function Frame({
   account,
   footerLinks = GUIDE_LINKS,
   strip,
+  paper = 'letter',
   children,
 }: FrameProps) {
   const inSite = siteNav !== undefined && siteNav.length > 0;
   return (
-    <div className="flex min-h-dvh flex-col">
+    <div className="flex min-h-dvh flex-col" data-paper={paper}>
       <SkipLink />
       {strip}
       <header className={inSite ? undefined : 'datum'}>

@@ -35,7 +35,7 @@ export function Layer({ depth, label, title, children, id, folded = false }: Lay
     <section id={id} data-depth={depth} className={cx('layer border-horizon-5 not-first:border-t', ground)}>
       <div className="page-wrap layer-in">
         <div aria-hidden className={cx('core-length', core)} />
-        <p className="pt-6 text-sm font-semibold text-clay max-lg:pt-4 max-lg:text-xs">{label ?? word}</p>
+        <p className="pt-6 text-sm font-semibold text-clay max-lg:pt-4 max-lg:text-xs print:hidden">{label ?? word}</p>
         <div className="min-w-0 pt-5 pb-8 max-lg:col-start-2 max-lg:pt-1">
           {folded ? (
             <details className="group">

@@ -12,13 +12,18 @@ export const metadata: Metadata = { title: 'Invitation', referrer: 'no-referrer'
 
 type PageProps = { params: Promise<{ token: string }>; searchParams: Promise<{ answer?: string | string[] }> };
 
+const CUT_OFF =
+  'This link is not whole. Copy all of it from the mail, or ask whoever invited you to send another. Nothing was changed.';
+
 async function lookAt(token: string) {
   const ctx = await pageContext();
   const me = ctx.actor.kind === 'person' ? ctx.actor.person.email : null;
   try {
     return { ok: true as const, me, look: await lookAtInvitation({ ctx, input: { token } }) };
   } catch (error) {
-    if (error instanceof Problem) return { ok: false as const, me, sentence: error.sentence };
+    if (error instanceof Problem) {
+      return { ok: false as const, me, sentence: error.code === 'invalid' ? CUT_OFF : error.sentence };
+    }
     throw error;
   }
 }

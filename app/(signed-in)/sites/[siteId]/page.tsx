@@ -1,11 +1,24 @@
+import { Suspense } from 'react';
 import { orNotFound, pagePerson } from '@/app/_server/context';
 import { listPlots } from '@/lib/data/plots/listPlots';
 import { listReports } from '@/lib/data/reports/listReports';
 import { getSite } from '@/lib/data/sites/getSite';
 import { lengthUnit } from '../../_components/lengths';
+import { PageLoading } from '../../_components/page-loading';
 import { Ground } from './_components/ground';
 
-export default async function GroundPage({ params }: { params: Promise<{ siteId: string }> }) {
+type PageProps = { params: Promise<{ siteId: string }> };
+
+/** No loading.tsx here: it would stand above the pages of plots and reports too, and one that is not there would answer 200. */
+export default function GroundPage(props: PageProps) {
+  return (
+    <Suspense fallback={<PageLoading />}>
+      <LoadedGround {...props} />
+    </Suspense>
+  );
+}
+
+async function LoadedGround({ params }: PageProps) {
   const { siteId } = await params;
   const { ctx, person } = await pagePerson(`/sites/${siteId}`);
   const site = await orNotFound(getSite({ ctx, input: { siteId } }));

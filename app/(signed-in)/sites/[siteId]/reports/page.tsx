@@ -1,9 +1,11 @@
 import type { Metadata } from 'next';
+import { Suspense } from 'react';
 import { orNotFound, pagePerson } from '@/app/_server/context';
 import { can } from '@/lib/access/table';
 import { listPlots } from '@/lib/data/plots/listPlots';
 import { listReports } from '@/lib/data/reports/listReports';
 import { getSite } from '@/lib/data/sites/getSite';
+import { PageLoading } from '../../../_components/page-loading';
 import { Inbox } from './_components/inbox';
 import { isFilter } from './_components/report-states';
 
@@ -14,7 +16,16 @@ type PageProps = {
   searchParams: Promise<Record<string, string | string[] | undefined>>;
 };
 
-export default async function ReportsPage({ params, searchParams }: PageProps) {
+/** No loading.tsx here: it would stand above every single report too, and one that is not there would answer 200. */
+export default function ReportsPage(props: PageProps) {
+  return (
+    <Suspense fallback={<PageLoading />}>
+      <LoadedReports {...props} />
+    </Suspense>
+  );
+}
+
+async function LoadedReports({ params, searchParams }: PageProps) {
   const { siteId } = await params;
   const { show } = await searchParams;
   const { ctx, person } = await pagePerson(`/sites/${siteId}/reports`);

@@ -1,37 +1,23 @@
-import { notFound } from 'next/navigation';
-import { orNotFound, pagePerson } from '@/app/_server/context';
+import { orNotFound } from '@/app/_server/context';
 import { can } from '@/lib/access/table';
 import { dayOf } from '@/lib/data/days';
 import { listPlots } from '@/lib/data/plots/listPlots';
-import { getReport } from '@/lib/data/reports/getReport';
 import { listResults } from '@/lib/data/results/listResults';
 import { getReview } from '@/lib/data/review/getReview';
-import { getSite } from '@/lib/data/sites/getSite';
-import { idSchema } from '@/lib/schemas/parts';
 import { ReadResults } from './_components/read-results';
 import { ReportScreen } from './_components/report-screen';
 import { hasReview, reportTitle } from './_components/report-words';
+import { openReport, type ReportParams } from './_server/open-report';
 
-type PageProps = { params: Promise<{ siteId: string; reportId: string }> };
-
-async function openReport({ params }: PageProps) {
+export async function generateMetadata({ params }: ReportParams) {
   const { siteId, reportId } = await params;
-  const { ctx, person } = await pagePerson(`/sites/${siteId}/reports/${reportId}`);
-  if (!idSchema.safeParse(reportId).success) notFound();
-  const [site, report] = await Promise.all([
-    orNotFound(getSite({ ctx, input: { siteId } })),
-    orNotFound(getReport({ ctx, input: { siteId, reportId } })),
-  ]);
-  return { ctx, person, site, report, siteId, reportId };
-}
-
-export async function generateMetadata(props: PageProps) {
-  const { report } = await openReport(props);
+  const { report } = await openReport(siteId, reportId);
   return { title: reportTitle(report) };
 }
 
-export default async function ReportPage(props: PageProps) {
-  const { ctx, person, site, report, siteId, reportId } = await openReport(props);
+export default async function ReportPage({ params }: ReportParams) {
+  const { siteId, reportId } = await params;
+  const { ctx, person, site, report } = await openReport(siteId, reportId);
   if (!can(site.role, 'reading.work')) {
     const { results } =
       report.state === 'confirmed' ? await orNotFound(listResults({ ctx, input: { siteId } })) : { results: [] };

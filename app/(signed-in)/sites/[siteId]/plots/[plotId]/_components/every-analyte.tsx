@@ -19,7 +19,7 @@ export function EveryAnalyte({ history, siteId }: { history: HistoryAnswer; site
       <SmallMultiples {...shared} series={all.slice(0, MOST)} />
       {rest.length > 0 ? (
         <details>
-          <summary className="text-link min-h-(--target) py-2 font-semibold">
+          <summary className="text-link min-h-(--target) py-2 font-semibold print:hidden">
             Show {rest.length} more {rest.length === 1 ? 'analyte' : 'analytes'}
           </summary>
           <div className="pt-4">
