@@ -4,7 +4,6 @@ import { useState } from 'react';
 import type { AuditList } from '@/lib/schemas/sites';
 import { Button } from '@/lib/ui/actions/button';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
-import { DataTable } from '@/lib/ui/show/data-table';
 import { useSubmit } from '@/lib/ui/use-submit';
 import { actInWords } from './act-words';
 
@@ -27,20 +26,24 @@ export function AuditTrail({ siteId, first, timeZone }: { siteId: string; first:
       <p className="max-w-measure text-clay">
         Every change of this site, newest first. Nobody can edit or remove a line here.
       </p>
-      <div className="w-full">
-        <DataTable
-          caption="What was done on this site"
-          hideCaption
-          rows={events}
-          rowKey={(event) => event.id}
-          empty="Nothing yet."
-          columns={[
-            { key: 'at', head: 'When', cell: (event) => when.format(new Date(event.at)) },
-            { key: 'who', head: 'Who', cell: (event) => event.person ?? 'Loamline itself' },
-            { key: 'act', head: 'What', rowHead: true, cell: (event) => actInWords(event.act) },
-          ]}
-        />
-      </div>
+      {events.length === 0 ? (
+        <p className="text-clay">Nothing yet.</p>
+      ) : (
+        <ol
+          aria-label="What was done on this site"
+          className="w-full divide-y divide-horizon-5 border-y border-horizon-5"
+        >
+          {events.map((event) => (
+            <li key={event.id} className="grid gap-x-6 py-2.5 sm:grid-cols-[minmax(0,1fr)_14rem_11rem]">
+              <span className="font-semibold">{actInWords(event.act)}</span>
+              <span className="break-words max-sm:text-sm">{event.person ?? 'Loamline itself'}</span>
+              <time dateTime={event.at} className="text-sm text-clay sm:text-right">
+                {when.format(new Date(event.at))}
+              </time>
+            </li>
+          ))}
+        </ol>
+      )}
       <ProblemNotice problem={problem} />
       {before ? (
         <Button look="quiet" busy={busy} busyLabel="Loading" onClick={() => void older()}>
