@@ -87,7 +87,7 @@ function DueRow({ due, today, focusId, onChanged }: Omit<DueListProps, 'due'> & 
         <p className="max-w-measure text-clay">{due.reason}</p>
       </div>
       {due.inDays > ACT_WITHIN_DAYS ? null : (
-        <div className="flex flex-wrap gap-2">
+        <div className={due.mayClose ? 'flex flex-wrap gap-2' : 'flex flex-wrap gap-2 max-md:-ml-4'}>
           {due.mayClose ? (
             <ConfirmButton
               title={`Already sampled ${due.plotName}?`}

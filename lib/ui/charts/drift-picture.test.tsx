@@ -38,6 +38,32 @@ describe('DriftPicture', () => {
   });
 });
 
+describe('a long source', () => {
+  it('goes on in the next line instead of off the edge', () => {
+    const band = {
+      ...phBand,
+      source: `${'A department of agriculture, its guide to reading a soil report. '.repeat(3)}Last words`,
+    };
+    const long = renderToStaticMarkup(
+      <DriftPicture
+        title="pH"
+        finding="Two tests."
+        drawnOn="Drawn 1 Jun 2026"
+        source="Tern Lane Growers"
+        fontFamily="sans-serif"
+        analyte={ph}
+        points={phBroken}
+        amendments={[]}
+        band={band}
+        asOf="2026-06-01"
+      />,
+    );
+    expect(long).toContain('Last words.');
+    const texts = [...long.matchAll(/<text[^>]*>([^<]*)/g)].map((match) => match[1] ?? '');
+    expect(Math.max(...texts.map((text) => text.length))).toBeLessThanOrEqual(130);
+  });
+});
+
 describe('wrap', () => {
   it('breaks between words and ends what does not fit in an ellipsis', () => {
     expect(wrap('one two three four', 9, 3)).toEqual(['one two', 'three', 'four']);

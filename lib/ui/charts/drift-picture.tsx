@@ -23,14 +23,17 @@ const PAD = 28;
 const HEAD = 94;
 const CHART = 410;
 const ROW = 19;
+const FOOT_ROW = 16;
 
 /** The chart as one self-contained drawing with title, key, day and source: the exported PNG, and the chart on paper. */
 export function DriftPicture({ title, finding, drawnOn, source, fontFamily, ref, ...input }: DriftPictureProps) {
   const layout = driftLayout({ ...input, width: WIDTH - PAD * 2, height: CHART });
   const rows = keyRows(input, layout);
   const keyTop = HEAD + CHART + 26;
-  const height = keyTop + rows.length * ROW + 38;
   const band = input.band === null ? '' : ` Target band: ${input.band.source}.`;
+  const foot = wrap(`${source}. ${drawnOn}.${band}`, 130, 3);
+  const footTop = keyTop + rows.length * ROW + 20;
+  const height = footTop + foot.length * FOOT_ROW + 2;
   return (
     <svg
       ref={ref}
@@ -62,9 +65,11 @@ export function DriftPicture({ title, finding, drawnOn, source, fontFamily, ref,
           </text>
         </g>
       ))}
-      <text x={PAD} y={height - 18} fontSize={12} fill={INK.clay}>
-        {source}. {drawnOn}.{band}
-      </text>
+      {foot.map((line, index) => (
+        <text key={line} x={PAD} y={footTop + index * FOOT_ROW} fontSize={12} fill={INK.clay}>
+          {line}
+        </text>
+      ))}
     </svg>
   );
 }

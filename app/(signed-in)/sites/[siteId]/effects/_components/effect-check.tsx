@@ -100,23 +100,23 @@ function Drawn({ outcome, check, ranges, target }: DrawnProps) {
   const dumbbell = dumbbellProps(outcome, analyte, ranges, target);
   const second = secondReading(outcome);
   return (
-    <div className="grid gap-7">
-      <div className={second === null ? 'max-w-3xl' : 'grid gap-7 lg:grid-cols-2'}>
-        <div className="grid content-start gap-2">
+    <div className="grid gap-7 print:block print:space-y-6">
+      <div className={second === null ? 'max-w-3xl' : 'grid gap-7 lg:grid-cols-2 print:block print:space-y-6'}>
+        <div className="grid break-inside-avoid content-start gap-2">
           <h3 className="text-base">
             {outcome.reading.withControls ? 'The change, compared with the untreated plots' : 'The change'}
           </h3>
           <IntervalStrip {...stripProps(outcome, analyte)} />
         </div>
         {second === null ? null : (
-          <div className="grid content-start gap-2">
+          <div className="grid break-inside-avoid content-start gap-2">
             <h3 className="text-base">The same without the untreated plots</h3>
             <IntervalStrip {...stripProps(outcome, analyte, second.reading)} />
           </div>
         )}
       </div>
       {dumbbell === null ? null : (
-        <div className="grid max-w-3xl gap-2">
+        <div className="grid max-w-3xl break-inside-avoid gap-2">
           <h3 className="text-base">The two tests themselves</h3>
           <Dumbbell {...dumbbell} />
         </div>

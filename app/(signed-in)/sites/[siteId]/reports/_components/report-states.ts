@@ -25,7 +25,7 @@ export function stateWord(report: Pick<Report, 'state' | 'pages' | 'pagesRead'>)
     case 'in-review':
       return 'To review';
     case 'unreadable':
-      return 'Not readable';
+      return 'Could not be read';
     case 'not-soil':
       return 'Not a soil report';
     case 'confirmed':
@@ -43,7 +43,7 @@ export const FILTER_WORDS: Record<Filter, string> = {
   all: 'All',
   review: 'To review',
   reading: 'Being read',
-  unreadable: 'Not readable',
+  unreadable: 'Could not be read',
   confirmed: 'Confirmed',
   'set-aside': 'Set aside',
 };

@@ -13,9 +13,9 @@ export const reportTitle = (report: Pick<Report, 'fileName' | 'origin'>): string
 export const STATE_WORDS: Record<Report['state'], { status: Status; word: string }> = {
   received: { status: 'waiting', word: 'Waiting to be read' },
   reading: { status: 'working', word: 'Being read' },
-  'in-review': { status: 'needs-you', word: 'In review' },
-  unreadable: { status: 'failed', word: 'Not read' },
-  'not-soil': { status: 'failed', word: 'No soil test' },
+  'in-review': { status: 'needs-you', word: 'To review' },
+  unreadable: { status: 'failed', word: 'Could not be read' },
+  'not-soil': { status: 'failed', word: 'Not a soil report' },
   confirmed: { status: 'done', word: 'Confirmed' },
   'set-aside': { status: 'off', word: 'Set aside' },
 };

@@ -138,11 +138,10 @@ export function ValuesPane({ path, review, live, readOnly, report, goTo, onCount
       </div>
       {noFile ? null : (
         <div className="pointer-events-none sticky bottom-[calc(var(--bar-bottom)+0.5rem)] z-30 mt-3 flex justify-between gap-3 px-4 md:bottom-24 lg:hidden">
-          {readOnly ? null : (
+          {readOnly || side === 'page' ? null : (
             <a
               href={`#${CONFIRM_ID}`}
               className={cx(buttonClass('quiet'), 'pointer-events-auto shadow-lift md:hidden')}
-              onClick={() => setSide('values')}
             >
               Go to the end
             </a>
