@@ -156,7 +156,8 @@ export function StripWord({
       fill={colour}
       fontWeight={bold ? 700 : 400}
       stroke={ground}
-      strokeWidth="3"
+      strokeWidth="5"
+      strokeLinejoin="round"
       paintOrder="stroke"
     >
       {children}

@@ -57,7 +57,11 @@ export function ReportRow(props: ReportRowProps) {
         ) : null}
       </div>
       <div className="md:pt-2.5">
-        <StatusWord status={STATE_MARKS[report.state]}>{stateWord(report)}</StatusWord>
+        {report.state === 'in-review' && !props.mayWork ? (
+          <StatusWord status="waiting">Not confirmed yet</StatusWord>
+        ) : (
+          <StatusWord status={STATE_MARKS[report.state]}>{stateWord(report)}</StatusWord>
+        )}
       </div>
       <div className="flex flex-wrap items-start gap-2 empty:hidden md:col-span-2">
         <RowActions {...props} name={name} />

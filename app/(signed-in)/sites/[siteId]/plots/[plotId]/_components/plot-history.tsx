@@ -91,7 +91,7 @@ export function PlotHistory({ siteId, siteName, first, mayUpload, mayRecord }: P
 function Papers({ siteId, history }: { siteId: string; history: HistoryAnswer }) {
   return (
     <div className="grid gap-5 print:block">
-      <ul className="grid max-w-measure border-y border-horizon-3">
+      <ul className="grid max-w-measure border-y print:block border-horizon-3">
         {papersOf(history).map(({ reportId, days, values }) => (
           <li key={reportId} className="border-b border-horizon-3 last:border-0">
             <a
