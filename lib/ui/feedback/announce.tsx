@@ -69,7 +69,8 @@ function useOutOfTheWay() {
       if (!box || box.height === 0 || !at || at === document.body || list.current?.contains(at)) return;
       const { top, bottom, left, right } = at.getBoundingClientRect();
       const isUnder = top < box.bottom && bottom > box.top && left < box.right && right > box.left;
-      if (isUnder) setAtTop((now) => !now);
+      // Where it stands is measured, not remembered: two looks in one frame must not send it there and back.
+      if (isUnder) setAtTop(box.top > window.innerHeight - box.bottom);
     };
     // The focus scrolls its element into view first.
     const later = () => requestAnimationFrame(look);
