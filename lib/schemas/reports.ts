@@ -35,6 +35,9 @@ export const uploadInput = z.strictObject({
   plotId: idSchema.optional(),
   asRevision: z.enum(['true', 'false']).optional(),
 });
+/** A file that waits longer than this to be read is told so: the worker may not be running. */
+export const LONG_WAIT_MS = 30_000;
+
 export const uploadAnswerSchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('received'), reportId: z.string(), fileName: z.string(), bytes: z.number() }),
   z.object({

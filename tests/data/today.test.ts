@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { membership, report, reportSample } from '@/db/schema';
 import { recordApplication } from '@/lib/data/applications/recordApplication';
@@ -7,9 +8,11 @@ import { claimMail } from '@/lib/data/mail/claimMail';
 import { settleMail } from '@/lib/data/mail/settleMail';
 import { setRule } from '@/lib/data/reminders/setRule';
 import { snoozeReminder } from '@/lib/data/reminders/snoozeReminder';
+import { getReport } from '@/lib/data/reports/getReport';
 import { acceptInvitation } from '@/lib/data/sites/acceptInvitation';
 import { createSite } from '@/lib/data/sites/createSite';
 import { invite } from '@/lib/data/sites/invite';
+import { getSiteToday } from '@/lib/data/today/getSiteToday';
 import { getToday } from '@/lib/data/today/getToday';
 import { withSite } from '@/lib/data/transaction';
 import type { PlotId } from '@/lib/domain/ids';
@@ -184,5 +187,31 @@ describe('the first page', () => {
     const after = await todayOf(newcomer);
     expect(after.invitations).toEqual([]);
     expect(after.sites.map((one) => [one.name, one.plots])).toEqual([['Asked to', 0]]);
+  });
+
+  it('says of a file unread for half a minute that it waits long, here as on its own page', async () => {
+    const fresh = await makeSite('A resting reader');
+    const ctx = await ctxAs(fresh.people.owner);
+    const sent = (id: string, secondsAgo: number) => ({
+      siteId: fresh.id,
+      id,
+      state: 'received' as const,
+      fileName: `${secondsAgo}.pdf`,
+      uploadedBy: fresh.people.owner.id,
+      uploadedAt: new Date(ctx.now.getTime() - secondsAgo * 1000),
+    });
+    const [young, old] = [randomUUID(), randomUUID()];
+    await withSite(fresh.id, (tx) => tx.insert(report).values([sent(young, 29), sent(old, 31)]));
+    const { reports } = await getSiteToday({ ctx, input: { siteId: fresh.id } });
+    expect(new Map(reports.map((one) => [one.fileName, one.waitingLong]))).toEqual(
+      new Map([
+        ['29.pdf', false],
+        ['31.pdf', true],
+      ]),
+    );
+    for (const one of reports) {
+      const own = await getReport({ ctx, input: { siteId: fresh.id, reportId: one.id } });
+      expect(own.waitingLong).toBe(one.waitingLong);
+    }
   });
 });

@@ -2,12 +2,11 @@ import { and, desc, eq, inArray, type SQL, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { laboratory, report, reportSample } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
-import type { Report } from '@/lib/schemas/reports';
+import { LONG_WAIT_MS, type Report } from '@/lib/schemas/reports';
 import { namesOf } from '../people/names';
 import { STORE_DOWN } from './giveUpReading';
 
 /** After this a report that nobody reads is worth a word: the worker may not be running. */
-const LONG_WAIT_MS = 60_000;
 const MOST = 500;
 
 type Row = { report: typeof report.$inferSelect; laboratoryName: string | null };

@@ -4,6 +4,7 @@ import { plot, report, reportSample, site } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
 import { notFound } from '@/lib/errors';
 import { nothingSchema } from '@/lib/schemas/parts';
+import { LONG_WAIT_MS } from '@/lib/schemas/reports';
 import type { TodayReport, TodaySite } from '@/lib/schemas/today';
 import { openDue } from '../reminders/openDue';
 import { siteVerb } from '../verb';
@@ -12,7 +13,6 @@ import { newestVerdicts } from './newestVerdicts';
 /** From a month before its day a reminder stands on the first page; the first letter leaves two weeks before. */
 const SHOWN_FROM_DAYS = 30;
 const REPORTS_SHOWN = 5;
-const LONG_WAIT_MS = 60_000;
 const WAITING = ['in-review', 'unreadable', 'not-soil', 'received', 'reading'] as const;
 
 async function waitingReports(tx: Transaction, siteId: SiteId, now: Date): Promise<TodayReport[]> {

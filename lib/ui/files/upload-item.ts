@@ -38,8 +38,6 @@ export type UploadStage =
 
 export const ACCEPTED_FILES = UPLOAD_ENDINGS.join(',');
 export const ATTEMPTS = 3;
-/** After this long without a page read, say so: the reader may not be running. */
-export const LONG_WAIT_MS = 30_000;
 
 export const isUnderWay = (item: UploadItem): boolean => ['queued', 'sending', 'pausing'].includes(item.stage.kind);
 

@@ -2,6 +2,7 @@
 
 import { X } from 'lucide-react';
 import { useEffect, useState } from 'react';
+import { LONG_WAIT_MS } from '@/lib/schemas/reports';
 import { Button } from '../actions/button';
 import { LinkButton } from '../actions/link-button';
 import { ProgressBar } from '../feedback/progress-bar';
@@ -10,7 +11,6 @@ import { seenOn } from './seen-on';
 import {
   ATTEMPTS,
   isUnderWay,
-  LONG_WAIT_MS,
   megabytes,
   outcomeText,
   readingText,

@@ -1,6 +1,6 @@
-import type { Report } from '@/lib/schemas/reports';
+import { LONG_WAIT_MS, type Report } from '@/lib/schemas/reports';
 import type { Status } from '@/lib/ui/feedback/status-word';
-import { isBeingRead, LONG_WAIT_MS, readingText } from '@/lib/ui/files/upload-item';
+import { isBeingRead, readingText } from '@/lib/ui/files/upload-item';
 
 type State = Report['state'];
 
