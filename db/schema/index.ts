@@ -1,4 +1,6 @@
 export * from './actions';
+export * from './batches';
 export * from './people';
 export * from './reports';
 export * from './sites';
+export * from './troubles';
