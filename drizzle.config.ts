@@ -7,6 +7,7 @@ export default defineConfig({
     './db/schema/batches.ts',
     './db/schema/people.ts',
     './db/schema/reports.ts',
+    './db/schema/sheets.ts',
     './db/schema/sites.ts',
     './db/schema/troubles.ts',
   ],

@@ -18,6 +18,7 @@ import { moment, siteColumns, siteRowsOnly } from './columns';
 import { plot, site } from './sites';
 
 export type ReportState = 'received' | 'reading' | 'in-review' | 'unreadable' | 'not-soil' | 'confirmed' | 'set-aside';
+export type ReportOrigin = 'file' | 'typed' | 'own-sheet';
 export type RowState = 'proposed' | 'edited' | 'added' | 'removed';
 export type Qualifier = '=' | '<' | '>' | 'nd' | 'trace';
 export type Box = [x0: number, y0: number, x1: number, y1: number];
@@ -66,7 +67,7 @@ export const report = pgTable(
   'report',
   {
     ...siteColumns,
-    origin: text('origin').$type<'file' | 'typed'>().notNull().default('file'),
+    origin: text('origin').$type<ReportOrigin>().notNull().default('file'),
     state: text('state').$type<ReportState>().notNull(),
     fileKey: text('file_key'),
     sha256: text('sha256'),
@@ -147,6 +148,19 @@ export type OriginalReading = {
   form: string | null;
 };
 
+export type LearntFrom = { on: string; filled: string[] };
+
+/** What one label meant in a confirmed review; the shape is that of the reading room. */
+export type LessonRow = {
+  label: string;
+  labelPrinted: string;
+  analyte: string;
+  method: string | null;
+  unit: string | null;
+  form: string | null;
+  columns: number[];
+};
+
 export const readingRow = pgTable(
   'reading_row',
   {
@@ -172,6 +186,8 @@ export const readingRow = pgTable(
     confidence: doublePrecision('confidence'),
     doubts: jsonb('doubts').$type<Doubt[]>().notNull().default([]),
     state: text('state').$type<RowState>().notNull().default('proposed'),
+    /** The confirmation this row leans on and the cells it filled; null where nothing of the layout was learnt. */
+    learnt: jsonb('learnt').$type<LearntFrom>(),
     original: jsonb('original').$type<OriginalReading>(),
     version: integer('version').notNull().default(1),
     editedBy: uuid('edited_by'),
@@ -206,6 +222,30 @@ export const recommendation = pgTable(
     primaryKey({ columns: [t.siteId, t.id] }),
     foreignKey({ columns: [t.siteId, t.reportId], foreignColumns: [report.siteId, report.id] }).onDelete('cascade'),
     siteRowsOnly('recommendation'),
+  ],
+);
+
+/** What one confirmed report taught of its layout. Withdrawing the confirmation takes the row away and no other's. */
+export const layoutMemory = pgTable(
+  'layout_memory',
+  {
+    ...siteColumns,
+    reportId: uuid('report_id').notNull(),
+    fingerprint: text('fingerprint').notNull(),
+    laboratory: text('laboratory').notNull(),
+    laboratoryPrinted: text('laboratory_printed'),
+    shape: text('shape').$type<'page-across' | 'page-down' | 'data-across' | 'data-down'>().notNull(),
+    headings: text('headings').array().notNull(),
+    lessons: jsonb('lessons').$type<LessonRow[]>().notNull(),
+    learntBy: uuid('learnt_by').notNull(),
+    learntAt: moment('learnt_at').notNull().defaultNow(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.siteId, t.id] }),
+    foreignKey({ columns: [t.siteId, t.reportId], foreignColumns: [report.siteId, report.id] }).onDelete('cascade'),
+    uniqueIndex('layout_memory_site_report_key').on(t.siteId, t.reportId),
+    index('layout_memory_site_laboratory_idx').on(t.siteId, t.laboratory, t.learntAt.desc()),
+    siteRowsOnly('layout_memory'),
   ],
 );
 
