@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { ANALYTE_KEYS, isMethodKey, isUnitKey } from '@/lib/domain/analytes';
+import { learntSchema } from './learning';
 import { daySchema, decimalSchema, idSchema, lineSchema, momentSchema, remarkSchema, versionSchema } from './parts';
 import { plotSchema } from './plots';
 import { laboratorySchema, reportSchema } from './reports';
@@ -101,6 +102,8 @@ export const rowSchema = z.object({
     .object({ sheet: z.union([z.string(), z.number()]).nullable(), row: z.number(), column: z.number() })
     .nullable(),
   confidence: z.number().nullable(),
+  /** The earlier confirmation of this layout that the row leans on. */
+  learnt: learntSchema.nullable(),
   doubts: z.array(remarkSchema),
   /** Worth a look: it has a doubt, or the reader was not sure and nobody has checked it. */
   doubtful: z.boolean(),

@@ -113,4 +113,6 @@ export const EXPECTED_GUARDS: Record<string, string> = {
   'POST /sites/[siteId]/reports/[reportId]/withdraw': 'reading.decide',
   'POST /sites/[siteId]/reports/[reportId]/read-again': 'reading.decide',
   'POST /sites/[siteId]/uploads': 'reading.work',
+  'GET /sites/[siteId]/layouts': 'reading.work',
+  'DELETE /sites/[siteId]/layouts/[layoutId]': 'reading.decide',
 };

@@ -4,6 +4,7 @@ import {
   application,
   invitation,
   laboratory,
+  layoutMemory,
   membership,
   plan,
   planIntent,
@@ -146,6 +147,21 @@ export async function makeParams(site: TestSite, author: TestPerson = site.peopl
         .returning(),
     );
     await tx.insert(target).values({ siteId, targetSetId: set.id, analyte: 'ph-water', low: '6.2', high: '6.8' });
+    const learnt = one(
+      await tx
+        .insert(layoutMemory)
+        .values({
+          siteId,
+          reportId,
+          fingerprint: 'f',
+          laboratory: 'hollin vale soils',
+          shape: 'page-down',
+          headings: ['ph', 'p'],
+          lessons: [],
+          learntBy: owner,
+        })
+        .returning(),
+    );
     const params: Record<string, string> = {
       siteId,
       plotId,
@@ -156,6 +172,7 @@ export async function makeParams(site: TestSite, author: TestPerson = site.peopl
       sampleId: bag.id,
       reportId,
       reportSampleId: printed.id,
+      layoutId: learnt.id,
       rowId: row.id,
       resultId: measured.id,
       planId: adopted.id,

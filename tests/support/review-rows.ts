@@ -48,6 +48,7 @@ export const makeRow = (id: string, more: Partial<ReviewRow> = {}): ReviewRow =>
   box: [0.1, 0.1, 0.2, 0.12],
   cell: null,
   confidence: 0.99,
+  learnt: null,
   doubts: [],
   doubtful: false,
   impossible: null,

@@ -5,7 +5,8 @@ import { asSiteId } from '@/lib/domain/ids';
 import { READER_VERSION, type Reading } from '@/lib/reading/types';
 import { audit } from '../audit';
 import { findOrMakeLaboratory } from '../laboratories/findOrMakeLaboratory';
-import { withSite } from '../transaction';
+import { recallLayout } from '../learning/recallLayout';
+import { enqueue, withSite } from '../transaction';
 import { workerVerb } from '../verb';
 import { held, leaseSchema } from './lease';
 import { outcomeOf } from './readingOutcome';
@@ -42,10 +43,16 @@ export const saveReading = workerVerb({
             .set({ laboratoryId })
             .where(and(eq(report.siteId, siteId), eq(report.id, row.id)));
         }
-        await writeReadingRows(tx, ctx, siteId, row, reading);
+        const recalled = await recallLayout(tx, siteId, reading);
+        await tx
+          .update(report)
+          .set({ layoutFingerprint: recalled.fingerprint })
+          .where(and(eq(report.siteId, siteId), eq(report.id, row.id)));
+        await writeReadingRows(tx, ctx, siteId, row, recalled.reading);
       }
       const detail = { state: outcome.state, samples: reading.samples.length, refusal: outcome.refusal?.code ?? null };
       await audit(tx, ctx, siteId, { act: 'report.read', objectKind: 'report', objectId: row.id, detail });
+      await enqueue(tx, 'tell-report', { siteId, id: row.id });
       return true;
     });
   },

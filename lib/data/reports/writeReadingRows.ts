@@ -3,7 +3,8 @@ import type { Transaction } from '@/db/client';
 import { readingRow, recommendation, reportSample } from '@/db/schema';
 import { addDays, parseDay } from '@/lib/domain/days';
 import type { SiteId } from '@/lib/domain/ids';
-import type { Depth, Reading, ReadResult, ReadSample } from '@/lib/reading/types';
+import type { LearntReading, LearntResult, LearntSample } from '@/lib/reading/memory/apply';
+import type { Depth } from '@/lib/reading/types';
 import type { Ctx } from '../context';
 import { dayOf } from '../days';
 import type { ReportRow } from './getReportInSite';
@@ -35,7 +36,7 @@ type SampleValues = Omit<typeof reportSample.$inferInsert, 'id'>;
 function sampleValues(
   reportRow: ReportRow,
   ctx: Ctx,
-  sample: ReadSample,
+  sample: LearntSample,
   at: number,
   plotId: string | null,
 ): SampleValues {
@@ -69,7 +70,7 @@ function numberBags(samples: SampleValues[]): void {
   }
 }
 
-function rowValues(reportRow: ReportRow, reportSampleId: string, read: ReadResult, ordinal: number) {
+function rowValues(reportRow: ReportRow, reportSampleId: string, read: LearntResult, ordinal: number) {
   return {
     siteId: reportRow.siteId,
     reportId: reportRow.id,
@@ -91,6 +92,7 @@ function rowValues(reportRow: ReportRow, reportSampleId: string, read: ReadResul
     box: read.box === null ? null : ([...read.box] as [number, number, number, number]),
     cell: read.cell === null ? null : { ...read.cell, sheet: String(read.cell.sheet) },
     confidence: read.confidence,
+    learnt: read.learnt ? { on: read.learnt.on, filled: [...read.learnt.filled] } : null,
     doubts: read.doubts.map(({ code, sentence }) => ({ code, sentence })),
   };
 }
@@ -101,7 +103,7 @@ export async function writeReadingRows(
   ctx: Ctx,
   siteId: SiteId,
   reportRow: ReportRow,
-  reading: Reading,
+  reading: LearntReading,
 ): Promise<void> {
   const ofReport = { siteId, reportId: reportRow.id };
   await tx

@@ -1,5 +1,6 @@
 import { Problem } from '@/lib/errors';
 import { confirmInput } from '@/lib/schemas/review';
+import { learnFromReport } from '../learning/learnFromReport';
 import { lockPlots } from '../plots/lockPlots';
 import { refreshReminders } from '../reminders/refreshReminders';
 import { holdReportsOf } from '../reports/holdReportsOf';
@@ -46,6 +47,7 @@ export const confirmReport = siteVerb({
       });
     }
     const results = await writeResults({ tx, ctx, siteId, person, report: row, samples: counted, rows });
+    await learnFromReport({ tx, ctx, siteId, person, report: row, samples: counted, rows });
     await audit({
       act: 'report.confirm',
       objectKind: 'report',

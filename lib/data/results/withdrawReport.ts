@@ -2,6 +2,7 @@ import { and, eq, inArray, isNull, ne } from 'drizzle-orm';
 import { report, reportSample, result } from '@/db/schema';
 import { Problem } from '@/lib/errors';
 import { reportReasonInput } from '@/lib/schemas/reports';
+import { unlearnReport } from '../learning/learnFromReport';
 import { lockPlots } from '../plots/lockPlots';
 import { refreshReminders } from '../reminders/refreshReminders';
 import { moveReport } from '../reports/moveReport';
@@ -68,6 +69,7 @@ export const withdrawReport = siteVerb({
               ),
             )
             .returning({ id: result.id });
+    await unlearnReport(tx, siteId, reportId);
     const detail = { reason, results: gone.length };
     await audit({ act: 'report.withdraw', objectKind: 'report', objectId: reportId, detail });
     for (const plotId of plotIds) await refreshReminders(tx, ctx, siteId, plotId);
