@@ -1,13 +1,13 @@
 import { assemble } from './assemble';
 import { type Candidate, type Identity, remark, type SamplePart } from './candidate';
-import { samplesAcross } from './stages/across';
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
 import { type IdentityHit, identityHits } from './stages/identity';
 import { type Line, linesOf } from './stages/lines';
-import { type ListRow, listRows, type RoleHeader } from './stages/list';
+import { type ListRow, listRows, type NotTaken, type Run } from './stages/down';
 import { rowsOfTable, type Table, type TableRow, tablesOf } from './stages/matrix';
+import { type ProseRefusal, paragraphsOf, proseRows } from './stages/prose';
 import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommendations';
 import {
   laboratoryName,
@@ -19,7 +19,7 @@ import {
   zoneAt,
   zonesOf,
 } from './stages/sections';
-import { numberStyle } from './stages/values';
+import { type NumberStyle, numberStyle } from './stages/values';
 import { type Upright, uprightWords } from './stages/words';
 import { type Page, type Reading, type Remark, refusedReading } from './types';
 
@@ -30,11 +30,16 @@ export type Trace = {
   readonly zones: readonly ZoneBox[];
   readonly tables: readonly Table[];
   readonly listRows: readonly ListRow[];
-  readonly roleHeaders: readonly RoleHeader[];
+  readonly runs: readonly Run[];
+  readonly notTaken: readonly NotTaken[];
+  readonly proseRefused: readonly ProseRefusal[];
   readonly identity: readonly IdentityHit[];
   readonly contexts: readonly Context[];
   readonly statements: Statements;
 };
+
+/** A letter tells its numbers in sentences; a report with tables repeats them there, or speaks of soils in general. */
+const ENOUGH_WITHOUT_SENTENCES = 4;
 
 const NO_TEXT = remark(
   'no-text-layer',
@@ -124,10 +129,10 @@ function soilPages(
   return { soil, other };
 }
 
-function traced(pages: readonly Upright[]): { lines: CellLine[]; texts: string[] } {
+function traced(pages: readonly Upright[]): { lines: CellLine[]; texts: string[]; style: NumberStyle } {
   const plain: Line[] = pages.flatMap((page) => linesOf(page));
   const style = numberStyle(pages.flatMap((page) => page.words.map((word) => word.text)));
-  return { lines: cellsOf(plain, style), texts: plain.map((line) => line.text) };
+  return { lines: cellsOf(plain, style), texts: plain.map((line) => line.text), style };
 }
 
 /**
@@ -145,7 +150,7 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const bare = upright.filter((page) => page.words.length < 3);
   if (bare.length === upright.length)
     return { reading: refusedReading({ file, pages: count, error: NO_TEXT }), trace: null };
-  const { lines, texts } = traced(upright);
+  const { lines, texts, style } = traced(upright);
   const { soil, other } = soilPages(lines, upright);
   const warnings: Remark[] = [];
   if (bare.length > 0)
@@ -172,13 +177,19 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const tables = tablesOf(results);
   const taken = new Set(tables.flatMap((table) => [...table.header, ...table.rows]));
   const tableRows = tables.flatMap((table) => rowsOfTable(table));
-  const across = samplesAcross(results.filter((line) => !taken.has(line)));
-  const list = listRows(results, taken, across);
-  for (const line of across.flatMap((one) => one.lines)) taken.add(line);
+  const list = listRows(results, taken);
+  for (const run of list.runs) for (const line of run.sampleLines) taken.add(line);
+  const structured = list.rows.length + tableRows.reduce((sum, row) => sum + row.candidates.length, 0);
+  const prose =
+    structured < ENOUGH_WITHOUT_SENTENCES
+      ? proseRows(paragraphsOf(results, taken), style)
+      : { rows: [], refused: [] };
+  const toldAlready = new Set(list.rows.map((row) => row.candidate.label.analyte));
+  const rows = [...list.rows, ...prose.rows.filter((row) => !toldAlready.has(row.candidate.label.analyte))];
   const hits = identityHits(ofSoil, taken);
   const contexts = contextsOf(hits);
   const statements = statementsOf(texts);
-  const parts = partsOf(tableRows, list.rows, contexts);
+  const parts = partsOf(tableRows, rows, contexts);
   const dateTexts = texts.filter((text) => ANY_DATE.test(text));
   const { samples, warnings: found } = assemble({ parts, statements, dateTexts });
   const trace: Trace = {
@@ -186,8 +197,10 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
     lines,
     zones,
     tables,
-    listRows: list.rows,
-    roleHeaders: list.headers,
+    listRows: rows,
+    proseRefused: prose.refused,
+    runs: list.runs,
+    notTaken: list.notTaken,
     identity: hits,
     contexts,
     statements,

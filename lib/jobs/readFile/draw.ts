@@ -46,13 +46,16 @@ function drawPage(trace: Trace, number: number, reading: Reading): string {
       );
     }
   }
-  for (const header of trace.roleHeaders.filter((one) => one.line.line.page === page)) {
-    for (const span of header.spans)
+  for (const run of trace.runs) {
+    const lines = run.segments.map((segment) => segment.line.line).filter((line) => line.page === page);
+    if (lines.length === 0) continue;
+    const [y0, y1] = [Math.min(...lines.map((line) => line.y0)), Math.max(...lines.map((line) => line.y1))];
+    for (const column of run.columns)
       shapes.push(
         rect(
-          { ...span, y0: header.line.line.y0, y1: header.line.line.y1 },
-          'fill="none" stroke="#808" stroke-width="0.7"',
-          span.role,
+          { x0: column.x0, x1: column.x1, y0, y1 },
+          'fill="#808" fill-opacity="0.06" stroke="#808" stroke-width="0.5"',
+          `${column.heading}: ${column.role ?? '?'} ${column.unit?.unit ?? ''}`,
         ),
       );
   }

@@ -1,4 +1,5 @@
 import { type AnalyteKey, analyte, type MethodKey, methodsOf, type UnitKey } from '@/lib/domain/analytes';
+import { describedName } from './described';
 import { METHOD_SPELLINGS, NAMES, UNIT_SPELLINGS } from './dictionary';
 import { findWhole, normal } from './normal';
 import { remembered } from './remember';
@@ -75,7 +76,22 @@ export function methodIn(key: AnalyteKey, text: string): { method: MethodKey; pr
     if (wanted.length <= (best?.length ?? 0)) continue;
     if (findWhole(plain, wanted) >= 0) best = { method, printed: spelling, length: wanted.length };
   }
-  return best;
+  return best ?? suspension(key, text);
+}
+
+const SUSPENSIONS: Readonly<Record<string, MethodKey>> = {
+  '1': '1:1_water',
+  '2': '1:2_water',
+  '2.5': '1:2.5_water',
+  '5': '1:5_water',
+};
+
+/** "pH (H2O, 1:5)": soil to water, in whatever words stand around it. */
+function suspension(key: AnalyteKey, text: string): { method: MethodKey; printed: string; length: number } | null {
+  if (key !== 'soil_ph_water') return null;
+  const match = /(?<![\d.:])1 ?[:/] ?(1|2\.5|2|5)(?![\d.:])/.exec(text);
+  const method = SUSPENSIONS[match?.[1] ?? ''];
+  return match === null || method === undefined ? null : { method, printed: match[0], length: match[0].length };
 }
 
 function cutMethods(text: string): string {
@@ -168,6 +184,27 @@ function formOf(key: AnalyteKey, text: string): { form: string | null; doubt: st
   };
 }
 
+const CHANGES =
+  /recommend|needed|target|optimum|desired|require|ratio|apply|previous|last|goal|want|removal|uptake|goal/i;
+
+/** "Salt (EC 1:5)" or "Copper (nitric digest)": one side of the brackets is the name, the other a few harmless words. */
+function besideBrackets(raw: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null {
+  const match = /^([^()]+)\(([^()]+)\)\s*$/.exec(raw);
+  if (match === null || CHANGES.test(raw)) return null;
+  const [outside, inside] = [(match[1] ?? '').trim(), (match[2] ?? '').trim()];
+  if (outside.split(' ').length > 4 || inside.split(' ').length > 5) return null;
+  const sides = [outside, inside].map((part) => {
+    const plain = normal(part);
+    return lookUp(plain, part) ?? lookUp(cutMethods(plain), part) ?? describedName(part, (name) => lookUp(name, part));
+  });
+  const [one, other] = sides;
+  if (one != null && other != null) return one.analyte === other.analyte ? { ...one, strength: 0.96 } : null;
+  const found = one ?? other ?? null;
+  // A bare symbol in brackets after unknown words ("Free lime (S)") proves nothing.
+  if (found === null || (one == null && inside.length < 2)) return null;
+  return { ...found, strength: 0.93 };
+}
+
 /** A target range inside a label ("Phosphorus (25-50 ppm)") is no part of the name. */
 const RANGE_IN_LABEL = /\(\s*[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*[^)]*\)/g;
 
@@ -187,7 +224,10 @@ const nameIn = remembered(
     const fourth = bare === withoutMethod ? null : lookUp(bare, raw);
     if (fourth !== null) return { ...fourth, strength: 0.96 };
     const same = twoNames(withoutUnit) ?? sameInAllParts(raw);
-    return same === null ? null : { analyte: same, strength: 0.97, ambiguous: null };
+    if (same !== null) return { analyte: same, strength: 0.97, ambiguous: null };
+    const described = describedName(withoutUnit, (plain) => lookUp(plain, raw));
+    if (described !== null) return { ...described, strength: 0.955 };
+    return besideBrackets(raw);
   },
 );
 
@@ -203,10 +243,18 @@ export function readLabel(text: string, captions: readonly string[] = []): Label
   const all = around.join(' ');
   let key = named.analyte;
   const share = SHARES[key];
-  if (share !== undefined && (unit?.unit === '%' || /saturation|% of cec|of exchangeable bases/i.test(all))) {
+  if (
+    share !== undefined &&
+    (unit?.unit === '%' || /saturation|\bof cec\b|of exchangeable bases|\bof bases\b/i.test(all))
+  ) {
     if (!/total/i.test(text)) key = share;
   }
   if (key === 'ec' && unit?.unit === 'mg/kg') key = 'tss';
+  if (
+    key === 'soil_ph_water' &&
+    /cacl ?2|calcium chloride|\bkcl\b|potassium chloride|\bsalt\b/i.test(all.normalize('NFKC'))
+  )
+    key = 'soil_ph_salt';
   const method = around.map((part) => methodIn(key, part)).find((found) => found !== null) ?? null;
   const { form, doubt } = formOf(key, text);
   return {

@@ -26,6 +26,7 @@ export function clean(text: string): string {
       // biome-ignore lint/suspicious/noControlCharactersInRegex: these are what is being removed
       .replace(/[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u202a-\u202e\u2066-\u2069\ufeff]/g, ' ')
       .replace(/\u00a0/g, ' ')
+      .replace(/[\u2010\u2011\u2212]/g, '-')
       .replace(/\s+/g, ' ')
       .trim()
   );

@@ -1,5 +1,6 @@
 import { readLabel } from '../labels/label';
 import { type Line, type Phrase, phraseOf } from './lines';
+import { roleOf } from './roles';
 import { type CellMeaning, type NumberStyle, readCell } from './values';
 
 export type PageCell = { readonly phrase: Phrase; readonly meaning: CellMeaning };
@@ -19,6 +20,24 @@ function wordsText(phrase: Phrase, from: number, to?: number): string {
     .join(' ');
 }
 
+/** "pH in 0.01 M", "Mehlich 3", "Bray 1": the number is a part of the name. */
+function belongsToName(left: string, number: string, whole: string): boolean {
+  if (/[:=]$/.test(left)) return false;
+  if (/\b(in|with|by|at|of|to|per|no\.?|page)$/i.test(left)) return true;
+  if (/^\d*\.?\d+ ?[MN]( |$)/.test(number)) return true;
+  return (
+    /\b(mehlich|bray|p|m|morgan|method|olsen)-?$/i.test(left) &&
+    /^[-]?(1|2|3|i{1,3})\b(?!\.)/i.test(number) &&
+    readLabel(whole) !== null
+  );
+}
+
+/** "Found 34", "Desired: 50": a word for the number and nothing else. */
+function saysRole(left: string): boolean {
+  const role = roleOf(left, false);
+  return role === 'result' || role === 'desired' || role === 'previous' || role === 'difference';
+}
+
 /** "Soil pH: 6.4" set with one blank is a label and a value; several numbers set close together are several cells. */
 function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
   const count = phrase.words.length;
@@ -32,7 +51,9 @@ function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
     const right = readCell(wordsText(phrase, at), style).kind;
     if (right !== 'value' && right !== 'none' && right !== 'range') continue;
     const left = wordsText(phrase, 0, at).replace(/[:=]$/, '');
-    if (readLabel(left) !== null) return cut(phrase, at);
+    const number = wordsText(phrase, at);
+    if (belongsToName(left, number, phrase.text)) continue;
+    if (readLabel(left) !== null || (right === 'value' && saysRole(left))) return cut(phrase, at);
   }
   return [phrase];
 }

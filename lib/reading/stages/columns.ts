@@ -166,6 +166,14 @@ function meaningOf(stack: Stack, first: boolean): Column {
     unexplained = 1;
     if (label !== null) label = { ...label, strength: Math.min(label.strength, 0.9) };
   }
+  // "Phosphorus" over the two columns "M3" and "Bray": the caption is the name, the column's own words the method or unit.
+  if (label === null && stack.own.length > 0) {
+    const caption = stack.captions.findLast((text) => (readLabel(text)?.strength ?? 0) >= 0.97);
+    if (caption !== undefined && roleOf(heading, false) === null) {
+      const joined = readLabel(`${caption} ${heading}`, stack.captions);
+      if (joined !== null) label = { ...joined, strength: Math.min(joined.strength, 0.97) };
+    }
+  }
   const fields = stack.own.map((_, drop) => fieldOf(stack.own.slice(drop).join(' ')));
   const field = fields.find((found) => found !== null) ?? null;
   const all = [...stack.captions, heading].join(' ');

@@ -3,7 +3,7 @@ import { readLabel } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { type Column, columnsOf, headerScore, spansOf } from './columns';
 import { fieldWithValue } from './identity';
-import { JUST_RESULT, NOT_A_SAMPLE } from './roles';
+import { JUST_RESULT, NOT_A_SAMPLE, roleOf } from './roles';
 import { storedBox } from './words';
 
 export type Table = {
@@ -131,6 +131,10 @@ function borrow(
 }
 
 function isRatingRow(line: CellLine): boolean {
+  if (line.values > 0) return false;
+  const [first, ...rest] = line.cells;
+  const named = first !== undefined && rest.length > 0 && roleOf(first.phrase.text, false) === 'rating';
+  if (named) return rest.every((cell) => cell.phrase.text.length <= 16);
   const ratings = line.cells.filter((cell) => cell.meaning.kind === 'rating').length;
   return ratings > 0 && ratings >= 0.6 * line.cells.length && line.values === 0;
 }
@@ -232,7 +236,11 @@ export function rowsOfTable(table: Table): TableRow[] {
         cell,
         column,
         table,
-        under?.meaning.kind === 'rating' ? under.meaning.rating : null,
+        under?.meaning.kind === 'rating'
+          ? under.meaning.rating
+          : under?.meaning.kind === 'text'
+            ? under.phrase.text
+            : null,
       );
       if (candidate !== null) candidates.push(candidate);
     }

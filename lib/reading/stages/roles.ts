@@ -21,7 +21,10 @@ const ROLES: readonly (readonly [Role, RegExp])[] = [
   ['difference', /\b(deficit|difference|short(fall|age)?|surplus|excess|change|needed)\b/i],
   ['previous', /\b(previous|last (test|year|result|sample|season|time)|prior|earlier|past|history)\b/i],
   ['desired', /\b(desired|optimum|optimal|target|ideal|sufficien(t|cy)|normal|guide(line)?|wanted|goal|range)\b/i],
-  ['rating', /^(rating|interpretation|status|class|category|rank|level rating|soil level|rtg\.?)$/i],
+  [
+    'rating',
+    /^((soil |fertility |nutrient |supply )?(rating|interpretation|status|class|category|rank|grade|group|comment|remark|evaluation|assessment|rtg\.?)s?|level rating|soil level|rate)$/i,
+  ],
   [
     'result',
     /^((your|soil|lab|laboratory|test|this|current|present|new|actual|amount) )*(results?|found|level( found)?|value( found)?|values|test|soil test|measured|actual|reading|current|concentration|amount|analysis result|your (soil|garden|bed|plot|sample)|this (year|test|sample))$/i,

@@ -78,6 +78,19 @@ type Tail = { rating: string | null; unit: UnitKey | null; unitPrinted: string |
 /** What may follow the number in its own cell: a rating, a unit, a footnote mark, or unit and rating. */
 function tailOf(rest: string): Tail | null {
   const text = rest.replace(/[*†‡§^]+\d?/g, '').trim();
+  const aside = /^(.*?)\s*\(([^()]{1,40})\)$/.exec(text);
+  if (aside !== null && ratingIn(text) === null && unitOnly(text) === null) {
+    const before = tailOf(aside[1] ?? '');
+    const rating = ratingIn(aside[2] ?? '');
+    const unit = before?.unit == null ? unitOnly(aside[2] ?? '') : null;
+    return before === null
+      ? null
+      : {
+          rating: before.rating ?? rating,
+          unit: before.unit ?? unit?.unit ?? null,
+          unitPrinted: before.unitPrinted ?? unit?.printed ?? null,
+        };
+  }
   if (text === '') return { rating: null, unit: null, unitPrinted: null };
   const rating = ratingIn(text);
   if (rating !== null) return { rating, unit: null, unitPrinted: null };
