@@ -1,4 +1,4 @@
-import { CircleAlert, CloudOff, Eye, GitCompareArrows } from 'lucide-react';
+import { CircleAlert, CloudOff, Eye, GitCompareArrows, History } from 'lucide-react';
 import { BusyMark, Button } from '../actions/button';
 import type { CellView } from './cell-view';
 import type { GridCellRef, GridCellState } from './types';
@@ -15,7 +15,7 @@ const ICON = 'mt-px size-3.5 flex-none';
 
 /** What is to be said about a cell, always icon + word + reason; the cell points here with aria-describedby. */
 export function CellNotes({ view, id, toTheRight = false }: { view: CellView; id: string; toTheRight?: boolean }) {
-  const { state, doubts } = view;
+  const { state, doubts, note } = view;
   return (
     <div id={id} className={toTheRight ? 'grid justify-items-end' : undefined}>
       {state.kind === 'invalid' ? (
@@ -62,12 +62,18 @@ export function CellNotes({ view, id, toTheRight = false }: { view: CellView; id
           </span>
         </p>
       ))}
+      {note ? (
+        <p className={`${LINE} text-clay`}>
+          <History aria-hidden="true" className={ICON} />
+          <span>{note}</span>
+        </p>
+      ) : null}
     </div>
   );
 }
 
 export function hasNotes(view: CellView): boolean {
-  return view.doubts.length > 0 || view.state.kind !== 'saved';
+  return view.note !== undefined || view.doubts.length > 0 || view.state.kind !== 'saved';
 }
 
 export function ConflictChoice({

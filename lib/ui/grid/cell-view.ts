@@ -10,6 +10,7 @@ export interface CellView {
   readonly shown: string;
   readonly state: OverlayCell['state'];
   readonly doubts: readonly GridDoubt[];
+  readonly note: string | undefined;
   readonly editable: boolean;
   readonly subtitle: string | undefined;
   /** "pH, Value": what a field or cell is called. */
@@ -40,6 +41,7 @@ export function viewOf(input: {
     state: over?.state ?? row.states?.[column.id] ?? SAVED,
     // A value just typed is no longer the one that was doubted.
     doubts: over ? NO_DOUBTS : (row.doubts?.[column.id] ?? NO_DOUBTS),
+    note: over ? undefined : row.notes?.[column.id],
     editable: isEditable(column, row, readOnly),
     subtitle: column.id === header?.id ? row.subtitle : undefined,
     name:

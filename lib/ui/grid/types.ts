@@ -59,6 +59,8 @@ export interface GridRow {
   /** Cell text by column id; a missing entry is an empty cell. */
   readonly cells: Readonly<Record<string, string>>;
   readonly doubts?: Readonly<Record<string, readonly GridDoubt[]>>;
+  /** A quiet word below a cell, by column id: where its value comes from when not from the page. */
+  readonly notes?: Readonly<Record<string, string>>;
   readonly states?: Readonly<Record<string, GridCellState>>;
   readonly readOnly?: boolean;
   /** The row's version for concurrent edits; sent with each edit. */

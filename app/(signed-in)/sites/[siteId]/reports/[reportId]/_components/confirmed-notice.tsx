@@ -31,6 +31,16 @@ export function ConfirmedNotice({ siteId, review, report }: { siteId: string; re
         </span>
       ))}
       {values > 0 ? '. They do not change any more; a wrong confirmation can be withdrawn with a reason.' : ''}
+      {report.origin === 'file' ? (
+        <>
+          {' '}
+          What its labels meant is kept for the next report of this form:{' '}
+          <Link className="text-link inline-block py-1" href={`/sites/${siteId}/reports/learnt`}>
+            what was learnt
+          </Link>
+          .
+        </>
+      ) : null}
     </Notice>
   );
 }

@@ -1,4 +1,5 @@
 import { ANALYTES, analyte, isAnalyteKey, METHODS, methodsOf, UNITS } from '@/lib/domain/analytes';
+import { asDay, dayInWords } from '@/lib/domain/days';
 import type { Review, ReviewRow, ReviewSample } from '@/lib/schemas/review';
 import { readValueText, VALUE_TEXT_REASONS } from '@/lib/schemas/valueText';
 import type { GridColumn, GridDoubt, GridOption, GridRow } from '@/lib/ui/grid/types';
@@ -59,6 +60,9 @@ const DOUBT_OF_CELL: Readonly<Record<string, CellId>> = {
   'unit-missing': 'unit',
   'unit-unusual': 'unit',
   'unit-from-statement': 'unit',
+  'unit-changed': 'unit',
+  'area-unit-light-soil': 'unit',
+  'method-changed': 'method',
   'method-missing': 'method',
   'ph-method-missing': 'method',
   'name-ambiguous': 'analyte',
@@ -87,7 +91,30 @@ export function doubtsOf(row: ReviewRow): Record<string, GridDoubt[]> {
   return found;
 }
 
+const learntDay = (row: ReviewRow): string | null => (row.learnt === null ? null : dayInWords(asDay(row.learnt.on)));
+
+/** Under each cell that the page left open and an earlier confirmation of the layout answers. */
+export function notesOf(row: ReviewRow): Record<string, string> {
+  const day = learntDay(row);
+  if (day === null || row.learnt === null) return {};
+  const words = `as you confirmed on ${day}`;
+  const untouched = (cell: CellId) => row.original === null || (cell !== 'value' && row.original[cell] === row[cell]);
+  return Object.fromEntries(
+    row.learnt.filled
+      .filter(isCellId)
+      .filter(untouched)
+      .map((cell) => [cell, words]),
+  );
+}
+
 export function placeOf(row: ReviewRow): string {
+  const day = learntDay(row);
+  return day === null || row.learnt?.filled.length
+    ? printedPlace(row)
+    : `${printedPlace(row)}, as you confirmed on ${day}`;
+}
+
+function printedPlace(row: ReviewRow): string {
   if (row.page !== null && row.box !== null) return `Page ${row.page}`;
   if (row.cell) return `Line ${row.cell.row}, column ${row.cell.column}`;
   return 'Entered by hand';
@@ -110,6 +137,7 @@ export function toGridRow(row: ReviewRow, subtitle: string | undefined): GridRow
     ...(subtitle ? { subtitle } : {}),
     cells,
     doubts: doubtsOf(row),
+    notes: notesOf(row),
     options: { method: methodOptions(row) },
     place: placeOf(row),
   };

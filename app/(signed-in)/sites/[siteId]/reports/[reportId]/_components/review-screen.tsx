@@ -12,6 +12,7 @@ import { Advice } from './advice';
 import { ConfirmBar } from './confirm-bar';
 import { ConfirmedNotice } from './confirmed-notice';
 import { depthUnit } from './depth-units';
+import { ReadWithMemory } from './read-with-memory';
 import { sampleFieldId } from './sample-card';
 import { SamplesStrip } from './samples-strip';
 import type { ReportScreenProps } from './screen-props';
@@ -63,6 +64,7 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
             {report.withdrawnReason}
           </Notice>
         ) : null}
+        {report.state === 'in-review' ? <ReadWithMemory siteId={siteId} review={review} /> : null}
         {report.warnings.length > 0 && report.state === 'in-review' ? (
           <Notice tone="look" title="What the reader noticed">
             <ul>
