@@ -1,18 +1,28 @@
 import { assemble } from './assemble';
-import { remark } from './candidate';
-import { decode } from './csv/decode';
-import { type Grid, gridOf } from './csv/grid';
-import { headerRow } from './csv/headings';
-import { listShape, longShape, matrixShape, type Shape, titleIdentity } from './csv/shapes';
+import { type Identity, remark, type SamplePart } from './candidate';
 import { NO_RESULTS } from './readPages';
-import { withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
-import { SOIL_WORDS, statementsOf } from './stages/sections';
-import { numberStyle } from './stages/values';
+import type { Statements } from './stages/sections';
+import { type NumberStyle, numberStyle } from './stages/values';
+import { decode } from './table/decode';
+import { gridOf } from './table/grid';
+import { joinSamples } from './table/joinSamples';
+import { materialByNumbers, materialOf } from './table/material';
+import { readSheet, type SheetReading, type Untaken, untakenOf } from './table/sheet';
+import type { Merge, Sheet } from './table/types';
 import { type Reading, type Remark, refusedReading } from './types';
 
 export const MAX_ROWS = 20_000;
 export const MAX_COLUMNS = 1_000;
+
+export type { Merge, Sheet, Untaken };
+
+/** What the reader saw of a data file, kept so that a person can see why a number was taken or left. */
+export type TableTrace = {
+  readonly sheets: readonly SheetReading[];
+  /** Every number that is no result, with the reason. */
+  readonly untaken: readonly Untaken[];
+};
 
 const TOO_LARGE = (what: string) =>
   remark('table-too-large', `This file has more than ${what}. It is kept; cut it into smaller files and upload those.`);
@@ -22,88 +32,135 @@ const BINARY = remark(
 );
 const EMPTY = remark('empty', 'This file is empty. Save it again at the laboratory page and upload it once more.');
 
-const OTHER_MATERIAL: readonly (readonly [string, RegExp])[] = [
-  ['a plant tissue test', /\b(plant tissue|tissue (test|analysis)|petiole|leaf (analysis|tissue)|plant analysis)\b/i],
-  ['a water test', /\b(water (analysis|test|quality)|irrigation water)\b/i],
-  ['a compost or manure test', /\b(compost|manure) (analysis|test)\b/i],
-];
+export type TableInput = {
+  readonly fileName: string;
+  /** Days of a sheet's cells, as ISO and as the sheet shows them. */
+  readonly shownDates?: ReadonlyMap<string, string>;
+  readonly warnings?: readonly Remark[];
+} & ({ readonly bytes: Uint8Array } | { readonly text: string } | { readonly sheets: readonly Sheet[] });
 
-function shapeOf(grid: Grid, style: { decimalComma: boolean }): { shape: Shape; titleRows: number } | null {
-  const long = longShape(grid, style);
-  if (long !== null) return { shape: long.shape, titleRows: long.header };
-  const header = headerRow(grid);
-  const matrix = header === null ? null : matrixShape(grid, header, style);
-  const list = listShape(grid, style);
-  const count = (shape: Shape | null) => shape?.parts.reduce((sum, part) => sum + part.candidates.length, 0) ?? 0;
-  if (matrix !== null && header !== null && count(matrix) >= count(list))
-    return { shape: matrix, titleRows: header.row };
-  return list === null ? null : { shape: list, titleRows: grid.length };
+type Opened = { ok: true; sheets: readonly Sheet[]; delimiter: string | null } | { ok: false; error: Remark };
+
+function opened(input: TableInput): Opened {
+  if ('sheets' in input) {
+    const empty = input.sheets.every((sheet) => sheet.grid.every((row) => row.every((cell) => cell === '')));
+    return empty ? { ok: false, error: EMPTY } : { ok: true, sheets: input.sheets, delimiter: null };
+  }
+  const decoded = 'text' in input ? { ok: true as const, text: input.text } : decode(input.bytes);
+  if (!decoded.ok) return { ok: false, error: BINARY };
+  if (decoded.text.replace(/^\ufeff/, '').trim() === '') return { ok: false, error: EMPTY };
+  const { grid, delimiter } = gridOf(decoded.text);
+  return { ok: true, sheets: [{ number: 1, name: null, grid, merges: [] }], delimiter };
 }
 
-function laboratory(grid: Grid, rows: number): string | null {
-  const titles = grid.slice(0, Math.min(rows, 12)).flat();
-  const found = titles.find(
-    (cell) => /\b(laborator(y|ies)|labs?|soil testing)\b/i.test(cell) && !/\b(no|number|id)\b|#/i.test(cell),
-  );
-  return found?.replace(/^lab(oratory)?\s*:\s*/i, '') ?? null;
+function* cellsOf(sheets: readonly Sheet[]): Generator<string> {
+  for (const sheet of sheets) for (const row of sheet.grid) for (const cell of row) if (cell !== '') yield cell;
+}
+
+/** Decimal comma or point from the cells; where they leave it open, a semicolon between cells speaks for the comma. */
+function styleOf(sheets: readonly Sheet[], delimiter: string | null): NumberStyle {
+  const style = numberStyle(cellsOf(sheets));
+  if (style.decimalComma || delimiter !== ';') return style;
+  let [points, commas] = [0, 0];
+  for (const cell of cellsOf(sheets)) {
+    if (/^[<>]?\s?\d*\.\d+$/.test(cell)) points += 1;
+    else if (/^[<>]?\s?\d+,\d+$/.test(cell)) commas += 1;
+  }
+  return { decimalComma: points === 0 && commas > 0 };
+}
+
+function shareAll(parts: readonly SamplePart[], shared: Identity): SamplePart[] {
+  const one = parts.every((part) => part.identity.sampleId === undefined && part.identity.labNumber === undefined);
+  const { sampleId, labNumber, fieldName, ...always } = shared;
+  const names: Identity = {
+    ...(sampleId === undefined ? {} : { sampleId }),
+    ...(labNumber === undefined ? {} : { labNumber }),
+  };
+  const field: Identity = fieldName === undefined ? {} : { fieldName };
+  return parts.map((part) => ({ ...part, identity: { ...always, ...field, ...(one ? names : {}), ...part.identity } }));
+}
+
+function allStatements(readings: readonly SheetReading[]): Statements {
+  const methods = new Map(readings.flatMap((one) => [...one.statements.methods]));
+  return { unit: readings.find((one) => one.statements.unit !== null)?.statements.unit ?? null, methods };
+}
+
+function shown(reading: Reading, dates: ReadonlyMap<string, string>): Reading {
+  const back = (printed: string | null) => (printed === null ? null : (dates.get(printed) ?? printed));
+  return {
+    ...reading,
+    samples: reading.samples.map((sample) => ({
+      ...sample,
+      dateSampledPrinted: back(sample.dateSampledPrinted),
+      dateReportedPrinted: back(sample.dateReportedPrinted),
+    })),
+  };
 }
 
 /**
- * Reads a laboratory's data file: samples down and analytes across, one number a row, or analytes down. Each number
- * carries its cell (row and column from 1). Errors: none are thrown for content; see the refusal codes.
+ * Reads a laboratory's data file or sheets: samples down and analytes across, one number a row, or analytes down, in any
+ * mixture and number. Each number carries its cell (sheet, row and column from 1). Stages: decoding, grid, facts of each
+ * row, tables with their headings, columns, rows, lines around the tables, samples, checks; the trace holds what they saw
+ * and why each number that was not taken is no result. Errors: none are thrown for content; see the refusal codes.
  */
-export function readTable(input: { fileName: string; bytes?: Uint8Array; text?: string }): Reading {
+export function readTableTraced(input: TableInput): { reading: Reading; trace: TableTrace | null } {
   const file = input.fileName;
-  const refuse = (error: Remark) => refusedReading({ file, pages: 0, error });
-  const decoded =
-    input.text === undefined ? decode(input.bytes ?? new Uint8Array()) : { ok: true as const, text: input.text };
-  if (!decoded.ok) return refuse(BINARY);
-  if (decoded.text.replace(/^\ufeff/, '').trim() === '') return refuse(EMPTY);
-  const grid = gridOf(decoded.text);
-  if (grid.length > MAX_ROWS + 1) return refuse(TOO_LARGE('20,000 rows'));
-  if (grid.some((row) => row.length > MAX_COLUMNS)) return refuse(TOO_LARGE('1,000 columns'));
-  const style = numberStyle(grid.flat());
-  const found = shapeOf(grid, style);
-  const titles = grid.slice(0, Math.min(found?.titleRows ?? 5, 20)).map((row) => row.join(' '));
-  const lab = { name: laboratory(grid, found?.titleRows ?? 5) };
-  const other = OTHER_MATERIAL.find(([, pattern]) => pattern.test(titles.join(' ')))?.[0];
-  if (other !== undefined && !SOIL_WORDS.test(titles.join(' '))) {
-    const warning = remark('not-soil', `This looks like ${other}, not a soil test; nothing of it was taken.`);
-    return {
-      file,
-      kind: 'not-soil',
-      error: null,
-      pages: 0,
-      warnings: [warning],
-      lab,
-      samples: [],
-      recommendations: [],
-    };
-  }
-  if (found === null) return refuse(NO_RESULTS);
-  const shared = titleIdentity(grid, found.titleRows);
-  const nameless = found.shape.parts.every(
-    (part) => part.identity.sampleId === undefined && part.identity.labNumber === undefined,
+  const refuse = (error: Remark) => ({ reading: refusedReading({ file, pages: 0, error }), trace: null });
+  const open = opened(input);
+  if (!open.ok) return refuse(open.error);
+  if (open.sheets.some((sheet) => sheet.grid.length > MAX_ROWS)) return refuse(TOO_LARGE('20,000 rows'));
+  if (open.sheets.some((sheet) => sheet.grid.some((row) => row.length > MAX_COLUMNS)))
+    return refuse(TOO_LARGE('1,000 columns'));
+  const style = styleOf(open.sheets, open.delimiter);
+  const readings = open.sheets.map((sheet) => readSheet(sheet, style));
+  const trace: TableTrace = { sheets: readings, untaken: readings.flatMap((one) => untakenOf(one)) };
+  const lab = { name: readings.find((one) => one.laboratory !== null)?.laboratory ?? null };
+  const materials = readings.map((one) =>
+    materialOf([one.facts.sheet.name ?? '', ...one.texts.filter((text) => text.length < 200)]),
   );
-  const parts = found.shape.parts.map((part) => ({
-    ...part,
-    identity: nameless ? { ...shared, ...part.identity } : withShared(part.identity, shared),
-  }));
-  const statements = statementsOf(grid.slice(0, found.titleRows).map((row) => row.join(' ')));
-  const { samples, warnings } = assemble({
-    parts,
-    statements,
-    dateTexts: grid.flat().filter((cell) => ANY_DATE.test(cell)),
+  const soilSaid = readings.some((one) => /\bsoil\b/i.test(one.texts.join(' ')));
+  const soil = readings.filter((_, index) => materials[index] === null);
+  const parts = soil.flatMap((one) => shareAll(one.parts, one.shared));
+  const other = materials.find((one) => one !== null) ?? (soilSaid ? null : materialByNumbers(parts)) ?? null;
+  const nothing = soil.length === 0 || (other !== null && materials.every((one) => one === null));
+  const unsoiled = trace.untaken.some((one) => one.why === 'not-soil');
+  const warnings: Remark[] = [...(input.warnings ?? [])];
+  if (other !== null || unsoiled) {
+    const what = other ?? 'an analysis of something else';
+    const some = nothing || parts.every((part) => part.candidates.length === 0);
+    warnings.push(
+      remark(
+        'not-soil',
+        `This looks like ${what}, not a soil test; ${some ? 'nothing' : 'only the soil'} of it was taken.`,
+      ),
+    );
+    if (some) {
+      return {
+        reading: { file, kind: 'not-soil', error: null, pages: 0, warnings, lab, samples: [], recommendations: [] },
+        trace,
+      };
+    }
+  }
+  const { samples, warnings: found } = assemble({
+    parts: joinSamples(parts),
+    statements: allStatements(soil),
+    dateTexts: [...cellsOf(open.sheets)].filter((cell) => cell.length < 40 && ANY_DATE.test(cell)),
   });
-  if (samples.length === 0) return refuse(NO_RESULTS);
-  return {
+  if (samples.length === 0) return { reading: refusedReading({ file, pages: 0, error: NO_RESULTS }), trace };
+  const reading: Reading = {
     file,
     kind: 'soil',
     error: null,
     pages: 0,
-    warnings,
+    warnings: [...warnings, ...found],
     lab,
     samples,
-    recommendations: found.shape.recommendations,
+    recommendations: soil.flatMap((one) => one.recommendations),
   };
+  return { reading: input.shownDates === undefined ? reading : shown(reading, input.shownDates), trace };
+}
+
+/** The reading alone; see readTableTraced. */
+export function readTable(input: TableInput): Reading {
+  return readTableTraced(input).reading;
 }
