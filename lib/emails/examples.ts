@@ -1,4 +1,5 @@
 import { addressTaken, addressTakenExample } from './address-taken';
+import { batchReady, batchReadyExample } from './batch-ready';
 import { invitation, invitationExample } from './invitation';
 import { passwordChanged, passwordChangedExample } from './password-changed';
 import { reminderDigest, reminderDigestExample } from './reminder-digest';
@@ -18,6 +19,9 @@ export const emailExamples: Readonly<Record<string, () => Promise<Email>>> = {
   reminderDue: () => reminderDue(reminderDueExample),
   reminderDigest: () => reminderDigest(reminderDigestExample),
   reportReady: () => reportReady(reportReadyExample),
+  batchReady: () => batchReady(batchReadyExample),
+  batchReadyNothing: () =>
+    batchReady({ ...batchReadyExample, files: 5, toReview: 0, samples: 0, notRead: 2, notTaken: 2, missing: 1 }),
   reportNotRead: () =>
     reportReady({
       ...reportReadyExample,

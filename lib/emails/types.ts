@@ -88,3 +88,20 @@ export interface ReportReadyProps extends ToPerson {
   readonly unsubscribeUrl: string;
   readonly preferencesUrl: string;
 }
+
+export interface BatchReadyProps extends ToPerson {
+  readonly siteName: string;
+  /** "1 December 2026" */
+  readonly sentOn: string;
+  readonly files: number;
+  readonly toReview: number;
+  /** Of the reports that wait to be reviewed. */
+  readonly samples: number;
+  readonly notRead: number;
+  readonly notTaken: number;
+  /** Announced, but never arrived. */
+  readonly missing: number;
+  readonly batchUrl: string;
+  readonly unsubscribeUrl: string;
+  readonly preferencesUrl: string;
+}

@@ -34,6 +34,8 @@ export const uploadInput = z.strictObject({
   bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
   plotId: idSchema.optional(),
   asRevision: z.enum(['true', 'false']).optional(),
+  /** The announced file of a batch that this is. */
+  batchFileId: idSchema.optional(),
 });
 /** A file that waits longer than this to be read is told so: the worker may not be running. */
 export const LONG_WAIT_MS = 30_000;

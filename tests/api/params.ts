@@ -2,10 +2,12 @@ import { createHash, randomBytes } from 'node:crypto';
 import { eq } from 'drizzle-orm';
 import {
   application,
+  failedJob,
   invitation,
   laboratory,
   layoutMemory,
   membership,
+  pageCopy,
   plan,
   planIntent,
   planLine,
@@ -18,6 +20,8 @@ import {
   sample,
   target,
   targetSet,
+  uploadBatch,
+  uploadBatchFile,
 } from '@/db/schema';
 import { hashSecret } from '@/lib/data/people/secrets';
 import { withSite } from '@/lib/data/transaction';
@@ -162,7 +166,38 @@ export async function makeParams(site: TestSite, author: TestPerson = site.peopl
         })
         .returning(),
     );
+    const now = new Date();
+    const sent = { createdAt: now, mailChosenAt: now, movedAt: now };
+    const batch = one(
+      await tx
+        .insert(uploadBatch)
+        .values({ siteId, createdBy: author.id, ...sent })
+        .returning(),
+    );
+    const announced = one(
+      await tx
+        .insert(uploadBatchFile)
+        .values({ siteId, batchId: batch.id, ordinal: 1, fileName: 'old.csv', bytes: 20 })
+        .returning(),
+    );
+    const lost = one(
+      await tx
+        .insert(failedJob)
+        .values({ siteId, job: 'recheck-effects', subjectId: plotId, code: 'job-failed', sentence: 'x', gaveUpAt: now })
+        .returning(),
+    );
+    const shot = { pictureKey: fileKey, pictureSha256: sha256, bundleKey: fileKey, bundleSha256: sha256 };
+    const copy = one(
+      await tx
+        .insert(pageCopy)
+        .values({ siteId, reportId, page: 1, state: 'ready', askedBy: author.id, askedAt: now, ...shot })
+        .returning(),
+    );
     const params: Record<string, string> = {
+      batchId: batch.id,
+      fileId: announced.id,
+      failedJobId: lost.id,
+      copyId: copy.id,
       siteId,
       plotId,
       token,

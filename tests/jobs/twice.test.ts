@@ -2,16 +2,25 @@ import { readFile } from 'node:fs/promises';
 import { eq } from 'drizzle-orm';
 import postgres from 'postgres';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { effectCheck, outbox, readingRow, report } from '@/db/schema';
+import { effectCheck, outbox, pageCopy, readingRow, report } from '@/db/schema';
 import { recordApplication } from '@/lib/data/applications/recordApplication';
+import { createBatch } from '@/lib/data/batches/createBatch';
+import { setBatchMail } from '@/lib/data/batches/setBatchMail';
+import { askCopy } from '@/lib/data/copies/askCopy';
+import { setMailPreference } from '@/lib/data/mail/preferences';
 import { queueMail } from '@/lib/data/mail/queueMail';
 import { requeueMail } from '@/lib/data/mail/requeueMail';
+import { saveReading } from '@/lib/data/reports/saveReading';
+import { startReading } from '@/lib/data/reports/startReading';
 import { uploadReport } from '@/lib/data/reports/uploadReport';
 import { withPeople, withSite } from '@/lib/data/transaction';
+import type { SiteId } from '@/lib/domain/ids';
 import type { JobDefinition } from '@/lib/jobs/job';
 import { JOB_NAMES, type JobName, type JobPayload } from '@/lib/jobs/names';
 import { JOB_DEFINITIONS } from '@/lib/jobs/registry';
+import { getFile } from '@/lib/services/storage/storage';
 import { ctxAs, ctxWorker, makePlot, makeSite, makeTest, useWorld } from '../support/factory';
+import { pdfBytes, readResult, readSample, soilReading } from '../support/reports';
 
 /** Every job may be delivered twice: the second time, and a second worker at the same time, change nothing. */
 const world = useWorld();
@@ -98,7 +107,82 @@ const CASES: { [N in JobName]: () => Promise<Case<N>> } = {
       acted: () => withSite(site.id, async (tx) => (await tx.select().from(effectCheck)).length),
     };
   },
+  'tell-batch': async () => {
+    const { site, batchId } = await aBatchThatIsRead();
+    return { payload: { siteId: site.id, id: batchId }, acted: () => lettersOf(site.people.owner.email) };
+  },
+  'tell-report': async () => {
+    const site = await makeSite();
+    const ctx = await ctxAs(site.people.owner);
+    await setMailPreference({ ctx, input: { kind: 'report-ready', wanted: true } });
+    const { reportId: id } = await uploadReport({
+      ctx,
+      input: { siteId: site.id, fileName: 'r.pdf', bytes: pdfBytes() },
+    });
+    await read(site.id, id);
+    return { payload: { siteId: site.id, id }, acted: () => lettersOf(site.people.owner.email) };
+  },
+  'mask-page': async () => {
+    const { site, copyId, copy } = await aCopy();
+    const files = async () => {
+      const row = await copy();
+      expect(row?.state).toBe('ready');
+      return (row?.pictureKey === null ? 0 : 1) * (row?.bundleKey === null ? 0 : 1);
+    };
+    return { payload: { siteId: site.id, id: copyId }, acted: files };
+  },
+  'drop-copy': async () => {
+    const { site, copyId, copy } = await aCopy();
+    await run('mask-page', { siteId: site.id, id: copyId });
+    return {
+      payload: { siteId: site.id, id: copyId },
+      acted: async () => {
+        const row = await copy();
+        expect(row?.state).toBe('thrown-away');
+        await expect(getFile(row?.pictureKey ?? '', row?.pictureSha256 ?? '')).rejects.toThrow('not-found');
+        return 1;
+      },
+    };
+  },
 };
+
+const lettersOf = async (to: string): Promise<number> =>
+  (await withPeople((tx) => tx.select().from(outbox).where(eq(outbox.toAddress, to)))).length;
+
+/** Taken and read, as the worker does it. */
+async function read(siteId: SiteId, id: string): Promise<void> {
+  const ctx = await ctxWorker();
+  const task = await startReading({ ctx, input: { siteId, id } });
+  if (!task) throw new Error('The report could not be taken.');
+  const sample = readSample({ sampleId: 'North', results: [readResult({ analyte: 'soil_ph_water', printed: '6.4' })] });
+  await saveReading({ ctx, input: { lease: task.lease, reading: soilReading([sample]) } });
+}
+
+async function aBatchThatIsRead() {
+  const site = await makeSite();
+  const ctx = await ctxAs(site.people.owner);
+  const at = { siteId: site.id };
+  const files = ['a.pdf', 'b.pdf'].map((name) => ({ name, bytes: 9 }));
+  const { batchId, fileIds } = await createBatch({ ctx, input: { ...at, files } });
+  await setBatchMail({ ctx, input: { ...at, batchId, wanted: true } });
+  for (const batchFileId of fileIds) {
+    const sent = await uploadReport({ ctx, input: { ...at, fileName: 'a.pdf', bytes: pdfBytes(), batchFileId } });
+    await read(site.id, sent.reportId);
+  }
+  return { site, batchId };
+}
+
+async function aCopy() {
+  const site = await makeSite();
+  const ctx = await ctxAs(site.people.owner);
+  const bytes = new Uint8Array(await readFile('fixtures/reports/main-job/last-spring.pdf'));
+  const { reportId } = await uploadReport({ ctx, input: { siteId: site.id, fileName: 'last-spring.pdf', bytes } });
+  await read(site.id, reportId);
+  const { id: copyId } = await askCopy({ ctx, input: { siteId: site.id, reportId, page: 1 } });
+  const copy = () =>
+    withSite(site.id, async (tx) => (await tx.select().from(pageCopy).where(eq(pageCopy.id, copyId)))[0]);
+  return { site, copyId, copy };
+}
 
 async function run(name: JobName, payload: unknown): Promise<void> {
   const job = JOB_DEFINITIONS.find((one) => one.name === name) as JobDefinition | undefined;

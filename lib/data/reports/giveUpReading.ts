@@ -4,7 +4,8 @@ import { report } from '@/db/schema';
 import { asSiteId } from '@/lib/domain/ids';
 import { idSchema } from '@/lib/schemas/parts';
 import { audit } from '../audit';
-import { withSite } from '../transaction';
+import { noteFailedJob } from '../failedJobs/noteFailedJob';
+import { enqueue, withSite } from '../transaction';
 import { workerVerb } from '../verb';
 
 /** What a reading is released with while the file store does not answer. */
@@ -22,7 +23,7 @@ export const giveUpReading = workerVerb({
   run: ({ ctx, input }): Promise<void> => {
     const siteId = asSiteId(input.siteId);
     return withSite(siteId, async (tx) => {
-      const rows = await tx
+      const [row] = await tx
         .update(report)
         .set({
           state: 'unreadable',
@@ -38,9 +39,16 @@ export const giveUpReading = workerVerb({
             sql`${report.refusalCode} is distinct from ${STORE_DOWN}`,
           ),
         )
-        .returning({ id: report.id });
-      if (rows.length > 0)
-        await audit(tx, ctx, siteId, { act: 'report.give-up', objectKind: 'report', objectId: input.id });
+        .returning({ id: report.id, code: report.refusalCode, sentence: report.refusalSentence });
+      if (!row) return;
+      await noteFailedJob(tx, ctx, siteId, {
+        job: 'read-report',
+        subjectId: row.id,
+        code: row.code ?? 'reader-failed',
+        sentence: row.sentence ?? SENTENCE,
+      });
+      await enqueue(tx, 'tell-report', { siteId, id: row.id });
+      await audit(tx, ctx, siteId, { act: 'report.give-up', objectKind: 'report', objectId: input.id });
     });
   },
 });

@@ -27,28 +27,31 @@ function containedPlot(name: string, plots: readonly { id: string; name: string 
   return best && best.name.length !== next?.name.length ? best.id : null;
 }
 
-export function suggestPlot(
-  sample: Named,
-  known: { plots: readonly { id: string; name: string }[]; earlier: ReadonlyMap<string, string> },
-): string | null {
+type Known = { plots: readonly { id: string; name: string }[]; earlier: ReadonlyMap<string, string> };
+type Proposal = { plotId: string; because: 'same-name' | 'confirmed-before' | 'name-inside' };
+
+/** The plot that would fit a sample, and why: its own name first, then what was confirmed before, then a name inside the text. */
+export function proposePlot(sample: Named, known: Known): Proposal | null {
   const names = namesOf(sample);
   for (const name of names) {
     const exact = known.plots.filter((one) => plainName(one.name) === name);
-    if (exact.length === 1 && exact[0]) return exact[0].id;
+    if (exact.length === 1 && exact[0]) return { plotId: exact[0].id, because: 'same-name' };
   }
   for (const name of names) {
     const before = known.earlier.get(name);
-    if (before) return before;
+    if (before) return { plotId: before, because: 'confirmed-before' };
   }
   for (const name of names) {
     const inside = containedPlot(name, known.plots);
-    if (inside) return inside;
+    if (inside) return { plotId: inside, because: 'name-inside' };
   }
   return null;
 }
 
-/** Live plots, and where samples of a printed name were put before (the newest decision counts). */
-export async function loadKnownNames(tx: Transaction, siteId: SiteId, reportId: string) {
+export const suggestPlot = (sample: Named, known: Known): string | null => proposePlot(sample, known)?.plotId ?? null;
+
+/** Live plots, and where samples of a printed name were put before in other reports (the newest decision counts). */
+export async function loadKnownNames(tx: Transaction, siteId: SiteId, reportId: string | null) {
   const plots = await tx
     .select({ id: plot.id, name: plot.name })
     .from(plot)
@@ -65,7 +68,7 @@ export async function loadKnownNames(tx: Transaction, siteId: SiteId, reportId: 
     .where(
       and(
         eq(reportSample.siteId, siteId),
-        ne(reportSample.reportId, reportId),
+        reportId === null ? undefined : ne(reportSample.reportId, reportId),
         eq(report.state, 'confirmed'),
         isNotNull(reportSample.plotId),
         isNull(reportSample.leftOutReason),

@@ -5,6 +5,7 @@ import type { SiteId } from '@/lib/domain/ids';
 import { log } from '@/lib/log';
 import { type UploadAnswer, uploadInput } from '@/lib/schemas/reports';
 import { deleteFile, putFile, sha256 } from '@/lib/services/storage/storage';
+import { getBatchFileInSite, noteArrival } from '../batches/batchFiles';
 import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { enqueue, isUniqueViolation } from '../transaction';
 import { siteWorkVerb } from '../workVerb';
@@ -49,14 +50,21 @@ export const uploadReport = siteWorkVerb({
   act: 'reading.work',
   input: uploadInput,
   run: async ({ ctx, siteId, person, input, inSite }): Promise<UploadAnswer> => {
-    const { bytes, plotId } = input;
+    const { bytes, plotId, batchFileId } = input;
     const asRevision = input.asRevision === 'true';
     const fileName = cleanFileName(input.fileName);
     const { contentType } = sniffUpload(bytes, fileName);
     const hash = sha256(bytes);
+    const meets = async (tx: Transaction) => {
+      const found = await newestOf(tx, siteId, hash);
+      if (found && batchFileId && !asRevision)
+        await noteArrival(tx, ctx, siteId, batchFileId, { reportId: found.id, state: 'seen-before' });
+      return found;
+    };
     const seen = await inSite(async ({ tx }) => {
       if (plotId) await getLivePlotInSite(tx, siteId, plotId);
-      return newestOf(tx, siteId, hash);
+      if (batchFileId) await getBatchFileInSite(tx, siteId, batchFileId);
+      return meets(tx);
     });
     if (seen && !asRevision) return seenBefore(seen);
 
@@ -89,6 +97,7 @@ export const uploadReport = siteWorkVerb({
           objectId: row.id,
           detail: { sha256: hash, bytes: bytes.byteLength, revision },
         });
+        if (batchFileId) await noteArrival(tx, ctx, siteId, batchFileId, { reportId: row.id, state: 'kept' });
         await enqueue(tx, 'read-report', { siteId, id: row.id });
         return { kind: 'received', reportId: row.id, fileName, bytes: bytes.byteLength };
       });
@@ -100,7 +109,7 @@ export const uploadReport = siteWorkVerb({
       await deleteFile(key).catch((err: unknown) =>
         log().warn({ err, key }, 'a file without a row stays in the store'),
       );
-      const first = await inSite(({ tx }) => newestOf(tx, siteId, hash));
+      const first = await inSite(({ tx }) => meets(tx));
       if (!first) throw error;
       return seenBefore(first);
     }
