@@ -148,7 +148,12 @@ export type OriginalReading = {
   form: string | null;
 };
 
-export type LearntFrom = { on: string; filled: string[] };
+export type LearntFrom = {
+  on: string;
+  filled: string[];
+  /** The cells as the page alone gave them. */
+  before: { analyte: string; form: string | null; unit: string | null; method: string | null };
+};
 
 /** What one label meant in a confirmed review; the shape is that of the reading room. */
 export type LessonRow = {

@@ -4,6 +4,7 @@ import { auditEvent, layoutMemory } from '@/db/schema';
 import { database } from '@/lib/data/database';
 import { forgetLayout } from '@/lib/data/learning/forgetLayout';
 import { listLayouts } from '@/lib/data/learning/listLayouts';
+import { recheckReviews } from '@/lib/data/learning/recheckReviews';
 import { saveReading } from '@/lib/data/reports/saveReading';
 import { startReading } from '@/lib/data/reports/startReading';
 import { uploadReport } from '@/lib/data/reports/uploadReport';
@@ -146,6 +147,34 @@ describe('what a confirmed review taught', () => {
     await withdraw(first.reportId);
     expect(await meant()).toBeNull();
     expect(await named('Holm Soils')).toEqual([]);
+  });
+
+  it('reaches reviews that were open already, but no row that somebody has looked at, and goes with a withdrawal', async () => {
+    const open = await read('Mere Soils', [PH(), P(), K({ unit: null, doubts: [UNIT_MISSING] })]);
+    await say(open.reportId, 'Potassium', { unit: 'lb/acre' });
+    const first = await taught('Mere Soils');
+    const again = async () =>
+      recheckReviews({ ctx: await ctxWorker(), input: { siteId: bench.here.id, id: first.reportId } });
+    await again();
+    expect(await rowOf(open.reportId, 'Phosphorus')).toMatchObject({
+      unit: 'mg/kg',
+      method: 'Olsen',
+      version: 2,
+      state: 'proposed',
+      doubts: [UNIT_MISSING],
+    });
+    expect(await rowOf(open.reportId, 'Potassium')).toMatchObject({ unit: 'lb/acre', method: 'M3', learnt: null });
+    await again();
+    expect((await rowOf(open.reportId, 'Phosphorus')).version).toBe(2);
+    const { id: siteId } = bench.here;
+    await withdrawReport({ ctx: bench.owner, input: { siteId, reportId: first.reportId, reason: 'Wrong plot.' } });
+    await again();
+    expect(await rowOf(open.reportId, 'Phosphorus')).toMatchObject({
+      unit: null,
+      method: null,
+      learnt: null,
+      version: 3,
+    });
   });
 
   it('is forgotten with one button by those who decide, and the trail says so', async () => {

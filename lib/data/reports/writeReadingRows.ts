@@ -1,12 +1,13 @@
 import { and, eq } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { readingRow, recommendation, reportSample } from '@/db/schema';
+import { type LearntFrom, readingRow, recommendation, reportSample } from '@/db/schema';
 import { addDays, parseDay } from '@/lib/domain/days';
 import type { SiteId } from '@/lib/domain/ids';
 import type { LearntReading, LearntResult, LearntSample } from '@/lib/reading/memory/apply';
 import type { Depth } from '@/lib/reading/types';
 import type { Ctx } from '../context';
 import { dayOf } from '../days';
+import { refreshHistoryDoubts } from '../review/refreshHistoryDoubts';
 import type { ReportRow } from './getReportInSite';
 import { loadKnownNames, plainName, suggestPlot } from './suggestPlots';
 
@@ -70,6 +71,9 @@ function numberBags(samples: SampleValues[]): void {
   }
 }
 
+export const learntFrom = ({ learnt }: LearntResult): LearntFrom | null =>
+  learnt ? { on: learnt.on, filled: [...learnt.filled], before: learnt.before } : null;
+
 function rowValues(reportRow: ReportRow, reportSampleId: string, read: LearntResult, ordinal: number) {
   return {
     siteId: reportRow.siteId,
@@ -92,7 +96,7 @@ function rowValues(reportRow: ReportRow, reportSampleId: string, read: LearntRes
     box: read.box === null ? null : ([...read.box] as [number, number, number, number]),
     cell: read.cell === null ? null : { ...read.cell, sheet: String(read.cell.sheet) },
     confidence: read.confidence,
-    learnt: read.learnt ? { on: read.learnt.on, filled: [...read.learnt.filled] } : null,
+    learnt: learntFrom(read),
     doubts: read.doubts.map(({ code, sentence }) => ({ code, sentence })),
   };
 }
@@ -135,6 +139,7 @@ export async function writeReadingRows(
     }),
   );
   for (const slice of slices(rows)) await tx.insert(readingRow).values(slice);
+  await refreshHistoryDoubts(tx, siteId, [...ids.values()]);
 
   const byName = new Map(reading.samples.map((sample, at) => [plainName(sample.sampleId), ids.get(at + 1)]));
   const advice = reading.recommendations.map((one) => ({

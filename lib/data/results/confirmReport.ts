@@ -54,6 +54,7 @@ export const confirmReport = siteVerb({
       objectId: reportId,
       detail: { results, plotIds, separateAnalyses },
     });
+    await enqueue(tx, 'recheck-reviews', { siteId, id: reportId });
     for (const plotId of plotIds) await refreshReminders(tx, ctx, siteId, plotId);
     // One is enough: the recheck looks at the whole site, since a plot can serve another as its control.
     const [anyPlot] = plotIds;

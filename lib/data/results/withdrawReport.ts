@@ -72,6 +72,7 @@ export const withdrawReport = siteVerb({
     await unlearnReport(tx, siteId, reportId);
     const detail = { reason, results: gone.length };
     await audit({ act: 'report.withdraw', objectKind: 'report', objectId: reportId, detail });
+    await enqueue(tx, 'recheck-reviews', { siteId, id: reportId });
     for (const plotId of plotIds) await refreshReminders(tx, ctx, siteId, plotId);
     // One is enough: the recheck looks at the whole site, since a plot can serve another as its control.
     const [anyPlot] = plotIds;

@@ -32,7 +32,7 @@ export function toReviewRow(row: RowColumns, names: ReadonlyMap<string, string>)
     box: row.box,
     cell: row.cell,
     confidence: row.confidence,
-    learnt: row.learnt,
+    learnt: row.learnt && { on: row.learnt.on, filled: row.learnt.filled },
     doubts: row.doubts,
     doubtful: isDoubtful(row),
     impossible: row.state === 'removed' ? null : impossibleSentence(row),

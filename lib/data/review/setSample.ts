@@ -3,6 +3,7 @@ import { assertDayCame } from '../dayCame';
 import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { siteVerb } from '../verb';
 import { assertDepths } from './assertDepths';
+import { refreshHistoryDoubts } from './refreshHistoryDoubts';
 import { reportInReview } from './reportInReview';
 import { getSampleInReport, type SampleAnswer, toSample, writeSample } from './sampleStore';
 
@@ -25,6 +26,8 @@ export const setSample = siteVerb({
     const after = { ...before, ...depths };
     assertDepths(after.depthFromCm, after.depthToCm);
     const row = await writeSample(tx, siteId, { reportId, reportSampleId, version }, { ...plain, ...depths });
+    if (row.plotId !== before.plotId || row.takenOn !== before.takenOn)
+      await refreshHistoryDoubts(tx, siteId, [row.id]);
     await audit({
       act: 'sample.assign',
       objectKind: 'report-sample',

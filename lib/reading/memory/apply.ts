@@ -7,7 +7,12 @@ import { layoutOf, plainLabel } from './layout';
 import { columnOf, type Lesson, type Memory } from './lessons';
 
 /** On which confirmation a row leans, and which of its cells the page left open and that confirmation answers. */
-export type Learnt = { readonly on: string; readonly filled: readonly ('analyte' | 'form' | 'unit' | 'method')[] };
+export type Learnt = {
+  readonly on: string;
+  readonly filled: readonly ('analyte' | 'form' | 'unit' | 'method')[];
+  /** The row as the page alone gave it, so that what was filled can be taken back. */
+  readonly before: Pick<ReadResult, 'analyte' | 'form' | 'unit' | 'method'>;
+};
 export type LearntResult = ReadResult & { readonly learnt?: Learnt | null };
 export type LearntSample = Omit<ReadSample, 'results'> & { readonly results: readonly LearntResult[] };
 export type LearntReading = Omit<Reading, 'samples'> & { readonly samples: readonly LearntSample[] };
@@ -91,7 +96,8 @@ function filled(row: ReadResult, lesson: Lesson, on: string): LearntResult {
     next = { ...next, method: lesson.method };
     names.push('method');
   }
-  const learnt = { on, filled: names };
+  const { analyte: named, form, unit, method } = row;
+  const learnt = { on, filled: names, before: { analyte: named, form, unit, method } };
   const odd = names.length === 0 || row.doubts.some((one) => one.code === 'implausible') ? null : plausibleDoubt(next);
   if (odd === null) return { ...next, learnt };
   return { ...doubted(next, odd), learnt };
@@ -117,6 +123,12 @@ function doubtColumn(row: LearntResult, memory: Memory): LearntResult {
   if (known === undefined || !everyOne || known.lessons.some((lesson) => standsIn(row, lesson))) return row;
   const sentence = `In the report you confirmed on ${onDay(known.on)} the result of "${row.label}" stood in another column of this layout.`;
   return doubted(row, remark(LEARNT_OTHERWISE, sentence));
+}
+
+/** A row without what was learnt: as the page alone gave it. */
+export function withoutMemory(row: LearntResult): LearntResult {
+  const doubts = row.doubts.filter((doubt) => doubt.code !== LEARNT_OTHERWISE);
+  return { ...row, ...row.learnt?.before, doubts, learnt: null };
 }
 
 /**

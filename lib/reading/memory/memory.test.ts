@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Reading, ReadResult } from '../types';
-import { applyMemory } from './apply';
+import { applyMemory, withoutMemory } from './apply';
 import { findLayout, layoutOf, plainLabel, sameLayout } from './layout';
 import { type ConfirmedRow, lessonsOf, memoryOf } from './lessons';
 
@@ -133,7 +133,8 @@ describe('what was confirmed', () => {
     });
     const read = applyMemory(reading([open, K]), memory([confirmed(P), confirmed(K)])).samples[0]?.results[0];
     expect(read).toMatchObject({ unit: 'mg/kg', method: 'M3', value: 40, printed: '40', confidence: 0.8 });
-    expect(read?.learnt).toEqual({ on: '2025-05-03', filled: ['unit', 'method'] });
+    expect(read?.learnt).toMatchObject({ on: '2025-05-03', filled: ['unit', 'method'] });
+    expect(read && withoutMemory(read)).toEqual({ ...open, learnt: null });
     expect(read?.doubts).toEqual([UNIT_MISSING]);
   });
   it('names the pH that the page leaves open', () => {
@@ -167,7 +168,7 @@ describe('what was confirmed', () => {
   });
   it('says so and adds nothing where page and memory agree', () => {
     const read = applyMemory(reading([P, K]), memory([confirmed(P)])).samples[0]?.results ?? [];
-    expect(read[0]).toEqual({ ...P, learnt: { on: '2025-05-03', filled: [] } });
+    expect(read[0]).toEqual({ ...P, learnt: { on: '2025-05-03', filled: [], before: expect.anything() } });
     expect(read[1]).toEqual(K);
   });
   it('never takes a doubt away, raises a confidence, touches a number or changes how many rows there are', () => {
