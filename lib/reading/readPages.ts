@@ -3,12 +3,13 @@ import { type Candidate, type Identity, remark, type SamplePart } from './candid
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
+import { type ListRow, listRows, type Run } from './stages/down';
 import { type IdentityHit, identityHits } from './stages/identity';
 import { type Line, linesOf } from './stages/lines';
-import { type ListRow, listRows, type NotTaken, type Run } from './stages/down';
 import { rowsOfTable, type Table, type TableRow, tablesOf } from './stages/matrix';
 import { type ProseRefusal, paragraphsOf, proseRows } from './stages/prose';
 import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommendations';
+import type { NotTaken } from './stages/roles';
 import {
   laboratoryName,
   notSoil,
@@ -176,14 +177,13 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const { results, advice } = split(ofSoil, zones);
   const tables = tablesOf(results);
   const taken = new Set(tables.flatMap((table) => [...table.header, ...table.rows]));
-  const tableRows = tables.flatMap((table) => rowsOfTable(table));
+  const notTaken: NotTaken[] = [];
+  const tableRows = tables.flatMap((table) => rowsOfTable(table, notTaken));
   const list = listRows(results, taken);
   for (const run of list.runs) for (const line of run.sampleLines) taken.add(line);
   const structured = list.rows.length + tableRows.reduce((sum, row) => sum + row.candidates.length, 0);
   const prose =
-    structured < ENOUGH_WITHOUT_SENTENCES
-      ? proseRows(paragraphsOf(results, taken), style)
-      : { rows: [], refused: [] };
+    structured < ENOUGH_WITHOUT_SENTENCES ? proseRows(paragraphsOf(results, taken), style) : { rows: [], refused: [] };
   const toldAlready = new Set(list.rows.map((row) => row.candidate.label.analyte));
   const rows = [...list.rows, ...prose.rows.filter((row) => !toldAlready.has(row.candidate.label.analyte))];
   const hits = identityHits(ofSoil, taken);
@@ -200,7 +200,7 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
     listRows: rows,
     proseRefused: prose.refused,
     runs: list.runs,
-    notTaken: list.notTaken,
+    notTaken: [...notTaken, ...list.notTaken],
     identity: hits,
     contexts,
     statements,

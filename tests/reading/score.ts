@@ -104,7 +104,8 @@ function boxRight(want: WantedResult, got: ReadResult): boolean | null {
   if (want.box === null || want.box === undefined) return null;
   if (got.page !== want.page || got.box === null) return false;
   const [cx, cy] = [(got.box[0] + got.box[2]) / 2, (got.box[1] + got.box[3]) / 2];
-  const [x0, y0, x1, y1] = want.box;
+  const [x0, a, x1, b] = want.box;
+  const [y0, y1] = [Math.min(a, b), Math.max(a, b)];
   return cx > x0 - 0.008 && cx < x1 + 0.008 && cy > y0 - 0.008 && cy < y1 + 0.008;
 }
 

@@ -52,9 +52,9 @@ const ROWS = [
     'meq/100g',
     'meq/100 g',
     'charge',
-    'meq/100g me/100g mEq/100g MEQ/100G meq/100gm meq% cmol(+)/kg cmol+/kg cmolc/kg cmol/kg meq/lOOg|meq/100 g|me/100 g|mEq/100 g|cmol(+) kg-1|meq per 100 g|meq',
+    'meq/100g me/100g mEq/100g MEQ/100G meq/100gm meq% cmol(+)/kg cmol+/kg cmolc/kg cmol/kg meq/lOOg|meq/100 g|me/100 g|mEq/100 g|cmol(+) kg-1|meq per 100 g|meq|milliequivalents per 100 grams|milliequivalents per 100 g|milliequivalents/100 g|meq per 100g|mval/100 g|mval/100g|cmolc kg-1|cmol kg-1|cmol+ kg-1',
   ],
-  ['mmolc/kg', 'mmolc/kg', 'charge', 'mmol(+)/kg mmolc/kg'],
+  ['mmolc/kg', 'mmolc/kg', 'charge', 'mmol(+)/kg mmolc/kg mmol+/kg|mmol(+) kg-1|mmolc kg-1|mmol(c)/kg|meq/kg'],
   [
     'meq/100cm3',
     'meq/100 cm³',

@@ -1,4 +1,4 @@
-import { readLabel } from '../labels/label';
+import { readLabel, unitOnly } from '../labels/label';
 import { type Line, type Phrase, phraseOf } from './lines';
 import { roleOf } from './roles';
 import { type CellMeaning, type NumberStyle, readCell } from './values';
@@ -46,6 +46,19 @@ function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
   const numbers = each.filter((cell) => cell.kind === 'value').length;
   if (numbers >= 2 && each.every((cell) => cell.kind !== 'text' && cell.kind !== 'range')) {
     return phrase.words.map((word) => phraseOf(phrase.page, phrase.line, [word]));
+  }
+  // "6.9 Zinc, DTPA": the number of one list so near the next list's label that they became one phrase.
+  const [firstWord] = phrase.words;
+  const rest = wordsText(phrase, 1);
+  if (
+    each[0]?.kind === 'value' &&
+    firstWord !== undefined &&
+    each[0].unit === null &&
+    readLabel(rest) !== null &&
+    unitOnly(rest) === null
+  ) {
+    const [head, tail] = cut(phrase, 1);
+    return [head, ...parts(tail, style)];
   }
   for (let at = count - 1; at >= 1; at--) {
     const right = readCell(wordsText(phrase, at), style).kind;

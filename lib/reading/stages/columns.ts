@@ -21,7 +21,14 @@ export type Column = {
 
 type Span = { x0: number; x1: number };
 type Stack = Span & { own: string[]; captions: string[]; over: boolean };
-type Caption = { text: string; middle: number; first: number; last: number };
+type Caption = {
+  text: string;
+  middle: number;
+  first: number;
+  last: number;
+  blocked: ReadonlySet<number>;
+  title: boolean;
+};
 
 /** Share of the narrower of two spans by which they must overlap to be one column. */
 const SAME_COLUMN = 0.2;
@@ -72,6 +79,31 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
   return meant ? parts : [phrase];
 }
 
+/** A unit or an extractant above names may be a caption over more columns than the one it stands over. */
+function saysForSeveral(text: string): boolean {
+  return (
+    unitOnly(text) !== null ||
+    (readLabel(text) === null &&
+      fieldOf(text) === null &&
+      /extract|saturation|exchangeable|acetate|dtpa|mehlich|olsen|morgan|bicarb/i.test(text))
+  );
+}
+
+/** Columns under other phrases of the caption's line are not its own. */
+function captionOf(
+  phrase: Phrase,
+  line: readonly Phrase[],
+  stacks: readonly Stack[],
+  first: number,
+  last: number,
+): Caption {
+  const blocked = new Set<number>();
+  for (const [index, stack] of stacks.entries())
+    if (line.some((other) => other !== phrase && overlap(other, stack) > 0)) blocked.add(index);
+  const title = line.length === 1 && saysForSeveral(phrase.text);
+  return { text: phrase.text, middle: (phrase.x0 + phrase.x1) / 2, first, last, blocked, title };
+}
+
 function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], captions: Caption[]) {
   const over = stacks.filter((stack) => overlap(stack, phrase) > 0);
   const wide = over.filter((stack) => {
@@ -80,17 +112,15 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
   });
   if (wide.length >= 2) {
     const at = wide.map((stack) => stacks.indexOf(stack));
-    captions.push({
-      text: phrase.text,
-      middle: (phrase.x0 + phrase.x1) / 2,
-      first: Math.min(...at),
-      last: Math.max(...at),
-    });
+    captions.push(captionOf(phrase, line, stacks, Math.min(...at), Math.max(...at)));
     return;
   }
   const best = over.sort((a, b) => overlap(b, phrase) - overlap(a, phrase))[0];
   if (best !== undefined) {
-    best.own.push(phrase.text);
+    const at = stacks.indexOf(best);
+    const narrow = best.own.length > 0 && line.length < stacks.length && saysForSeveral(phrase.text);
+    if (narrow) captions.push(captionOf(phrase, line, stacks, at, at));
+    else best.own.unshift(phrase.text);
     best.over = true;
     return;
   }
@@ -106,16 +136,23 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
     .filter((stack) => gap(stack) < REACH * phrase.size && !blocked(stack))
     .sort((a, b) => gap(a) - gap(b))[0];
   if (near === undefined) return;
-  near.own.push(phrase.text);
+  near.own.unshift(phrase.text);
 }
 
 const CHARGED = new Set(['potassium', 'calcium', 'magnesium', 'sodium', 'exchangeable_acidity', 'aluminium']);
+
+/** "Phosphorus" over "M3" and "Bray 1": the caption is the name, the column's own words are its method or unit. */
+function namedByCaption(own: string, caption: string): Label | null {
+  if (own === '' || roleOf(own, false) !== null || (readLabel(caption)?.strength ?? 0) < 0.97) return null;
+  const joined = readLabel(`${caption} ${own}`);
+  return joined === null ? null : { ...joined, strength: Math.min(joined.strength, 0.97) };
+}
 
 /** Whether a caption has something to say to a column that it does not yet know. */
 function takesCaption(stack: Stack | undefined, caption: string): boolean {
   if (stack === undefined || stack.captions.length > 0) return false;
   const label = readLabel(stack.own.join(' '));
-  if (label === null) return false;
+  if (label === null) return namedByCaption(stack.own.join(' '), caption) !== null;
   const unit = unitIn(caption)?.unit;
   if (unit === 'meq/100g' || unit === '%' || /saturation/i.test(caption))
     return label.unit === null && CHARGED.has(label.analyte);
@@ -126,15 +163,15 @@ function takesCaption(stack: Stack | undefined, caption: string): boolean {
 /** A caption is centred over its group: the widest run of columns that can take it and has it in the middle. */
 function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
   let [low, high] = [caption.first, caption.last];
-  while (takesCaption(stacks[low - 1], caption.text)) low -= 1;
-  while (takesCaption(stacks[high + 1], caption.text)) high += 1;
+  while (!caption.blocked.has(low - 1) && takesCaption(stacks[low - 1], caption.text)) low -= 1;
+  while (!caption.blocked.has(high + 1) && takesCaption(stacks[high + 1], caption.text)) high += 1;
   let best = { first: caption.first, last: caption.last };
   for (let first = low; first <= caption.first; first++) {
     for (let last = caption.last; last <= high; last++) {
       const [left, right] = [stacks[first], stacks[last]];
       if (left === undefined || right === undefined || last - first <= best.last - best.first) continue;
       const pitch = (right.x1 - left.x0) / (last - first + 1);
-      if (Math.abs((left.x0 + right.x1) / 2 - caption.middle) < 0.55 * pitch) best = { first, last };
+      if (caption.title || Math.abs((left.x0 + right.x1) / 2 - caption.middle) < 0.55 * pitch) best = { first, last };
     }
   }
   for (const stack of stacks.slice(best.first, best.last + 1)) stack.captions.push(caption.text);
@@ -166,14 +203,7 @@ function meaningOf(stack: Stack, first: boolean): Column {
     unexplained = 1;
     if (label !== null) label = { ...label, strength: Math.min(label.strength, 0.9) };
   }
-  // "Phosphorus" over the two columns "M3" and "Bray": the caption is the name, the column's own words the method or unit.
-  if (label === null && stack.own.length > 0) {
-    const caption = stack.captions.findLast((text) => (readLabel(text)?.strength ?? 0) >= 0.97);
-    if (caption !== undefined && roleOf(heading, false) === null) {
-      const joined = readLabel(`${caption} ${heading}`, stack.captions);
-      if (joined !== null) label = { ...joined, strength: Math.min(joined.strength, 0.97) };
-    }
-  }
+  for (const caption of [...stack.captions].reverse()) label ??= namedByCaption(heading, caption);
   const fields = stack.own.map((_, drop) => fieldOf(stack.own.slice(drop).join(' ')));
   const field = fields.find((found) => found !== null) ?? null;
   const all = [...stack.captions, heading].join(' ');
@@ -196,11 +226,11 @@ export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]
   const spans = spansOf(rows);
   const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], over: false }));
   const captions: Caption[] = [];
-  for (const line of header) {
+  for (const line of [...header].reverse()) {
     const phrases = line.cells.flatMap((cell: PageCell) => partHeading(cell.phrase, spans));
     for (const phrase of phrases) place(phrase, phrases, stacks, captions);
   }
-  for (const caption of captions) spreadCaption(caption, stacks);
+  for (const caption of captions.reverse()) spreadCaption(caption, stacks);
   return stacks.map((stack, index) => meaningOf(stack, index === 0));
 }
 

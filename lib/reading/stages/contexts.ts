@@ -7,31 +7,54 @@ export type Context = { readonly page: number; readonly y0: number; readonly x0:
 const STARTS = ['sampleId', 'labNumber'] as const;
 const SHARED = ['dateSampled', 'dateReported', 'depth'] as const;
 
+type Group = { readonly anchor: IdentityHit; readonly hits: IdentityHit[] };
+
+/** Anchors nearer than this in height stand side by side. */
+const LEVEL = 6;
+
+function isAnchor(hit: IdentityHit): boolean {
+  return STARTS.some((field) => field === hit.field);
+}
+
 /** Of groups that begin side by side, the one under whose first words a hit stands. */
-function besideOf(groups: readonly IdentityHit[][], last: IdentityHit[], hit: IdentityHit): IdentityHit[] {
+function besideOf(groups: readonly Group[], last: Group, hit: IdentityHit): Group {
   const level = groups.filter(
-    (group) => group[0]?.page === last[0]?.page && Math.abs((group[0]?.y0 ?? 0) - (last[0]?.y0 ?? 0)) < 2,
+    (group) => group.anchor.page === last.anchor.page && Math.abs(group.anchor.y0 - last.anchor.y0) < LEVEL,
   );
-  const left = level.filter((group) => (group[0]?.x0 ?? 0) <= hit.x0 + 2);
+  const left = level.filter((group) => group.anchor.x0 <= hit.x0 + 2);
   return left[left.length - 1] ?? last;
 }
 
-/** Stage 6c. The samples that form boxes speak of, in reading order; what is said once holds for all. */
+/**
+ * Stage 6c. The samples that form boxes speak of, in reading order; a name or number of a sample begins one, and what
+ * is said before the first holds for all.
+ */
 export function contextsOf(hits: readonly IdentityHit[]): Context[] {
   const sorted = [...hits].sort((a, b) => a.page - b.page || a.y0 - b.y0 || a.x0 - b.x0);
-  const groups: IdentityHit[][] = [];
+  const groups: Group[] = [];
+  const before: IdentityHit[] = [];
   for (const hit of sorted) {
-    const group = groups[groups.length - 1];
-    const held = group?.find((other) => other.field === hit.field);
-    const starts = STARTS.some((field) => field === hit.field);
-    if (group === undefined || (starts && held !== undefined && held.value !== hit.value)) groups.push([hit]);
-    else besideOf(groups, group, hit).push(hit);
+    const last = groups[groups.length - 1];
+    if (last === undefined) {
+      if (isAnchor(hit)) groups.push({ anchor: hit, hits: [hit] });
+      else before.push(hit);
+      continue;
+    }
+    const home = besideOf(groups, last, hit);
+    const held = home.hits.find((other) => other.field === hit.field);
+    if (isAnchor(hit) && held !== undefined && held.value !== hit.value) groups.push({ anchor: hit, hits: [hit] });
+    else home.hits.push(hit);
   }
-  const contexts = groups.map((group) => ({
-    page: group[0]?.page ?? 1,
-    y0: group[0]?.y0 ?? 0,
-    x0: group[0]?.x0 ?? 0,
-    identity: identityOf(group),
+  const shared = identityOf(before);
+  if (groups.length === 0) {
+    const [first] = before;
+    return first === undefined ? [] : [{ page: first.page, y0: first.y0, x0: first.x0, identity: shared }];
+  }
+  const contexts = groups.map(({ anchor, hits: own }) => ({
+    page: anchor.page,
+    y0: anchor.y0,
+    x0: anchor.x0,
+    identity: { ...shared, ...identityOf(own) },
   }));
   const first = contexts[0]?.identity ?? {};
   return contexts.map((context) => ({ ...context, identity: withShared(context.identity, first) }));
@@ -56,8 +79,10 @@ export function contextAt(
   let best: Context | null = null;
   for (const context of contexts) {
     if (context.page < page || (context.page === page && context.y0 <= y + 2)) {
-      const beside = best !== null && best.page === context.page && Math.abs(best.y0 - context.y0) < 2;
-      if (!beside || context.x0 <= x + 2) best = context;
+      const beside = best !== null && best.page === context.page && Math.abs(best.y0 - context.y0) < LEVEL;
+      // The title of a panel may be set in from the table under it.
+      const slack = best === null ? 0 : Math.min(60, 0.25 * (context.x0 - best.x0));
+      if (!beside || context.x0 - slack <= x + 2) best = context;
     }
   }
   return best ?? contexts.find((context) => context.page === page) ?? null;

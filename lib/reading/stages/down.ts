@@ -3,7 +3,7 @@ import { type Label, methodIn, methodInAny, readLabel, unitIn, unitOnly } from '
 import type { Remark } from '../types';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { fieldOf, fieldWithValue } from './identity';
-import { type Role, roleOf } from './roles';
+import { type NotTaken, type Role, roleOf } from './roles';
 import { isRatingHere, labelText, rowRoleOf, type Segment, wrappedLabel } from './rowLabels';
 import { headingsOver, isFieldLine, isHeadingLine, type RunColumn, runColumns } from './runColumns';
 import type { Value } from './values';
@@ -18,15 +18,13 @@ export type ListRow = {
   readonly identity: Identity | null;
 };
 
-/** A number beside a label that is no result, and the evidence. */
-export type NotTaken = { readonly cell: PageCell; readonly role: Role | 'advice' | 'several'; readonly why: string };
-
 export type Run = {
   readonly segments: readonly Segment[];
   readonly headings: readonly CellLine[];
   readonly columns: readonly RunColumn[];
   /** Heading lines that name the samples side by side; they speak of no other sample. */
   readonly sampleLines: readonly CellLine[];
+  readonly sections: readonly { readonly page: number; readonly y0: number; readonly text: string }[];
 };
 
 const NUMBERLIKE = new Set(['value', 'none', 'range']);
@@ -46,15 +44,19 @@ function startsOf(lines: readonly CellLine[], at: number, notLabel: (cell: PageC
   const starts: Start[] = [];
   for (const [index, cell] of line.cells.entries()) {
     if (NUMBERLIKE.has(cell.meaning.kind) || cell.meaning.kind === 'date' || isRatingHere(line, index)) continue;
-    if (!hasNumberAfter(line, index) || fieldOf(cell.phrase.text) !== null || notLabel(cell)) continue;
+    if (!hasNumberAfter(line, index) || notLabel(cell)) continue;
+    if (fieldOf(cell.phrase.text) !== null && cell.phrase.text.trim().endsWith(':')) continue;
     const last = starts[starts.length - 1];
     const filled =
       last !== undefined && line.cells.slice(last.index + 1, index).some((one) => NUMBERLIKE.has(one.meaning.kind));
     const next = line.cells.slice(index + 1).find((one) => NUMBERLIKE.has(one.meaning.kind));
     const end = next?.phrase.x0 ?? cell.phrase.x1;
-    if (last !== undefined && filled && next?.meaning.kind === 'range') continue;
+    const valued = line.cells
+      .slice(index + 1)
+      .some((one) => one.meaning.kind === 'value' || one.meaning.kind === 'none');
+    if (last !== undefined && filled && !valued) continue;
     const found = wrappedLabel(lines, at, cell, end);
-    if (found === null) continue;
+    if (found === null || (fieldOf(cell.phrase.text) !== null && found.lines.length === 0)) continue;
     if (last !== undefined && !filled) {
       const joined = readLabel(`${labelText(last.cell.phrase.text)} ${labelText(cell.phrase.text)}`);
       if (joined !== null && joined.analyte === last.label.analyte) continue;
@@ -238,7 +240,13 @@ function runsOf(lines: readonly CellLine[], segments: readonly Segment[]): Run[]
     const columns = runColumns(run.segments, headings, within);
     const named = columns.filter((column) => Object.keys(column.identity).length > 0);
     const sampleLines = named.length >= 2 ? headings.filter((line) => isFieldLine(line, within)) : [];
-    return { segments: run.segments, headings, columns, sampleLines };
+    return {
+      segments: run.segments,
+      headings,
+      columns,
+      sampleLines,
+      sections: sectionsOf(lines, run.segments, run.span),
+    };
   });
 }
 
@@ -455,8 +463,68 @@ function choose(found: readonly Found[], run: Run): Choice {
   return { taken: alone(open.slice(0, 1)), not, doubts: [doubt], position: 0.6 };
 }
 
-function rowsOf(segment: Segment, run: Run, not: NotTaken[]): ListRow[] {
+/** "Base saturation, %" or "Trace elements (DTPA), ppm" over the rows of a list adds what the rows leave open. */
+function underSection(segment: Segment, run: Run): Label {
+  const section = run.sections.findLast(
+    (one) => one.y0 < segment.line.line.y0 && one.page === segment.line.line.page.number,
+  );
+  if (section === undefined) return segment.label;
+  const named = readLabel(segment.label.text, [section.text]);
+  if (named === null) return segment.label;
+  const share = named.analyte.startsWith('sat_') && segment.label.unit === null;
+  const same = named.analyte === segment.label.analyte;
+  if (!share && !same) return segment.label;
+  return {
+    ...named,
+    unit: segment.label.unit ?? named.unit,
+    unitPrinted: segment.label.unitPrinted ?? named.unitPrinted,
+    strength: segment.label.strength,
+  };
+}
+
+/** Lines of one phrase between the rows, over them or among them, that speak of units, methods or shares. */
+function sectionsOf(lines: readonly CellLine[], segments: readonly Segment[], span: Span): Run['sections'] {
+  const [first, last] = [segments[0], segments[segments.length - 1]];
+  if (first === undefined || last === undefined) return [];
+  const from = Math.max(0, lines.indexOf(first.line) - 3);
+  const wrapped = new Set(segments.flatMap((segment) => segment.wrapped));
+  return lines.slice(from, lines.indexOf(last.line)).flatMap((line) => {
+    const cells = line.cells.filter((cell) => overlapping(cell.phrase, span));
+    const [cell] = cells;
+    if (
+      cell === undefined ||
+      cells.length !== 1 ||
+      line.values > 0 ||
+      wrapped.has(line) ||
+      cell.meaning.kind !== 'text'
+    )
+      return [];
+    if (line.line.page !== first.line.line.page || cell.phrase.words.length > 8) return [];
+    return [{ page: line.line.page.number, y0: line.line.y0, text: cell.phrase.text }];
+  });
+}
+
+/** "26.4" over "mg/kg" in the column of numbers. */
+function unitUnder(
+  lines: readonly CellLine[],
+  at: number,
+  cell: PageCell,
+): { unit: NonNullable<Value['unit']>; printed: string } | null {
+  for (const line of lines.slice(at + 1, at + 4)) {
+    if (line.line.page !== cell.phrase.page || line.line.y0 - cell.phrase.y1 > 0.8 * cell.phrase.size) return null;
+    const under = line.cells.find((one) => overlapping(one.phrase, cell.phrase));
+    if (under === undefined) continue;
+    return unitOnly(under.phrase.text);
+  }
+  return null;
+}
+
+function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly CellLine[], at: number): ListRow[] {
   const { found, words } = valuesOf(segment, run);
+  for (const one of found) {
+    const under = one.unit === null && segment.label.unit === null ? unitUnder(lines, at, one.cell) : null;
+    if (under !== null) [one.unit, one.unitPrinted] = [under.unit, under.printed];
+  }
   if (segment.rowRole !== null && NOT_RESULTS.has(segment.rowRole)) {
     for (const one of found)
       not.push({ cell: one.cell, role: segment.rowRole, why: `its row says ${segment.rowRole}` });
@@ -464,7 +532,7 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[]): ListRow[] {
   }
   const choice = choose(found, run);
   not.push(...choice.not);
-  const { label } = segment;
+  const label = underSection(segment, run);
   const wrappedWords = segment.wrapped.flatMap((line) => line.cells.map((cell) => cell.phrase.text)).join(' ');
   const method = label.method === null ? methodInAny(label.analyte, `${words} ${wrappedWords}`) : null;
   return choice.taken.map(({ one, identity }): ListRow => {
@@ -527,6 +595,9 @@ export function listRows(
     );
   const runs = silent.length === 0 ? first : runsOf(lines, segmentsOf(lines, taken, notLabel));
   const notTaken: NotTaken[] = [];
-  const rows = runs.flatMap((run) => run.segments.flatMap((segment) => rowsOf(segment, run, notTaken)));
+  const index = new Map(lines.map((line, at) => [line, at]));
+  const rows = runs.flatMap((run) =>
+    run.segments.flatMap((segment) => rowsOf(segment, run, notTaken, lines, index.get(segment.line) ?? 0)),
+  );
   return { rows, runs, notTaken };
 }

@@ -72,6 +72,43 @@ export function fieldWithValue(text: string): { field: IdentityField; value: str
   return null;
 }
 
+type Inside = { field: IdentityField; value: string; from: number };
+
+/** Fields set one after another in one phrase: "Sample 1: Marrow bed Lab no. WL-901 Depth 0-20 cm". */
+export function fieldsInside(words: readonly string[]): Inside[] {
+  const starts: { field: IdentityField; from: number; to: number }[] = [];
+  for (let at = 0; at < words.length; at++) {
+    for (let to = Math.min(words.length - 1, at + 4); to > at; to--) {
+      const text = words.slice(at, to).join(' ');
+      const colon = /[:#]$/.test(text);
+      const bare = colon ? text.slice(0, -1) : text;
+      const field =
+        fieldOf(bare) ?? (colon && /^(sample|plot|bed|field) (no\.? ?)?\w{1,3}$/i.test(bare) ? 'sampleId' : null);
+      if (field === null) continue;
+      const rest = words.slice(to, to + 4).join(' ');
+      const dated = field === 'dateSampled' || field === 'dateReported';
+      const sure = dated
+        ? new RegExp(`^(?:${ANY_DATE.source})`).test(rest)
+        : field === 'depth'
+          ? /^\d/.test(rest)
+          : colon || (field === 'labNumber' && /^\S*\d{2,}/.test(rest));
+      if (!sure) continue;
+      starts.push({ field, from: at, to });
+      at = to;
+      break;
+    }
+  }
+  return starts.map((start, index) => ({
+    field: start.field,
+    value: words
+      .slice(start.to, starts[index + 1]?.from ?? words.length)
+      .join(' ')
+      .replace(/[,;|·•]+$/, '')
+      .trim(),
+    from: start.from,
+  }));
+}
+
 export type IdentityHit = {
   readonly field: IdentityField;
   readonly value: string;
@@ -108,7 +145,14 @@ export function identityHits(lines: readonly CellLine[], taken: ReadonlySet<Cell
     for (const [index, cell] of line.cells.entries()) {
       const text = cell.phrase.text;
       const place = { page: cell.phrase.page.number, line: line.line.index, x0: cell.phrase.x0, y0: cell.phrase.y0 };
-      const whole = fieldWithValue(text);
+      const inside = fieldsInside(cell.phrase.words.map((word) => word.text)).filter((one) => one.value !== '');
+      if (inside.length >= 2 || (inside[0] !== undefined && inside[0].from > 0)) {
+        for (const one of inside)
+          hits.push({ field: one.field, value: one.value, ...place, x0: cell.phrase.words[one.from]?.x0 ?? place.x0 });
+        continue;
+      }
+      const whole =
+        fieldWithValue(text) ?? (inside[0] === undefined ? null : { field: inside[0].field, value: inside[0].value });
       if (whole !== null) {
         hits.push({ ...whole, ...place });
         continue;

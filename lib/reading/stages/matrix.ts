@@ -1,9 +1,9 @@
 import { type Candidate, type Identity, remark, type SamplePart } from '../candidate';
-import { readLabel } from '../labels/label';
+import { readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { type Column, columnsOf, headerScore, spansOf } from './columns';
-import { fieldWithValue } from './identity';
-import { JUST_RESULT, NOT_A_SAMPLE, roleOf } from './roles';
+import { fieldsInside, fieldWithValue } from './identity';
+import { JUST_RESULT, NOT_A_SAMPLE, type NotTaken, roleOf } from './roles';
 import { storedBox } from './words';
 
 export type Table = {
@@ -16,7 +16,7 @@ export type Table = {
 export type AdviceCell = { readonly sampleKey: Identity; readonly column: Column; readonly cell: PageCell };
 export type TableRow = SamplePart & { readonly line: CellLine; readonly advice: readonly AdviceCell[] };
 
-const HEADER_LINES = 6;
+const HEADER_LINES = 9;
 
 function samePage(a: CellLine, b: CellLine): boolean {
   return a.line.page === b.line.page;
@@ -34,13 +34,40 @@ function headerAbove(lines: readonly CellLine[], at: number, taken: ReadonlySet<
     if (line === undefined || under === undefined || taken.has(line) || !samePage(line, under) || line.values >= 2)
       break;
     if (line.values === 1 && labelsIn(line) > 0) break;
-    if (line.cells.some((cell) => fieldWithValue(cell.phrase.text) !== null)) break;
+    if (line.cells.some((cell) => namesASample(cell))) break;
     const gap = under.line.y0 - line.line.y1;
     if (gap > (header.length === 0 ? 4 : 2.2) * line.line.size) break;
     header.unshift(line);
     under = line;
   }
   return header;
+}
+
+function namesASample(cell: PageCell): boolean {
+  return (
+    fieldWithValue(cell.phrase.text) !== null || fieldsInside(cell.phrase.words.map((word) => word.text)).length > 0
+  );
+}
+
+/** "Nutrient | lb/acre | ppm | Rating": the head of another table. */
+function isRoleLine(line: CellLine): boolean {
+  if (line.values > 0 || line.cells.length < 2) return false;
+  const roles = line.cells.map((cell, index) => roleOf(cell.phrase.text, index === 0));
+  const known = roles.filter((role, index) => role !== null || unitOnly(line.cells[index]?.phrase.text ?? '') !== null);
+  return (
+    known.length >= 2 &&
+    known.length >= 0.6 * line.cells.length &&
+    roles.some((role) => role === 'analyte' || role === 'result')
+  );
+}
+
+/** A row that begins with an analyte, when the table's rows do not: a list stands under the table. */
+function beginsList(line: CellLine, first: CellLine): boolean {
+  const [cell] = line.cells;
+  const [top] = first.cells;
+  if (cell === undefined || top === undefined || line.values === 0) return false;
+  const label = cell.meaning.kind === 'value' ? null : readLabel(cell.phrase.text);
+  return label !== null && label.strength >= 0.97 && top.meaning.kind === 'value';
 }
 
 /** Rows under a header: until a new header, a wide gap, or lines that fit no column. */
@@ -53,6 +80,7 @@ function rowsFrom(lines: readonly CellLine[], at: number): CellLine[] {
       if (line.line.y0 - last.line.y1 > 5 * last.line.size) break;
       const headings = labelsIn(line);
       if (headings >= 3 && line.values <= 1 && !isRatingRow(line)) break;
+      if (isRoleLine(line) || (rows[0] !== undefined && beginsList(line, rows[0]))) break;
     }
     rows.push(line);
     last = line;
@@ -93,9 +121,10 @@ export function tablesOf(lines: readonly CellLine[]): Table[] {
     const block = rowsFrom(lines, at);
     const data = block.filter((row, index) => row.values >= 2 && (index === 0 || labelsIn(row) < 2));
     const above = headerAbove(lines, at, taken);
+    const under = unitsUnder(block);
     let best: { header: CellLine[]; columns: Column[]; score: number } | null = null;
     for (let count = 1; count <= above.length; count++) {
-      const header = above.slice(above.length - count);
+      const header = [...above.slice(above.length - count), ...under];
       const columns = columnsOf(header, data);
       const score = headerScore(columns);
       if (trustworthy(columns) && score >= (best?.score ?? 0.01)) best = { header, columns, score };
@@ -108,6 +137,14 @@ export function tablesOf(lines: readonly CellLine[]): Table[] {
     tables.push({ header: best?.header ?? [], rows, columns, borrowed: best === null });
   }
   return tables;
+}
+
+/** A line of units or methods set under the numbers instead of over them. */
+function unitsUnder(block: readonly CellLine[]): CellLine[] {
+  const line = block[1];
+  if (line === undefined || line.values > 0 || line.cells.length < 2) return [];
+  const units = line.cells.filter((cell) => unitOnly(cell.phrase.text) !== null).length;
+  return units >= 2 && units >= 0.5 * line.cells.length ? [line] : [];
 }
 
 function borrow(
@@ -134,7 +171,10 @@ function isRatingRow(line: CellLine): boolean {
   if (line.values > 0) return false;
   const [first, ...rest] = line.cells;
   const named = first !== undefined && rest.length > 0 && roleOf(first.phrase.text, false) === 'rating';
-  if (named) return rest.every((cell) => cell.phrase.text.length <= 16);
+  if (named)
+    return rest.every(
+      (cell) => cell.phrase.text.length <= 16 && (cell.phrase.text.length < 3 || readLabel(cell.phrase.text) === null),
+    );
   const ratings = line.cells.filter((cell) => cell.meaning.kind === 'rating').length;
   return ratings > 0 && ratings >= 0.6 * line.cells.length && line.values === 0;
 }
@@ -203,24 +243,67 @@ function rowIdentity(row: CellLine, table: Table): Identity {
   return identity;
 }
 
+/** "HH-331" or "20418" under a name is the laboratory's number, not more of the name. */
+const CODE = /^(?=.*\d{2})[A-Z]{0,4}[-./ ]?\d[\dA-Z./-]*$/;
+
+/** A column whose cells say what each row is: "Found", "Desired", "Mar 2025". */
+function rowKinds(table: Table): ReadonlyMap<CellLine, string> {
+  for (const column of table.columns) {
+    if (column.label !== null) continue;
+    const said = table.rows.flatMap((row) => {
+      const cell = row.cells.find((one) => columnAt(table.columns, one) === column);
+      return cell === undefined ? [] : [{ row, text: cell.phrase.text }];
+    });
+    const roles = said.filter(({ text }) => JUST_RESULT.test(text) || roleOf(text, false) !== null);
+    const results = roles.filter(({ text }) => JUST_RESULT.test(text) || roleOf(text, false) === 'result');
+    if (results.length >= 1 && roles.length > results.length && roles.length >= 0.5 * said.length)
+      return new Map(said.map(({ row, text }) => [row, text]));
+  }
+  return new Map();
+}
+
 /** Stage 6a. One part per row of a table; rating rows and name tails go to the row above them. */
-export function rowsOfTable(table: Table): TableRow[] {
+export function rowsOfTable(table: Table, notTaken: NotTaken[] = []): TableRow[] {
   const rows: TableRow[] = [];
+  const kinds = rowKinds(table);
   for (const [index, row] of table.rows.entries()) {
     const last = rows[rows.length - 1];
     if (isRatingRow(row)) continue;
+    const kind = kinds.get(row);
+    if (kind !== undefined && !JUST_RESULT.test(kind) && roleOf(kind, false) !== 'result' && row.values > 0) {
+      notTaken.push(
+        ...row.cells
+          .filter((cell) => cell.meaning.kind === 'value')
+          .map((cell) => ({ cell, role: roleOf(kind, false) ?? ('previous' as const), why: `its row says "${kind}"` })),
+      );
+      continue;
+    }
     if (last !== undefined && isTail(row, table.columns) && row.line.y0 - last.line.line.y1 < 1.2 * row.line.size) {
       const tail = row.cells.map((cell) => cell.phrase.text).join(' ');
       const before = last.identity.sampleId;
+      const code = before !== undefined && last.identity.labNumber === undefined && CODE.test(tail);
       rows[rows.length - 1] = {
         ...last,
-        identity: { ...last.identity, sampleId: before === undefined ? tail : `${before} ${tail}` },
+        identity: code
+          ? { ...last.identity, labNumber: tail }
+          : { ...last.identity, sampleId: before === undefined ? tail : `${before} ${tail}` },
       };
       continue;
     }
     const identity = rowIdentity(row, table);
     const name = identity.sampleId ?? identity.labNumber ?? row.cells[0]?.phrase.text ?? '';
-    if (NOT_A_SAMPLE.test(name)) continue;
+    if (NOT_A_SAMPLE.test(name)) {
+      notTaken.push(
+        ...row.cells
+          .filter((cell) => cell.meaning.kind === 'value')
+          .map((cell) => ({
+            cell,
+            role: roleOf(name, false) ?? ('several' as const),
+            why: `its row is headed "${name}"`,
+          })),
+      );
+      continue;
+    }
     const next = table.rows[index + 1];
     const ratings = next !== undefined && isRatingRow(next) ? next : null;
     const candidates: Candidate[] = [];
@@ -229,7 +312,11 @@ export function rowsOfTable(table: Table): TableRow[] {
       const column = columnAt(table.columns, cell);
       if (column === undefined || cell.meaning.kind !== 'value') continue;
       if (column.role === 'recommendation') advice.push({ sampleKey: identity, column, cell });
-      if (column.label === null || column.role !== null) continue;
+      if (column.label === null || column.role !== null) {
+        if (column.role !== null && column.role !== 'rating')
+          notTaken.push({ cell, role: column.role, why: `stands under "${column.heading}"` });
+        continue;
+      }
       const under = ratings?.cells.find((other) => columnAt(table.columns, other) === column);
       const candidate = candidateOf(
         row,

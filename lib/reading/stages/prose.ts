@@ -1,5 +1,5 @@
 import { type Candidate, remark } from '../candidate';
-import { type Label, readLabel, unitIn, unitOnly } from '../labels/label';
+import { type Label, readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox } from './cells';
 import type { ListRow } from './down';
 import { type Phrase, phraseOf } from './lines';

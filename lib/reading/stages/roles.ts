@@ -1,3 +1,5 @@
+import type { PageCell } from './cells';
+
 /** What a column holds, from its heading. Only "result" columns give results. */
 export type Role =
   | 'result'
@@ -20,10 +22,13 @@ const ROLES: readonly (readonly [Role, RegExp])[] = [
   ['recommendation', /\b(recommend(ed|ation)s?( (rate|amount))?|to apply|apply|to add|add)\b/i],
   ['difference', /\b(deficit|difference|short(fall|age)?|surplus|excess|change|needed)\b/i],
   ['previous', /\b(previous|last (test|year|result|sample|season|time)|prior|earlier|past|history)\b/i],
-  ['desired', /\b(desired|optimum|optimal|target|ideal|sufficien(t|cy)|normal|guide(line)?|wanted|goal|range)\b/i],
+  [
+    'desired',
+    /\b(desired|optimum|optimal|target|ideal|sufficien(t|cy)|normal|guide(line)?|wanted|goal|aim|usual|adequate|recommended range|range)\b/i,
+  ],
   [
     'rating',
-    /^((soil |fertility |nutrient |supply )?(rating|interpretation|status|class|category|rank|grade|group|comment|remark|evaluation|assessment|rtg\.?)s?|level rating|soil level|rate)$/i,
+    /^((fertility |nutrient |supply )?(rating|interpretation|status|class|category|rank|grade|group|comment|remark|evaluation|assessment|rtg\.?)s?|level rating|soil level|rate)$/i,
   ],
   [
     'result',
@@ -52,4 +57,8 @@ export const NOT_A_SAMPLE =
   /^(optimum|optimal|desired|target|ideal|previous|last|average|avg|mean|median|min(imum)?|max(imum)?|totals?|sum|std|reporting|detection|mdl|rl|lod|blank|duplicate rpd|normal|range|sufficien|guide|units?|method|rating|recommend|critical|deficit|difference|shortage|surplus|needed|wanted)\b/i;
 
 /** Row names that say "this is the result" and name no sample. */
-export const JUST_RESULT = /^(your |test |soil )?(values?|levels?|results?)( found)?$|^found$/i;
+export const JUST_RESULT =
+  /^(your |test |soil |this )?(values?|levels?|results?|year|test|reading)( found)?$|^(found|actual|measured|now|current|analysis)$/i;
+
+/** A number beside a label that is no result, and the evidence. */
+export type NotTaken = { readonly cell: PageCell; readonly role: Role | 'advice' | 'several'; readonly why: string };

@@ -8,6 +8,7 @@ import { fieldOf, fieldWithValue } from './identity';
 import { type Phrase, phraseOf } from './lines';
 import { type Role, roleOf } from './roles';
 import type { Segment } from './rowLabels';
+import { ratingIn } from './values';
 
 /** A column of numbers beside analytes that stand down the side, with everything its headings say. */
 export type RunColumn = {
@@ -86,7 +87,8 @@ function canHead(line: CellLine, within: Span, busy: ReadonlySet<CellLine>): Pag
   const numbers = cells.filter((cell) => cell.meaning.kind === 'value' && !isYear(cell));
   if (numbers.length > 0) return null;
   if (cells.some((cell) => cell.phrase.words.length > 9)) return null;
-  if (cells.length === 1 && cells[0]?.phrase.text.includes(':')) return null;
+  if (cells.some((cell) => /:$/.test(cell.phrase.text)) || (cells.length === 1 && cells[0]?.phrase.text.includes(':')))
+    return null;
   return cells;
 }
 
@@ -122,7 +124,41 @@ export function isHeadingLine(line: CellLine, within: Span): boolean {
   return roles.length >= 2 && roles.length >= 0.5 * cells.length;
 }
 
+/** Columns in groups that repeat one another: "found, target | found, target". */
+function repeatedGroups(columns: readonly Column[]): Column[][] {
+  const groups: Column[][] = [];
+  for (const column of columns) {
+    const own = column.own.join(' ').toLowerCase();
+    if (own === '') continue;
+    const last = groups[groups.length - 1];
+    if (last === undefined || last.some((other) => other.own.join(' ').toLowerCase() === own)) groups.push([column]);
+    else last.push(column);
+  }
+  const again = groups
+    .slice(1)
+    .every((group) =>
+      group.every((column) => groups[0]?.some((other) => other.own.join(' ') === column.own.join(' '))),
+    );
+  return groups.length >= 2 && again ? groups : [];
+}
+
 function placeLine(phrases: readonly Phrase[], columns: readonly Column[], size: number) {
+  const repeating = columns.filter(
+    (column) => columns.filter((other) => other.own.join(' ') === column.own.join(' ')).length >= 2,
+  );
+  const groups = repeatedGroups(repeating);
+  const spans = groups.map((group) => ({
+    x0: Math.min(...group.map((one) => one.x0)),
+    x1: Math.max(...group.map((one) => one.x1)),
+  }));
+  if (groups.length >= 2 && phrases.length === groups.length) {
+    const homes = phrases.map((phrase) => spans.findIndex((span) => overlap(span, phrase) > 0));
+    if (homes.every((home, index) => home === index)) {
+      for (const [index, group] of groups.entries())
+        for (const column of group) column.captions.unshift(phrases[index]?.text ?? '');
+      return;
+    }
+  }
   const claimed = new Set<Column>();
   const homes = phrases.map((phrase) => {
     const over = columns.filter((column) => overlap(column, phrase) > 0);
@@ -149,12 +185,13 @@ function placeLine(phrases: readonly Phrase[], columns: readonly Column[], size:
   }
   for (const column of columns) {
     // A column whose own heading is repeated under each caption belongs to the nearest caption.
-    if (claimed.has(column) || column.own.length === 0) continue;
+    const ownText = column.own.join(' ');
+    if (claimed.has(column) || ownText === '' || homes.length < 2) continue;
+    if (columns.filter((other) => other.own.join(' ') === ownText).length < 2) continue;
     const near = homes
       .filter((home) => home.over.length > 0 && gap(home.phrase, column) < 10 * size)
       .sort((a, b) => gap(a.phrase, column) - gap(b.phrase, column))[0];
-    const shares = near?.over.some((other) => other.own.length > 0 && other.own.join(' ') !== column.own.join(' '));
-    if (near !== undefined && shares) near.over.push(column);
+    if (near !== undefined && !near.over.some((other) => other.own.join(' ') === ownText)) near.over.push(column);
   }
   for (const { phrase, over } of homes) {
     if (over.length === 1 && over[0] !== undefined) over[0].own.unshift(phrase.text);
@@ -166,7 +203,8 @@ function settle(column: Column, first: boolean): RunColumn {
   const pieces = [...column.own, ...column.captions];
   const heading = [...column.captions, ...column.own].join(' ');
   const ownText = column.own.join(' ');
-  const whole = roleOf(ownText, first);
+  // "Low | Adequate | High" over a drawn scale: its columns grade, they hold no results.
+  const whole = ratingIn(ownText) === null ? roleOf(ownText, first) : 'rating';
   const roleText = [ownText, ...pieces].find((text) => {
     const role = roleOf(text, first);
     return role !== null && role !== 'date' && role !== 'analyte';
@@ -187,7 +225,8 @@ function settle(column: Column, first: boolean): RunColumn {
       unitOnly(text) === null &&
       fieldOf(text) === null &&
       !ANY_DATE.test(text) &&
-      readLabel(text) === null,
+      readLabel(text) === null &&
+      ratingIn(text) === null,
   );
   return {
     x0: column.x0,
@@ -214,6 +253,10 @@ export function runColumns(segments: readonly Segment[], headings: readonly Cell
     const fields = fieldLine(line, within);
     if (fields !== null && fields.cells.length >= 2) {
       for (const cell of fields.cells) {
+        if (roleOf(cell.phrase.text, false) !== null || unitOnly(cell.phrase.text) !== null) {
+          columns.find((column) => overlap(column, cell.phrase) > 0)?.own.unshift(cell.phrase.text);
+          continue;
+        }
         const home = columns.filter(
           (column) => overlap(column, cell.phrase) > 0 || gap(column, cell.phrase) < cell.phrase.size,
         )[0];
