@@ -1,11 +1,12 @@
 import { assemble } from './assemble';
 import { type Identity, remark, type SamplePart } from './candidate';
+import { clean } from './labels/normal';
 import { NO_RESULTS } from './readPages';
 import { ANY_DATE } from './stages/dates';
 import type { Statements } from './stages/sections';
 import { type NumberStyle, numberStyle } from './stages/values';
 import { decode } from './table/decode';
-import { gridOf } from './table/grid';
+import { gridOf, unwrapped } from './table/grid';
 import { joinSamples } from './table/joinSamples';
 import { materialByNumbers, materialOf } from './table/material';
 import { readSheet, type SheetReading, type Untaken, untakenOf } from './table/sheet';
@@ -43,8 +44,12 @@ type Opened = { ok: true; sheets: readonly Sheet[]; delimiter: string | null } |
 
 function opened(input: TableInput): Opened {
   if ('sheets' in input) {
-    const empty = input.sheets.every((sheet) => sheet.grid.every((row) => row.every((cell) => cell === '')));
-    return empty ? { ok: false, error: EMPTY } : { ok: true, sheets: input.sheets, delimiter: null };
+    const sheets = input.sheets.map((sheet) => ({
+      ...sheet,
+      grid: sheet.grid.map((row) => row.map((cell) => unwrapped(clean(cell)))),
+    }));
+    const empty = sheets.every((sheet) => sheet.grid.every((row) => row.every((cell) => cell === '')));
+    return empty ? { ok: false, error: EMPTY } : { ok: true, sheets, delimiter: null };
   }
   const decoded = 'text' in input ? { ok: true as const, text: input.text } : decode(input.bytes);
   if (!decoded.ok) return { ok: false, error: BINARY };

@@ -1,10 +1,10 @@
 import { readPages } from '@/lib/reading/readPages';
-import { readTable } from '@/lib/reading/readTable';
 import { type Reading, refusedReading } from '@/lib/reading/types';
 import { wordsOfPdf } from '@/lib/services/pdf/words';
 import { refusal } from '@/lib/services/reading/refusals';
+import { readDataFile } from './dataFile';
 import { MAX_PAGES } from './limits';
-import type { FromChild, ToChild } from './messages';
+import { type FromChild, isDataKind, type ToChild } from './messages';
 
 /** Child process that reads one file and ends. It has no environment, no database and no store. */
 function send(message: FromChild) {
@@ -12,7 +12,7 @@ function send(message: FromChild) {
 }
 
 async function read(input: ToChild): Promise<Reading> {
-  if (input.kind === 'csv') return readTable({ fileName: input.fileName, bytes: input.bytes });
+  if (isDataKind(input.kind)) return readDataFile({ ...input, kind: input.kind });
   const words = await wordsOfPdf({
     bytes: input.bytes,
     maxPages: MAX_PAGES,

@@ -1,6 +1,14 @@
 import type { Reading } from '@/lib/reading/types';
 
-export type ToChild = { readonly kind: 'pdf' | 'csv'; readonly fileName: string; readonly bytes: Uint8Array };
+/** Kinds of file that have no pages. */
+const DATA_KINDS = ['csv', 'text', 'xlsx', 'xls'] as const;
+export type DataKind = (typeof DATA_KINDS)[number];
+
+export function isDataKind(kind: string): kind is DataKind {
+  return DATA_KINDS.some((one) => one === kind);
+}
+
+export type ToChild = { readonly kind: 'pdf' | DataKind; readonly fileName: string; readonly bytes: Uint8Array };
 
 export type FromChild =
   | { readonly type: 'ready' }

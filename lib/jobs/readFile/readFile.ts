@@ -6,7 +6,7 @@ import { type Reading, refusedReading } from '@/lib/reading/types';
 import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
 import { maxBytesOf, sniffReport } from '@/lib/services/reading/sniff';
 import { HEAP_LIMIT_MB, MEMORY_CHECK_MS, MEMORY_LIMIT_BYTES, START_LIMIT_MS, TIME_LIMIT_MS } from './limits';
-import { isFromChild, type ToChild } from './messages';
+import { isDataKind, isFromChild, type ToChild } from './messages';
 
 /** In development the child is the TypeScript file beside this one; in a bundle it is bundled beside the worker. */
 const CHILD_FILES = ['./child.ts', './readFileChild.mjs', './readFileChild.js'];
@@ -103,7 +103,7 @@ export async function readFile(input: {
   const sniffed = sniffReport({ bytes: input.bytes, fileName: input.fileName });
   if (!sniffed.ok) return refuse(sniffed.code);
   if (input.bytes.length > maxBytesOf(sniffed.kind)) return refuse('too-large');
-  if (sniffed.kind !== 'pdf' && sniffed.kind !== 'csv') return refuse('kept-not-read');
+  if (sniffed.kind !== 'pdf' && !isDataKind(sniffed.kind)) return refuse('kept-not-read');
   return run({
     message: { kind: sniffed.kind, fileName: input.fileName, bytes: input.bytes },
     timeLimitMs: input.timeLimitMs ?? TIME_LIMIT_MS,

@@ -44,7 +44,7 @@ export function delimiterOf(text: string): string {
 }
 
 /** `="007"` and `'007` are how spreadsheets keep a number as text. */
-function unwrapped(cell: string): string {
+export function unwrapped(cell: string): string {
   const formula = /^="(.*)"$/.exec(cell);
   return formula?.[1] ?? (/^'[\d<>]/.test(cell) ? cell.slice(1) : cell);
 }

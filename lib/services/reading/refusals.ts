@@ -3,7 +3,8 @@ const SENTENCES = {
   empty: 'This file is empty. Save it again where it came from and upload it once more.',
   'not-what-it-says':
     'The content of this file does not match its name. Save it again under its real type and upload it once more.',
-  'type-not-accepted': 'Loamline reads PDF and CSV files. Save the report as one of these, or type the numbers in.',
+  'type-not-accepted':
+    'Loamline reads PDF files, pictures, data files (CSV, XLSX, XLS), plain text and the open laboratory formats (XML, JSON). Save the report as one of these, or type the numbers in.',
   'too-large': 'This file is larger than Loamline reads. Save it smaller, or type the numbers in.',
   'kept-not-read':
     'Pictures and spreadsheets of this kind cannot be read yet. The file is kept; type the numbers in beside the page.',
@@ -15,6 +16,24 @@ const SENTENCES = {
   'not-a-pdf': 'This file is named as a PDF but is something else. Open it, save it as a PDF and upload that.',
   'too-many-pages':
     'This PDF has more than 60 pages. It is kept; save the pages with your results as a file of their own.',
+  'encrypted-sheet':
+    'This workbook is locked with a password. It is kept; save a copy without the password and upload that, or type the numbers in.',
+  'broken-sheet':
+    'This workbook is damaged and could not be opened. It is kept; open and save it in your own program, or save it as CSV and upload that.',
+  'unpacks-too-large':
+    'This workbook unpacks to far more than a laboratory’s data and was not opened. It is kept; save the sheet with your results as CSV and upload that.',
+  'table-too-large':
+    'This workbook has more than 20,000 rows, 1,000 columns or 60 sheets. It is kept; cut it into smaller files and upload those.',
+  'xml-declares-entities':
+    'This XML file declares a document type or entities of its own, which laboratory data never needs, so it was not read. It is kept; ask the laboratory for a plain file, or type the numbers in.',
+  'nested-too-deep':
+    'This file nests its parts deeper than laboratory data ever does and was not read. It is kept; ask the laboratory for a plain file, or type the numbers in.',
+  'broken-xml':
+    'This XML file breaks off or is not well formed, so it was not read. It is kept; fetch it once more, or type the numbers in.',
+  'broken-json':
+    'This JSON file breaks off or is not well formed, so it was not read. It is kept; fetch it once more, or type the numbers in.',
+  'not-lab-data':
+    'This file is not in the open laboratory format that Loamline reads. It is kept; ask the laboratory for PDF or CSV, or type the numbers in.',
   'too-slow': 'Reading this file took too long and was stopped. It is kept; type the numbers in beside the page.',
   'too-much-memory':
     'Reading this file needed too much memory and was stopped. It is kept; type the numbers in beside the page.',

@@ -12,8 +12,18 @@ describe('sniffReport', () => {
     ['a.tsv', hex('fffe70004800'), 'csv', true],
     ['a.jpg', hex('ffd8ffe000104a464946'), 'jpeg', false],
     ['a.png', hex('89504e470d0a1a0a'), 'png', false],
-    ['a.xls', hex('d0cf11e0a1b11ae1'), 'xls', false],
-    ['a.xlsx', Uint8Array.from([...hex('504b0304'), ...bytes('[Content_Types].xml')]), 'xlsx', false],
+    ['a.xls', hex('d0cf11e0a1b11ae1'), 'xls', true],
+    ['a.txt', bytes('pH: 6.5\n'), 'text', true],
+    ['a.xml', bytes('<?xml version="1.0"?><Event/>'), 'xml', true],
+    ['a.xml', bytes('\ufeff<Event/>'), 'xml', true],
+    ['a.json', bytes(' {"id": 1}'), 'json', true],
+    ['a.xlsx', Uint8Array.from([...hex('504b0304'), ...bytes('[Content_Types].xml')]), 'xlsx', true],
+    [
+      'a.xlsx',
+      Uint8Array.from([...hex('d0cf11e0a1b11ae1'), ...Buffer.from('EncryptedPackage', 'utf16le')]),
+      'xlsx',
+      true,
+    ],
   ])('%s', (fileName, content, kind, readable) => {
     expect(sniffReport({ bytes: content, fileName })).toMatchObject({ ok: true, kind, readable });
   });
@@ -24,6 +34,11 @@ describe('sniffReport', () => {
     ['a.png', hex('ffd8ffe0'), 'not-what-it-says'],
     ['a.xlsx', hex('504b0304aaaa'), 'not-what-it-says'],
     ['a.csv', hex('0102030405060708'), 'not-what-it-says'],
+    ['a.xml', bytes('<?xml version="1.0"?><svg/>'), 'not-what-it-says'],
+    ['a.json', bytes('pH,P'), 'not-what-it-says'],
+    ['a.csv', bytes('{"id": 1}'), 'not-what-it-says'],
+    ['a.txt', bytes('<?xml version="1.0"?><a/>'), 'not-what-it-says'],
+    ['a.xlsx', hex('d0cf11e0a1b11ae1'), 'not-what-it-says'],
     ['a.svg', bytes('<svg/>'), 'type-not-accepted'],
     ['a', bytes('pH,P'), 'type-not-accepted'],
     ['a.pdf', new Uint8Array(), 'empty'],
