@@ -1,25 +1,31 @@
-import { readPages } from '@/lib/reading/readPages';
 import { type Reading, refusedReading } from '@/lib/reading/types';
 import { wordsOfPdf } from '@/lib/services/pdf/words';
 import { refusal } from '@/lib/services/reading/refusals';
 import { readDataFile } from './dataFile';
 import { MAX_PAGES } from './limits';
 import { type FromChild, isDataKind, type ToChild } from './messages';
+import { readPdfPages, readPictureFile, type Told } from './pictures';
 
 /** Child process that reads one file and ends. It has no environment, no database and no store. */
 function send(message: FromChild) {
   process.send?.(message);
 }
 
+const tell: Told = {
+  page: (page, of) => send({ type: 'page', page, of }),
+  scans: (pages) => send({ type: 'scans', pages }),
+};
+
 async function read(input: ToChild): Promise<Reading> {
   if (isDataKind(input.kind)) return readDataFile({ ...input, kind: input.kind });
+  if (input.kind === 'picture') return (await readPictureFile(input, tell)).reading;
   const words = await wordsOfPdf({
     bytes: input.bytes,
     maxPages: MAX_PAGES,
-    onPage: (page, of) => send({ type: 'page', page, of }),
+    onPage: tell.page,
   });
   if (!words.ok) return refusedReading({ file: input.fileName, pages: words.pages, error: refusal(words.reason) });
-  return readPages({ fileName: input.fileName, pages: words.pages });
+  return readPdfPages({ ...input, pages: words.pages }, tell);
 }
 
 process.on('disconnect', () => process.exit(1));

@@ -8,17 +8,24 @@ export function isDataKind(kind: string): kind is DataKind {
   return DATA_KINDS.some((one) => one === kind);
 }
 
-export type ToChild = { readonly kind: 'pdf' | DataKind; readonly fileName: string; readonly bytes: Uint8Array };
+export type ToChild = {
+  readonly kind: 'pdf' | 'picture' | DataKind;
+  readonly fileName: string;
+  readonly bytes: Uint8Array;
+};
 
 export type FromChild =
   | { readonly type: 'ready' }
   | { readonly type: 'page'; readonly page: number; readonly of: number }
+  /** So many pages are pictures and take longer. */
+  | { readonly type: 'scans'; readonly pages: number }
   | { readonly type: 'done'; readonly reading: Reading };
 
 /** The child is our own program; the check guards against a half-written message of a dying process. */
 export function isFromChild(message: unknown): message is FromChild {
   if (typeof message !== 'object' || message === null || !('type' in message)) return false;
   if (message.type === 'ready') return true;
+  if (message.type === 'scans') return 'pages' in message && typeof message.pages === 'number';
   if (message.type === 'page') return 'page' in message && 'of' in message;
   return (
     message.type === 'done' && 'reading' in message && typeof message.reading === 'object' && message.reading !== null

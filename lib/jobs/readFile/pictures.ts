@@ -41,10 +41,7 @@ async function withEngine<T>(run: (engine: () => Promise<Engine>) => Promise<T>)
 }
 
 /** A PNG or JPEG as a report of one page. */
-export async function readPictureFile(
-  input: { fileName: string; bytes: Uint8Array },
-  tell: Told,
-): Promise<Trace> {
+export async function readPictureFile(input: { fileName: string; bytes: Uint8Array }, tell: Told): Promise<Trace> {
   const { fileName } = input;
   const decoded = await decodePicture(input.bytes);
   if (!decoded.ok) {
@@ -55,7 +52,10 @@ export async function readPictureFile(
     const seen = await readPicture(await engine(), decoded.picture);
     tell.page(1, 1);
     if (seen === null) {
-      return { reading: refusedReading({ file: fileName, pages: 1, error: refusal('picture-unreadable') }), trace: null };
+      return {
+        reading: refusedReading({ file: fileName, pages: 1, error: refusal('picture-unreadable') }),
+        trace: null,
+      };
     }
     return readScanTraced({
       fileName,

@@ -5,7 +5,15 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 import { type Reading, refusedReading } from '@/lib/reading/types';
 import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
 import { maxBytesOf, sniffReport } from '@/lib/services/reading/sniff';
-import { HEAP_LIMIT_MB, MEMORY_CHECK_MS, MEMORY_LIMIT_BYTES, START_LIMIT_MS, TIME_LIMIT_MS } from './limits';
+import {
+  HEAP_LIMIT_MB,
+  LONGEST_TIME_MS,
+  MEMORY_CHECK_MS,
+  MEMORY_LIMIT_BYTES,
+  SCAN_TIME_MS,
+  START_LIMIT_MS,
+  TIME_LIMIT_MS,
+} from './limits';
 import { isDataKind, isFromChild, type ToChild } from './messages';
 
 /** In development the child is the TypeScript file beside this one; in a bundle it is bundled beside the worker. */
@@ -60,6 +68,7 @@ function run(input: RunInput): Promise<Reading> {
       child.kill('SIGKILL');
     };
     const onAbort = () => child.kill('SIGKILL');
+    let began = Date.now();
     let clock = setTimeout(() => kill('too-slow'), START_LIMIT_MS);
     const watch = setInterval(() => {
       if (child.pid !== undefined && residentBytes(child.pid) > input.memoryLimitBytes) kill('too-much-memory');
@@ -69,8 +78,13 @@ function run(input: RunInput): Promise<Reading> {
       if (!isFromChild(message)) return;
       if (message.type === 'ready') {
         clearTimeout(clock);
+        began = Date.now();
         clock = setTimeout(() => kill('too-slow'), input.timeLimitMs);
         child.send(input.message);
+      } else if (message.type === 'scans') {
+        const whole = Math.min(LONGEST_TIME_MS, input.timeLimitMs + message.pages * SCAN_TIME_MS);
+        clearTimeout(clock);
+        clock = setTimeout(() => kill('too-slow'), whole - (Date.now() - began));
       } else if (message.type === 'page') input.onPage?.(message.page, message.of);
       else reading = message.reading;
     });
@@ -103,9 +117,10 @@ export async function readFile(input: {
   const sniffed = sniffReport({ bytes: input.bytes, fileName: input.fileName });
   if (!sniffed.ok) return refuse(sniffed.code);
   if (input.bytes.length > maxBytesOf(sniffed.kind)) return refuse('too-large');
-  if (sniffed.kind !== 'pdf' && !isDataKind(sniffed.kind)) return refuse('kept-not-read');
+  const kind = sniffed.kind === 'jpeg' || sniffed.kind === 'png' ? 'picture' : sniffed.kind;
+  if (kind !== 'pdf' && kind !== 'picture' && !isDataKind(kind)) return refuse('kept-not-read');
   return run({
-    message: { kind: sniffed.kind, fileName: input.fileName, bytes: input.bytes },
+    message: { kind, fileName: input.fileName, bytes: input.bytes },
     timeLimitMs: input.timeLimitMs ?? TIME_LIMIT_MS,
     memoryLimitBytes: input.memoryLimitBytes ?? MEMORY_LIMIT_BYTES,
     signal: input.signal,

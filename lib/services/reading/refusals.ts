@@ -34,6 +34,14 @@ const SENTENCES = {
     'This JSON file breaks off or is not well formed, so it was not read. It is kept; fetch it once more, or type the numbers in.',
   'not-lab-data':
     'This file is not in the open laboratory format that Loamline reads. It is kept; ask the laboratory for PDF or CSV, or type the numbers in.',
+  'picture-broken':
+    'This picture is damaged and could not be opened. It is kept; take or save it once more, or type the numbers in.',
+  'picture-too-large':
+    'This picture has more than 40 megapixels and was not opened. It is kept; save it smaller and upload that, or type the numbers in beside it.',
+  'picture-unreadable':
+    'No print could be made out in this picture. It is kept; take it again flat, sharp and in good light, or type the numbers in beside it.',
+  'too-many-scans':
+    'This PDF has more than 12 scanned pages. It is kept; save the pages with your results as a file of their own.',
   'too-slow': 'Reading this file took too long and was stopped. It is kept; type the numbers in beside the page.',
   'too-much-memory':
     'Reading this file needed too much memory and was stopped. It is kept; type the numbers in beside the page.',

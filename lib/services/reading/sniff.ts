@@ -20,8 +20,8 @@ const TYPES: Readonly<
   text: { contentType: 'text/plain', extensions: ['txt'], readable: true, maxBytes: 5 * 1024 * 1024 },
   xml: { contentType: 'application/xml', extensions: ['xml'], readable: true, maxBytes: 5 * 1024 * 1024 },
   json: { contentType: 'application/json', extensions: ['json'], readable: true, maxBytes: 5 * 1024 * 1024 },
-  jpeg: { contentType: 'image/jpeg', extensions: ['jpg', 'jpeg'], readable: false, maxBytes: 20 * 1024 * 1024 },
-  png: { contentType: 'image/png', extensions: ['png'], readable: false, maxBytes: 20 * 1024 * 1024 },
+  jpeg: { contentType: 'image/jpeg', extensions: ['jpg', 'jpeg'], readable: true, maxBytes: 20 * 1024 * 1024 },
+  png: { contentType: 'image/png', extensions: ['png'], readable: true, maxBytes: 20 * 1024 * 1024 },
   xlsx: {
     contentType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
     extensions: ['xlsx'],
@@ -79,7 +79,7 @@ function contentOf(bytes: Uint8Array): Content | null {
   if (!looksLikeText(bytes)) return null;
   const text = startOf(bytes);
   if (/^(<!doctype html|<html|<svg|<script|<head|<body|<meta|<table)/.test(text)) return 'html';
-  if (/^<(\?xml|!doctype|!--|[a-z_:])/.test(text)) return /<(html|svg)[\s>]/.test(text) ? 'html' : 'xml';
+  if (/^<(\?xml|!doctype|!--|[a-z_:])/.test(text)) return /<(html|svg)[\s/>]/.test(text) ? 'html' : 'xml';
   return /^[{[]\s*("|\{|\[|\}|\])/.test(text) ? 'json' : 'text';
 }
 

@@ -1,0 +1,60 @@
+import type { Merged } from './types';
+import { isKnown, mended } from './vocabulary';
+
+/** Letters that the engine takes for one another in the short words of units. */
+const UNITS: readonly (readonly [RegExp, string])[] = [
+  [/^([(]?)[I1|]bs?(?=$|[/)., ])/, '$1lb'],
+  [/^([(]?)[I1|]bs(?=$|[/)., ])/, '$1lbs'],
+  [/(\/|per)[I1|]bs?\b/, '$1lb'],
+  [/^([(]?)(?:meg|mcq|rneq|mea|meqg)(?=\/?1?0?0?)/i, '$1meq'],
+  [/^([(]?)(?:pprn|ppin|pom|ppn|pprm|opm|pprn\.)(?=$|[),.])/i, '$1ppm'],
+  [/^([(]?)(?:rng|mq|mo)\/(?=k|K|L|d|1)/, '$1mg/'],
+  [/mg\/k[gq9]\b/, 'mg/kg'],
+  [/^([(]?)0z(?=$|[/)., ])/, '$1oz'],
+  [/\/(?:1OO|I00|l00|10O|1O0)(?=g|\b)/, '/100'],
+  [/\bK20\b/, 'K2O'],
+  [/\bP20[5S]\b|\bP2OS\b|\bP205\b/, 'P2O5'],
+  [/\bH20\b/, 'H2O'],
+  [/^([(]?)p[Hh](?=$|[ ,)])/, '$1pH'],
+];
+
+function unitsMended(text: string): string {
+  let out = text;
+  for (const [wrong, right] of UNITS) {
+    const next = out.replace(wrong, right);
+    if (next !== out) {
+      out = /^[(]?[I1|]bs/.test(text) ? next.replace(/lb(?!s)/, 'lbs') : next;
+      break;
+    }
+  }
+  return out;
+}
+
+/** Letters inside a number: O for 0, l and I for 1, S for 5, B for 8, when everything else is a figure. */
+function figuresMended(text: string): string | null {
+  if (!/\d/.test(text) || !/[OoQDlI|SsBZ]/.test(text)) return null;
+  const core = text
+    .replace(/[OoQD]/g, '0')
+    .replace(/[lI|]/g, '1')
+    .replace(/[Ss]/g, '5')
+    .replace(/B/g, '8')
+    .replace(/Z/g, '2');
+  if (!/^[<>]?\d+([.,]\d+)?$/.test(core)) return null;
+  // A letter at the end after figures is more often a rating or a mark than a figure.
+  if (/^[<>]?\d+([.,]\d+)?[A-Z]{1,2}$/.test(text) && !/[Oo]$/.test(text)) return null;
+  return core;
+}
+
+/** Words with the engine's usual confusions undone. What was changed is doubted through the support it keeps. */
+export function mendWords(words: readonly Merged[]): Merged[] {
+  return words.map((word) => {
+    const figures = figuresMended(word.text);
+    if (figures !== null && !isKnown(word.text) && !/^[A-Z]/.test(word.text)) {
+      return { ...word, text: figures, support: Math.max(1, word.support - 1), others: [...word.others, word.text] };
+    }
+    const unit = unitsMended(word.text);
+    if (unit !== word.text) return { ...word, text: unit };
+    const whole = isKnown(word.text) ? null : mended(word.text);
+    return whole === null ? word : { ...word, text: whole };
+  });
+}

@@ -1,0 +1,63 @@
+import type { Seen } from './types';
+
+/** Reach of each character above and below the baseline, as shares of the type size; usual for printed sans and serif. */
+const TALL = 0.72;
+const LOW = 0.53;
+const DEEP = 0.21;
+
+function reach(text: string): { up: number; down: number } {
+  let [up, down] = [0, 0];
+  for (const character of text) {
+    if (/[acemnorsuvwxz]/.test(character)) up = Math.max(up, LOW);
+    else if (/[gpqy]/.test(character)) [up, down] = [Math.max(up, LOW), DEEP];
+    else if (/[()[\]{}/|jQ$]/.test(character)) [up, down] = [Math.max(up, TALL), Math.max(down, 0.18)];
+    else if (/[,;]/.test(character)) down = Math.max(down, 0.14);
+    else if (/[.:_]/.test(character)) up = Math.max(up, 0.1);
+    else if (/[-–—~=+<>]/.test(character)) up = Math.max(up, 0.45);
+    else up = Math.max(up, TALL);
+  }
+  return { up, down };
+}
+
+export type Set = { readonly size: number; readonly base: number };
+
+function median(values: readonly number[]): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  return sorted[Math.floor(sorted.length / 2)] ?? 0;
+}
+
+/** Size of type and baseline of one word from the box of its ink; null for words of marks only, whose ink tells neither. */
+function ownSet(word: Seen): Set | null {
+  if (!/[A-Za-z0-9]/.test(word.text)) return null;
+  const { up, down } = reach(word.text);
+  const size = (word.y1 - word.y0) / (up + down);
+  return { size, base: word.y1 - down * size };
+}
+
+/**
+ * Type size and baseline of each word, evened out with its neighbours on the same line: ink boxes differ with the
+ * letters in them, and the stages of the reader compare baselines and sizes.
+ */
+export function setOf(words: readonly Seen[]): Map<Seen, Set> {
+  const own = words.map((word) => ({ word, set: ownSet(word) }));
+  const usual = median(own.flatMap(({ set }) => set?.size ?? [])) || 1;
+  const known = own.flatMap(({ word, set }) => (set === null ? [] : [{ word, set }]));
+  const sets = new Map<Seen, Set>();
+  for (const { word, set } of own) {
+    const rough = set ?? { size: usual, base: (word.y0 + word.y1) / 2 + 0.25 * usual };
+    const near = known.filter(
+      (other) =>
+        Math.abs(other.set.base - rough.base) < 0.35 * rough.size &&
+        (set === null || Math.max(other.set.size, rough.size) < 1.3 * Math.min(other.set.size, rough.size)) &&
+        Math.abs(other.word.x0 + other.word.x1 - word.x0 - word.x1) < 40 * rough.size,
+    );
+    if (near.length === 0) sets.set(word, rough);
+    else {
+      // A longer word measures its type better than a single letter.
+      const weighted = (pick: (one: Set) => number) =>
+        median(near.flatMap((one) => Array(Math.min(8, one.word.text.length)).fill(pick(one.set))));
+      sets.set(word, { size: weighted((one) => one.size), base: weighted((one) => one.base) });
+    }
+  }
+  return sets;
+}

@@ -1,0 +1,64 @@
+import { ANALYTES, METHODS, RATINGS, UNITS } from '@/lib/domain/analytes';
+
+/** Words of reports that are no analyte, unit or method. */
+const PLAIN = [
+  'sample', 'samples', 'soil', 'test', 'report', 'results', 'result', 'laboratory', 'lab', 'number', 'field', 'name',
+  'depth', 'date', 'sampled', 'received', 'reported', 'analysis', 'rating', 'level', 'found', 'wanted', 'short',
+  'desired', 'optimum', 'range', 'method', 'units', 'unit', 'extractable', 'available', 'saturation', 'base', 'bases',
+  'cation', 'exchange', 'capacity', 'recommendation', 'recommendations', 'previous', 'inches', 'acre', 'total', 'ratio',
+  'garden', 'grower', 'low', 'high', 'medium', 'very', 'adequate', 'deficient', 'excess', 'matter', 'organic', 'water',
+]; // biome-ignore format: one list
+
+function collect(): ReadonlySet<string> {
+  const words = new Set<string>(PLAIN);
+  const add = (text: string) => {
+    for (const word of text.toLowerCase().split(/[^a-z0-9%/+.:-]+/)) if (word.length > 1) words.add(word);
+  };
+  for (const entry of ANALYTES) for (const text of [entry.label, entry.symbol, ...entry.spellings]) add(text);
+  for (const entry of UNITS) entry.spellings.forEach(add);
+  for (const entry of METHODS) entry.spellings.forEach(add);
+  for (const entry of RATINGS) entry.spellings.forEach(add);
+  return words;
+}
+
+const WORDS = collect();
+const LONG = [...WORDS].filter((word) => /^[a-z]{6,}$/.test(word));
+
+export function bare(text: string): string {
+  return text.toLowerCase().replace(/^[^a-z0-9%]+|[^a-z0-9%+]+$/g, '');
+}
+
+export function isKnown(text: string): boolean {
+  return WORDS.has(bare(text));
+}
+
+export function isNumber(text: string): boolean {
+  return /^[<>]?\d{1,6}([.,]\d{1,4})?$/.test(text.replace(/[A-Z*]{0,2}$/, ''));
+}
+
+/** True when one letter changed, put in or left out makes one word the other, or "rn" stands for "m". */
+function oneOff(a: string, b: string): boolean {
+  if (a.replace(/rn/g, 'm') === b.replace(/rn/g, 'm')) return true;
+  if (Math.abs(a.length - b.length) > 1) return false;
+  let at = 0;
+  while (at < a.length && at < b.length && a[at] === b[at]) at += 1;
+  const [restA, restB] = [a.slice(at), b.slice(at)];
+  return restA.slice(1) === restB.slice(1) || restA.slice(1) === restB || restA === restB.slice(1);
+}
+
+/** A long word one letter away from exactly one word of the vocabulary becomes that word; its case is kept. */
+export function mended(text: string): string | null {
+  const low = bare(text).replace(/0/g, 'o').replace(/1/g, 'l').replace(/5/g, 's');
+  if (low.length < 6 || !/^[a-z]+$/.test(low)) return null;
+  if (WORDS.has(low)) return bare(text) === low ? null : recased(text, low);
+  const near = LONG.filter((word) => oneOff(word, low));
+  return near.length === 1 && near[0] !== undefined ? recased(text, near[0]) : null;
+}
+
+function recased(text: string, word: string): string {
+  const core = /[A-Za-z0-9]+/.exec(text)?.[0] ?? text;
+  const upper = core === core.toUpperCase();
+  const capital = /^[A-Z]/.test(core);
+  const cased = upper ? word.toUpperCase() : capital ? (word[0] ?? '').toUpperCase() + word.slice(1) : word;
+  return text.replace(core, cased);
+}
