@@ -1,4 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { basisDoubts } from './checks/basis';
+import { repeatsAbove } from './checks/forms';
+import { checkHistory } from './checks/history';
 import { readTable } from './readTable';
 import type { Reading } from './types';
 
@@ -79,6 +82,94 @@ describe('faults of laboratories and files', () => {
   it('reads shares of bases as such', () => {
     const result = read('Sample ID,pH,% of Exchangeable Bases K', 'A,6.5,5').samples[0]?.results[1];
     expect(result?.analyte).toBe('sat_k');
+  });
+});
+
+describe('faults seen in the reports of nine laboratories', () => {
+  const of = (reading: Reading) => {
+    const [sample] = reading.samples;
+    if (sample === undefined) throw new Error('No sample was read.');
+    return sample;
+  };
+  const against = (now: Reading, before: Reading, on: string) =>
+    checkHistory({
+      on: '2026-04-10',
+      sampleName: of(now).sampleId,
+      plotName: 'The long bed',
+      rows: of(now).results,
+      tests: [{ on, sampleName: of(before).sampleId, values: of(before).results }],
+    });
+  const said = (found: ReturnType<typeof against>) => [...found.rows.values()].flat().map((doubt) => doubt.code);
+
+  it('1: a cell of the data file that repeats the sample above is named where page and file differ', () => {
+    const file = read(HEAD, 'A,6.5,40,150,1500,200', 'B,6.7,52,150,1710,231');
+    const page = read(HEAD, 'A,6.5,40,150,1500,200', 'B,6.7,52,188,1710,231');
+    const [above, here] = file.samples.map((sample) => sample.results);
+    const differing = here?.filter((cell, at) => cell.value !== page.samples[1]?.results[at]?.value) ?? [];
+    expect(differing.map((cell) => [cell.analyte, repeatsAbove(cell, above ?? [])])).toEqual([['potassium', true]]);
+    expect(here?.filter((cell) => repeatsAbove(cell, above ?? [])).map((cell) => cell.analyte)).toEqual(['potassium']);
+  });
+  it('2: no form of "less than" becomes 0', () => {
+    for (const printed of ['<0.1', '< 0.1', '<.1', '≤0.1']) {
+      const result = of(read('Sample ID,Boron (ppm),Zinc (ppm)', `A,${printed},2.0`)).results[0];
+      expect(result).toMatchObject({ value: 0.1, qualifier: '<' });
+    }
+  });
+  it('3: a day of no possible year is kept as printed and asked about', () => {
+    for (const printed of ['4/1/0023', '2923-04-01', '31/04/2025', '00/00/0000']) {
+      const reading = read('Sample ID,Date Sampled,pH,P (ppm)', `A,${printed},6.5,40`);
+      expect(of(reading)).toMatchObject({ dateSampled: null, dateSampledPrinted: printed });
+      expect(reading.warnings.map((warning) => warning.code).some((code) => code.startsWith('date-'))).toBe(true);
+    }
+  });
+  it('4: lb/acre in one file and ppm in the next is asked about, with the unit and without it', () => {
+    const ppm = read('Sample ID,pH,P (ppm),K (ppm)', 'North,6.5,40,150');
+    expect(said(against(read('Sample ID,pH,P (lb/A),K (lb/A)', 'North,6.5,80,300'), ppm, '2025-04-01'))).toEqual([
+      'unit-changed',
+      'unit-changed',
+    ]);
+    for (const head of ['Sample ID,pH,P (ppm),K (ppm)', 'Sample ID,pH,P,K']) {
+      expect(said(against(read(head, 'North,6.5,80,300'), ppm, '2025-04-01'))).toEqual(['factor-two', 'factor-two']);
+      expect(said(against(read(head, 'North,6.5,44,161'), ppm, '2025-04-01'))).toEqual([]);
+    }
+  });
+  it('5: the sample of one plot under a new name is asked about', () => {
+    const before = read('Sample ID,pH,P (ppm)', 'N-1,6.5,40');
+    const named = (name: string) =>
+      against(read('Sample ID,pH,P (ppm)', `${name},6.6,41`), before, '2025-04-01').sample.map((doubt) => doubt.code);
+    expect([named('North'), named('n 1'), named('The Long Bed')]).toEqual([['sample-renamed'], [], []]);
+  });
+  it('6: lb/acre of a potting mix is asked about', () => {
+    const doubts = (density: string) => {
+      const sample = of(read('Sample ID,pH,Density g/cm3,K (lb/A),Zn (ppm)', `Bench,6.5,${density},240,2`));
+      const found = basisDoubts(sample.sampleId, sample.results);
+      return sample.results.map((row) => found.get(row)?.map((doubt) => doubt.code));
+    };
+    expect(doubts('0.3')).toEqual([[], [], ['area-unit-light-soil'], []]);
+    expect(doubts('1.1').flat()).toEqual([]);
+  });
+  it('7: nitrate per acre stays as printed, whichever factor the laboratory took for an inch', () => {
+    // 10 ppm over 24 in: 0.30 an inch makes 72 lb/acre, 0.333 makes 80.
+    for (const printed of ['72', '80']) {
+      const sample = of(read('Sample ID,Depth,pH,NO3-N (ppm),NO3-N (lb/A)', `A,0-24 in,6.5,10,${printed}`));
+      const acre = sample.results.find((row) => row.unit === 'lb/acre');
+      expect(acre).toMatchObject({ analyte: 'nitrate_n', value: Number(printed), printed });
+      expect(sample.results.flatMap((row) => row.doubts.map((doubt) => doubt.code))).not.toContain('two-readings');
+    }
+  });
+  it('8: a base saturation that comes from pH and not from the bases is asked about', () => {
+    const head = 'Sample ID,pH,CEC meq/100g,K meq/100g,Ca meq/100g,Mg meq/100g,Base Saturation %';
+    const doubts = (line: string) =>
+      [...basisDoubts(null, of(read(head, line)).results).values()].flat().map((doubt) => doubt.code);
+    expect(doubts('A,6.5,12,0.4,5,1,85')).toEqual(['saturation-apart']);
+    expect(doubts('A,6.5,12,0.4,8.6,1.2,85')).toEqual([]);
+  });
+  it('9: per cent of three bases is not taken for per cent of the exchange capacity without a question', () => {
+    const head = 'Sample ID,pH,% K,% Ca,% Mg';
+    const doubts = (line: string) =>
+      [...basisDoubts(null, of(read(head, line)).results).values()].flat().map((doubt) => doubt.code);
+    expect(doubts('A,5.8,5,75,20')).toEqual(['shares-of-bases', 'shares-of-bases', 'shares-of-bases']);
+    expect(doubts('A,5.8,4,58,14')).toEqual([]);
   });
 });
 

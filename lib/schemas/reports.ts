@@ -86,7 +86,7 @@ export const setLaboratoryInput = z.strictObject({
 
 export const reportSchema = z.object({
   id: z.string(),
-  origin: z.enum(['file', 'typed']),
+  origin: z.enum(['file', 'typed', 'own-sheet']),
   state: reportStateSchema,
   fileName: z.string().nullable(),
   contentType: z.string().nullable(),

@@ -133,6 +133,8 @@ const differenceSchema = z.object({
   rowId: z.string().nullable(),
   here: z.string().nullable(),
   there: z.string().nullable(),
+  /** The side that repeats the sample above it, where the other one does not. */
+  repeats: z.enum(['here', 'there']).nullable(),
 });
 /** One sample of another report that may be the same analysis, compared cell by cell. */
 export const otherFormSchema = z.object({

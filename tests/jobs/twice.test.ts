@@ -13,6 +13,9 @@ import { requeueMail } from '@/lib/data/mail/requeueMail';
 import { saveReading } from '@/lib/data/reports/saveReading';
 import { startReading } from '@/lib/data/reports/startReading';
 import { uploadReport } from '@/lib/data/reports/uploadReport';
+import { confirmReport } from '@/lib/data/results/confirmReport';
+import { getReview } from '@/lib/data/review/getReview';
+import { setSample } from '@/lib/data/review/setSample';
 import { withPeople, withSite } from '@/lib/data/transaction';
 import type { SiteId } from '@/lib/domain/ids';
 import type { JobDefinition } from '@/lib/jobs/job';
@@ -107,6 +110,31 @@ const CASES: { [N in JobName]: () => Promise<Case<N>> } = {
       acted: () => withSite(site.id, async (tx) => (await tx.select().from(effectCheck)).length),
     };
   },
+  'recheck-reviews': async () => {
+    const site = await makeSite();
+    const plotId = await makePlot(site.id, { name: 'North' });
+    const ctx = await ctxAs(site.people.owner);
+    const send = async () =>
+      (await uploadReport({ ctx, input: { siteId: site.id, fileName: 'r.pdf', bytes: pdfBytes() } })).reportId;
+    const [open, first] = [await send(), await send()];
+    await read(site.id, open, '12.8');
+    await read(site.id, first, '6.4');
+    const input = { siteId: site.id, reportId: first };
+    const review = await getReview({ ctx, input });
+    const [sample] = review.samples;
+    if (sample?.plotId !== plotId) throw new Error('The sample did not find its plot by its name.');
+    const at = { ...input, reportSampleId: sample.id, version: sample.version, takenOn: '2026-04-10' };
+    await setSample({ ctx, input: at });
+    await confirmReport({ ctx, input });
+    return {
+      payload: { siteId: site.id, id: first },
+      acted: () =>
+        withSite(site.id, async (tx) => {
+          const rows = await tx.select().from(readingRow).where(eq(readingRow.reportId, open));
+          return rows.flatMap((row) => row.doubts).filter((doubt) => doubt.code === 'factor-two').length;
+        }),
+    };
+  },
   'tell-batch': async () => {
     const { site, batchId } = await aBatchThatIsRead();
     return { payload: { siteId: site.id, id: batchId }, acted: () => lettersOf(site.people.owner.email) };
@@ -150,11 +178,12 @@ const lettersOf = async (to: string): Promise<number> =>
   (await withPeople((tx) => tx.select().from(outbox).where(eq(outbox.toAddress, to)))).length;
 
 /** Taken and read, as the worker does it. */
-async function read(siteId: SiteId, id: string): Promise<void> {
+async function read(siteId: SiteId, id: string, printed = '6.4'): Promise<void> {
   const ctx = await ctxWorker();
   const task = await startReading({ ctx, input: { siteId, id } });
   if (!task) throw new Error('The report could not be taken.');
-  const sample = readSample({ sampleId: 'North', results: [readResult({ analyte: 'soil_ph_water', printed: '6.4' })] });
+  const results = [readResult({ analyte: 'potassium', printed, unit: 'mg/kg' })];
+  const sample = readSample({ sampleId: 'North', results });
   await saveReading({ ctx, input: { lease: task.lease, reading: soilReading([sample]) } });
 }
 

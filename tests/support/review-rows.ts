@@ -112,7 +112,7 @@ export const makeOtherForm = (more: Partial<OtherForm> = {}): OtherForm => ({
   takenOn: '2026-04-12',
   shared: 13,
   equal: 12,
-  differences: [{ analyte: 'zinc', unit: 'mg/kg', rowId: 'zn', here: '5.0', there: '5.1' }],
+  differences: [{ analyte: 'zinc', unit: 'mg/kg', rowId: 'zn', here: '5.0', there: '5.1', repeats: null }],
   ...more,
 });
 

@@ -1,3 +1,4 @@
+import { repeatsAbove } from '@/lib/reading/checks/forms';
 import type { RowColumns } from './reviewRow';
 
 export type CellDifference = {
@@ -6,6 +7,8 @@ export type CellDifference = {
   rowId: string | null;
   here: string | null;
   there: string | null;
+  /** The side whose number is that of the sample above it: the one to look at first. */
+  repeats: 'here' | 'there' | null;
 };
 export type FormComparison = { shared: number; equal: number; differences: CellDifference[] };
 
@@ -20,8 +23,17 @@ const sameNumber = (a: Row, b: Row): boolean =>
 /** A form that leaves the unit or the element's form out is taken to mean the other one's. */
 const agrees = (a: string | null, b: string | null) => a === null || b === null || a === b;
 
+/** The samples that stand above the two that are compared. */
+export type Above = { readonly here: readonly Row[]; readonly there: readonly Row[] };
+const NOTHING_ABOVE: Above = { here: [], there: [] };
+
+function repeating(row: Row, other: Row, above: Above): CellDifference['repeats'] {
+  const [here, there] = [repeatsAbove(row, above.here), repeatsAbove(other, above.there)];
+  return here === there ? null : here ? 'here' : 'there';
+}
+
 /** Two forms of what may be one analysis, cell by cell. A cell that one side lacks is a difference, but no disagreement. */
-export function compareForms(here: readonly Row[], there: readonly Row[]): FormComparison {
+export function compareForms(here: readonly Row[], there: readonly Row[], above = NOTHING_ABOVE): FormComparison {
   const left = counted(there);
   const differences: CellDifference[] = [];
   let shared = 0;
@@ -34,15 +46,16 @@ export function compareForms(here: readonly Row[], there: readonly Row[]): FormC
     const cell = { analyte: row.analyte ?? '', unit: row.unit, rowId: row.id, here: row.printed };
     const other = found >= 0 ? left.splice(found, 1)[0] : undefined;
     if (!other) {
-      differences.push({ ...cell, there: null });
+      differences.push({ ...cell, there: null, repeats: null });
       continue;
     }
     shared += 1;
     if (sameNumber(row, other)) equal += 1;
-    else differences.push({ ...cell, there: other.printed });
+    else differences.push({ ...cell, there: other.printed, repeats: repeating(row, other, above) });
   }
   for (const other of left) {
-    differences.push({ analyte: other.analyte ?? '', unit: other.unit, rowId: null, here: null, there: other.printed });
+    const cell = { analyte: other.analyte ?? '', unit: other.unit, rowId: null, here: null };
+    differences.push({ ...cell, there: other.printed, repeats: null });
   }
   return { shared, equal, differences };
 }

@@ -80,6 +80,15 @@ export async function loadOtherForms(
             ),
           );
   const forms: OtherForms = new Map();
+  const rowsAbove = <R extends Pick<RowColumns, 'reportSampleId'>>(
+    of: SampleColumns,
+    among: readonly SampleColumns[],
+    all: readonly R[],
+  ): R[] => {
+    const above = among.find((one) => one.reportId === of.reportId && one.ordinal === of.ordinal - 1);
+    return above ? all.filter((row) => row.reportSampleId === above.id) : [];
+  };
+  const otherSamples = others.map((other) => other.sample);
   for (const sample of asked) {
     const mine = rows.filter((row) => row.reportSampleId === sample.id);
     const entry: { sameAs: OtherForm | null; candidates: OtherForm[] } = { sameAs: null, candidates: [] };
@@ -87,6 +96,7 @@ export async function loadOtherForms(
       const compared = compareForms(
         mine,
         theirs.filter((row) => row.reportSampleId === other.sample.id),
+        { here: rowsAbove(sample, samples, rows), there: rowsAbove(other.sample, otherSamples, theirs) },
       );
       const form: OtherForm = {
         reportSampleId: other.sample.id,

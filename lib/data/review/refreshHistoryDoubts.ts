@@ -2,8 +2,8 @@ import { and, eq, inArray } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { type Doubt, plot, readingRow, report, reportSample } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
+import { BASIS_CODES, basisDoubts } from '@/lib/reading/checks/basis';
 import { checkHistory, HISTORY_CODES, type HistoryValue } from '@/lib/reading/checks/history';
-import { isPerArea, LIGHT_SOIL, lightSoilDoubt } from '@/lib/reading/checks/lightSoil';
 import { loadPlotTests, type PlotTest, toHistoryValue } from './loadPlotTests';
 import type { RowColumns } from './reviewRow';
 import type { SampleColumns } from './sampleStore';
@@ -20,18 +20,16 @@ function doubtsOf(sample: SampleColumns, rows: readonly Row[], tests: readonly P
     rows,
     tests: tests.filter((test) => test.reportId !== sample.reportId),
   });
-  const light = lightSoilDoubt(name, rows);
+  const basis = basisDoubts(name, rows);
   return {
-    rows: new Map(
-      rows.map((row) => [row.of, [...(history.get(row) ?? []), ...(light !== null && isPerArea(row) ? [light] : [])]]),
-    ),
+    rows: new Map(rows.map((row) => [row.of, [...(history.get(row) ?? []), ...(basis.get(row) ?? [])]])),
     sample: said,
   };
 }
 
 /** The old answers of these checks go, today's come, and whatever else is doubtful stays. */
 const renewed = (before: readonly Doubt[], now: readonly Doubt[]): Doubt[] => [
-  ...before.filter((one) => !HISTORY_CODES.has(one.code) && one.code !== LIGHT_SOIL),
+  ...before.filter((one) => !HISTORY_CODES.has(one.code) && !BASIS_CODES.has(one.code)),
   ...now.map(({ code, sentence }) => ({ code, sentence })),
 ];
 

@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import { checkHistory, type EarlierTest, type HistoryValue } from './history';
-import { isPerArea, lightSoilDoubt } from './lightSoil';
 
 const value = (analyte: HistoryValue['analyte'], printed: string, over: Partial<HistoryValue> = {}): HistoryValue => ({
   analyte,
@@ -93,17 +92,5 @@ describe("the name of a plot's sample", () => {
   });
   it("is not when it was used before, is the plot's own, is missing, or nothing is known", () => {
     expect([said('n 1'), said('OLD NORTH'), said('North bed'), said(null), said('South 2', [])].flat()).toEqual([]);
-  });
-});
-
-describe('a number per acre of light soil', () => {
-  const density = (printed: string) => value('density', printed, { unit: 'g/cm3', method: 'scoop', form: null });
-  const potassium = value('potassium', '240', { unit: 'lb/acre' });
-  it('is asked about by density, or by name where there is none', () => {
-    expect(lightSoilDoubt('Bench 3', [density('0.3'), potassium])?.code).toBe('area-unit-light-soil');
-    expect(lightSoilDoubt('Potting mix A', [potassium])?.sentence).toContain('called a mix');
-    expect(lightSoilDoubt('Potting mix B', [density('1.2'), potassium])).toBeNull();
-    expect(lightSoilDoubt('Potting shed bed', [potassium])).toBeNull();
-    expect([isPerArea(potassium), isPerArea(value('potassium', '120'))]).toEqual([true, false]);
   });
 });

@@ -99,6 +99,11 @@ function Compared({ form }: { form: OtherForm }) {
               <th scope="row" className="py-1 pr-3 text-left font-normal">
                 {isAnalyteKey(one.analyte) ? analyte(one.analyte).label : one.analyte}
                 {one.unit ? `, ${one.unit}` : ''}
+                {one.repeats ? (
+                  <span className="block text-clay">
+                    {one.repeats === 'here' ? 'This report' : 'The other one'} repeats the sample above it here.
+                  </span>
+                ) : null}
               </th>
               <td className="px-3 text-right font-figures">{one.here ?? 'not there'}</td>
               <td className="pl-3 text-right font-figures">{one.there ?? 'not there'}</td>
