@@ -1,8 +1,8 @@
 import { type ChildProcess, fork } from 'node:child_process';
 import { existsSync, readFileSync } from 'node:fs';
-import { createRequire } from 'node:module';
-import { fileURLToPath, pathToFileURL } from 'node:url';
+import { fileURLToPath } from 'node:url';
 import { type Reading, refusedReading } from '@/lib/reading/types';
+import { bundleProgram } from '@/lib/services/program/bundle';
 import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
 import { maxBytesOf, sniffReport } from '@/lib/services/reading/sniff';
 import {
@@ -16,18 +16,14 @@ import {
 } from './limits';
 import { isDataKind, isFromChild, type ToChild } from './messages';
 
-/** In development the child is the TypeScript file beside this one; in a bundle it is bundled beside the worker. */
-const CHILD_FILES = ['./child.ts', './readFileChild.mjs', './readFileChild.js'];
+/** Beside the worker's bundle lies the child's; in development it is bundled from the file beside this one. */
+const BUNDLED = ['./readFileChild.mjs', './readFileChild.js'];
 
-function childProgram(): { path: string; execArgv: string[] } {
-  const heap = `--max-old-space-size=${HEAP_LIMIT_MB}`;
-  for (const name of CHILD_FILES) {
-    const path = fileURLToPath(new URL(name, import.meta.url));
-    if (!existsSync(path)) continue;
-    if (!name.endsWith('.ts')) return { path, execArgv: [heap] };
-    const tsx = pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href;
-    return { path, execArgv: [heap, '--import', tsx] };
-  }
+async function childProgram(): Promise<string> {
+  const beside = (name: string) => fileURLToPath(new URL(name, import.meta.url));
+  const bundled = BUNDLED.map(beside).find((path) => existsSync(path));
+  if (bundled !== undefined) return bundled;
+  if (existsSync(beside('./child.ts'))) return bundleProgram(beside('./child.ts'));
   throw new Error('The reading process is missing beside the worker.');
 }
 
@@ -49,14 +45,14 @@ type RunInput = {
   onPage?: ((page: number, of: number) => void) | undefined;
 };
 
-function run(input: RunInput): Promise<Reading> {
+async function run(input: RunInput): Promise<Reading> {
+  const path = await childProgram();
   const refuse = (code: RefusalCode) =>
     refusedReading({ file: input.message.fileName, pages: 0, error: refusal(code) });
   return new Promise((resolve, reject) => {
-    const { path, execArgv } = childProgram();
     // No environment: the process that opens strangers' files holds no secret.
     const child: ChildProcess = fork(path, [], {
-      execArgv,
+      execArgv: [`--max-old-space-size=${HEAP_LIMIT_MB}`],
       env: { NODE_ENV: 'production' },
       serialization: 'advanced',
       stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
