@@ -1,5 +1,6 @@
 import { assemble } from './assemble';
 import { type Candidate, type Identity, remark, type SamplePart } from './candidate';
+import { legendOf } from './labels/legend';
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
@@ -133,7 +134,8 @@ function soilPages(
 function traced(pages: readonly Upright[]): { lines: CellLine[]; texts: string[]; style: NumberStyle } {
   const plain: Line[] = pages.flatMap((page) => linesOf(page));
   const style = numberStyle(pages.flatMap((page) => page.words.map((word) => word.text)));
-  return { lines: cellsOf(plain, style), texts: plain.map((line) => line.text), style };
+  const texts = plain.map((line) => line.text);
+  return { lines: cellsOf(plain, style, legendOf(texts)), texts, style };
 }
 
 /**

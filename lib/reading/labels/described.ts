@@ -12,7 +12,7 @@ const DESCRIBES = new Set(
   suspension test the titration to topsoil total turbidimetric units using value volume water weight wet with walkley
   black walkley-black strong weak acid-extractable water-soluble plant-available acetate ammonium nh4oac nh4cl kcl cacl2 bacl2 hcl hcl-extractable
   nahco3 al cal p1 p2 i ii iii 1 2 3 dry-ash h2o water-extractable mineral element elemental reserve active potential
-  per unit cec regia capacity cation cations ph saturation ammonium share natural acid edta-extractable nitric perchloric
+  per unit cec acidity screening regia capacity cation cations ph saturation ammonium share natural acid edta-extractable nitric perchloric
   digest digestion saturate slurry solids deionised deionized distilled`
     .split(/\s+/)
     .filter((word) => word !== ''),
@@ -23,10 +23,14 @@ const MOLAR = /^(\d+(\.\d+)?)?-?[mn]$|^\d+(\.\d+)?$|^\d+(\.\d+)?:\d+(\.\d+)?$|^n
 const SALTS =
   /\b(0?\.?\d* ?m )?(calcium|ammonium|potassium|barium|sodium|magnesium|lithium) (chloride|acetate|nitrate|bicarbonate|sulfate|sulphate|lactate|oxalate|fluoride|citrate|phosphate)s?\b/g;
 const LEADS = new Set(
-  'available extractable exchangeable soluble plant-available total soil residual readily plant test mehlich olsen active estimated water-soluble reaction exch avail extr acid-extractable mineral'.split(
+  'hot water dtpa available extractable exchangeable soluble plant-available total soil residual readily plant test mehlich olsen active estimated water-soluble reaction exch avail extr acid-extractable mineral'.split(
     ' ',
   ),
 );
+
+function leads(word: string): boolean {
+  return LEADS.has(word) || /-(extractable|soluble|available|exchangeable)$/.test(word);
+}
 
 /**
  * The name at the head of a long label whose other words only describe: "Phosphorus extractable with bicarbonate
@@ -37,7 +41,7 @@ export function describedName<T>(text: string, find: (plain: string) => T | null
   const words = plain.split(' ').filter((word) => word !== '');
   if (words.length < 2 || words.length > 14) return null;
   let from = 0;
-  while (from < words.length - 1 && LEADS.has(words[from] ?? '')) from += 1;
+  while (from < words.length - 1 && leads(words[from] ?? '')) from += 1;
   for (let start = from; start >= 0; start--) {
     for (let to = Math.min(words.length, start + 5); to > start; to--) {
       const name = words.slice(start, to).join(' ');

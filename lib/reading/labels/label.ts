@@ -198,7 +198,10 @@ function besideBrackets(raw: string): { analyte: AnalyteKey; strength: number; a
     return lookUp(plain, part) ?? lookUp(cutMethods(plain), part) ?? describedName(part, (name) => lookUp(name, part));
   });
   const [one, other] = sides;
-  if (one != null && other != null) return one.analyte === other.analyte ? { ...one, strength: 0.96 } : null;
+  // "Sodium % of cations (ESP)": the abbreviation in brackets is the exact name.
+  if (one != null && other != null && one.analyte !== other.analyte)
+    return /^[A-Z]{3,6}$/.test(inside) ? { ...other, strength: 0.95 } : null;
+  if (one != null && other != null) return { ...one, strength: 0.96 };
   const found = one ?? other ?? null;
   // A bare symbol in brackets after unknown words ("Free lime (S)") proves nothing.
   if (found === null || (one == null && inside.length < 2)) return null;
@@ -237,7 +240,13 @@ const nameIn = remembered(
  */
 export function readLabel(text: string, captions: readonly string[] = []): Label | null {
   const named = nameIn(text);
-  if (named === null) return null;
+  if (named === null) {
+    // "Particle size: sand", "Base saturation: calcium": what stands before the colon is the caption.
+    const colon = text.indexOf(': ');
+    return colon < 3 || /\d/.test(text.slice(0, colon))
+      ? null
+      : readLabel(text.slice(colon + 2), [text.slice(0, colon), ...captions]);
+  }
   const around = [text, ...captions];
   const unit = around.map((part) => unitIn(part)).find((found) => found !== null) ?? null;
   const all = around.join(' ');
@@ -245,7 +254,8 @@ export function readLabel(text: string, captions: readonly string[] = []): Label
   const share = SHARES[key];
   if (
     share !== undefined &&
-    (unit?.unit === '%' || /saturation|\bof cec\b|of exchangeable bases|\bof bases\b/i.test(all))
+    (unit?.unit === '%' ||
+      (unit?.unit !== 'meq/100g' && /saturation|\bof cec\b|of exchangeable bases|\bof bases\b/i.test(all)))
   ) {
     if (!/total/i.test(text)) key = share;
   }

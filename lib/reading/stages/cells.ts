@@ -1,4 +1,5 @@
 import { readLabel, unitOnly } from '../labels/label';
+import { spelledOut } from '../labels/legend';
 import { type Line, type Phrase, phraseOf } from './lines';
 import { roleOf } from './roles';
 import { type CellMeaning, type NumberStyle, readCell } from './values';
@@ -23,7 +24,7 @@ function wordsText(phrase: Phrase, from: number, to?: number): string {
 /** "pH in 0.01 M", "Mehlich 3", "Bray 1": the number is a part of the name. */
 function belongsToName(left: string, number: string, whole: string): boolean {
   if (/[:=]$/.test(left)) return false;
-  if (/\b(in|with|by|at|of|to|per|no\.?|page)$/i.test(left)) return true;
+  if (/\b(in|with|by|at|of|to|per|no\.?|page|(at|to|of) pH)$/i.test(left)) return true;
   if (/^\d*\.?\d+ ?[MN]( |$)/.test(number)) return true;
   return (
     /\b(mehlich|bray|p|m|morgan|method|olsen)-?$/i.test(left) &&
@@ -72,11 +73,14 @@ function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
 }
 
 /** Stage 3. Phrases to cells, each with what it can be when nothing around it is known. */
-export function cellsOf(lines: readonly Line[], style: NumberStyle): CellLine[] {
+export function cellsOf(lines: readonly Line[], style: NumberStyle, legend: ReadonlyMap<string, string>): CellLine[] {
   return lines.map((line) => {
     const cells = line.phrases
       .flatMap((phrase) => parts(phrase, style))
-      .map((phrase) => ({ phrase, meaning: readCell(phrase.text, style) }));
+      .map((phrase) => ({
+        phrase: { ...phrase, text: spelledOut(phrase.text, legend) },
+        meaning: readCell(phrase.text, style),
+      }));
     return { line, cells, values: cells.filter((cell) => cell.meaning.kind === 'value').length };
   });
 }

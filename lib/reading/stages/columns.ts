@@ -66,6 +66,8 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
   const homes = phrase.words.map((word) => spans.findIndex((span) => overlap(span, word) > 0));
   const distinct = new Set(homes.filter((home) => home >= 0));
   if (distinct.size < 2) return [phrase];
+  // "Phosphorus, ppm P" over three columns is one caption.
+  if (/,/.test(phrase.text) && (readLabel(phrase.text)?.unit ?? null) !== null) return [phrase];
   const groups: { home: number; from: number; to: number }[] = [];
   for (const [index, home] of homes.entries()) {
     const last = groups[groups.length - 1];
@@ -160,18 +162,24 @@ function takesCaption(stack: Stack | undefined, caption: string): boolean {
   return label.method === null && methodIn(label.analyte, caption) !== null;
 }
 
+/** How far off its middle a caption may be, in columns, for one more column under it. */
+const WIDER = 0.12;
+
 /** A caption is centred over its group: the widest run of columns that can take it and has it in the middle. */
 function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
   let [low, high] = [caption.first, caption.last];
   while (!caption.blocked.has(low - 1) && takesCaption(stacks[low - 1], caption.text)) low -= 1;
   while (!caption.blocked.has(high + 1) && takesCaption(stacks[high + 1], caption.text)) high += 1;
-  let best = { first: caption.first, last: caption.last };
+  let best = { first: caption.first, last: caption.last, cost: Number.POSITIVE_INFINITY };
   for (let first = low; first <= caption.first; first++) {
     for (let last = caption.last; last <= high; last++) {
       const [left, right] = [stacks[first], stacks[last]];
-      if (left === undefined || right === undefined || last - first <= best.last - best.first) continue;
+      if (left === undefined || right === undefined) continue;
       const pitch = (right.x1 - left.x0) / (last - first + 1);
-      if (caption.title || Math.abs((left.x0 + right.x1) / 2 - caption.middle) < 0.55 * pitch) best = { first, last };
+      const off = caption.title ? 0 : Math.abs((left.x0 + right.x1) / 2 - caption.middle) / pitch;
+      const cost = off - WIDER * (last - first + 1);
+      if ((off < 0.75 || last - first === caption.last - caption.first) && cost < best.cost)
+        best = { first, last, cost };
     }
   }
   for (const stack of stacks.slice(best.first, best.last + 1)) stack.captions.push(caption.text);

@@ -2,7 +2,7 @@ import { type Candidate, type Identity, remark } from '../candidate';
 import { type Label, methodIn, methodInAny, readLabel, unitIn, unitOnly } from '../labels/label';
 import type { Remark } from '../types';
 import { type CellLine, numberBox, type PageCell } from './cells';
-import { fieldOf, fieldWithValue } from './identity';
+import { fieldOf, fieldWithValue, isCode } from './identity';
 import { type NotTaken, type Role, roleOf } from './roles';
 import { isRatingHere, labelText, rowRoleOf, type Segment, wrappedLabel } from './rowLabels';
 import { headingsOver, isFieldLine, isHeadingLine, type RunColumn, runColumns } from './runColumns';
@@ -35,7 +35,7 @@ function hasNumberAfter(line: CellLine, index: number): boolean {
     .some((cell) => cell.meaning.kind === 'value' || cell.meaning.kind === 'none' || cell.meaning.kind === 'range');
 }
 
-type Start = { index: number; label: Label; cell: PageCell; wrapped: readonly CellLine[]; x1: number };
+type Start = { index: number; label: Label; cell: PageCell; wrapped: readonly CellLine[]; x1: number; tail: string };
 
 /** Labels of one line. A second label begins only after a number of the first. */
 function startsOf(lines: readonly CellLine[], at: number, notLabel: (cell: PageCell) => boolean): Start[] {
@@ -68,10 +68,11 @@ function startsOf(lines: readonly CellLine[], at: number, notLabel: (cell: PageC
         cell,
         wrapped: found.lines,
         x1: found.x1,
+        tail: found.tail,
       };
       continue;
     }
-    starts.push({ index, label: found.label, cell, wrapped: found.lines, x1: found.x1 });
+    starts.push({ index, label: found.label, cell, wrapped: found.lines, x1: found.x1, tail: found.tail });
   }
   return starts;
 }
@@ -116,6 +117,7 @@ function rowOfGroup(line: CellLine, group: Group | null): Segment | null {
     cells: line.cells.slice(1),
     wrapped: [],
     rowRole: rowRole === 'result' ? null : rowRole,
+    tail: '',
   };
 }
 
@@ -145,6 +147,7 @@ function labelAround(lines: readonly CellLine[], at: number): Segment | null {
     cells: line.cells,
     wrapped: [above, under],
     rowRole: null,
+    tail: '',
   };
 }
 
@@ -182,6 +185,7 @@ function segmentsOf(
         cells: line.cells.slice(start.index + 1, end),
         wrapped: start.wrapped,
         rowRole: null,
+        tail: start.tail,
       });
     }
     const first = starts[0];
@@ -201,7 +205,7 @@ function extent(segment: Segment): Span {
 }
 
 /** Rows under one another with their labels in one column, parted by headings and by pages. */
-function runsOf(lines: readonly CellLine[], segments: readonly Segment[]): Run[] {
+function runsOf(lines: readonly CellLine[], segments: readonly Segment[], taken: ReadonlySet<CellLine>): Run[] {
   const open: { segments: Segment[]; span: Span; labels: Span }[] = [];
   const index = new Map(lines.map((line, at) => [line, at]));
   for (const segment of segments) {
@@ -224,7 +228,7 @@ function runsOf(lines: readonly CellLine[], segments: readonly Segment[]): Run[]
       home.labels = { x0: Math.min(home.labels.x0, segment.x0), x1: Math.max(home.labels.x1, segment.x1) };
     }
   }
-  const busy = new Set(segments.map((segment) => segment.line));
+  const busy = new Set([...taken, ...segments.map((segment) => segment.line)]);
   return open.map((run) => {
     const first = run.segments[0];
     const size = first?.line.line.size ?? 10;
@@ -396,13 +400,14 @@ function identityOver(column: RunColumn | null, samples: boolean): Identity | nu
   if (column === null || !samples) return null;
   const named = column.identity.sampleId ?? column.identity.labNumber ?? column.identity.fieldName;
   const day = column.day !== null && column.identity.dateSampled === undefined ? { dateSampled: column.day } : {};
-  if (named !== undefined)
-    return {
-      ...column.identity,
-      ...(column.free !== null && column.identity.sampleId === undefined ? { sampleId: column.free } : {}),
-      ...day,
-    };
-  return column.free === null ? null : { ...column.identity, sampleId: column.free, ...day };
+  if (named !== undefined && (column.free === null || column.identity.sampleId !== undefined))
+    return { ...column.identity, ...day };
+  if (column.free === null) return null;
+  // A code among the words over a column is the laboratory's number.
+  const words = column.free.split(' ');
+  const code = words.length > 1 ? words.find((word) => isCode(word)) : undefined;
+  const sampleId = words.filter((word) => word !== code).join(' ');
+  return { ...(code === undefined ? {} : { labNumber: code }), ...column.identity, sampleId, ...day };
 }
 
 function sideBySide(run: Run): boolean {
@@ -534,7 +539,7 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly Cel
   not.push(...choice.not);
   const label = underSection(segment, run);
   const wrappedWords = segment.wrapped.flatMap((line) => line.cells.map((cell) => cell.phrase.text)).join(' ');
-  const method = label.method === null ? methodInAny(label.analyte, `${words} ${wrappedWords}`) : null;
+  const method = label.method === null ? methodInAny(label.analyte, `${words} ${wrappedWords} ${segment.tail}`) : null;
   return choice.taken.map(({ one, identity }): ListRow => {
     const share =
       (one.unit === '%' || label.unit === '%') && !label.analyte.startsWith('sat_')
@@ -577,6 +582,7 @@ export function listRows(
   const first = runsOf(
     lines,
     segmentsOf(lines, taken, () => false),
+    taken,
   );
   // Columns of methods, units and ratings hold words that can look like labels; with them known, labels are found anew.
   const silent = first.flatMap((run) =>
@@ -593,7 +599,7 @@ export function listRows(
             segment.line.line.page === cell.phrase.page && Math.abs(segment.line.line.y0 - cell.phrase.y0) < 2,
         ),
     );
-  const runs = silent.length === 0 ? first : runsOf(lines, segmentsOf(lines, taken, notLabel));
+  const runs = silent.length === 0 ? first : runsOf(lines, segmentsOf(lines, taken, notLabel), taken);
   const notTaken: NotTaken[] = [];
   const index = new Map(lines.map((line, at) => [line, at]));
   const rows = runs.flatMap((run) =>

@@ -72,6 +72,11 @@ export function fieldWithValue(text: string): { field: IdentityField; value: str
   return null;
 }
 
+/** "HH-331" or "20418" under or beside a name is the laboratory's number, not more of the name. */
+export function isCode(text: string): boolean {
+  return /^(?=.*\d{2})[A-Z]{0,4}[-./ ]?\d[\dA-Z./-]*$/.test(text);
+}
+
 type Inside = { field: IdentityField; value: string; from: number };
 
 /** Fields set one after another in one phrase: "Sample 1: Marrow bed Lab no. WL-901 Depth 0-20 cm". */
@@ -93,6 +98,7 @@ export function fieldsInside(words: readonly string[]): Inside[] {
           ? /^\d/.test(rest)
           : colon || (field === 'labNumber' && /^\S*\d{2,}/.test(rest));
       if (!sure) continue;
+      if (field === 'other' && at > 0 && starts.length === 0) break;
       starts.push({ field, from: at, to });
       at = to;
       break;

@@ -1,3 +1,4 @@
+import { uprightHeads } from './uprightHeads';
 import type { Placed, Upright } from './words';
 
 /** Words that stand close together on one line and are read as one: a label, a name, a number with its unit. */
@@ -62,7 +63,7 @@ function groupByLine(words: readonly Placed[]): Placed[][] {
 
 /** Stage 2. Words to lines, lines to phrases, by position alone. */
 export function linesOf(page: Upright): Line[] {
-  return groupByLine(page.words).map((words, index) => {
+  return groupByLine([...page.words, ...uprightHeads(page)]).map((words, index) => {
     const phrases: Phrase[] = [];
     let run: Placed[] = [];
     for (const word of words) {

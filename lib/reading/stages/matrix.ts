@@ -2,7 +2,7 @@ import { type Candidate, type Identity, remark, type SamplePart } from '../candi
 import { readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { type Column, columnsOf, headerScore, spansOf } from './columns';
-import { fieldsInside, fieldWithValue } from './identity';
+import { fieldsInside, fieldWithValue, isCode } from './identity';
 import { JUST_RESULT, NOT_A_SAMPLE, type NotTaken, roleOf } from './roles';
 import { storedBox } from './words';
 
@@ -112,6 +112,53 @@ function trustworthy(columns: readonly Column[]): boolean {
   return named >= 3 || (named === 2 && free <= 3);
 }
 
+const NEVER_ADVISED = new Set([
+  'soil_ph_water',
+  'soil_ph_salt',
+  'buffer_ph',
+  'organic_matter',
+  'cec',
+  'base_saturation',
+  'ec',
+  'sat_ca',
+  'sat_mg',
+  'sat_k',
+  'clay',
+]);
+
+function isOxide(column: Column): boolean {
+  return column.label?.form === 'P2O5' || column.label?.form === 'K2O';
+}
+
+function isLime(column: Column): boolean {
+  return column.label?.analyte === 'lime_requirement' && !/requirement|index|\blr\b/i.test(column.heading);
+}
+
+/**
+ * Columns of what to spread: "Crop | N | P2O5 | K2O | Lime" with nothing that only a soil has, or P2O5 and K2O to
+ * apply beside the P and K that were found.
+ */
+function withAdvice(columns: readonly Column[]): Column[] {
+  const oxides = columns.filter(isOxide);
+  const heading = (pattern: RegExp) => columns.some((column) => pattern.test(column.heading));
+  const soil = columns.some((column) => column.label !== null && NEVER_ADVISED.has(column.label.analyte));
+  const frame = heading(/^(N|nitrogen)\b/i) || heading(/\blime/i) || heading(/\bcrop/i);
+  const all = oxides.length > 0 && !soil && frame;
+  const found = columns.some(
+    (column) => column.label?.form === 'element' && /^(phosphorus|potassium)$/.test(column.label.analyte),
+  );
+  const some = oxides.length > 0 && soil && found && (oxides.length >= 2 || frame);
+  return columns.map((column) => {
+    const nitrogen = column.label === null && column.field === null && /^(N|nitrogen)\b/i.test(column.heading);
+    const advised = all
+      ? column.label !== null || nitrogen
+      : some
+        ? isOxide(column) || isLime(column) || nitrogen
+        : isLime(column) && oxides.length > 0;
+    return advised || isLime(column) ? { ...column, role: 'recommendation' as const } : column;
+  });
+}
+
 /** Stage 5a. Tables with analytes across the top. A table at the top of a page without a header borrows the last one. */
 export function tablesOf(lines: readonly CellLine[]): Table[] {
   const tables: Table[] = [];
@@ -130,8 +177,9 @@ export function tablesOf(lines: readonly CellLine[]): Table[] {
       if (trustworthy(columns) && score >= (best?.score ?? 0.01)) best = { header, columns, score };
     }
     const borrowed = best === null ? borrow(tables[tables.length - 1], data, line, lines, at) : null;
-    const columns = best?.columns ?? borrowed;
-    if (columns === null || columns === undefined) continue;
+    const plain = best?.columns ?? borrowed;
+    if (plain === null || plain === undefined) continue;
+    const columns = withAdvice(plain);
     const rows = block.filter((row) => isRow(row, columns) || isRatingRow(row) || isTail(row, columns));
     for (const used of [...(best?.header ?? []), ...rows]) taken.add(used);
     tables.push({ header: best?.header ?? [], rows, columns, borrowed: best === null });
@@ -243,9 +291,6 @@ function rowIdentity(row: CellLine, table: Table): Identity {
   return identity;
 }
 
-/** "HH-331" or "20418" under a name is the laboratory's number, not more of the name. */
-const CODE = /^(?=.*\d{2})[A-Z]{0,4}[-./ ]?\d[\dA-Z./-]*$/;
-
 /** A column whose cells say what each row is: "Found", "Desired", "Mar 2025". */
 function rowKinds(table: Table): ReadonlyMap<CellLine, string> {
   for (const column of table.columns) {
@@ -281,7 +326,7 @@ export function rowsOfTable(table: Table, notTaken: NotTaken[] = []): TableRow[]
     if (last !== undefined && isTail(row, table.columns) && row.line.y0 - last.line.line.y1 < 1.2 * row.line.size) {
       const tail = row.cells.map((cell) => cell.phrase.text).join(' ');
       const before = last.identity.sampleId;
-      const code = before !== undefined && last.identity.labNumber === undefined && CODE.test(tail);
+      const code = before !== undefined && last.identity.labNumber === undefined && isCode(tail);
       rows[rows.length - 1] = {
         ...last,
         identity: code

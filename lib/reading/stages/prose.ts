@@ -38,8 +38,11 @@ function isText(line: CellLine): boolean {
 /** Lines of running text put together: the same left edge or a short last line, no wider gap than between lines. */
 export function paragraphsOf(lines: readonly CellLine[], taken: ReadonlySet<CellLine>): Paragraph[] {
   const found: { words: { word: Placed; line: CellLine }[]; last: Phrase }[] = [];
+  // What a reply quotes is an earlier letter.
+  let quoted = 0;
   for (const line of lines) {
-    if (taken.has(line)) continue;
+    if (/\bwrote:\s*$/.test(line.line.text)) quoted = line.line.page.number;
+    if (taken.has(line) || quoted === line.line.page.number || /^\s*>/.test(line.line.text)) continue;
     for (const phrase of wide(line)) {
       const words = phrase.words.map((word) => ({ word, line }));
       const home = found.find(
@@ -142,6 +145,7 @@ function numbersIn(words: readonly Placed[], piece: Piece, style: NumberStyle): 
     const rangeEnd = /^(to|-|–|—)$/.test(before) && /\d/.test(words[at - 2]?.text ?? '');
     if (ranged || rangeEnd) continue;
     if (/^(jan|feb|mar|apr|may|june?|july?|aug|sep|oct|nov|dec)[a-z]*\.?$/i.test(before)) continue;
+    if (/^\(?(mehlich|bray|olsen|morgan|method|grade|table|form|step)-?$/i.test(before)) continue;
     if (/^(no\.?|number|#|page|sample|lab|of)$/i.test(before) && /^(of|page)$/i.test(after)) continue;
     let unit: { unit: NonNullable<Value['unit']>; printed: string } | null = null;
     for (let to = Math.min(piece.to, at + 6); to > at + 1 && unit === null; to--)
@@ -164,9 +168,9 @@ function numbersIn(words: readonly Placed[], piece: Piece, style: NumberStyle): 
 }
 
 /** Why a number of a sentence is no result of this sample; null when it can be one. */
-function refusalOf(words: readonly Placed[], name: Name, number: Number_): string | null {
+function refusalOf(words: readonly Placed[], sentence: Piece, name: Name, number: Number_): string | null {
   const start = Math.min(name.from, number.from);
-  const clauseFrom = Math.max(0, start - 5);
+  const clauseFrom = Math.max(sentence.from, start - 5);
   const end = Math.max(name.to, number.to);
   const between = textOf(words, Math.min(name.to, number.to), Math.max(name.from, number.from));
   const before = textOf(words, clauseFrom, start);
@@ -174,6 +178,12 @@ function refusalOf(words: readonly Placed[], name: Name, number: Number_): strin
   const after = textOf(words, end, end + 8);
   if (number.unit !== null && /ft2|yd2|g\/m2|ton\/|cwt/.test(number.unit)) return 'unit of an amount to spread';
   if (APPLY.test(`${before} ${between} ${after.split(/[,;.]/)[0] ?? ''}`)) return 'an amount to spread';
+  if (
+    /\b(in (19|20)\d\d|last (year|time|season|spring|fall|autumn|test)|previously|a year ago|years ago)\b/i.test(
+      textOf(words, sentence.from, end),
+    )
+  )
+    return 'an earlier value';
   if (BEFORE.test(between) || BEFORE.test(before.split(/[,;]/).pop() ?? '')) return 'an earlier value';
   if (WANTED.test(between)) return 'a wanted value';
   if (/^(19|20)\d\d$/.test(number.value.printed) && number.unit === null) return 'a year';
@@ -207,13 +217,25 @@ function pairsOf(words: readonly Placed[], piece: Piece, style: NumberStyle) {
       after[0] !== undefined &&
       after[0].from - name.to <= 9 &&
       (link === '' || FOUND.test(` ${link} `) || /[:=(]$/.test(words[name.to - 1]?.text ?? ''));
-    const chosen = ahead !== undefined && !close ? [ahead] : after.slice(0, 3);
+    const chosen = ahead !== undefined ? [ahead] : secondUnit(words, after);
     for (const number of chosen) {
       used.add(number);
       pairs.push({ name, number });
     }
   }
   return { pairs, names, numbers };
+}
+
+/** A second number counts only as the same amount in another unit: "45 ppm (90 lb/acre)". */
+function secondUnit(words: readonly Placed[], after: readonly Number_[]): Number_[] {
+  const [first, second] = after;
+  if (first === undefined) return [];
+  if (second === undefined || first.unit === null || second.unit === null || second.unit === first.unit) return [first];
+  const link = textOf(words, first.to, second.from);
+  const opens = /^\(/.test(words[second.from]?.text ?? '');
+  return second.from - first.to <= 5 && (opens || /\b(or|equal to|equivalent to)\b|[/=]/.test(link))
+    ? [first, second]
+    : [first];
 }
 
 function ratingNear(words: readonly Placed[], number: Number_): string | null {
@@ -249,7 +271,8 @@ export function proseRows(
         const at = paragraph.words[number.from];
         if (at === undefined) continue;
         const key = `${name.label.analyte}|${number.unit}`;
-        const why = refusalOf(words, name, number) ?? (seen.has(key) ? 'a second number for the same name' : null);
+        const why =
+          refusalOf(words, piece, name, number) ?? (seen.has(key) ? 'a second number for the same name' : null);
         if (why !== null) {
           refused.push({ text: `${name.label.text} ${number.value.printed}`, why, line: at.line, word: at.word });
           continue;

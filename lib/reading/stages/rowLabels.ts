@@ -15,6 +15,8 @@ export type Segment = {
   readonly wrapped: readonly CellLine[];
   /** What the row's own words say its numbers are: "Desired value" under a heading "Calcium". */
   readonly rowRole: Role | null;
+  /** What goes on under the label: its method or a remark, never its name. */
+  readonly tail: string;
 };
 
 const NUMBERLIKE = new Set(['value', 'none', 'range']);
@@ -68,7 +70,7 @@ function partAt(line: CellLine | undefined, cell: PageCell, end: number): PageCe
   return busy ? null : part;
 }
 
-type Wrap = { label: Label; lines: CellLine[]; x1: number };
+type Wrap = { label: Label; lines: CellLine[]; x1: number; tail: string };
 
 /** Rows of the neighbouring lines, nearest first, that could hold more of this label. */
 function neighbours(lines: readonly CellLine[], at: number, cell: PageCell, end: number, step: 1 | -1) {
@@ -102,7 +104,7 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
   const below = neighbours(lines, at, cell, end, 1);
   // Lines over it that are themselves the head of another row (a label of its own, or the tail of the row before) stay away.
   let best: (Wrap & { rank: number }) | null =
-    own === null ? null : { label: own, lines: [], x1: cell.phrase.x1, rank: 10 * own.strength };
+    own === null ? null : { label: own, lines: [], x1: cell.phrase.x1, tail: '', rank: 10 * own.strength };
   for (let up = 0; up <= above.length; up++) {
     for (let down = 0; down <= below.length; down++) {
       if (up + down === 0) continue;
@@ -127,7 +129,11 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
       });
       if (foreign && own !== null) continue;
       const tells = (label.unit !== null ? 0.4 : 0) + (label.method !== null ? 0.4 : 0);
-      const rank = 10 * label.strength + tells - 0.15 * (up + down) - 0.05 * down - (foreign ? 0.5 : 0);
+      const top = up > 0 ? readOwn(above[up - 1]?.cell.phrase.text ?? '') : null;
+      // The name stands in the first line; a line that begins small goes on from the one before it.
+      const headed =
+        own === null || /^[\p{Ll}(]/u.test(cell.phrase.text) ? (top?.analyte === label.analyte ? 1 : 0) : 0;
+      const rank = headed + 10 * label.strength + tells - 0.15 * (up + down) - 0.05 * down - (foreign ? 0.5 : 0);
       const ownTells = own === null ? 0 : (own.unit !== null ? 0.4 : 0) + (own.method !== null ? 0.4 : 0);
       const current = best === null ? -1 : best.lines.length === 0 ? best.rank + ownTells : best.rank;
       if (rank > current)
@@ -135,11 +141,20 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
           label: { ...label, strength: Math.min(label.strength, 0.97) },
           lines: parts.map((one) => one.line),
           x1: Math.max(cell.phrase.x1, ...parts.map((one) => one.cell.phrase.x1)),
+          tail: '',
           rank,
         };
     }
   }
-  return best;
+  if (best === null) return null;
+  const used = new Set(best.lines);
+  const tail: string[] = [];
+  for (const one of below) {
+    if (used.has(one.line)) continue;
+    if (!/^[\p{Ll}(]/u.test(one.cell.phrase.text) && tail.length === 0) break;
+    tail.push(one.cell.phrase.text);
+  }
+  return { ...best, tail: tail.join(' ') };
 }
 
 /** "Base saturation" + "calcium" or "Sulfate" + "sulfur": the longer name is the real one. */

@@ -43,6 +43,20 @@ function turnWord(word: Word, page: Page, turn: 0 | 90 | 180 | 270): Placed {
   return { ...rest, x0, y0, x1, y1 };
 }
 
+/** Rows of dots between a label and its number are no text; a word that holds such a row is two words. */
+function withoutLeaders(word: Placed): Placed[] {
+  if (/^[.…_]+$/.test(word.text)) return [];
+  const match = /^(.*?)([._·…]{4,})(.*)$/.exec(word.text);
+  if (match === null) return [word];
+  const [head, dots, tail] = [match[1] ?? '', match[2] ?? '', match[3] ?? ''];
+  const step = (word.x1 - word.x0) / word.text.length;
+  const from = word.x0 + (head.length + dots.length) * step;
+  return [
+    ...(head === '' ? [] : [{ ...word, text: head, x1: word.x0 + head.length * step }]),
+    ...(tail === '' ? [] : withoutLeaders({ ...word, text: tail, x0: from })),
+  ];
+}
+
 /** A box in upright points, given back as fractions of the page as stored. */
 export function storedBox(page: Upright, box: { x0: number; y0: number; x1: number; y1: number }): Box {
   const sideways = page.turn === 90 || page.turn === 270;
@@ -121,7 +135,10 @@ export function uprightWords(page: Page): Upright {
   const turn = mainDirection(page.words);
   const swap = turn === 90 || turn === 270;
   const straight = page.words.filter((word) => word.direction === turn);
-  const placed = straight.map((word) => turnWord(word, page, turn)).filter((word) => word.text !== '');
+  const placed = straight
+    .map((word) => turnWord(word, page, turn))
+    .flatMap(withoutLeaders)
+    .filter((word) => word.text !== '');
   const seen = new Set<string>();
   const once = placed.filter((word) => {
     const key = `${word.text}@${Math.round(word.x0)},${Math.round(word.y0)}`;

@@ -64,11 +64,16 @@ function* splitRun(run: TextRun, even: boolean): Generator<{ text: string; from:
   if (text !== '') yield { text, from: start / total, to: at / total };
 }
 
+/** Sine of the angle from which text counts as neither level nor upright; a crooked scan's text layer is below it. */
+const ASLANT = 0.15;
+
 function placeRun(run: TextRun, frame: Frame, even: boolean): PdfWord[] {
   const [a = 1, b = 0, c = 0, d = 1, e = 0, f = 0] = run.transform;
   const size = Math.hypot(c, d) || Math.hypot(a, b);
   const length = Math.hypot(a, b) || 1;
   const [ux, uy] = [a / length, b / length];
+  // Text across the page is a watermark or a stamp; its box would cover what lies under it.
+  if (Math.min(Math.abs(ux), Math.abs(uy)) > ASLANT) return [];
   const [nx, ny] = [-uy, ux];
   const words: PdfWord[] = [];
   for (const part of splitRun(run, even)) {
