@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { VERDICTS } from '@/lib/domain/effects';
+import { batchListSchema } from './batches';
 import { idSchema, momentSchema } from './parts';
 import { dueAnswer } from './reminders';
 import { reportStateSchema } from './reports';
@@ -48,6 +49,8 @@ export const todaySiteAnswer = z.object({
   reports: z.array(todayReportAnswer),
   /** More of them than are shown here. */
   moreReports: z.number(),
+  /** Many files sent at once that are not done with. */
+  batches: batchListSchema.shape.batches,
   verdicts: z.array(todayVerdictAnswer),
 });
 export type TodaySite = z.infer<typeof todaySiteAnswer>;

@@ -6,6 +6,7 @@ import { notFound } from '@/lib/errors';
 import { nothingSchema } from '@/lib/schemas/parts';
 import { LONG_WAIT_MS } from '@/lib/schemas/reports';
 import type { TodayReport, TodaySite } from '@/lib/schemas/today';
+import { isOpenBatch, loadBatches } from '../batches/loadBatches';
 import { openDue } from '../reminders/openDue';
 import { siteVerb } from '../verb';
 import { newestVerdicts } from './newestVerdicts';
@@ -13,6 +14,7 @@ import { newestVerdicts } from './newestVerdicts';
 /** From a month before its day a reminder stands on the first page; the first letter leaves two weeks before. */
 const SHOWN_FROM_DAYS = 30;
 const REPORTS_SHOWN = 5;
+const BATCHES_LOOKED_AT = 5;
 const WAITING = ['in-review', 'unreadable', 'not-soil', 'received', 'reading'] as const;
 
 async function waitingReports(tx: Transaction, siteId: SiteId, now: Date): Promise<TodayReport[]> {
@@ -78,6 +80,7 @@ export const getSiteToday = siteVerb({
       next: all.find((one) => one.inDays > SHOWN_FROM_DAYS) ?? null,
       reports,
       moreReports: Math.max(0, counts.waiting - reports.length),
+      batches: (await loadBatches(tx, siteId, BATCHES_LOOKED_AT)).filter(isOpenBatch),
       verdicts: await newestVerdicts(tx, siteId, ctx.now),
     };
   },

@@ -9,8 +9,13 @@ export type UploadItem = {
   readonly plotId: string | null;
   readonly plotName: string | null;
   readonly asRevision: boolean;
+  /** The place of the file in its batch; 'announcing' until the server has named it; null: sent by itself. */
+  readonly batch: BatchSpot | 'announcing' | null;
   readonly stage: UploadStage;
 };
+
+export type BatchSpot = { readonly batchId: string; readonly fileId: string };
+export const batchOf = ({ batch }: UploadItem): BatchSpot | null => (batch === 'announcing' ? null : batch);
 
 export type UploadStage =
   | { readonly kind: 'queued' }

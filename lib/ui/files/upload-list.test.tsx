@@ -242,16 +242,17 @@ describe('UploadList', () => {
         const text = await request.text();
         const name = /filename="([^"]+)"/.exec(text)?.[1] ?? '';
         names.push(name);
-        return name === 'third.pdf' ? received() : new Promise<never>(() => undefined);
+        return name === 'fourth.pdf' ? received() : new Promise<never>(() => undefined);
       }),
     );
     states({});
     show();
-    store.add([pdf('first.pdf'), pdf('second.pdf'), pdf('third.pdf')], toSite);
-    await waitFor(() => expect(names).toHaveLength(2));
+    store.add([pdf('first.pdf'), pdf('second.pdf')], toSite);
+    store.add([pdf('third.pdf'), pdf('fourth.pdf')], toSite);
+    await waitFor(() => expect(names).toHaveLength(3));
     await userEvent.click(screen.getByRole('button', { name: 'Stop sending first.pdf' }));
     expect(await screen.findByRole('link', { name: 'Review 3 samples' })).toBeTruthy();
-    expect(names).toEqual(['first.pdf', 'second.pdf', 'third.pdf']);
+    expect(names).toEqual(['first.pdf', 'second.pdf', 'third.pdf', 'fourth.pdf']);
     expect(screen.getByText('Stopped')).toBeTruthy();
     await userEvent.click(screen.getByRole('button', { name: 'Take first.pdf off this list' }));
     expect(screen.queryByText('first.pdf')).toBeNull();
@@ -274,5 +275,75 @@ describe('UploadList', () => {
     expect(screen.getByText(/This file is empty/)).toBeTruthy();
     expect(screen.getByText(/at most 20 MB/)).toBeTruthy();
     expect(calls).toHaveBeenCalledTimes(1);
+  });
+
+  describe('many at once', () => {
+    const many = (count: number) => Array.from({ length: count }, (_, at) => pdf(`old-${at + 1}.pdf`));
+    const announced = (fileIds: string[]) =>
+      http.post('*/api/v1/sites/s1/batches', async () =>
+        HttpResponse.json({ batchId: 'b1', mailWanted: false, fileIds }, { status: 201 }),
+      );
+
+    it('are announced first, three go at a time, and the refused are told to the batch', async () => {
+      let [under, most] = [0, 0];
+      const spots: string[] = [];
+      const told: unknown[] = [];
+      server.use(
+        announced(['f1', 'f2', 'f3', 'f4', 'f5']),
+        http.post(UPLOADS, async ({ request }) => {
+          under += 1;
+          most = Math.max(most, under);
+          const text = await request.text();
+          const spot = /name="batchFileId"\r\n\r\n(\w+)/.exec(text)?.[1] ?? '';
+          spots.push(spot);
+          await new Promise((resolve) => setTimeout(resolve, 10));
+          under -= 1;
+          if (spot !== 'f2') return received(`r-${spot}`);
+          return HttpResponse.json({ title: 'Not taken', detail: 'It is a web page.', status: 415 }, { status: 415 });
+        }),
+        http.post('*/api/v1/sites/s1/batches/b1/files/:id/refuse', async ({ request, params }) => {
+          told.push([params.id, await request.json()]);
+          return HttpResponse.json({ fileId: 'f2', state: 'refused' });
+        }),
+      );
+      show();
+      expect(await store.add(many(5), toSite)).toBe('b1');
+      await waitFor(() => expect(store.snapshot()).toEqual([]));
+      expect(spots.sort()).toEqual(['f1', 'f2', 'f3', 'f4', 'f5']);
+      expect(most).toBe(3);
+      expect(told).toEqual([['f2', { sentence: 'It is a web page.' }]]);
+      expect(store.batches()).toEqual(['b1']);
+    });
+
+    it('are sent one by one when no batch can be made', async () => {
+      server.use(
+        http.post('*/api/v1/sites/s1/batches', () =>
+          HttpResponse.json({ title: 'No', detail: 'No.' }, { status: 500 }),
+        ),
+        http.post(UPLOADS, () => received()),
+      );
+      states({});
+      show();
+      expect(await store.add(many(4), toSite)).toBeNull();
+      await waitFor(() => expect(screen.getAllByRole('link', { name: 'Review 3 samples' })).toHaveLength(4));
+    });
+
+    it('send again only what the batch still waits for', async () => {
+      const spots: string[] = [];
+      server.use(
+        http.post(UPLOADS, async ({ request }) => {
+          spots.push(/name="batchFileId"\r\n\r\n(\w+)/.exec(await request.text())?.[1] ?? '');
+          return received();
+        }),
+      );
+      const waiting = [{ id: 'f7', fileName: 'old-1.pdf', bytes: 10 }];
+      const others = store.resume('b1', waiting, [...many(2), pdf('old-1.pdf', 11)]);
+      expect(others.map((file) => [file.name, file.size])).toEqual([
+        ['old-2.pdf', 10],
+        ['old-1.pdf', 11],
+      ]);
+      await waitFor(() => expect(store.snapshot()).toEqual([]));
+      expect(spots).toEqual(['f7']);
+    });
   });
 });

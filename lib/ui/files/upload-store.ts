@@ -1,8 +1,9 @@
+import { BATCH_FROM, type BatchAnnounced, LARGEST_BATCH } from '@/lib/schemas/batches';
 import type { Report, UploadAnswer } from '@/lib/schemas/reports';
 import { type ApiResult, callApi, type Problem } from '../api';
 import { type UploadProgress, uploadApi } from '../upload';
-import type { UploadItem, UploadStage } from './upload-item';
-import { ATTEMPTS, isBeingRead, isUnderWay, mayPass, pauseBefore, refusedBeforeSending } from './upload-item';
+import type { BatchSpot, UploadItem, UploadStage } from './upload-item';
+import { ATTEMPTS, batchOf, isBeingRead, isUnderWay, mayPass, pauseBefore, refusedBeforeSending } from './upload-item';
 
 export type UploadTarget = { readonly plotId: string | null; readonly plotName: string | null };
 
@@ -15,6 +16,8 @@ type Send = (
 export type UploadWorld = {
   readonly send: Send;
   readonly ask: (path: string) => Promise<ApiResult<Report>>;
+  readonly announce: (path: string, body: object) => Promise<ApiResult<BatchAnnounced>>;
+  readonly refuse: (path: string, body: object) => Promise<ApiResult<unknown>>;
   readonly pause: (ms: number, signal: AbortSignal) => Promise<void>;
   readonly now: () => number;
 };
@@ -28,9 +31,17 @@ const pause = (ms: number, signal: AbortSignal) =>
     });
   });
 
-export const REAL_WORLD: UploadWorld = { send: uploadApi, ask: callApi, pause, now: Date.now };
+export const REAL_WORLD: UploadWorld = {
+  send: uploadApi,
+  ask: callApi,
+  announce: (path, body) => callApi(path, { method: 'POST', body }),
+  refuse: (path, body) => callApi(path, { method: 'POST', body }),
+  pause,
+  now: Date.now,
+};
 
-const AT_ONCE = 2;
+const AT_ONCE = 3;
+const BEYOND = `At most ${LARGEST_BATCH} files are taken at once, and this one is beyond them. It was not sent; choose it again when the others are through.`;
 const ASK_EVERY_MS = 1_000;
 const ASK_EVERY_LATER_MS = 4_000;
 const SLOWER_AFTER_MS = 60_000;
@@ -58,17 +69,91 @@ export class UploadStore {
   };
   readonly snapshot = (): readonly UploadItem[] => this.items;
 
-  readonly add = (files: readonly File[], target: UploadTarget): void => {
-    const added = files.map((file): UploadItem => {
-      const why = refusedBeforeSending(file);
+  /** The batches begun in this browser, whose end is worth a word wherever the person is by then. */
+  private begun: readonly string[] = [];
+  readonly batches = (): readonly string[] => this.begun;
+  readonly forget = (batchId: string): void => {
+    this.begun = this.begun.filter((id) => id !== batchId);
+    this.show([...this.items]);
+  };
+
+  /** Sends the files; many at once become a batch, whose id is answered once the server knows of it. */
+  readonly add = async (files: readonly File[], target: UploadTarget): Promise<string | null> => {
+    const many = files.length >= BATCH_FROM;
+    const added = files.map((file, at): UploadItem => {
+      const why = at < LARGEST_BATCH ? refusedBeforeSending(file) : BEYOND;
       const stage: UploadStage = why
         ? { kind: 'refused', title: 'Not sent', detail: why, mayRetry: false }
         : { kind: 'queued' };
-      return { id: String(this.next++), file, ...target, asRevision: false, stage };
+      const batch = many && at < LARGEST_BATCH ? 'announcing' : null;
+      return { id: String(this.next++), file, ...target, asRevision: false, batch, stage };
     });
     this.show([...this.items, ...added]);
+    if (many) return this.announce(added.slice(0, LARGEST_BATCH));
     this.work();
+    return null;
   };
+
+  /** Files of a batch that a reload lost on the way, chosen again: told apart by name and size. */
+  readonly resume = (
+    batchId: string,
+    waiting: readonly { id: string; fileName: string; bytes: number }[],
+    files: readonly File[],
+  ): readonly File[] => {
+    const open = waiting.filter(({ id }) => !this.items.some((item) => batchOf(item)?.fileId === id));
+    const others: File[] = [];
+    const added = files.flatMap((file): UploadItem[] => {
+      const at = open.findIndex((one) => one.fileName === file.name && one.bytes === file.size);
+      const [spot] = at < 0 ? [] : open.splice(at, 1);
+      if (!spot) {
+        others.push(file);
+        return [];
+      }
+      const batch = { batchId, fileId: spot.id };
+      const sending = { asRevision: false, batch, stage: { kind: 'queued' } as const };
+      return [{ id: String(this.next++), file, plotId: null, plotName: null, ...sending }];
+    });
+    this.watch(batchId);
+    this.show([...this.items, ...added]);
+    this.work();
+    return others;
+  };
+
+  readonly watch = (batchId: string): void => {
+    if (this.begun.includes(batchId)) return;
+    this.begun = [...this.begun, batchId];
+    this.show([...this.items]);
+  };
+
+  private async announce(added: readonly UploadItem[]): Promise<string | null> {
+    const files = added.map(({ file, stage }) => ({
+      name: file.name.slice(-400) || 'report',
+      bytes: file.size,
+      refusal: stage.kind === 'refused' ? stage.detail : null,
+    }));
+    const answer = await this.world.announce(`/sites/${this.siteId}/batches`, { files });
+    const spots = new Map<string, BatchSpot>();
+    if (answer.ok) {
+      const { batchId, fileIds } = answer.data;
+      added.forEach((item, at) => {
+        const fileId = fileIds[at];
+        if (fileId) spots.set(item.id, { batchId, fileId });
+      });
+      this.begun = [...this.begun, batchId];
+    }
+    // Without a batch they are sent all the same, one by one. What was refused stands on the batch's own list.
+    this.show(
+      this.items
+        .map((item) =>
+          item.batch === 'announcing' && added.some(({ id }) => id === item.id)
+            ? { ...item, batch: spots.get(item.id) ?? null }
+            : item,
+        )
+        .filter((item) => !(item.batch && item.stage.kind === 'refused' && spots.has(item.id))),
+    );
+    this.work();
+    return answer.ok ? answer.data.batchId : null;
+  }
 
   readonly cancel = (id: string): void => {
     const item = this.find(id);
@@ -104,7 +189,9 @@ export class UploadStore {
 
   private work() {
     const busy = this.items.filter((item) => item.stage.kind === 'sending' || item.stage.kind === 'pausing').length;
-    const ready = this.items.filter((item) => item.stage.kind === 'queued').slice(0, Math.max(0, AT_ONCE - busy));
+    const ready = this.items
+      .filter((item) => item.stage.kind === 'queued' && item.batch !== 'announcing')
+      .slice(0, Math.max(0, AT_ONCE - busy));
     for (const item of ready) void this.send(item);
   }
 
@@ -128,7 +215,7 @@ export class UploadStore {
       }
       // A revision that may have arrived must not be sent twice by itself: each sending makes another.
       if (!mayPass(result.problem) || attempt === ATTEMPTS || item.asRevision) {
-        this.set(item.id, refusal(result.problem, item));
+        await this.refused(item, refusal(result.problem, item));
         break;
       }
       this.set(item.id, { kind: 'pausing', attempt });
@@ -139,7 +226,23 @@ export class UploadStore {
     this.work();
   }
 
+  /** A file of a batch that was looked at and not taken: the reason goes onto the batch's list, and off this one. */
+  private async refused(item: UploadItem, stage: UploadStage) {
+    const spot = batchOf(item);
+    if (spot && stage.kind === 'refused' && !stage.mayRetry) {
+      const path = `/sites/${this.siteId}/batches/${spot.batchId}/files/${spot.fileId}/refuse`;
+      if ((await this.world.refuse(path, { sentence: stage.detail })).ok) return this.drop(item.id);
+    }
+    this.set(item.id, stage);
+  }
+
+  private drop(id: string) {
+    this.show(this.items.filter((one) => one.id !== id));
+  }
+
   private answered(item: UploadItem, answer: UploadAnswer, attempt: number, began: number) {
+    // The batch's list goes on from here: it knows the report, and what became of it.
+    if (item.batch) return this.drop(item.id);
     // When an answer was lost on the way, the next try meets the file it brought itself.
     const own =
       attempt > 1 &&
@@ -210,6 +313,8 @@ function formOf(item: UploadItem): FormData {
   const form = new FormData();
   if (item.plotId !== null) form.set('plotId', item.plotId);
   if (item.asRevision) form.set('asRevision', 'true');
+  const spot = batchOf(item);
+  if (spot) form.set('batchFileId', spot.fileId);
   form.set('file', item.file, item.file.name);
   return form;
 }

@@ -40,5 +40,5 @@ export function useUploads(siteId: string, onReport?: () => void) {
     return () => window.removeEventListener('beforeunload', ask);
   }, [leaving]);
 
-  return { items, store };
+  return { items, store, batches: store.batches() };
 }

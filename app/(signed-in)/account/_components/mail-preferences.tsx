@@ -17,6 +17,12 @@ const WORDS: Record<string, { label: string; hint: string; on: string; off: stri
     on: 'Reminder mail is on.',
     off: 'No more reminder mail. What is due still stands on your first page.',
   },
+  'report-ready': {
+    label: 'Word that reports you sent in have been read',
+    hint: 'One letter a report, or one for many files sent at once. For many files you can also choose it on their own list.',
+    on: 'You are written to when a report you sent in has been read.',
+    off: 'No more letters about reports that were read. They still stand on your first page.',
+  },
 };
 
 /** Each switch saves itself. Mail about the account itself is not a matter of choice, and the section says so. */

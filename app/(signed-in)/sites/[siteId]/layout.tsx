@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { orNotFound, pageContext } from '@/app/_server/context';
 import { getSite } from '@/lib/data/sites/getSite';
+import { BatchWatch } from '@/lib/ui/files/batch-watch';
 
 type LayoutProps = { children: ReactNode; params: Promise<{ siteId: string }> };
 
@@ -14,5 +15,10 @@ export async function generateMetadata({ params }: { params: Promise<{ siteId: s
 export default async function SiteLayout({ children, params }: LayoutProps) {
   const { siteId } = await params;
   await orNotFound(getSite({ ctx: await pageContext(), input: { siteId } }));
-  return children;
+  return (
+    <>
+      {children}
+      <BatchWatch siteId={siteId} />
+    </>
+  );
 }

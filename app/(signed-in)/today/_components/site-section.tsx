@@ -7,9 +7,10 @@ import { EmptyState } from '@/lib/ui/feedback/empty-state';
 import { Stretch } from '@/lib/ui/frame/layers';
 import { DueList } from '../../_components/due-list';
 import { inWords } from '../../_components/due-words';
-import { WaitingReports } from './waiting-reports';
+import { WaitingBatches, WaitingReports } from './waiting-reports';
 
-export const asksForSomething = (site: TodaySite): boolean => site.due.length > 0 || site.reports.length > 0;
+export const asksForSomething = (site: TodaySite): boolean =>
+  site.due.length > 0 || site.reports.length > 0 || site.batches.length > 0;
 export const isNew = (site: TodaySite): boolean => site.plots === 0 || site.confirmed === 0;
 
 export function nextWords(site: TodaySite): string {
@@ -40,10 +41,13 @@ export function SiteSection({ site, today, onChanged }: SiteSectionProps) {
             <DueList due={site.due} today={today} focusId={headingId} onChanged={onChanged} />
           </div>
         ) : null}
-        {site.reports.length > 0 ? (
+        {site.reports.length > 0 || site.batches.length > 0 ? (
           <div>
             <h3 className="mb-2 text-lg">Reports</h3>
-            <WaitingReports siteId={site.id} role={site.role} reports={site.reports} more={site.moreReports} />
+            <WaitingBatches siteId={site.id} batches={site.batches} />
+            {site.reports.length > 0 ? (
+              <WaitingReports siteId={site.id} role={site.role} reports={site.reports} more={site.moreReports} />
+            ) : null}
           </div>
         ) : null}
         {!asksForSomething(site) && !isNew(site) ? (

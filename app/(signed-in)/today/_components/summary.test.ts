@@ -40,6 +40,7 @@ const today = (over: Partial<TodaySite>): Today => ({
       next: null,
       reports: [],
       moreReports: 0,
+      batches: [],
       verdicts: [],
       ...over,
     },

@@ -1,6 +1,7 @@
 import Link from 'next/link';
 import type { Role } from '@/lib/access/table';
 import { can } from '@/lib/access/table';
+import type { BatchHead } from '@/lib/schemas/batches';
 import type { TodayReport } from '@/lib/schemas/today';
 import { type Status, StatusWord } from '@/lib/ui/feedback/status-word';
 import { inWords } from '../../_components/due-words';
@@ -69,4 +70,23 @@ export function WaitingReports({ siteId, role, reports, more }: WaitingReportsPr
       ) : null}
     </>
   );
+}
+
+/** "36 of 40 files sent at once are ready to review": in one line, since the list below shows only the first few. */
+export function WaitingBatches({ siteId, batches }: { siteId: string; batches: readonly BatchHead[] }) {
+  return batches.map(({ id, counts }) => {
+    const under = counts.beingRead > 0 ? `${counts.beingRead} still being read` : '';
+    const missing = counts.missing > 0 ? `${counts.missing} not here yet` : '';
+    return (
+      <p key={id} className="pb-2">
+        <Link
+          href={`/sites/${siteId}/reports/batches/${id}`}
+          className="text-link inline-flex min-h-(--target) items-center font-semibold"
+        >
+          {counts.toReview} of {counts.files} files sent at once are ready to review
+        </Link>
+        <span className="ml-3 text-clay">{[under, missing].filter((part) => part !== '').join(', ')}</span>
+      </p>
+    );
+  });
 }

@@ -64,7 +64,8 @@ export function Ground({ site, unit, first }: GroundProps) {
   );
 
   const send = (plotId: string | null, files: readonly File[]) => {
-    store.add(files, { plotId, plotName: list.find((plot) => plot.id === plotId)?.name ?? null });
+    const to = { plotId, plotName: list.find((plot) => plot.id === plotId)?.name ?? null };
+    void store.add(files, to).then((batchId) => batchId && router.push(`${home}/reports/batches/${batchId}`));
   };
   return (
     <>
@@ -118,6 +119,7 @@ export function Ground({ site, unit, first }: GroundProps) {
                   items={items}
                   store={store}
                   reportHref={(id) => `${home}/reports/${id}`}
+                  batchHref={(id) => `${home}/reports/batches/${id}`}
                   mayType={`${home}/reports/new`}
                 />
               </div>

@@ -2,6 +2,8 @@ import type { Metadata } from 'next';
 import { Suspense } from 'react';
 import { orNotFound, pagePerson } from '@/app/_server/context';
 import { can } from '@/lib/access/table';
+import { listBatches } from '@/lib/data/batches/listBatches';
+import { dayOf } from '@/lib/data/days';
 import { listPlots } from '@/lib/data/plots/listPlots';
 import { listReports } from '@/lib/data/reports/listReports';
 import { getSite } from '@/lib/data/sites/getSite';
@@ -30,8 +32,9 @@ async function LoadedReports({ params, searchParams }: PageProps) {
   const { show } = await searchParams;
   const { ctx, person } = await pagePerson(`/sites/${siteId}/reports`);
   const site = await orNotFound(getSite({ ctx, input: { siteId } }));
-  const [reports, live, archived] = await Promise.all([
+  const [reports, batches, live, archived] = await Promise.all([
     listReports({ ctx, input: { siteId } }),
+    listBatches({ ctx, input: { siteId } }),
     listPlots({ ctx, input: { siteId } }),
     listPlots({ ctx, input: { siteId, archived: 'yes' } }),
   ]);
@@ -40,8 +43,10 @@ async function LoadedReports({ params, searchParams }: PageProps) {
     <Inbox
       site={{ id: site.id, name: site.name }}
       timeZone={person.timeZone}
+      today={dayOf(ctx.now, person.timeZone)}
       plots={[...live.plots, ...archived.plots].map(({ id, name }) => ({ id, name }))}
       first={reports}
+      batches={batches}
       shown={isFilter(asked) ? asked : 'all'}
       personId={person.id}
       mayWork={can(site.role, 'reading.work')}

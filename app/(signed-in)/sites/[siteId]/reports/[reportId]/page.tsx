@@ -1,5 +1,6 @@
 import { orNotFound } from '@/app/_server/context';
 import { can } from '@/lib/access/table';
+import { getBatchPlace } from '@/lib/data/batches/getBatchPlace';
 import { dayOf } from '@/lib/data/days';
 import { listPlots } from '@/lib/data/plots/listPlots';
 import { listResults } from '@/lib/data/results/listResults';
@@ -27,6 +28,7 @@ export default async function ReportPage({ params }: ReportParams) {
     return <ReadResults siteId={siteId} report={report} results={mine} plotNames={plotNames} />;
   }
   const review = hasReview(report.state) ? await orNotFound(getReview({ ctx, input: { siteId, reportId } })) : null;
+  const place = await orNotFound(getBatchPlace({ ctx, input: { siteId, reportId } }));
   return (
     <ReportScreen
       siteId={siteId}
@@ -36,6 +38,7 @@ export default async function ReportPage({ params }: ReportParams) {
       today={dayOf(ctx.now, person.timeZone)}
       firstReport={report}
       firstReview={review}
+      place={place}
     />
   );
 }

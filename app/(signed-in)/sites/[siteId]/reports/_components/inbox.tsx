@@ -1,7 +1,9 @@
 'use client';
 
 import { Upload } from 'lucide-react';
+import { useRouter } from 'next/navigation';
 import { useCallback, useEffect, useState } from 'react';
+import type { BatchList } from '@/lib/schemas/batches';
 import type { ReportList } from '@/lib/schemas/reports';
 import { Button } from '@/lib/ui/actions/button';
 import { LinkButton } from '@/lib/ui/actions/link-button';
@@ -16,21 +18,25 @@ import { UploadList } from '@/lib/ui/files/upload-list';
 import { useUploads } from '@/lib/ui/files/use-uploads';
 import { PageTitle } from '@/lib/ui/frame/page-title';
 import { useApi } from '@/lib/ui/use-api';
+import { OpenBatches } from './open-batches';
+import { OtherWays } from './other-ways';
 import { ReportRow, type RowRights } from './report-row';
 import { arranged, countsOf, FILTER_WORDS, FILTERS, type Filter, isStuck, someBeingRead } from './report-states';
 
 type InboxProps = RowRights & {
   readonly site: { readonly id: string; readonly name: string };
   readonly timeZone: string;
+  readonly today: string;
   readonly plots: readonly { readonly id: string; readonly name: string }[];
   readonly first: ReportList;
+  readonly batches: BatchList;
   readonly shown: Filter;
 };
 
 const AT_A_TIME = 25;
 const WHILE_READING_MS = 2_000;
 
-export function Inbox({ site, timeZone, plots, first, shown, ...rights }: InboxProps) {
+export function Inbox({ site, timeZone, today, plots, first, batches, shown, ...rights }: InboxProps) {
   const home = `/sites/${site.id}`;
   const {
     data = first,
@@ -48,7 +54,11 @@ export function Inbox({ site, timeZone, plots, first, shown, ...rights }: InboxP
   const counts = countsOf(data.reports);
   const plotNames = new Map(plots.map((plot) => [plot.id, plot.name]));
   const day = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', year: 'numeric', timeZone });
-  const send = (files: readonly File[]) => store.add(files, { plotId: null, plotName: null });
+  const router = useRouter();
+  const send = (files: readonly File[]) => {
+    const sent = store.add(files, { plotId: null, plotName: null });
+    void sent.then((batchId) => batchId && router.push(`${home}/reports/batches/${batchId}`));
+  };
   const choose = (next: Filter) => {
     setFilter(next);
     setMost(AT_A_TIME);
@@ -82,13 +92,16 @@ export function Inbox({ site, timeZone, plots, first, shown, ...rights }: InboxP
         }
       />
       <div className="page-wrap grid gap-4 pb-12">
+        {rights.mayWork ? <OtherWays home={home} today={today} onFile={(file) => send([file])} /> : null}
         <ProblemNotice problem={problem} />
         <UploadList
           items={items}
           store={store}
           reportHref={(id) => `${home}/reports/${id}`}
+          batchHref={(id) => `${home}/reports/batches/${id}`}
           mayType={`${home}/reports/new`}
         />
+        <OpenBatches siteId={site.id} first={batches} />
         <Stuck first={data} />
         {data.reports.length === 0 ? (
           <EmptyState shape="page" title="No report yet">

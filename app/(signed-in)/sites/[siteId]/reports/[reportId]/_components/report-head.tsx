@@ -4,11 +4,12 @@ import Link from 'next/link';
 import { can, type Role } from '@/lib/access/table';
 import type { Report } from '@/lib/schemas/reports';
 import { ConfirmButton } from '@/lib/ui/actions/confirm-button';
+import { LinkButton } from '@/lib/ui/actions/link-button';
 import { callApi } from '@/lib/ui/api';
 import { useAnnounce } from '@/lib/ui/feedback/announce';
 import { StatusWord } from '@/lib/ui/feedback/status-word';
 import { ReasonButton } from './reason-button';
-import { onDay, reportTitle, STATE_WORDS } from './report-words';
+import { isWaiting, onDay, reportTitle, STATE_WORDS } from './report-words';
 
 type HeadProps = {
   path: string;
@@ -62,6 +63,11 @@ function HeadActions({ path, report, role, personId, refresh }: Omit<HeadProps, 
   };
   return (
     <div className="flex flex-wrap gap-3">
+      {report.origin === 'file' && can(role, 'reading.work') && !isWaiting(report.state) ? (
+        <LinkButton size="small" look="plain" href={`${path}/read-wrong`}>
+          This was read wrong
+        </LinkButton>
+      ) : null}
       {maySetAside ? (
         <ConfirmButton
           size="small"

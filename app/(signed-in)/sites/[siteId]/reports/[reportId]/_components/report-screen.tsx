@@ -5,6 +5,7 @@ import type { Report } from '@/lib/schemas/reports';
 import { useAnnounce } from '@/lib/ui/feedback/announce';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { Skeleton } from '@/lib/ui/feedback/skeleton';
+import { BatchStrip } from './batch-strip';
 import { NotRead } from './not-read';
 import { ReadingProgress } from './reading-progress';
 import { ReportHead } from './report-head';
@@ -23,6 +24,7 @@ export function ReportScreen(props: ReportScreenProps) {
   return (
     <>
       <ReportHead path={path} siteId={siteId} report={report} role={role} personId={personId} refresh={live.refresh} />
+      {props.place ? <BatchStrip siteId={siteId} place={props.place} /> : null}
       {live.problem ? (
         <div className="page-wrap max-w-[110rem]! pb-4">
           <ProblemNotice problem={live.problem} />

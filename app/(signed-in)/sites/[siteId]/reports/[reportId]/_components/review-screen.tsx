@@ -9,6 +9,7 @@ import type { Problem } from '@/lib/ui/api';
 import { Notice } from '@/lib/ui/feedback/notice';
 import type { GridCounts } from '@/lib/ui/grid/types';
 import { Advice } from './advice';
+import { NextOfBatch } from './batch-strip';
 import { ConfirmBar } from './confirm-bar';
 import { ConfirmedNotice } from './confirmed-notice';
 import { depthUnit } from './depth-units';
@@ -24,7 +25,7 @@ const NONE_OPEN: GridCounts = { saving: 0, failed: 0, conflicts: 0, invalid: 0 }
 type ScreenProps = ReportScreenProps & { path: string; live: LiveReport; review: Review; report: Report };
 
 /** Samples above, the page beside its values, the confirmation below. */
-export function ReviewScreen({ siteId, role, units, today, path, live, review, report }: ScreenProps) {
+export function ReviewScreen({ siteId, role, units, today, path, live, review, report, place: batch }: ScreenProps) {
   const readOnly = report.state !== 'in-review';
   const [counts, setCounts] = useState(NONE_OPEN);
   const [separate, setSeparate] = useState<ReadonlySet<string>>(new Set());
@@ -50,10 +51,11 @@ export function ReviewScreen({ siteId, role, units, today, path, live, review, r
       <div className="page-wrap max-w-[110rem]! grid gap-4 pb-4 empty:hidden">
         {faster ? <Faster problem={faster} onShow={() => void afterwards(() => setFaster(null))} /> : null}
         {report.state === 'confirmed' ? (
-          <TakesFocus when={settled}>
+          <TakesFocus when={settled && !batch}>
             <ConfirmedNotice siteId={siteId} review={review} report={report} />
           </TakesFocus>
         ) : null}
+        {report.state === 'confirmed' && batch ? <NextOfBatch siteId={siteId} place={batch} focus={settled} /> : null}
         {report.state === 'set-aside' ? (
           <Notice title="Set aside">
             Nothing of it counts. File and rows are kept; an owner or adviser can bring it back.

@@ -1,4 +1,5 @@
 import type { Role } from '@/lib/access/table';
+import type { BatchPlace } from '@/lib/schemas/batches';
 import type { Report } from '@/lib/schemas/reports';
 import type { Review } from '@/lib/schemas/review';
 
@@ -10,4 +11,6 @@ export type ReportScreenProps = {
   today: string;
   firstReport: Report;
   firstReview: Review | null;
+  /** Where it stands among files sent at once. */
+  place?: BatchPlace | null;
 };
