@@ -12,7 +12,7 @@ export const REPORT_STATES = [
 ] as const;
 export const reportStateSchema = z.enum(REPORT_STATES);
 
-/** For the file picker; the server decides by content and name together. Pictures and sheets are kept but not read yet. */
+/** For the file picker; the server decides by content and name together. */
 export const UPLOAD_ENDINGS = [
   '.pdf',
   '.csv',

@@ -5,6 +5,7 @@ import type { Reading } from '@/lib/reading/types';
 import { wordsOfPdf } from '@/lib/services/pdf/words';
 import { sniffReport } from '@/lib/services/reading/sniff';
 import { MAX_PAGES } from './limits';
+import { readPictureFile, readPicturesOfPdf, type Told } from './pictures';
 
 function escapeText(text: string): string {
   return text.replace(/&/g, '&amp;').replace(/</g, '&lt;').replace(/>/g, '&gt;').replace(/"/g, '&quot;');
@@ -89,18 +90,29 @@ function drawPage(trace: Trace, number: number, reading: Reading): string {
   return `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${page.width} ${page.height}" font-family="sans-serif">${[...shapes, ...stored].join('\n')}</svg>\n`;
 }
 
-/** Writes DIR/<file>.page-<n>.svg for each page of a PDF; data files have no page and get nothing. */
-export async function drawFile(input: { bytes: Uint8Array; fileName: string; directory: string }): Promise<void> {
+/** What the stages saw of a PDF or a picture; a scanned page is shown level, as the stages see it. */
+async function tracedFile(input: { bytes: Uint8Array; fileName: string }) {
+  const quiet: Told = { page: () => undefined, scans: () => undefined };
   const sniffed = sniffReport(input);
-  if (!sniffed.ok || sniffed.kind !== 'pdf') return;
+  if (!sniffed.ok) return null;
+  if (sniffed.kind === 'png' || sniffed.kind === 'jpeg') return readPictureFile(input, quiet);
+  if (sniffed.kind !== 'pdf') return null;
   const words = await wordsOfPdf({ bytes: input.bytes, maxPages: MAX_PAGES });
-  if (!words.ok) return;
+  if (!words.ok) return null;
+  const pictured = await readPicturesOfPdf({ ...input, pages: words.pages }, quiet);
+  if (pictured !== null) return pictured;
   const { reading, trace } = readPagesTraced({ fileName: input.fileName, pages: words.pages });
-  if (trace === null) return;
-  for (const page of words.pages) {
+  return { level: reading, trace };
+}
+
+/** Writes DIR/<file>.page-<n>.svg for each page of a PDF or picture; data files have no page and get nothing. */
+export async function drawFile(input: { bytes: Uint8Array; fileName: string; directory: string }): Promise<void> {
+  const traced = await tracedFile(input);
+  if (traced === null || traced.trace === null) return;
+  for (const page of traced.trace.pages) {
     await writeFile(
       join(input.directory, `${input.fileName}.page-${page.number}.svg`),
-      drawPage(trace, page.number, reading),
+      drawPage(traced.trace, page.number, traced.level),
     );
   }
 }

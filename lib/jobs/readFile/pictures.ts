@@ -1,5 +1,5 @@
 import { readPages } from '@/lib/reading/readPages';
-import { type AnyPage, readScanTraced } from '@/lib/reading/scan/readScan';
+import { type AnyPage, readScanTraced, type TracedScan } from '@/lib/reading/scan/readScan';
 import type { ScannedPage } from '@/lib/reading/scan/types';
 import { type Page, type Reading, type Remark, refusedReading } from '@/lib/reading/types';
 import { type Engine, openEngine } from '@/lib/services/ocr/engine';
@@ -7,7 +7,7 @@ import { readPicture, type SeenPage } from '@/lib/services/ocr/page';
 import { picturesOfPdf } from '@/lib/services/pdf/pictures';
 import { decodePicture } from '@/lib/services/pictures/decode';
 import type { Grey } from '@/lib/services/pictures/types';
-import { refusal } from '@/lib/services/reading/refusals';
+import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
 import { FEW_WORDS, MAX_SCANNED_PAGES, NO_WORDS } from './limits';
 
 /** What the reading process tells its parent on the way. */
@@ -17,14 +17,17 @@ export type Told = {
   readonly page: (page: number, of: number) => void;
 };
 
-type Trace = Awaited<ReturnType<typeof readScanTraced>>;
+function refused(input: { fileName: string; pages: number; code: RefusalCode }): TracedScan {
+  const reading = refusedReading({ file: input.fileName, pages: input.pages, error: refusal(input.code) });
+  return { reading, trace: null, level: reading };
+}
 
 /** Longer side of a sheet in points of paper, for a picture that does not say its size: a letter's. */
 const USUAL_SIDE = 792;
 
 function scannedPage(number: number, seen: SeenPage, side: number): ScannedPage {
   const { width, height, letter, views, pieces, stored } = seen;
-  return { number, width, height, letter, views, pieces, stored, scale: Math.max(width, height) / side };
+  return { number, width, height, letter, views, pieces, stored, scale: seen.side / side };
 }
 
 /** One engine for the file, opened when the first picture is there. */
@@ -41,21 +44,18 @@ async function withEngine<T>(run: (engine: () => Promise<Engine>) => Promise<T>)
 }
 
 /** A PNG or JPEG as a report of one page. */
-export async function readPictureFile(input: { fileName: string; bytes: Uint8Array }, tell: Told): Promise<Trace> {
+export async function readPictureFile(input: { fileName: string; bytes: Uint8Array }, tell: Told): Promise<TracedScan> {
   const { fileName } = input;
   const decoded = await decodePicture(input.bytes);
   if (!decoded.ok) {
-    return { reading: refusedReading({ file: fileName, pages: 1, error: refusal(decoded.reason) }), trace: null };
+    return refused({ fileName, pages: 1, code: decoded.reason });
   }
   tell.scans(1);
   return withEngine(async (engine) => {
     const seen = await readPicture(await engine(), decoded.picture);
     tell.page(1, 1);
     if (seen === null) {
-      return {
-        reading: refusedReading({ file: fileName, pages: 1, error: refusal('picture-unreadable') }),
-        trace: null,
-      };
+      return refused({ fileName, pages: 1, code: 'picture-unreadable' });
     }
     return readScanTraced({
       fileName,
@@ -77,7 +77,7 @@ function unread(numbers: readonly number[]): Remark {
 export async function readPicturesOfPdf(
   input: { fileName: string; bytes: Uint8Array; pages: readonly Page[] },
   tell: Told,
-): Promise<Trace | null> {
+): Promise<TracedScan | null> {
   const bare = input.pages.filter((page) => page.words.length < NO_WORDS).map((page) => page.number);
   const perhaps = input.pages
     .filter((page) => page.words.length >= NO_WORDS && page.words.length < FEW_WORDS)
@@ -85,10 +85,7 @@ export async function readPicturesOfPdf(
   if (bare.length === 0 && perhaps.length === 0) return null;
   const { fileName, bytes } = input;
   if (bare.length > MAX_SCANNED_PAGES && bare.length === input.pages.length) {
-    return {
-      reading: refusedReading({ file: fileName, pages: input.pages.length, error: refusal('too-many-scans') }),
-      trace: null,
-    };
+    return refused({ fileName, pages: input.pages.length, code: 'too-many-scans' });
   }
   const numbers = [...bare, ...perhaps].sort((a, b) => a - b).slice(0, MAX_SCANNED_PAGES);
   tell.scans(numbers.length);
@@ -112,7 +109,7 @@ export async function readPicturesOfPdf(
       const picture = seen.get(page.number);
       return picture === undefined ? page : scannedPage(page.number, picture, Math.max(page.width, page.height));
     });
-    const { reading, trace } = await readScanTraced({
+    const { reading, trace, level } = await readScanTraced({
       fileName,
       pages,
       lookAgain: async (number, spots) => (await seen.get(number)?.look(spots)) ?? [],
@@ -120,8 +117,9 @@ export async function readPicturesOfPdf(
     const missed = bare.filter((number) => !seen.has(number));
     const warnings = reading.warnings.filter((warning) => warning.code !== 'page-without-text');
     if (seen.size === 0 && reading.kind === 'refused')
-      return { reading: { ...reading, error: refusal('picture-unreadable') }, trace };
-    return { reading: { ...reading, warnings: missed.length > 0 ? [...warnings, unread(missed)] : warnings }, trace };
+      return refused({ fileName, pages: input.pages.length, code: 'picture-unreadable' });
+    const told = missed.length > 0 ? [...warnings, unread(missed)] : warnings;
+    return { reading: { ...reading, warnings: told }, trace, level };
   });
 }
 

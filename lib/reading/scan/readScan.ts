@@ -78,6 +78,13 @@ function storedResult(result: ReadResult, page: ScannedPage): ReadResult {
   return { ...result, box: page.stored({ x0: x0 * w, y0: y0 * h, x1: x1 * w, y1: y1 * h }) };
 }
 
+export type TracedScan = {
+  readonly reading: Reading;
+  readonly trace: Trace | null;
+  /** The same with the boxes of scanned pages still on the level page, for drawing over what the stages saw. */
+  readonly level: Reading;
+};
+
 /** Looks again at spots of one scanned page, each alone; the text seen at each, '' for nothing. */
 export type LookAgain = (page: number, spots: readonly Spot['box'][]) => Promise<readonly string[]>;
 
@@ -112,7 +119,7 @@ export async function readScanTraced(input: {
   fileName: string;
   pages: readonly AnyPage[];
   lookAgain: LookAgain;
-}): Promise<{ reading: Reading; trace: Trace | null }> {
+}): Promise<TracedScan> {
   let words: Words = new Map(input.pages.filter(isScan).map((page) => [page.number, wordsOf(page)]));
   let { reading, trace } = readWords(input, words);
   let spots = spotsOf(reading, input.pages, words);
@@ -143,5 +150,5 @@ export async function readScanTraced(input: {
     const { width: w, height: h } = page;
     return { ...one, box: page.stored({ x0: x0 * w, y0: y0 * h, x1: x1 * w, y1: y1 * h }) };
   });
-  return { reading: { ...reading, samples, recommendations }, trace };
+  return { reading: { ...reading, samples, recommendations }, trace, level: reading };
 }

@@ -14,6 +14,8 @@ export type SeenPage = {
   readonly height: number;
   /** Usual height of a letter, in points of the picture. */
   readonly letter: number;
+  /** Longer side of the whole sheet, in points of the picture; the picture holds only the part with type. */
+  readonly side: number;
   /** The words as each way of looking saw them. */
   readonly views: readonly (readonly SeenWord[])[];
   /** Connected pieces of ink of the size of letters, figures and points. */
@@ -130,6 +132,7 @@ export async function readPicture(engine: Engine, source: Grey): Promise<SeenPag
     width: picture.width,
     height: picture.height,
     letter: prepared.letter,
+    side: prepared.side * prepared.scale,
     views,
     pieces: smallPieces(picture, prepared.letter),
     stored: ({ x0, y0, x1, y1 }) => {

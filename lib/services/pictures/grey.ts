@@ -1,4 +1,4 @@
-import { carry, type Matrix } from './matrix';
+import type { Matrix } from './matrix';
 import type { Grey } from './types';
 
 /** Shrinks by a whole number, each new point the mean of its block. */
@@ -20,29 +20,32 @@ export function shrink(picture: Grey, by: number): Grey {
   return { width, height, data };
 }
 
-/** Catmull-Rom weights of the four points around a place between the second and the third. */
-function weights(t: number): readonly [number, number, number, number] {
+/** Catmull-Rom weights of the four points around a place between the second and the third, in steps of 1/32. */
+const STEPS = 32;
+const WEIGHTS = new Float32Array((STEPS + 1) * 4);
+for (let step = 0; step <= STEPS; step++) {
+  const t = step / STEPS;
   const [t2, t3] = [t * t, t * t * t];
-  return [(-t3 + 2 * t2 - t) / 2, (3 * t3 - 5 * t2 + 2) / 2, (-3 * t3 + 4 * t2 + t) / 2, (t3 - t2) / 2];
+  WEIGHTS.set([(-t3 + 2 * t2 - t) / 2, (3 * t3 - 5 * t2 + 2) / 2, (-3 * t3 + 4 * t2 + t) / 2, (t3 - t2) / 2], step * 4);
 }
 
-const WEIGHTS = Array.from({ length: 33 }, (_, step) => weights(step / 32));
-
+/** Brightness between the points, with the edge's own points repeated outside. */
 function cubic(picture: Grey, x: number, y: number): number {
   const { width, height, data } = picture;
   const [left, top] = [Math.floor(x), Math.floor(y)];
-  const wx = WEIGHTS[Math.round((x - left) * 32)] ?? weights(0);
-  const wy = WEIGHTS[Math.round((y - top) * 32)] ?? weights(0);
+  const [wx, wy] = [Math.round((x - left) * STEPS) * 4, Math.round((y - top) * STEPS) * 4];
+  const inside = left >= 1 && top >= 1 && left + 2 < width && top + 2 < height;
   let sum = 0;
   for (let j = 0; j < 4; j++) {
-    const row = Math.min(height - 1, Math.max(0, top - 1 + j)) * width;
+    const row = (inside ? top - 1 + j : Math.min(height - 1, Math.max(0, top - 1 + j))) * width;
     let line = 0;
     for (let i = 0; i < 4; i++) {
-      line += (wx[i] ?? 0) * (data[row + Math.min(width - 1, Math.max(0, left - 1 + i))] ?? 0);
+      const at = inside ? left - 1 + i : Math.min(width - 1, Math.max(0, left - 1 + i));
+      line += (WEIGHTS[wx + i] ?? 0) * (data[row + at] ?? 0);
     }
-    sum += (wy[j] ?? 0) * line;
+    sum += (WEIGHTS[wy + j] ?? 0) * line;
   }
-  return Math.min(255, Math.max(0, Math.round(sum)));
+  return sum < 0 ? 0 : sum > 255 ? 255 : Math.round(sum);
 }
 
 /**
@@ -51,11 +54,16 @@ function cubic(picture: Grey, x: number, y: number): number {
  */
 export function warp(source: Grey, toSource: Matrix, width: number, height: number): Grey {
   const data = new Uint8Array(width * height);
+  const [a, b, c, d, e, f, g, h, i] = toSource;
   for (let y = 0; y < height; y++) {
+    const py = y + 0.5;
     for (let x = 0; x < width; x++) {
-      const at = carry(toSource, x + 0.5, y + 0.5);
-      const outside = at.x < -0.5 || at.y < -0.5 || at.x > source.width + 0.5 || at.y > source.height + 0.5;
-      data[y * width + x] = outside ? 255 : cubic(source, at.x - 0.5, at.y - 0.5);
+      const px = x + 0.5;
+      const w = g * px + h * py + i;
+      const sx = (a * px + b * py + c) / w;
+      const sy = (d * px + e * py + f) / w;
+      const outside = sx < -0.5 || sy < -0.5 || sx > source.width + 0.5 || sy > source.height + 0.5;
+      data[y * width + x] = outside ? 255 : cubic(source, sx - 0.5, sy - 0.5);
     }
   }
   return { width, height, data };

@@ -1,17 +1,17 @@
 import { shrink, warp } from './grey';
 import { flatten, HAIRLINE, inkOf } from './light';
-import { chain, type Matrix, rectangleToQuad, SAME, scaling, shifting, turning } from './matrix';
+import { carry, chain, inverse, type Matrix, rectangleToQuad, SAME, scaling, shifting, turning } from './matrix';
 import { findPage, flatSize } from './page';
 import { lettersOf, median, piecesOf } from './pieces';
 import { withoutRules } from './rules';
 import { runsUpright, skewOf } from './straight';
-import type { Grey } from './types';
+import type { Grey, Piece } from './types';
 
 /** Height in points that the usual letter is brought to: what 10-point type has at 300 points an inch. */
 const LETTER = 32;
 /** The picture looked at for turn and skew. */
 const LOOK = 1700;
-const MOST_POINTS = 16_000_000;
+const MOST_POINTS = 12_000_000;
 const LARGEST_SCALE = 4;
 
 export type Prepared = {
@@ -21,11 +21,25 @@ export type Prepared = {
   readonly toStored: Matrix;
   /** Usual height of its letters, in points. */
   readonly letter: number;
+  /** Points of `picture` to one point of the sheet as it came, before it was enlarged. */
+  readonly scale: number;
+  /** Longer side of the sheet, in points as it came. */
+  readonly side: number;
 };
 
 function letters(picture: Grey) {
   const flat = flatten(picture, 24);
   return lettersOf(piecesOf(inkOf(flat)));
+}
+
+/** The part of the page that holds type, with room around it. Letters are in units of `by` points. */
+function inkBox(letters: readonly Piece[], map: Matrix, by: number, room: number) {
+  let [x0, y0, x1, y1] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY, -1e9, -1e9];
+  for (const piece of letters) {
+    const at = carry(map, ((piece.x0 + piece.x1) / 2) * by, ((piece.y0 + piece.y1) / 2) * by);
+    [x0, y0, x1, y1] = [Math.min(x0, at.x), Math.min(y0, at.y), Math.max(x1, at.x), Math.max(y1, at.y)];
+  }
+  return { x0: x0 - room, y0: y0 - room, x1: x1 + room, y1: y1 + room };
 }
 
 /**
@@ -66,15 +80,12 @@ export function prepare(source: Grey, photo: boolean): Prepared | null {
     : seen;
   const angle = skewOf(level);
   const type = median(level.map((piece) => piece.y1 - piece.y0)) * by || LETTER;
-  const [c, s] = [Math.abs(Math.cos(angle)), Math.abs(Math.sin(angle))];
-  const [wide, high] = [width * c + height * s, width * s + height * c];
+  // Level, about the middle of the sheet; only the part with type on it is kept.
+  const levelled = chain(shifting(width / 2, height / 2), turning(angle));
+  const box = inkBox(level, inverse(levelled), by, 2.5 * type);
+  const [wide, high] = [box.x1 - box.x0, box.y1 - box.y0];
   const scale = Math.min(LARGEST_SCALE, LETTER / type, Math.sqrt(MOST_POINTS / (wide * high)));
-  const toLevel = chain(
-    shifting(width / 2, height / 2),
-    turning(angle),
-    shifting(-wide / 2, -high / 2),
-    scaling(1 / scale, 1 / scale),
-  );
+  const toLevel = chain(levelled, shifting(box.x0, box.y0), scaling(1 / scale, 1 / scale));
   const toSource = chain(flatToSource, levelToFlat, toLevel);
   const whole = Math.max(1, Math.floor(1 / scale));
   const raw = warp(
@@ -89,6 +100,8 @@ export function prepare(source: Grey, photo: boolean): Prepared | null {
     picture,
     toStored: chain(scaling(1 / source.width, 1 / source.height), toSource),
     letter: type * scale,
+    scale,
+    side: Math.max(width, height),
   };
 }
 

@@ -17,12 +17,12 @@ export default function UploadGuide() {
             and press the button for a report. A report with several samples may go onto any of its plots.
           </li>
           <li>
-            Wait while it is read; you may leave the page. PDF files with text and CSV files are read. A file that was
-            sent before is recognised and offered to open.
+            Wait while it is read; you may leave the page. PDF files, scans, photos and data files are read; a scanned
+            page takes some seconds longer. A file that was sent before is recognised and offered to open.
           </li>
           <li>
-            Scans, photos and spreadsheets are kept, but not read yet: type their numbers in beside the page. A report
-            you only have on paper can be typed in with no file at all.
+            Have a report only on paper? Scan it, or photograph it from straight above in even light, the whole sheet in
+            the picture. It can also be typed in with no file at all.
           </li>
         </Steps>
       </Part>
