@@ -17,7 +17,7 @@ export function OtherWays({ home, today, onFile }: OtherWaysProps) {
         href={`${home}/reports/own-sheet`}
         icon={<Sheet aria-hidden="true" className="size-5" />}
       >
-        Bring a spreadsheet of your own
+        Own spreadsheet
       </LinkButton>
       <LinkButton
         look="quiet"

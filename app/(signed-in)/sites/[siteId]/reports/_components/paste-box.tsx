@@ -40,7 +40,7 @@ export function PasteBox({ onFile, today }: PasteBoxProps) {
         aria-haspopup="dialog"
         onClick={() => change(true)}
       >
-        Paste the numbers from a mail
+        Paste from a mail
       </Button>
       <Dialog
         open={open}
@@ -66,7 +66,9 @@ export function PasteBox({ onFile, today }: PasteBoxProps) {
           spellCheck={false}
           {...(fault === undefined ? {} : { error: fault })}
           onChange={(event) => setText(event.currentTarget.value)}
-          placeholder={'Sample: North bed, 0-6 in\npH 6.4\nPhosphorus (Mehlich-3)  52 ppm\nPotassium  188 ppm'}
+          placeholder={
+            'For example:\nSample: North bed, 0-6 in\npH 6.4\nPhosphorus (Mehlich-3)  52 ppm\nPotassium  188 ppm'
+          }
         />
       </Dialog>
     </>

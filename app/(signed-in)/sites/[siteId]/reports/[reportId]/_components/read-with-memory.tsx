@@ -12,8 +12,8 @@ export function ReadWithMemory({ siteId, review }: { siteId: string; review: Rev
     .map((one) => one.on)
     .sort()
     .at(-1);
-  if (newest === undefined && otherwise === 0) return null;
   const filled = learnt.filter((one) => one.filled.length > 0).length;
+  if (filled === 0 && otherwise === 0) return null;
   return (
     <Notice
       title={
@@ -22,9 +22,7 @@ export function ReadWithMemory({ siteId, review }: { siteId: string; review: Rev
           : `You confirmed this form on ${dayInWords(asDay(newest))}`
       }
     >
-      {filled > 0
-        ? `${counted(filled, 'row')} took from there what this page leaves open; each says so. `
-        : 'This page leaves nothing open that was confirmed then. '}
+      {filled > 0 ? `${counted(filled, 'row')} took from there what this page leaves open; each says so. ` : ''}
       {otherwise > 0
         ? `${counted(otherwise, 'row')} ${otherwise === 1 ? 'says' : 'say'} something else than then and ${otherwise === 1 ? 'is' : 'are'} marked. `
         : ''}

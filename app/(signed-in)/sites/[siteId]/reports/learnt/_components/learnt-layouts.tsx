@@ -71,6 +71,7 @@ function OneLayout({
   layout: LearntLayout;
   onForget?: () => Promise<ApiResult<unknown>>;
 }) {
+  const days = new Set(layout.lessons.map((lesson) => lesson.on));
   const rows = layout.lessons.map((lesson, at) => ({ ...lesson, at }));
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
@@ -112,7 +113,9 @@ function OneLayout({
           { key: 'analyte', head: 'Means', cell: meaningWords },
           { key: 'method', head: 'Method', cell: methodWords },
           { key: 'unit', head: 'Unit', cell: unitWords },
-          { key: 'on', head: 'Confirmed', cell: (row) => onDay(row.on) },
+          ...(days.size > 1
+            ? [{ key: 'on', head: 'Confirmed', cell: (row: (typeof rows)[number]) => onDay(row.on) }]
+            : []),
         ]}
       />
     </div>
