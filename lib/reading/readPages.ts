@@ -1,6 +1,7 @@
 import { assemble } from './assemble';
 import { type Candidate, type Identity, remark, type SamplePart } from './candidate';
 import { legendOf } from './labels/legend';
+import { cardRows } from './stages/cards';
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
@@ -184,10 +185,18 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const list = listRows(results, taken);
   for (const run of list.runs) for (const line of run.sampleLines) taken.add(line);
   const structured = list.rows.length + tableRows.reduce((sum, row) => sum + row.candidates.length, 0);
+  const cards = structured < ENOUGH_WITHOUT_SENTENCES ? cardRows(results, taken) : [];
   const prose =
-    structured < ENOUGH_WITHOUT_SENTENCES ? proseRows(paragraphsOf(results, taken), style) : { rows: [], refused: [] };
+    structured + cards.length < ENOUGH_WITHOUT_SENTENCES
+      ? proseRows(paragraphsOf(results, taken), style)
+      : { rows: [], refused: [] };
   const toldAlready = new Set(list.rows.map((row) => row.candidate.label.analyte));
-  const rows = [...list.rows, ...prose.rows.filter((row) => !toldAlready.has(row.candidate.label.analyte))];
+  const apart = cards.length >= ENOUGH_WITHOUT_SENTENCES ? cards : [];
+  const rows = [
+    ...list.rows,
+    ...apart.filter((row) => !toldAlready.has(row.candidate.label.analyte)),
+    ...prose.rows.filter((row) => !toldAlready.has(row.candidate.label.analyte)),
+  ];
   const hits = identityHits(ofSoil, taken);
   const contexts = contextsOf(hits);
   const statements = statementsOf(texts);

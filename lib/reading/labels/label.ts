@@ -255,7 +255,8 @@ export function readLabel(text: string, captions: readonly string[] = []): Label
   if (
     share !== undefined &&
     (unit?.unit === '%' ||
-      (unit?.unit !== 'meq/100g' && /saturation|\bof cec\b|of exchangeable bases|\bof bases\b/i.test(all)))
+      (unit?.unit !== 'meq/100g' &&
+        /saturation|\bof (the )?(cec\b|(cation )?exchange capacity)|of exchangeable bases|\bof bases\b/i.test(all)))
   ) {
     if (!/total/i.test(text)) key = share;
   }

@@ -42,7 +42,14 @@ function saysRole(left: string): boolean {
 /** "Soil pH: 6.4" set with one blank is a label and a value; several numbers set close together are several cells. */
 function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
   const count = phrase.words.length;
-  if (count < 2 || readCell(phrase.text, style).kind !== 'text') return [phrase];
+  if (count < 2) return [phrase];
+  // "27 ppm (54 lb/A)": one amount in two units is two numbers.
+  const second = phrase.words.findIndex((word, index) => index > 0 && /^\([<>]?\d/.test(word.text));
+  if (second > 0) {
+    const [first, other] = [readCell(wordsText(phrase, 0, second), style), readCell(wordsText(phrase, second), style)];
+    if (first.kind === 'value' && other.kind === 'value' && other.unit !== null) return cut(phrase, second);
+  }
+  if (readCell(phrase.text, style).kind !== 'text') return [phrase];
   const each = phrase.words.map((word) => readCell(word.text, style));
   const numbers = each.filter((cell) => cell.kind === 'value').length;
   if (numbers >= 2 && each.every((cell) => cell.kind !== 'text' && cell.kind !== 'range')) {

@@ -20,7 +20,8 @@ export type Column = {
 };
 
 type Span = { x0: number; x1: number };
-type Stack = Span & { own: string[]; captions: string[]; over: boolean };
+/** `head` is where the column's own headings stand; numbers are often set to one side under them. */
+type Stack = Span & { own: string[]; captions: string[]; over: boolean; head: Span | null };
 type Caption = {
   text: string;
   middle: number;
@@ -81,6 +82,10 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
   return meant ? parts : [phrase];
 }
 
+function widened(span: Span | null, by: Span): Span {
+  return span === null ? { x0: by.x0, x1: by.x1 } : { x0: Math.min(span.x0, by.x0), x1: Math.max(span.x1, by.x1) };
+}
+
 /** A unit or an extractant above names may be a caption over more columns than the one it stands over. */
 function saysForSeveral(text: string): boolean {
   return (
@@ -122,7 +127,10 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
     const at = stacks.indexOf(best);
     const narrow = best.own.length > 0 && line.length < stacks.length && saysForSeveral(phrase.text);
     if (narrow) captions.push(captionOf(phrase, line, stacks, at, at));
-    else best.own.unshift(phrase.text);
+    else {
+      best.own.unshift(phrase.text);
+      best.head = widened(best.head, phrase);
+    }
     best.over = true;
     return;
   }
@@ -139,6 +147,7 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
     .sort((a, b) => gap(a) - gap(b))[0];
   if (near === undefined) return;
   near.own.unshift(phrase.text);
+  near.head = widened(near.head, phrase);
 }
 
 const CHARGED = new Set(['potassium', 'calcium', 'magnesium', 'sodium', 'exchangeable_acidity', 'aluminium']);
@@ -175,8 +184,9 @@ function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
     for (let last = caption.last; last <= high; last++) {
       const [left, right] = [stacks[first], stacks[last]];
       if (left === undefined || right === undefined) continue;
-      const pitch = (right.x1 - left.x0) / (last - first + 1);
-      const off = caption.title ? 0 : Math.abs((left.x0 + right.x1) / 2 - caption.middle) / pitch;
+      const [x0, x1] = [(left.head ?? left).x0, (right.head ?? right).x1];
+      const pitch = (x1 - x0) / (last - first + 1);
+      const off = caption.title ? 0 : Math.abs((x0 + x1) / 2 - caption.middle) / pitch;
       const cost = off - WIDER * (last - first + 1);
       if ((off < 0.75 || last - first === caption.last - caption.first) && cost < best.cost)
         best = { first, last, cost };
@@ -232,7 +242,7 @@ function meaningOf(stack: Stack, first: boolean): Column {
 /** Stage 5. Columns with the meaning of their stacked headings; captions that stretch over several are given to each. */
 export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]): Column[] {
   const spans = spansOf(rows);
-  const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], over: false }));
+  const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], over: false, head: null }));
   const captions: Caption[] = [];
   for (const line of [...header].reverse()) {
     const phrases = line.cells.flatMap((cell: PageCell) => partHeading(cell.phrase, spans));

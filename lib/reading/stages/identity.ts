@@ -56,6 +56,10 @@ export function fieldWithValue(text: string): { field: IdentityField; value: str
     const value = text.slice(colon + 1).trim();
     return field === null || value === '' ? null : { field, value };
   }
+  // "Sample SP-1", "Plot 4": without a colon only a short name with a figure in it.
+  const plain = /^(sample|plot|bed|field|sample id|sample no\.?)\s+(\S+(?: \S+){0,2})$/i.exec(text);
+  if (plain !== null && /\d/.test(plain[2] ?? '') && !/^(no|id|number|date|depth|of)\b/i.test(plain[2] ?? ''))
+    return { field: 'sampleId', value: (plain[2] ?? '').trim() };
   const words = text.split(' ');
   for (let cut = Math.min(words.length - 1, 4); cut >= 1; cut--) {
     const field = fieldOf(words.slice(0, cut).join(' '));

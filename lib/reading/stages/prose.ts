@@ -106,7 +106,7 @@ function textOf(words: readonly Placed[], from: number, to: number): string {
 /** A short symbol in running text counts only beside a number or in brackets: "P 45", "(K)". */
 function symbolHere(words: readonly Placed[], from: number, to: number): boolean {
   const text = textOf(words, from, to);
-  if (bare(text).length > 2) return true;
+  if (bare(text).length > 2 || /^(pH|EC|OM)$/.test(bare(text))) return true;
   return (
     /^\(.*\)[,.;:]?$/.test(text) ||
     /\d/.test(words[to]?.text ?? '') ||
@@ -141,6 +141,13 @@ function numbersIn(words: readonly Placed[], piece: Piece, style: NumberStyle): 
     const before = words[at - 1]?.text ?? '';
     const after = words[at + 1]?.text ?? '';
     // "6.2 to 6.8" and "between 6 and 7" are ranges; "March 4" and "1 of 2" are no amounts.
+    if (
+      /^(years?|months?|weeks?|days?|times?|inch(es)?|feet|gallons?|bags?|beds?|plots?|samples?|seasons?|pounds?|lbs?|oz|ounces?|tons?)\b/i.test(
+        after,
+      ) &&
+      !/\//.test(after)
+    )
+      continue;
     const ranged = /^(to|-|–|—)$/.test(after) && /^\d/.test(words[at + 2]?.text ?? '');
     const rangeEnd = /^(to|-|–|—)$/.test(before) && /\d/.test(words[at - 2]?.text ?? '');
     if (ranged || rangeEnd) continue;
@@ -231,9 +238,9 @@ function secondUnit(words: readonly Placed[], after: readonly Number_[]): Number
   const [first, second] = after;
   if (first === undefined) return [];
   if (second === undefined || first.unit === null || second.unit === null || second.unit === first.unit) return [first];
-  const link = textOf(words, first.to, second.from);
+  const link = words.slice(first.to, second.from).map((word) => word.text);
   const opens = /^\(/.test(words[second.from]?.text ?? '');
-  return second.from - first.to <= 5 && (opens || /\b(or|equal to|equivalent to)\b|[/=]/.test(link))
+  return second.from - first.to <= 5 && (opens || link.some((word) => /^(or|equals?|equivalent|\/|=)$/.test(word)))
     ? [first, second]
     : [first];
 }
@@ -245,7 +252,7 @@ function ratingNear(words: readonly Placed[], number: Number_): string | null {
     const rating = ratingIn(bare(text));
     const two = ratingIn(bare(textOf(words, at, at + 2)));
     if (two !== null && (inBrackets || /^(rated|is|which|,)$/i.test(words[at - 1]?.text ?? ''))) return two;
-    if (rating !== null && (inBrackets || rating.length > 2)) return rating;
+    if (rating !== null && (inBrackets || (rating.length > 2 && !/^(below|above)$/i.test(rating)))) return rating;
     if (/[.;]$/.test(text)) return null;
   }
   return null;

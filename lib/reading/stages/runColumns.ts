@@ -81,7 +81,7 @@ function isYear(cell: PageCell): boolean {
 function canHead(line: CellLine, within: Span, busy: ReadonlySet<CellLine>): PageCell[] | null {
   const cells = line.cells.filter((cell) => overlap(cell.phrase, within) > 0);
   if (cells.length === 0) return [];
-  if (cells.every((cell) => fieldWithValue(cell.phrase.text) !== null)) return null;
+  if (cells.some((cell) => fieldWithValue(cell.phrase.text) !== null)) return null;
   if (fieldLine(line, within) !== null) return cells;
   if (busy.has(line)) return null;
   const numbers = cells.filter((cell) => cell.meaning.kind === 'value' && !isYear(cell));

@@ -110,6 +110,14 @@ function tailOf(rest: string): Tail | null {
 
 /** What one cell says. A "+" glued to a rating letter ("221H+") is the rating's; after bare digits it means "or more". */
 export function readCell(raw: string, style: NumberStyle): CellMeaning {
+  const bracketed = /^\((.+)\)$/.exec(raw.trim());
+  if (bracketed !== null) {
+    const inside = readCell(bracketed[1] ?? '', style);
+    if (inside.kind === 'value' && inside.unit !== null) {
+      const at = raw.indexOf('(') + 1;
+      return { ...inside, span: [inside.span[0] + at, inside.span[1] + at] };
+    }
+  }
   const text = raw.trim();
   const lower = text.toLowerCase();
   const word = WORD_QUALIFIERS.find(([spelling]) => spelling === lower);

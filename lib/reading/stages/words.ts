@@ -45,7 +45,8 @@ function turnWord(word: Word, page: Page, turn: 0 | 90 | 180 | 270): Placed {
 
 /** Rows of dots between a label and its number are no text; a word that holds such a row is two words. */
 function withoutLeaders(word: Placed): Placed[] {
-  if (/^[.…_]+$/.test(word.text)) return [];
+  // Rules drawn with characters part the page for the eye only.
+  if (/^[.…_]+$|^[|¦]+$|^[-=~*+|]{5,}$/.test(word.text)) return [];
   const match = /^(.*?)([._·…]{4,})(.*)$/.exec(word.text);
   if (match === null) return [word];
   const [head, dots, tail] = [match[1] ?? '', match[2] ?? '', match[3] ?? ''];
