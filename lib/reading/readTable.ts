@@ -74,6 +74,19 @@ function styleOf(sheets: readonly Sheet[], delimiter: string | null): NumberStyl
   return { decimalComma: points === 0 && commas > 0 };
 }
 
+/** Where the field is all that names a sample, it is the sample's name; one field of several samples names none. */
+function namedByField(parts: readonly SamplePart[]): SamplePart[] {
+  const fields = parts.flatMap((part) => (part.identity.sampleId === undefined ? (part.identity.fieldName ?? []) : []));
+  const numbers = new Set(parts.map((part) => part.identity.labNumber ?? part.identity.fieldName));
+  if (new Set(fields).size < Math.min(fields.length, numbers.size)) return [...parts];
+  return parts.map((part) => {
+    const { sampleId, fieldName } = part.identity;
+    return sampleId !== undefined || fieldName === undefined
+      ? part
+      : { ...part, identity: { ...part.identity, sampleId: fieldName } };
+  });
+}
+
 function shareAll(parts: readonly SamplePart[], shared: Identity): SamplePart[] {
   const one = parts.every((part) => part.identity.sampleId === undefined && part.identity.labNumber === undefined);
   const { sampleId, labNumber, fieldName, ...always } = shared;
@@ -125,7 +138,7 @@ export function readTableTraced(input: TableInput): { reading: Reading; trace: T
   );
   const soilSaid = readings.some((one) => /\bsoil\b/i.test(one.texts.join(' ')));
   const soil = readings.filter((_, index) => materials[index] === null);
-  const parts = soil.flatMap((one) => shareAll(one.parts, one.shared));
+  const parts = soil.flatMap((one) => shareAll(namedByField(one.parts), one.shared));
   const other = materials.find((one) => one !== null) ?? (soilSaid ? null : materialByNumbers(parts)) ?? null;
   const nothing = soil.length === 0 || (other !== null && materials.every((one) => one === null));
   const unsoiled = trace.untaken.some((one) => one.why === 'not-soil');

@@ -111,9 +111,20 @@ function shares(
   return counts;
 }
 
+/** A heading over two columns stands over the first: the blank one beside it is its own when a unit or kind stands under it. */
+function headToTheLeft(facts: Facts, block: Block, at: number): string {
+  if (block.underRows.every((row) => facts.at(row, at) === '')) return '';
+  for (let left = at - 1; left >= 0; left--) {
+    const cell = facts.at(block.base, left);
+    if (cell !== '') return fieldOf(cell) === null ? cell : '';
+  }
+  return '';
+}
+
 function headingOf(facts: Facts, block: Block, at: number): Column {
   const own = facts.at(block.base, at);
-  const captions = block.captionRows.map((row) => captionAt(facts, row, at, block.base));
+  const spread = own === '' ? headToTheLeft(facts, block, at) : '';
+  const captions = [...block.captionRows.map((row) => captionAt(facts, row, at, block.base)), spread];
   const under = block.underRows.map((row) => facts.at(row, at));
   const lines = [...captions, own, ...under].filter((text) => text !== '');
   const whole = [...new Set(lines)].join(' ');

@@ -38,7 +38,7 @@ const FURTHER: readonly (readonly [IdentityField, RegExp])[] = [
   ],
   [
     'other',
-    /^(latitude|longitude|lat|lon(g)?|x|y|easting|northing|gps.*|acreage|area \(?ac(res)?\)?|hectares|ha|row|seq(uence)?( no)?|line( no)?|no of samples|price|cost|fee|invoice.*|phone|zip( code)?|post ?code|p\.?o\.?( (no|number|box).*)?|year|season|sample (type|matrix|material)|matrix|material|medium|comments?|remarks?|notes?|analyst|technician|package|test (package|code|pkg)|yield.*|crop.*|variety|submitter.*|account.*|client.*|grower.*|customer.*|order.*|batch.*|report.?(no|num(ber)?|id|#).*|dilution|job.*|project.*|farm|farm (id|no|number|name))$/,
+    /^(latitude|longitude|lat|lon(g)?|x|y|easting|northing|gps.*|acreage|area \(?ac(res)?\)?|hectares|ha|row|seq(uence)?( no)?|line( no)?|no of samples|price|cost|fee|invoice.*|phone|zip( code)?|post ?code|p\.?o\.?( (no|number|box).*)?|year|season|sample (type|matrix|material)|matrix|material|medium|comments?|remarks?|notes?|analyst|technician|package|test (package|code|pkg)|yield.*|crop.*|variety|submitter.*|account.*|client.*|grower.*|customer.*|order.*|batch.*|report|report.?(no|num(ber)?|id|#).*|dilution|job.*|project.*|farm|farm (id|no|number|name))$/,
   ],
 ];
 

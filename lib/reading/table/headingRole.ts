@@ -17,7 +17,7 @@ export type ColumnRole =
 const WORDS: readonly (readonly [ColumnRole, RegExp])[] = [
   [
     'recommendation',
-    /\b(rec(s|d|ommend(ed|ation|ations)?)?\b\.?(?! (level|range|value))|to (be )?(apply|applied|add)|apply|application|fertili[sz]er( rate)?|suggested( rate)?|maintenance|build-?up|removal|crop need)\b/i,
+    /\b(rec(s|d|ommend(ed|ation|ations)?)? ?\d{0,2}\b\.?(?! (level|range|value))|to (be )?(apply|applied|add)|apply|application|fertili[sz]er( rate)?|suggested( rate)?|maintenance|build-?up|removal|crop need)\b/i,
   ],
   [
     'limit',

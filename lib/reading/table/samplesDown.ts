@@ -7,6 +7,7 @@ import { type Beside, candidateOf } from './candidates';
 import { type Column, columnsOf, companion } from './columns';
 import type { Facts } from './facts';
 import { dateText, depthText, joinDepth, nameRank } from './fields';
+import { withoutRole } from './headingRole';
 import { otherMaterial } from './material';
 import { isNoSample, isSummary } from './names';
 import { spoken } from './spoken';
@@ -110,7 +111,7 @@ function adviceAt(facts: Facts, plan: Plan, row: number, sampleId: string | null
     return [
       {
         sampleId,
-        item: column.text,
+        item: adviceItem(column.text),
         amount: meaning.kind === 'value' ? meaning.value : null,
         printed: facts.at(row, column.at),
         unit:
@@ -123,6 +124,23 @@ function adviceAt(facts: Facts, plan: Plan, row: number, sampleId: string | null
       },
     ];
   });
+}
+
+/** "Lime Rec (lb/ac)" advises lime. */
+export function adviceItem(heading: string): string {
+  const words = withoutRole(heading);
+  const unit = unitIn(words);
+  const bare = (unit === null ? words : cutText(words, unit.printed))
+    .replace(/\(\s*\)|\[\s*\]/g, ' ')
+    .replace(/[\s,;:([/-]+$/g, '')
+    .replace(/\s+/g, ' ')
+    .trim();
+  return bare === '' ? heading : bare;
+}
+
+function cutText(text: string, part: string): string {
+  const at = text.toLowerCase().indexOf(part.toLowerCase());
+  return at < 0 ? text : `${text.slice(0, at)} ${text.slice(at + part.length)}`;
 }
 
 /** A line between the rows that speaks of the samples under it: "Field: Mill meadow". */
@@ -220,4 +238,21 @@ function pick(identity: Identity): Identity {
     ...(labNumber === undefined ? {} : { labNumber }),
     ...(fieldName === undefined ? {} : { fieldName }),
   };
+}
+
+/** A column that says the same laboratory in every row. */
+export function laboratoryColumn(facts: Facts, block: Block): string | null {
+  for (let at = 0; at < facts.width; at++) {
+    if (
+      !/^(lab(oratory)?( name)?|analy[sz]ed by|tested by)$/i.test(
+        spoken(facts.at(block.base, at)).replace(/([a-z])([A-Z])/g, '$1 $2'),
+      )
+    )
+      continue;
+    const cells = new Set<string>();
+    for (let row = block.from; row < block.to; row++) if (facts.at(row, at) !== '') cells.add(facts.at(row, at));
+    const [only] = cells;
+    if (cells.size === 1 && only !== undefined && /\p{L}{3}/u.test(only)) return only;
+  }
+  return null;
 }

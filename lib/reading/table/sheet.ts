@@ -6,7 +6,7 @@ import type { ReadRecommendation } from '../types';
 import { analytesDown } from './analytesDown';
 import { blocksOf } from './blocks';
 import { type Facts, factsOf } from './facts';
-import { samplesDown } from './samplesDown';
+import { laboratoryColumn, samplesDown } from './samplesDown';
 import { spoken } from './spoken';
 import { withStackedHeads } from './stacked';
 import { laboratoryOf, legendOf, titleIdentity, titleStatements } from './titles';
@@ -63,7 +63,10 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
     recommendations: all.flatMap((shape) => shape.recommendations),
     shared: titleIdentity(facts, top),
     statements: titleStatements(facts, around),
-    laboratory: laboratoryOf(facts, over),
+    laboratory:
+      laboratoryOf(facts, over) ??
+      blocks.map((block) => laboratoryColumn(facts, block)).find((name) => name !== null) ??
+      null,
     texts: [...around, ...heads].map((row) => (facts.grid[row] ?? []).filter((cell) => cell !== '').join(' ')),
     ledger,
   };

@@ -35,6 +35,7 @@ const SYMBOLS: Readonly<Record<string, string>> = {
 /** Units as codes write them, without the strokes that a code cannot hold. */
 const UNIT_CODES: readonly (readonly [RegExp, string])[] = [
   [/\b(lbs?|pounds?|#)[ ./]*(?:per )?(?:a|ac|acre)s?\b\.?/gi, 'lb/acre'],
+  [/\b[tT](?:ons?)?[ ./]?A(?:c|cre)?\b/g, 'ton/acre'],
   [/\bkg[ .]*(?:per )?ha(?:-1)?\b/gi, 'kg/ha'],
   [/\bmg[ .]*(?:per )?kg(?:-1)?\b/gi, 'mg/kg'],
   [/\bg[ .]kg\b/gi, 'g/kg'],
@@ -60,6 +61,7 @@ export function spoken(text: string): string {
     .replace(/(\d) ?to ?(\d)/gi, '$1:$2')
     .replace(/\b(\d) *[:/] *(\d(?:\.\d)?)\b/g, '$1:$2')
     .replace(/\b(p)h\b/gi, 'pH')
+    .replace(/([a-z]{3,})pH\b/g, '$1 pH')
     .replace(
       /\bMehlich[\s-]*(\d|I{1,3})(?![\dI])/gi,
       (_all, number: string) => `Mehlich-${/i/i.test(number) ? number.length : number}`,

@@ -56,7 +56,7 @@ export function titleStatements(facts: Facts, rows: readonly number[]): Statemen
 }
 
 const NAMED =
-  /\b(laborator(y|ies)|labs?|soil testing|testing (service|cent(er|re))|analytical|agronomy services?|soil service|soil (health )?cent(er|re)|institute)\b/i;
+  /\b(laborator(y|ies)|labs?|soil testing|testing (service|cent(er|re))|analytical|agronomy services?|soil service|soil (health )?cent(er|re)|institute|bodenlabor|bodenproben|bodenuntersuchung|labor|laboratoire|laboratorio|laboratorium|jordpr\S+|agrolab|analyti(cs|k))\b/i;
 
 /** The laboratory's name from the lines over the first table. */
 export function laboratoryOf(facts: Facts, rows: readonly number[]): string | null {

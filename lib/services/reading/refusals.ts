@@ -23,7 +23,7 @@ const SENTENCES = {
   'unpacks-too-large':
     'This workbook unpacks to far more than a laboratory’s data and was not opened. It is kept; save the sheet with your results as CSV and upload that.',
   'table-too-large':
-    'This workbook has more than 20,000 rows, 1,000 columns or 60 sheets. It is kept; cut it into smaller files and upload those.',
+    'This file has more than 20,000 rows, 1,000 columns, 60 sheets or 400,000 parts. It is kept; cut it into smaller files and upload those.',
   'xml-declares-entities':
     'This XML file declares a document type or entities of its own, which laboratory data never needs, so it was not read. It is kept; ask the laboratory for a plain file, or type the numbers in.',
   'nested-too-deep':
