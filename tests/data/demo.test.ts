@@ -119,7 +119,7 @@ describe('the reports of the demo', () => {
       'old-report-2022.pdf unreadable',
       'sloe-bank-2026-fall.pdf in-review',
     ]);
-    expect(rows.find(({ state }) => state === 'unreadable')?.code).toBe('no-text-layer');
+    expect(rows.find(({ state }) => state === 'unreadable')?.code).toBe('picture-unreadable');
   });
 
   it('give the results that their pages were printed from, each analysis once', async () => {

@@ -30,6 +30,22 @@ function scannedPage(number: number, seen: SeenPage, side: number): ScannedPage 
   return { number, width, height, letter, views, pieces, stored, scale: seen.side / side };
 }
 
+/** Mean certainty of the words from which on a page counts as legible; print that nobody can read stays far below. */
+const LEGIBLE = 0.6;
+
+function isLegible(page: SeenPage): boolean {
+  const words = page.views.flat();
+  const letters = words.reduce((sum, word) => sum + word.text.length, 0);
+  return words.reduce((sum, word) => sum + word.certainty * word.text.length, 0) > LEGIBLE * letters;
+}
+
+/** Nothing found on pages that cannot be made out is the picture's fault, and the grower is told so. */
+function unlessBlurred(traced: TracedScan, pages: Iterable<SeenPage>): TracedScan {
+  const { file, kind, pages: count } = traced.reading;
+  if (kind !== 'refused' || [...pages].some(isLegible)) return traced;
+  return refused({ fileName: file, pages: count, code: 'picture-unreadable' });
+}
+
 /** One engine for the file, opened when the first picture is there. */
 async function withEngine<T>(run: (engine: () => Promise<Engine>) => Promise<T>): Promise<T> {
   let opened: Promise<Engine> | null = null;
@@ -57,11 +73,12 @@ export async function readPictureFile(input: { fileName: string; bytes: Uint8Arr
     if (seen === null) {
       return refused({ fileName, pages: 1, code: 'picture-unreadable' });
     }
-    return readScanTraced({
+    const traced = await readScanTraced({
       fileName,
       pages: [scannedPage(1, seen, USUAL_SIDE)],
       lookAgain: (_, spots) => seen.look(spots),
     });
+    return unlessBlurred(traced, [seen]);
   });
 }
 
@@ -109,17 +126,16 @@ export async function readPicturesOfPdf(
       const picture = seen.get(page.number);
       return picture === undefined ? page : scannedPage(page.number, picture, Math.max(page.width, page.height));
     });
-    const { reading, trace, level } = await readScanTraced({
+    const traced = await readScanTraced({
       fileName,
       pages,
       lookAgain: async (number, spots) => (await seen.get(number)?.look(spots)) ?? [],
     });
     const missed = bare.filter((number) => !seen.has(number));
-    const warnings = reading.warnings.filter((warning) => warning.code !== 'page-without-text');
-    if (seen.size === 0 && reading.kind === 'refused')
-      return refused({ fileName, pages: input.pages.length, code: 'picture-unreadable' });
+    const warnings = traced.reading.warnings.filter((warning) => warning.code !== 'page-without-text');
     const told = missed.length > 0 ? [...warnings, unread(missed)] : warnings;
-    return { reading: { ...reading, warnings: told }, trace, level };
+    const whole = { ...traced, reading: { ...traced.reading, warnings: told } };
+    return bare.length === input.pages.length ? unlessBlurred(whole, seen.values()) : whole;
   });
 }
 

@@ -61,7 +61,7 @@ export function refusedBeforeSending(file: { name: string; size: number }): stri
     return `This file has ${megabytes(file.size)}; at most ${megabytes(LARGEST_UPLOAD_BYTES)} are taken. Nothing was sent. Save the report's own pages, or a smaller scan, and send that.`;
   }
   if (!UPLOAD_ENDINGS.some((ending) => ending === endingOf(file.name))) {
-    return 'Nothing was sent: reports are taken as PDF, CSV or text tables; pictures and sheets are kept to type in from. Save the report as one of these, or type it in.';
+    return 'Nothing was sent: reports are taken as PDF, picture (JPG, PNG), workbook, data file or text. Save the report as one of these, or type it in.';
   }
   return null;
 }
