@@ -10,8 +10,8 @@ export const ownSheet = pgTable(
   {
     ...siteColumns,
     reportId: uuid('report_id').notNull(),
-    /** Rows of cells as text, the sheet's own order kept. */
-    cells: jsonb('cells').$type<string[][]>().notNull(),
+    /** Sheet by sheet the rows of cells as text, in their own order. */
+    cells: jsonb('cells').$type<{ number: number; name: string | null; rows: string[][] }[]>().notNull(),
     headerFingerprint: text('header_fingerprint').notNull(),
     proposal: jsonb('proposal').$type<unknown>().notNull(),
     mapping: jsonb('mapping').$type<unknown>(),

@@ -34,6 +34,8 @@ export const uploadInput = z.strictObject({
   bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
   plotId: idSchema.optional(),
   asRevision: z.enum(['true', 'false']).optional(),
+  /** A grower's own spreadsheet of old results and no laboratory's report. */
+  ownSheet: z.enum(['true', 'false']).optional(),
   /** The announced file of a batch that this is. */
   batchFileId: idSchema.optional(),
 });

@@ -128,6 +128,9 @@ export const EXPECTED_GUARDS: Record<string, string> = {
   'DELETE /sites/[siteId]/reports/[reportId]/copies/[copyId]': 'reading.work',
   'GET /sites/[siteId]/reports/[reportId]/copies/[copyId]/picture': 'reading.work',
   'GET /sites/[siteId]/reports/[reportId]/copies/[copyId]/bundle': 'reading.work',
+  'GET /sites/[siteId]/reports/[reportId]/sheet': 'reading.work',
+  'PUT /sites/[siteId]/reports/[reportId]/sheet': 'reading.work',
+  'POST /sites/[siteId]/reports/[reportId]/sheet/import': 'reading.decide',
   'GET /sites/[siteId]/layouts': 'reading.work',
   'DELETE /sites/[siteId]/layouts/[layoutId]': 'reading.decide',
 };

@@ -7,6 +7,7 @@ import {
   laboratory,
   layoutMemory,
   membership,
+  ownSheet,
   pageCopy,
   plan,
   planIntent,
@@ -25,6 +26,7 @@ import {
 } from '@/db/schema';
 import { hashSecret } from '@/lib/data/people/secrets';
 import { withSite } from '@/lib/data/transaction';
+import { proposeMapping } from '@/lib/reading/ownSheet';
 import { putFile } from '@/lib/services/storage/storage';
 import { makePlot, type TestPerson, type TestSite } from '../support/factory';
 
@@ -151,6 +153,20 @@ export async function makeParams(site: TestSite, author: TestPerson = site.peopl
         .returning(),
     );
     await tx.insert(target).values({ siteId, targetSetId: set.id, analyte: 'ph-water', low: '6.2', high: '6.8' });
+    const cells = [
+      {
+        number: 1,
+        name: null,
+        rows: [
+          ['Plot', 'Date', 'pH'],
+          ['North', '2024-04-10', '6.4'],
+        ],
+      },
+    ];
+    const proposal = proposeMapping(cells);
+    await tx
+      .insert(ownSheet)
+      .values({ siteId, reportId, cells, headerFingerprint: 'f', proposal: { doubts: [], ...proposal } });
     const learnt = one(
       await tx
         .insert(layoutMemory)

@@ -11,7 +11,7 @@ import type { Lease } from './lease';
 const LOST_AFTER_MS = 140_000;
 
 /** Later writes of this reading name its lease, so that a worker thought lost cannot write over its successor. */
-export type ReadingTask = { lease: Lease; fileKey: string; sha256: string; fileName: string };
+export type ReadingTask = { lease: Lease; fileKey: string; sha256: string; fileName: string; ownSheet: boolean };
 
 /** received -> reading. Null: another worker has it, or there is nothing left to do. */
 export const startReading = workerVerb({
@@ -38,6 +38,12 @@ export const startReading = workerVerb({
         .returning();
       if (!row?.fileKey || !row.sha256 || !row.fileName) return null;
       const lease = { siteId: input.siteId, id: input.id, started: ctx.now };
-      return { lease, fileKey: row.fileKey, sha256: row.sha256, fileName: row.fileName };
+      return {
+        lease,
+        fileKey: row.fileKey,
+        sha256: row.sha256,
+        fileName: row.fileName,
+        ownSheet: row.origin === 'own-sheet',
+      };
     }),
 });

@@ -77,7 +77,7 @@ export const uploadReport = siteWorkVerb({
           .insert(report)
           .values({
             siteId,
-            origin: 'file',
+            origin: input.ownSheet === 'true' ? 'own-sheet' : 'file',
             state: 'received',
             fileKey: key,
             sha256: hash,

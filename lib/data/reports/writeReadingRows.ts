@@ -21,13 +21,13 @@ function* slices<T>(all: readonly T[]): Generator<T[]> {
 const amount = (value: number | null): string | null =>
   value === null || !Number.isFinite(value) ? null : String(value);
 
-const centimetres = (depth: Depth | null, end: 'top' | 'bottom'): string | null => {
+export const centimetres = (depth: Depth | null, end: 'top' | 'bottom'): string | null => {
   if (depth === null || !Number.isFinite(depth[end])) return null;
   return String(Math.round(depth[end] * (depth.unit === 'in' ? CM_PER_INCH : 1) * 100) / 100);
 };
 
 /** A day the calendar has, between 1950 and tomorrow anywhere; the printed words stay beside it either way. */
-function believableDay(text: string | null, ctx: Ctx): string | null {
+export function believableDay(text: string | null, ctx: Ctx): string | null {
   if (text === null || !parseDay(text).ok || text < '1950-01-01') return null;
   return text <= addDays(dayOf(ctx.now, 'UTC'), 2) ? text : null;
 }
@@ -108,6 +108,8 @@ export async function writeReadingRows(
   siteId: SiteId,
   reportRow: ReportRow,
   reading: LearntReading,
+  /** Where somebody has said which plot each sample is of; else its name decides. */
+  plotOf?: (sample: LearntSample) => string | null,
 ): Promise<void> {
   const ofReport = { siteId, reportId: reportRow.id };
   await tx
@@ -119,7 +121,7 @@ export async function writeReadingRows(
   const only = reading.samples.length === 1 ? reportRow.droppedOnPlotId : null;
   const samples = reading.samples.map((sample, at) => {
     const named = { printedName: sample.sampleId, fieldName: sample.fieldName };
-    return sampleValues(reportRow, ctx, sample, at, only ?? suggestPlot(named, known));
+    return sampleValues(reportRow, ctx, sample, at, plotOf ? plotOf(sample) : (only ?? suggestPlot(named, known)));
   });
   numberBags(samples);
 

@@ -5,6 +5,7 @@ import { readDataFile } from './dataFile';
 import { MAX_PAGES } from './limits';
 import { type FromChild, isDataKind, type ToChild } from './messages';
 import { readPdfPages, readPictureFile, type Told } from './pictures';
+import { rowsOfSheet } from './sheetRows';
 
 /** Child process that reads one file and ends. It has no environment, no database and no store. */
 function send(message: FromChild) {
@@ -28,10 +29,17 @@ async function read(input: ToChild): Promise<Reading> {
   return readPdfPages({ ...input, pages: words.pages }, tell);
 }
 
+async function answer(input: ToChild): Promise<FromChild> {
+  if (input.rowsOnly && isDataKind(input.kind)) {
+    return { type: 'rows', rows: await rowsOfSheet({ kind: input.kind, bytes: input.bytes }) };
+  }
+  return { type: 'done', reading: await read(input) };
+}
+
 process.on('disconnect', () => process.exit(1));
 process.once('message', (message: ToChild) => {
-  read(message).then(
-    (reading) => process.send?.({ type: 'done', reading } satisfies FromChild, () => process.exit(0)),
+  answer(message).then(
+    (said) => process.send?.(said, () => process.exit(0)),
     () => process.exit(1),
   );
 });

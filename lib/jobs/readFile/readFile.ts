@@ -14,7 +14,7 @@ import {
   START_LIMIT_MS,
   TIME_LIMIT_MS,
 } from './limits';
-import { isDataKind, isFromChild, type ToChild } from './messages';
+import { type FromChild, isDataKind, isFromChild, type SheetRows, type ToChild } from './messages';
 
 /** Beside the worker's bundle lies the child's; in development it is bundled from the file beside this one. */
 const BUNDLED = ['./readFileChild.mjs', './readFileChild.js'];
@@ -45,10 +45,15 @@ type RunInput = {
   onPage?: ((page: number, of: number) => void) | undefined;
 };
 
-async function run(input: RunInput): Promise<Reading> {
+type Final = Extract<FromChild, { type: 'done' | 'rows' }>;
+
+async function run(input: RunInput): Promise<Final> {
   const path = await childProgram();
-  const refuse = (code: RefusalCode) =>
-    refusedReading({ file: input.message.fileName, pages: 0, error: refusal(code) });
+  const refuse = (code: RefusalCode): Final => {
+    const error = refusal(code);
+    if (input.message.rowsOnly) return { type: 'rows', rows: { ok: false, error } };
+    return { type: 'done', reading: refusedReading({ file: input.message.fileName, pages: 0, error }) };
+  };
   return new Promise((resolve, reject) => {
     // No environment: the process that opens strangers' files holds no secret.
     const child: ChildProcess = fork(path, [], {
@@ -58,7 +63,7 @@ async function run(input: RunInput): Promise<Reading> {
       stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
     });
     let killedFor: RefusalCode | null = null;
-    let reading: Reading | null = null;
+    let final: Final | null = null;
     const kill = (code: RefusalCode) => {
       killedFor ??= code;
       child.kill('SIGKILL');
@@ -82,7 +87,7 @@ async function run(input: RunInput): Promise<Reading> {
         clearTimeout(clock);
         clock = setTimeout(() => kill('too-slow'), whole - (Date.now() - began));
       } else if (message.type === 'page') input.onPage?.(message.page, message.of);
-      else reading = message.reading;
+      else final = message;
     });
     child.on('error', () => undefined);
     child.on('close', (_code, signal) => {
@@ -90,7 +95,7 @@ async function run(input: RunInput): Promise<Reading> {
       clearInterval(watch);
       input.signal?.removeEventListener('abort', onAbort);
       if (input.signal?.aborted) reject(new DOMException('Reading was stopped.', 'AbortError'));
-      else if (reading !== null) resolve(reading);
+      else if (final !== null) resolve(final);
       else resolve(refuse(killedFor ?? (signal === 'SIGABRT' ? 'too-much-memory' : 'crashed')));
     });
     if (input.signal?.aborted) onAbort();
@@ -115,11 +120,32 @@ export async function readFile(input: {
   if (input.bytes.length > maxBytesOf(sniffed.kind)) return refuse('too-large');
   const kind = sniffed.kind === 'jpeg' || sniffed.kind === 'png' ? 'picture' : sniffed.kind;
   if (kind !== 'pdf' && kind !== 'picture' && !isDataKind(kind)) return refuse('kept-not-read');
-  return run({
+  const final = await run({
     message: { kind, fileName: input.fileName, bytes: input.bytes },
     timeLimitMs: input.timeLimitMs ?? TIME_LIMIT_MS,
     memoryLimitBytes: input.memoryLimitBytes ?? MEMORY_LIMIT_BYTES,
     signal: input.signal,
     onPage: input.onPage,
   });
+  return final.type === 'done' ? final.reading : refuse('crashed');
+}
+
+/** The cells of a grower's own sheet, taken out in the same killable process. Every content ends in rows or a refusal. */
+export async function readSheetRows(input: {
+  bytes: Uint8Array;
+  fileName: string;
+  signal?: AbortSignal | undefined;
+}): Promise<SheetRows> {
+  const refuse = (code: RefusalCode): SheetRows => ({ ok: false, error: refusal(code) });
+  const sniffed = sniffReport({ bytes: input.bytes, fileName: input.fileName });
+  if (!sniffed.ok) return refuse(sniffed.code);
+  if (input.bytes.length > maxBytesOf(sniffed.kind)) return refuse('too-large');
+  if (!isDataKind(sniffed.kind)) return refuse('not-a-sheet');
+  const final = await run({
+    message: { kind: sniffed.kind, fileName: input.fileName, bytes: input.bytes, rowsOnly: true },
+    timeLimitMs: TIME_LIMIT_MS,
+    memoryLimitBytes: MEMORY_LIMIT_BYTES,
+    signal: input.signal,
+  });
+  return final.type === 'rows' ? final.rows : refuse('crashed');
 }

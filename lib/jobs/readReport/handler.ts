@@ -1,3 +1,4 @@
+import { saveSheetRows } from '@/lib/data/ownSheets/saveSheetRows';
 import { giveUpReading, STORE_DOWN } from '@/lib/data/reports/giveUpReading';
 import { noteProgress } from '@/lib/data/reports/noteProgress';
 import { releaseReading } from '@/lib/data/reports/releaseReading';
@@ -8,6 +9,8 @@ import { log } from '@/lib/log';
 import type { Reading } from '@/lib/reading/types';
 import { getFile } from '@/lib/services/storage/storage';
 import type { JobTools } from '../job';
+import type { SheetRows } from '../readFile/messages';
+import { readSheetRows } from '../readFile/readFile';
 
 export type ReadFile = (input: {
   bytes: Uint8Array;
@@ -15,6 +18,12 @@ export type ReadFile = (input: {
   signal?: AbortSignal | undefined;
   onPage?: ((page: number, of: number) => void) | undefined;
 }) => Promise<Reading>;
+
+export type ReadSheet = (input: {
+  bytes: Uint8Array;
+  fileName: string;
+  signal?: AbortSignal | undefined;
+}) => Promise<SheetRows>;
 
 /** What the grower is told if no later try goes better. */
 function whatWentWrong(error: unknown): { code: string; sentence: string } {
@@ -42,7 +51,7 @@ function whatWentWrong(error: unknown): { code: string; sentence: string } {
 
 /** received -> reading -> in-review, unreadable or not-soil. A second delivery finds the lease taken and does nothing. */
 export const readReportWith =
-  (readFile: ReadFile) =>
+  (readFile: ReadFile, readSheet: ReadSheet = readSheetRows) =>
   async ({ ctx, payload, signal }: JobTools<'read-report'>): Promise<void> => {
     const task = await startReading({ ctx, input: payload });
     if (!task) return;
@@ -50,6 +59,11 @@ export const readReportWith =
     let noted: Promise<void> = Promise.resolve();
     try {
       const bytes = await getFile(task.fileKey, task.sha256);
+      if (task.ownSheet) {
+        const rows = await readSheet({ bytes, fileName: task.fileName, signal });
+        await saveSheetRows({ ctx, input: { lease, rows } });
+        return;
+      }
       const reading = await readFile({
         bytes,
         fileName: task.fileName,

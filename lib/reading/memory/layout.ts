@@ -81,7 +81,7 @@ function votesAcross(rows: readonly PlacedRow[]): number {
 }
 
 /** 16 hexadecimal figures of a text: two runs of the FNV-1a hash. It tells layouts of one site apart and guards nothing. */
-function hashOf(text: string): string {
+export function hashOf(text: string): string {
   const run = (start: number) => {
     let hash = start;
     for (let at = 0; at < text.length; at += 1) hash = Math.imul(hash ^ text.charCodeAt(at), 0x01000193) >>> 0;

@@ -49,6 +49,8 @@ const WORDS: Readonly<Record<string, string>> = {
   'row.accept': 'Accepted a doubtful value',
   'row.remove': 'Removed a row in review',
   'row.restore': 'Brought a row back in review',
+  'sheet.map': 'Said what the columns of an own spreadsheet hold',
+  'sheet.import': 'Imported an own spreadsheet',
   'layout.forget': 'Had a learnt layout forgotten',
   'result.correct': 'Corrected a confirmed result',
   'application.record': 'Recorded what was spread',
