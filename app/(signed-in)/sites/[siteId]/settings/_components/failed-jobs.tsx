@@ -76,7 +76,7 @@ function Line({ siteId, job, timeZone, onChanged }: LineProps) {
       ) : job.notAgain ? (
         <p className="text-sm text-clay">{job.notAgain}</p>
       ) : (
-        <p>
+        <p className="pt-1">
           <Button look="quiet" busy={busy} busyLabel="Asking for it" onClick={() => void again()}>
             Do it again
             <span className="sr-only">

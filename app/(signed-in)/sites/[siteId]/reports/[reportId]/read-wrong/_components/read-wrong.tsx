@@ -47,7 +47,7 @@ export function ReadWrong({ siteId, reportId, name, pages, first, hasPages }: Wr
         <ProblemNotice problem={problem} />
         {hasPages ? (
           <form
-            className="flex flex-wrap items-end gap-3"
+            className="flex empty:hidden flex-wrap items-end gap-3"
             onSubmit={(event) => {
               event.preventDefault();
               void ask();
@@ -124,12 +124,14 @@ function Copy({ path, first, onGone }: { path: string; first: PageCopy; onGone: 
         Page {copy.page}: {copy.wordsKept} words and numbers kept, {copy.wordsMasked} blacked out. Only values, units,
         analytes, methods, ratings and headings are left. Look it over: is there anything on it that says whose it is?
       </p>
-      {/* biome-ignore lint/performance/noImgElement: a private picture behind a session, not one to be resized by the framework */}
-      <img
-        src={apiPath(`${path}/picture`)}
-        alt={`Page ${copy.page} with ${copy.wordsMasked} words blacked out`}
-        className="w-full max-w-[56rem] border border-fallow bg-white"
-      />
+      <a href={apiPath(`${path}/picture`)} target="_blank" rel="noreferrer" className="block max-w-[56rem]">
+        {/* biome-ignore lint/performance/noImgElement: a private picture behind a session, not one to be resized by the framework */}
+        <img
+          src={apiPath(`${path}/picture`)}
+          alt={`Page ${copy.page} with ${copy.wordsMasked} words blacked out; opens larger`}
+          className="w-full border border-fallow bg-white"
+        />
+      </a>
       <CheckField
         name="looked"
         label="I have looked at it, and nothing on it names anybody"

@@ -9,6 +9,7 @@ import { Notice } from '@/lib/ui/feedback/notice';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { SelectField } from '@/lib/ui/fields/select-field';
 import { counted } from '@/lib/ui/files/upload-item';
+import { useLatest } from '@/lib/ui/grid/use-latest';
 import { useApi } from '@/lib/ui/use-api';
 import { useSubmit } from '@/lib/ui/use-submit';
 import { SampleRow } from './sample-row';
@@ -42,14 +43,13 @@ export function AssignPlots({ home, path, first, moved }: AssignProps) {
     samples.map((sample) => sample.id),
     () => picker.current?.querySelector('select')?.focus(),
   );
-  const latest = useRef(reload);
-  latest.current = reload;
+  const latest = useLatest(reload);
   const known = useRef(moved);
   useEffect(() => {
     if (known.current === moved) return;
     known.current = moved;
     void latest.current();
-  }, [moved]);
+  }, [moved, latest]);
 
   const chosen = samples.filter((sample) => rows.selected.has(sample.id));
   const open = samples.filter((sample) => sample.plotId === null && !sample.leftOut);
@@ -146,43 +146,45 @@ export function AssignPlots({ home, path, first, moved }: AssignProps) {
           </Button>
         ) : null}
       </form>
-      <table
-        ref={rows.grid}
-        // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: its rows are chosen with keys, as the grid pattern has it
-        role="grid"
-        aria-label="Samples and their plots"
-        aria-describedby="assign-help"
-        aria-multiselectable="true"
-        className="w-full border-y max-md:block border-horizon-5 text-left"
-        onKeyDown={rows.onKeyDown}
-      >
-        <thead className="max-md:sr-only">
-          <tr className="border-b border-fallow text-sm">
-            <th scope="col" className="w-9">
-              <span className="sr-only">Chosen</span>
-            </th>
-            {['Sample', 'Lab no.', 'Taken', 'File', 'Plot'].map((head) => (
-              <th key={head} scope="col" className="px-3 py-1.5 font-semibold">
-                {head}
+      <div className="max-h-[70vh] overflow-y-auto border-b border-horizon-5">
+        <table
+          ref={rows.grid}
+          // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: its rows are chosen with keys, as the grid pattern has it
+          role="grid"
+          aria-label="Samples and their plots"
+          aria-describedby="assign-help"
+          aria-multiselectable="true"
+          className="w-full text-left max-md:block"
+          onKeyDown={rows.onKeyDown}
+        >
+          <thead className="sticky top-0 z-10 bg-white max-md:sr-only">
+            <tr className="border-b border-fallow text-sm">
+              <th scope="col" className="w-9">
+                <span className="sr-only">Chosen</span>
               </th>
+              {['Sample', 'Lab no.', 'Taken', 'File', 'Plot'].map((head) => (
+                <th key={head} scope="col" className="px-3 py-1.5 font-semibold">
+                  {head}
+                </th>
+              ))}
+            </tr>
+          </thead>
+          <tbody className="max-md:block">
+            {samples.map((sample, at) => (
+              <SampleRow
+                key={sample.id}
+                sample={sample}
+                at={at}
+                plotName={sample.plotId === null ? null : (names.get(sample.plotId) ?? 'an archived plot')}
+                proposedName={sample.proposal === null ? null : (names.get(sample.proposal.plotId) ?? null)}
+                selected={rows.selected.has(sample.id)}
+                tabStop={at === rows.active}
+                onToggle={rows.toggle}
+              />
             ))}
-          </tr>
-        </thead>
-        <tbody className="max-md:block">
-          {samples.map((sample, at) => (
-            <SampleRow
-              key={sample.id}
-              sample={sample}
-              at={at}
-              plotName={sample.plotId === null ? null : (names.get(sample.plotId) ?? 'an archived plot')}
-              proposedName={sample.proposal === null ? null : (names.get(sample.proposal.plotId) ?? null)}
-              selected={rows.selected.has(sample.id)}
-              tabStop={at === rows.active}
-              onToggle={rows.toggle}
-            />
-          ))}
-        </tbody>
-      </table>
+          </tbody>
+        </table>
+      </div>
     </div>
   );
 }

@@ -13,14 +13,16 @@ type FilesProps = {
   home: string;
   files: readonly BatchFile[];
   /** Those this browser is sending right now. */
-  sending: readonly UploadItem[];
+  own: readonly UploadItem[];
+  /** Until the last of them is through. */
+  sending: boolean;
   store: Pick<UploadStore, 'cancel' | 'retry'>;
   mayWork: boolean;
 };
 
 /** Every file that was let go, in that order: refused ones stay with their reason. */
-export function BatchFiles({ home, files, sending, store, mayWork }: FilesProps) {
-  const bySpot = new Map(sending.map((item) => [batchOf(item)?.fileId, item]));
+export function BatchFiles({ home, files, own, sending, store, mayWork }: FilesProps) {
+  const bySpot = new Map(own.map((item) => [batchOf(item)?.fileId, item]));
   return (
     <ol aria-label="Files" className="divide-y divide-horizon-5 border-y border-horizon-5">
       {files.map((file) => {
@@ -29,7 +31,11 @@ export function BatchFiles({ home, files, sending, store, mayWork }: FilesProps)
           <li key={file.id} className="grid gap-x-4 py-2 sm:grid-cols-[2.5rem_minmax(0,1fr)]" data-state={file.state}>
             <span className="text-sm text-clay max-sm:hidden sm:pt-2">{file.ordinal}</span>
             <div className="min-w-0">
-              {item ? <Sending item={item} store={store} /> : <Kept home={home} file={file} mayWork={mayWork} />}
+              {item ? (
+                <Sending item={item} store={store} />
+              ) : (
+                <Kept home={home} file={file} sending={sending} mayWork={mayWork} />
+              )}
             </div>
           </li>
         );
@@ -38,8 +44,10 @@ export function BatchFiles({ home, files, sending, store, mayWork }: FilesProps)
   );
 }
 
-function Kept({ home, file, mayWork }: { home: string; file: BatchFile; mayWork: boolean }) {
-  const { status, words } = fileWords(file);
+type KeptProps = Pick<FilesProps, 'home' | 'sending' | 'mayWork'> & { file: BatchFile };
+
+function Kept({ home, file, sending, mayWork }: KeptProps) {
+  const { status, words } = fileWords(file, sending);
   const sentence = fileSentence(file);
   const shown = mayWork || file.report?.state === 'confirmed';
   return (

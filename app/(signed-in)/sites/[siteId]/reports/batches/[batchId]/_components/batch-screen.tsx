@@ -1,15 +1,16 @@
 'use client';
 
-import { useEffect } from 'react';
+import { useEffect, useState } from 'react';
 import type { Batch, BatchSamples } from '@/lib/schemas/batches';
 import { LinkButton } from '@/lib/ui/actions/link-button';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { ProgressBar } from '@/lib/ui/feedback/progress-bar';
 import { PageDrop } from '@/lib/ui/files/page-drop';
-import { batchOf, counted } from '@/lib/ui/files/upload-item';
+import { batchOf, counted, isUnderWay } from '@/lib/ui/files/upload-item';
 import { useUploads } from '@/lib/ui/files/use-uploads';
 import { Stretch } from '@/lib/ui/frame/layers';
 import { PageTitle } from '@/lib/ui/frame/page-title';
+import { useLatest } from '@/lib/ui/grid/use-latest';
 import { useApi } from '@/lib/ui/use-api';
 import { AssignPlots } from './assign-plots';
 import { BatchFiles } from './batch-files';
@@ -27,7 +28,8 @@ type ScreenProps = {
   mine: boolean;
 };
 
-const WHILE_MOVING_MS = 1_500;
+const WHILE_SENDING_MS = 700;
+const WHILE_READ_MS = 1_500;
 
 /** Old years at once: how far every file is, the plots of all samples, and the way into the review. */
 export function BatchScreen({ site, first, firstSamples, timeZone, mayWork, mine }: ScreenProps) {
@@ -35,16 +37,18 @@ export function BatchScreen({ site, first, firstSamples, timeZone, mayWork, mine
   const path = `${home}/batches/${first.id}`;
   const { items, store } = useUploads(site.id);
   const own = items.filter((item) => batchOf(item)?.batchId === first.id);
+  const sending = own.some(isUnderWay);
   const {
     data: batch = first,
     problem,
     reload,
   } = useApi<Batch>(path, {
     fallback: first,
-    refreshMs: (latest) => (own.length > 0 || isMoving(latest ?? first) ? WHILE_MOVING_MS : 0),
+    refreshMs: (latest) => (sending ? WHILE_SENDING_MS : isMoving(latest ?? first) ? WHILE_READ_MS : 0),
   });
   const { counts, files } = batch;
-  const moving = own.length > 0 || isMoving(batch);
+  const moving = sending || isMoving(batch);
+  const settled = useSettled(sending, reload);
   useEffect(() => {
     if (moving) store.watch(first.id);
   }, [moving, store, first.id]);
@@ -70,9 +74,9 @@ export function BatchScreen({ site, first, firstSamples, timeZone, mayWork, mine
         <ProblemNotice problem={problem} />
         <ProgressBar label="How far they are" percent={percentDone(counts)} valueText={progressWords(counts)} />
         <p role="status" className="max-w-measure">
-          {standingWords(counts)}
+          {standingWords(counts, !settled)}
         </p>
-        {mayWork && counts.missing > own.length ? (
+        {mayWork && settled && counts.missing > own.length ? (
           <MissingFiles
             path={path}
             missing={files.filter(
@@ -92,14 +96,31 @@ export function BatchScreen({ site, first, firstSamples, timeZone, mayWork, mine
         </Stretch>
       ) : null}
       <Stretch title="Files" id="files">
-        <BatchFiles home={home} files={files} sending={own} store={store} mayWork={mayWork} />
+        <BatchFiles home={home} files={files} own={own} sending={!settled} store={store} mayWork={mayWork} />
       </Stretch>
       <PageDrop
-        onFiles={mayWork && counts.missing > own.length ? choose : undefined}
+        onFiles={mayWork && settled && counts.missing > own.length ? choose : undefined}
         label="Let go to send what is still missing of this list."
       />
     </>
   );
+}
+
+/** False from the first file on its way until the server has been asked after the last: only then is a file missing. */
+function useSettled(sending: boolean, reload: () => Promise<void>): boolean {
+  const [settled, setSettled] = useState(!sending);
+  const latest = useLatest(reload);
+  useEffect(() => {
+    if (sending) return setSettled(false);
+    let gone = false;
+    void latest.current().then(() => {
+      if (!gone) setSettled(true);
+    });
+    return () => {
+      gone = true;
+    };
+  }, [sending, latest]);
+  return settled;
 }
 
 const isAnnounced = (file: Batch['files'][number]): boolean => file.state === 'announced';

@@ -13,11 +13,11 @@ export const progressWords = (counts: BatchCounts): string =>
   `${counts.files - stillOpen(counts)} of ${counts.files} gone through`;
 
 /** One sentence: "36 reports to review, 2 being read, 1 could not be read." */
-export function standingWords(counts: BatchCounts): string {
+export function standingWords(counts: BatchCounts, sending = false): string {
   const parts = [
     counts.toReview > 0 && `${counted(counts.toReview, 'report')} to review`,
     counts.beingRead > 0 && `${counts.beingRead} waiting or being read`,
-    counts.missing > 0 && `${counts.missing} not here yet`,
+    counts.missing > 0 && `${counts.missing} ${sending ? 'on the way' : 'not here yet'}`,
     counts.notRead > 0 && `${counts.notRead} could not be read`,
     counts.notTaken > 0 && `${counts.notTaken} not taken`,
     counts.setAside > 0 && `${counts.setAside} set aside`,
@@ -37,8 +37,8 @@ const MARKS: Record<NonNullable<BatchFile['report']>['state'], Status> = {
 };
 
 /** The state of one file in a few words, and its mark. */
-export function fileWords({ state, report }: BatchFile): { status: Status; words: string } {
-  if (state === 'announced') return { status: 'waiting', words: 'not here yet' };
+export function fileWords({ state, report }: BatchFile, sending = false): { status: Status; words: string } {
+  if (state === 'announced') return { status: 'waiting', words: sending ? 'on its way' : 'not here yet' };
   if (state === 'refused') return { status: 'failed', words: 'not taken' };
   if (state === 'left-out') return { status: 'off', words: 'left out' };
   if (report === null) return { status: 'waiting', words: 'waiting to be read' };

@@ -37,7 +37,7 @@ export function SampleRow({ sample, at, plotName, proposedName, selected, tabSto
       aria-selected={selected}
       tabIndex={tabStop ? 0 : -1}
       className={cx(
-        'min-h-(--target) scroll-mt-44 cursor-pointer border-b border-horizon-5 last:border-0 max-md:grid max-md:grid-cols-[2rem_minmax(0,1fr)] max-md:gap-x-3 max-md:px-2 max-md:py-2',
+        'min-h-(--target) scroll-mt-12 cursor-pointer border-b border-horizon-5 last:border-0 max-md:grid max-md:grid-cols-[2rem_minmax(0,1fr)] max-md:gap-x-3 max-md:px-2 max-md:py-2',
         selected ? 'bg-gley-wash' : 'hover:bg-chalk',
       )}
       onClick={(event) => onToggle(at, event.shiftKey)}
