@@ -200,7 +200,7 @@ function besideBrackets(raw: string): { analyte: AnalyteKey; strength: number; a
   const [one, other] = sides;
   // "Sodium % of cations (ESP)": the abbreviation in brackets is the exact name.
   if (one != null && other != null && one.analyte !== other.analyte)
-    return /^[A-Z]{3,6}$/.test(inside) ? { ...other, strength: 0.95 } : null;
+    return /^[A-Z]{3,6}$|^pH\b/.test(inside) ? { ...other, strength: 0.95 } : null;
   if (one != null && other != null) return { ...one, strength: 0.96 };
   const found = one ?? other ?? null;
   // A bare symbol in brackets after unknown words ("Free lime (S)") proves nothing.
@@ -209,11 +209,15 @@ function besideBrackets(raw: string): { analyte: AnalyteKey; strength: number; a
 }
 
 /** A target range inside a label ("Phosphorus (25-50 ppm)") is no part of the name. */
-const RANGE_IN_LABEL = /\(\s*[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*[^)]*\)/g;
+const RANGE_IN_LABEL =
+  /\(\s*(?:[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*|(?:<|>|≤|≥|less than|more than|up to|below|above|under|over|at least|at most)\s*\d[\d.,]*)[^)]*\)/gi;
+
+/** "7. Soil pH": the number of a form's box. */
+const NUMBERED = /^\s*\(?\d{1,2}[.)]\s+(?=\p{L})/u;
 
 const nameIn = remembered(
   (printed: string): { analyte: AnalyteKey; strength: number; ambiguous: string | null } | null => {
-    const raw = printed.replace(RANGE_IN_LABEL, ' ').trim();
+    const raw = printed.replace(RANGE_IN_LABEL, ' ').replace(NUMBERED, '').trim();
     const whole = lookUp(normal(raw), raw);
     if (whole !== null) return { ...whole, strength: 1 };
     const unit = unitIn(raw);

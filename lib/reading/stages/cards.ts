@@ -19,11 +19,24 @@ function height(cell: PageCell): number {
   return (cell.phrase.y0 + cell.phrase.y1) / 2;
 }
 
-/** Of some numbers the one set larger than all others, or the only one. */
-function emphasised(spots: readonly Spot[]): Spot | null {
-  const [first, second] = [...spots].sort((a, b) => b.cell.phrase.size - a.cell.phrase.size);
+/** Of some numbers the one set larger than the others; of several as large, the one clearly nearest. */
+function emphasised(spots: readonly Spot[], from: PageCell): Spot | null {
+  const largest = Math.max(...spots.map(({ cell }) => cell.phrase.size));
+  const distance = (spot: Spot) => Math.abs(height(spot.cell) - height(from));
+  const [first, second] = spots
+    .filter(({ cell }) => cell.phrase.size * EMPHASIS > largest)
+    .sort((a, b) => distance(a) - distance(b));
   if (first === undefined) return null;
-  return second === undefined || first.cell.phrase.size >= EMPHASIS * second.cell.phrase.size ? first : null;
+  return second === undefined || distance(first) < 0.8 * distance(second) ? first : null;
+}
+
+/** Of two places the one with the larger type; beside its name where both are alike. */
+function largest(spots: readonly (Spot | null)[]): Spot | null {
+  return spots.reduce<Spot | null>(
+    (best, spot) =>
+      spot !== null && (best === null || spot.cell.phrase.size > 1.1 * best.cell.phrase.size) ? spot : best,
+    null,
+  );
 }
 
 function unitNear(
@@ -99,22 +112,19 @@ export function cardRows(lines: readonly CellLine[], taken: ReadonlySet<CellLine
       ({ cell }) =>
         Math.abs(middle(cell) - middle(one.cell)) < 1.2 * phrase.size && cell.phrase.y1 < phrase.y0 && !between(cell),
     );
-    const found =
-      emphasised(
-        beside.filter(
-          ({ cell }) =>
-            cell.phrase.x0 - phrase.x1 < 60 * phrase.size &&
-            !named.some(
-              (other) =>
-                other !== one &&
-                other.cell.phrase.x0 > phrase.x1 &&
-                other.cell.phrase.x0 < cell.phrase.x0 &&
-                Math.abs(height(other.cell) - height(one.cell)) < phrase.size,
-            ),
+    const free = beside.filter(
+      ({ cell }) =>
+        cell.phrase.x0 - phrase.x1 < 60 * phrase.size &&
+        !named.some(
+          (other) =>
+            other !== one &&
+            other.cell.phrase.x0 > phrase.x1 &&
+            other.cell.phrase.x0 < cell.phrase.x0 &&
+            Math.abs(height(other.cell) - height(one.cell)) < phrase.size,
         ),
-      ) ??
-      emphasised(over) ??
-      (bar.length === 1 ? (bar[0] ?? null) : null);
+    );
+    const found =
+      largest([emphasised(free, one.cell), emphasised(over, one.cell)]) ?? (bar.length === 1 ? (bar[0] ?? null) : null);
     if (found === null || found.cell.meaning.kind !== 'value') continue;
     used.add(found.cell);
     const value = found.cell.meaning;

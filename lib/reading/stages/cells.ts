@@ -79,11 +79,31 @@ function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
   return [phrase];
 }
 
+/** A row of a list: words first, then a unit, a number or a blank. */
+function inRow(before: readonly Phrase[], style: NumberStyle): boolean {
+  const [first, ...rest] = before;
+  if (first === undefined || readCell(first.text, style).kind !== 'text') return false;
+  return (
+    readLabel(first.text) !== null ||
+    rest.some((phrase) => unitOnly(phrase.text) !== null || readCell(phrase.text, style).kind !== 'text')
+  );
+}
+
+/** "6.7 not acc." in a row that begins with a label: the number, then a remark set too near. */
+function valueAndRemark(phrase: Phrase, style: NumberStyle): Phrase[] {
+  const [first] = phrase.words;
+  if (first === undefined || phrase.words.length < 2 || !/^[<>]?\d[\d.,]*$/.test(first.text)) return [phrase];
+  if (readCell(phrase.text, style).kind !== 'text' || readCell(first.text, style).kind !== 'value') return [phrase];
+  if (!/\p{L}{3}/u.test(wordsText(phrase, 1))) return [phrase];
+  return cut(phrase, 1);
+}
+
 /** Stage 3. Phrases to cells, each with what it can be when nothing around it is known. */
 export function cellsOf(lines: readonly Line[], style: NumberStyle, legend: ReadonlyMap<string, string>): CellLine[] {
   return lines.map((line) => {
     const cells = line.phrases
       .flatMap((phrase) => parts(phrase, style))
+      .flatMap((phrase, index, all) => (inRow(all.slice(0, index), style) ? valueAndRemark(phrase, style) : [phrase]))
       .map((phrase) => ({
         phrase: { ...phrase, text: spelledOut(phrase.text, legend) },
         meaning: readCell(phrase.text, style),

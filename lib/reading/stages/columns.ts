@@ -68,7 +68,8 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
   const distinct = new Set(homes.filter((home) => home >= 0));
   if (distinct.size < 2) return [phrase];
   // "Phosphorus, ppm P" over three columns is one caption.
-  if (/,/.test(phrase.text) && (readLabel(phrase.text)?.unit ?? null) !== null) return [phrase];
+  const whole = readLabel(phrase.text);
+  if (whole !== null && (whole.strength >= 0.99 || (/,/.test(phrase.text) && whole.unit !== null))) return [phrase];
   const groups: { home: number; from: number; to: number }[] = [];
   for (const [index, home] of homes.entries()) {
     const last = groups[groups.length - 1];
@@ -171,6 +172,11 @@ function takesCaption(stack: Stack | undefined, caption: string): boolean {
   return label.method === null && methodIn(label.analyte, caption) !== null;
 }
 
+/** Distance of a caption from the middle of some columns, in columns. */
+function offCentre(left: Span, right: Span, count: number, caption: Caption): number {
+  return (Math.abs((left.x0 + right.x1) / 2 - caption.middle) * count) / (right.x1 - left.x0 || 1);
+}
+
 /** How far off its middle a caption may be, in columns, for one more column under it. */
 const WIDER = 0.12;
 
@@ -184,9 +190,12 @@ function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
     for (let last = caption.last; last <= high; last++) {
       const [left, right] = [stacks[first], stacks[last]];
       if (left === undefined || right === undefined) continue;
-      const [x0, x1] = [(left.head ?? left).x0, (right.head ?? right).x1];
-      const pitch = (x1 - x0) / (last - first + 1);
-      const off = caption.title ? 0 : Math.abs((x0 + x1) / 2 - caption.middle) / pitch;
+      const off = caption.title
+        ? 0
+        : Math.min(
+            offCentre(left, right, last - first + 1, caption),
+            offCentre(left.head ?? left, right.head ?? right, last - first + 1, caption),
+          );
       const cost = off - WIDER * (last - first + 1);
       if ((off < 0.75 || last - first === caption.last - caption.first) && cost < best.cost)
         best = { first, last, cost };

@@ -524,6 +524,21 @@ function unitUnder(
   return null;
 }
 
+const ADVICE_UNIT = /^(lb\/acre|kg\/ha|ton\/acre|t\/ha|cwt\/acre|lb\/1000ft2|lb\/100ft2|oz\/|g\/m2)/;
+
+/** P2O5, K2O or lime to spread, listed among the results: P or K was found in the same list in another unit. */
+function isAdvice(segment: Segment, unit: Value['unit'], run: Run): boolean {
+  const { label } = segment;
+  const text = label.text;
+  if (label.analyte === 'lime_requirement')
+    return !/requirement|index|\blr\b/i.test(text) && (unit === null || ADVICE_UNIT.test(unit));
+  if (label.form !== 'P2O5' && label.form !== 'K2O') return false;
+  const found = run.segments.some(
+    (other) => other !== segment && other.label.analyte === label.analyte && other.label.form === 'element',
+  );
+  return found && (unit === null || ADVICE_UNIT.test(unit));
+}
+
 function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly CellLine[], at: number): ListRow[] {
   const { found, words } = valuesOf(segment, run);
   for (const one of found) {
@@ -533,6 +548,12 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly Cel
   if (segment.rowRole !== null && NOT_RESULTS.has(segment.rowRole)) {
     for (const one of found)
       not.push({ cell: one.cell, role: segment.rowRole, why: `its row says ${segment.rowRole}` });
+    return [];
+  }
+  const advised = found.filter((one) => isAdvice(segment, one.unit ?? segment.label.unit, run));
+  if (advised.length > 0) {
+    for (const one of found)
+      not.push({ cell: one.cell, role: 'recommendation', why: `"${segment.label.text}" is an amount to spread` });
     return [];
   }
   const choice = choose(found, run);

@@ -33,6 +33,7 @@ const FIELDS: readonly (readonly [IdentityField, RegExp])[] = [
 
 function bareHeading(text: string): string {
   return text
+    .replace(/^\s*\(?\d{1,2}[.)]\s+(?=\p{L})/u, '')
     .toLowerCase()
     .replace(/\((in|inches|cm)\.?\)/, '$1')
     .replace(/[.:()]/g, ' ')
@@ -88,7 +89,7 @@ export function fieldsInside(words: readonly string[]): Inside[] {
   const starts: { field: IdentityField; from: number; to: number }[] = [];
   for (let at = 0; at < words.length; at++) {
     for (let to = Math.min(words.length - 1, at + 4); to > at; to--) {
-      const text = words.slice(at, to).join(' ');
+      const text = words.slice(at, to).join(' ').replace(/^\(/, '');
       const colon = /[:#]$/.test(text);
       const bare = colon ? text.slice(0, -1) : text;
       const field =
@@ -100,7 +101,7 @@ export function fieldsInside(words: readonly string[]): Inside[] {
         ? new RegExp(`^(?:${ANY_DATE.source})`).test(rest)
         : field === 'depth'
           ? /^\d/.test(rest)
-          : colon || (field === 'labNumber' && /^\S*\d{2,}/.test(rest));
+          : colon || (field === 'labNumber' && /^([A-Z]{1,4} )?\S*\d{2,}/.test(rest));
       if (!sure) continue;
       if (field === 'other' && at > 0 && starts.length === 0) break;
       starts.push({ field, from: at, to });
@@ -113,7 +114,8 @@ export function fieldsInside(words: readonly string[]): Inside[] {
     value: words
       .slice(start.to, starts[index + 1]?.from ?? words.length)
       .join(' ')
-      .replace(/[,;|·•]+$/, '')
+      .replace(start.field === 'labNumber' || start.field === 'depth' ? /[),;].*$|\. .*$/ : /^$/, '')
+      .replace(/[,;|·•.]+$/, '')
       .trim(),
     from: start.from,
   }));
@@ -157,6 +159,11 @@ export function identityHits(lines: readonly CellLine[], taken: ReadonlySet<Cell
       const place = { page: cell.phrase.page.number, line: line.line.index, x0: cell.phrase.x0, y0: cell.phrase.y0 };
       const inside = fieldsInside(cell.phrase.words.map((word) => word.text)).filter((one) => one.value !== '');
       if (inside.length >= 2 || (inside[0] !== undefined && inside[0].from > 0)) {
+        const start = cell.phrase.words[inside[0]?.from ?? 0];
+        const head = cell.phrase.words.slice(0, inside[0]?.from ?? 0).map((word) => word.text);
+        // "North bed (lab no. WB 615)" begins what is told of that bed.
+        if (start?.text.startsWith('(') && head.length >= 1 && head.length <= 5)
+          hits.push({ field: 'sampleId', value: head.join(' '), ...place });
         for (const one of inside)
           hits.push({ field: one.field, value: one.value, ...place, x0: cell.phrase.words[one.from]?.x0 ?? place.x0 });
         continue;

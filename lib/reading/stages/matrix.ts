@@ -43,6 +43,16 @@ function headerAbove(lines: readonly CellLine[], at: number, taken: ReadonlySet<
   return header;
 }
 
+/** Labels of a line that have their number right behind them: a list, not a row of a table. */
+function labelledPairs(line: CellLine): number {
+  return line.cells.filter(
+    (cell, index) =>
+      cell.meaning.kind === 'text' &&
+      line.cells[index + 1]?.meaning.kind === 'value' &&
+      readLabel(cell.phrase.text) !== null,
+  ).length;
+}
+
 function namesASample(cell: PageCell): boolean {
   return (
     fieldWithValue(cell.phrase.text) !== null || fieldsInside(cell.phrase.words.map((word) => word.text)).length > 0
@@ -80,7 +90,7 @@ function rowsFrom(lines: readonly CellLine[], at: number): CellLine[] {
       if (line.line.y0 - last.line.y1 > 5 * last.line.size) break;
       const headings = labelsIn(line);
       if (headings >= 3 && line.values <= 1 && !isRatingRow(line)) break;
-      if (isRoleLine(line) || (rows[0] !== undefined && beginsList(line, rows[0]))) break;
+      if (labelledPairs(line) >= 2 || isRoleLine(line) || (rows[0] !== undefined && beginsList(line, rows[0]))) break;
     }
     rows.push(line);
     last = line;
@@ -134,6 +144,8 @@ function isLime(column: Column): boolean {
   return column.label?.analyte === 'lime_requirement' && !/requirement|index|\blr\b/i.test(column.heading);
 }
 
+const ADVISED = /\b(suggest|recommend|to apply|advice|advised)/i;
+
 /**
  * Columns of what to spread: "Crop | N | P2O5 | K2O | Lime" with nothing that only a soil has, or P2O5 and K2O to
  * apply beside the P and K that were found.
@@ -147,6 +159,8 @@ function withAdvice(columns: readonly Column[]): Column[] {
   const found = columns.some(
     (column) => column.label?.form === 'element' && /^(phosphorus|potassium)$/.test(column.label.analyte),
   );
+  const [head] = columns;
+  const titled = head !== undefined && head.label === null && head.field === null && ADVISED.test(head.heading);
   const some = oxides.length > 0 && soil && found && (oxides.length >= 2 || frame);
   return columns.map((column) => {
     const nitrogen = column.label === null && column.field === null && /^(N|nitrogen)\b/i.test(column.heading);
@@ -246,6 +260,14 @@ function ratingFor(row: CellLine, cell: PageCell, columns: readonly Column[]): s
   return between ? null : next.meaning.rating;
 }
 
+/** "lb/A" or "ppm" at the head of a row is the unit of its numbers. */
+function rowUnit(row: CellLine, table: Table): ReturnType<typeof unitOnly> {
+  const [first] = row.cells;
+  if (first === undefined || first.meaning.kind === 'value' || columnAt(table.columns, first)?.label != null)
+    return null;
+  return unitOnly(first.phrase.text);
+}
+
 function candidateOf(
   row: CellLine,
   cell: PageCell,
@@ -253,15 +275,17 @@ function candidateOf(
   table: Table,
   under: string | null,
 ): Candidate | null {
-  const { label } = column;
-  if (cell.meaning.kind !== 'value' || label === null) return null;
+  if (cell.meaning.kind !== 'value' || column.label === null) return null;
+  const unitOfRow = rowUnit(row, table);
+  const shared = unitOfRow?.unit === '%' ? readLabel(`${column.label.text} %`) : null;
+  const label = shared?.analyte.startsWith('sat_') && column.label.unit === null ? shared : column.label;
   const value = cell.meaning;
   return {
     label: { ...label, text: column.heading },
     value,
     rating: value.rating ?? ratingFor(row, cell, table.columns) ?? under,
-    unit: value.unit ?? label.unit,
-    unitPrinted: value.unitPrinted ?? label.unitPrinted,
+    unit: value.unit ?? unitOfRow?.unit ?? label.unit,
+    unitPrinted: value.unitPrinted ?? unitOfRow?.printed ?? label.unitPrinted,
     method: label.method,
     methodPrinted: label.methodPrinted,
     page: row.line.page.number,
@@ -285,7 +309,7 @@ function rowIdentity(row: CellLine, table: Table): Identity {
       (column === first && cell.meaning.kind === 'text' && !table.columns.some((other) => other.field === 'sampleId')
         ? 'sampleId'
         : null);
-    if (field !== null && !JUST_RESULT.test(cell.phrase.text))
+    if (field !== null && !JUST_RESULT.test(cell.phrase.text) && unitOnly(cell.phrase.text) === null)
       identity[field] = identity[field] === undefined ? cell.phrase.text : `${identity[field]} ${cell.phrase.text}`;
   }
   return identity;
@@ -336,7 +360,9 @@ export function rowsOfTable(table: Table, notTaken: NotTaken[] = []): TableRow[]
       continue;
     }
     const identity = rowIdentity(row, table);
-    const name = identity.sampleId ?? identity.labNumber ?? row.cells[0]?.phrase.text ?? '';
+    const [first] = row.cells;
+    const lead = first === undefined || columnAt(table.columns, first)?.label != null ? '' : first.phrase.text;
+    const name = identity.sampleId ?? identity.labNumber ?? lead;
     if (NOT_A_SAMPLE.test(name)) {
       notTaken.push(
         ...row.cells
@@ -349,8 +375,10 @@ export function rowsOfTable(table: Table, notTaken: NotTaken[] = []): TableRow[]
       );
       continue;
     }
-    const next = table.rows[index + 1];
-    const ratings = next !== undefined && isRatingRow(next) ? next : null;
+    const [before, next] = [table.rows[index - 1], table.rows[index + 1]];
+    // Two rows of one sample in two units share the ratings between them.
+    const shared = before !== undefined && isRatingRow(before) && rowUnit(row, table) !== null ? before : null;
+    const ratings = next !== undefined && isRatingRow(next) ? next : shared;
     const candidates: Candidate[] = [];
     const advice: AdviceCell[] = [];
     for (const cell of row.cells) {

@@ -77,7 +77,7 @@ type Tail = { rating: string | null; unit: UnitKey | null; unitPrinted: string |
 
 /** What may follow the number in its own cell: a rating, a unit, a footnote mark, or unit and rating. */
 function tailOf(rest: string): Tail | null {
-  const text = rest.replace(/[*†‡§^]+\d?/g, '').trim();
+  const text = rest.replace(/[*†‡§^↑↓→←↗↘▲▼△▽●○■□]+\d?/g, '').trim();
   const aside = /^(.*?)\s*\(([^()]{1,40})\)$/.exec(text);
   if (aside !== null && ratingIn(text) === null && unitOnly(text) === null) {
     const before = tailOf(aside[1] ?? '');
@@ -111,7 +111,7 @@ function tailOf(rest: string): Tail | null {
 /** What one cell says. A "+" glued to a rating letter ("221H+") is the rating's; after bare digits it means "or more". */
 export function readCell(raw: string, style: NumberStyle): CellMeaning {
   const bracketed = /^\((.+)\)$/.exec(raw.trim());
-  if (bracketed !== null) {
+  if (bracketed !== null && /^[<>]?\s?\d/.test(bracketed[1] ?? '')) {
     const inside = readCell(bracketed[1] ?? '', style);
     if (inside.kind === 'value' && inside.unit !== null) {
       const at = raw.indexOf('(') + 1;

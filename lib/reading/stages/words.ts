@@ -109,6 +109,39 @@ function nextPiece(
   return undefined;
 }
 
+const UNIT_END = /(^|[ /])(k|d|c|m|µ)?(m|g)$|(^|[ /])(ft|yd|ha|acre|dm|cm)$/i;
+
+/**
+ * Raised and lowered small type. A lowered figure belongs to its word ("P" + "2"), so does the raised power of a unit;
+ * any other raised mark points to a footnote or a charge and is dropped.
+ */
+function withScripts(words: readonly Placed[]): Placed[] {
+  const small = words.filter((word) => /^[\d+*†‡§a-e-]{1,3}$/.test(word.text));
+  if (small.length === 0) return [...words];
+  const gone = new Set<Placed>();
+  const grown = new Map<Placed, Placed>();
+  for (const script of [...small].sort((a, b) => a.x0 - b.x0)) {
+    const base = words.find((word) => {
+      const now = grown.get(word) ?? word;
+      return (
+        word !== script &&
+        !gone.has(word) &&
+        script.size < 0.82 * word.size &&
+        Math.abs(script.x0 - now.x1) < 0.3 * word.size &&
+        script.y0 < word.y1 + 0.3 * word.size &&
+        script.y1 > word.y0 - 0.5 * word.size
+      );
+    });
+    if (base === undefined) continue;
+    const now = grown.get(base) ?? base;
+    const lowered = (script.y0 + script.y1) / 2 > (base.y0 + base.y1) / 2;
+    if (lowered || (/^[-+]?[123]$/.test(script.text) && UNIT_END.test(now.text)))
+      grown.set(base, { ...now, text: now.text + script.text, x1: Math.max(now.x1, script.x1) });
+    gone.add(script);
+  }
+  return words.flatMap((word) => (gone.has(word) ? [] : [grown.get(word) ?? word]));
+}
+
 function joinPieces(words: readonly Placed[]): Placed[] {
   const sorted = [...words].sort((a, b) => a.y0 - b.y0 || a.x0 - b.x0);
   const lines = byBaseline(sorted);
@@ -152,7 +185,7 @@ export function uprightWords(page: Page): Upright {
     width: swap ? page.height : page.width,
     height: swap ? page.width : page.height,
     turn,
-    words: joinPieces(once),
+    words: joinPieces(withScripts(once)),
     sideways: page.words.filter((word) => word.direction !== turn),
   };
 }
