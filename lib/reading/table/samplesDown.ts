@@ -204,7 +204,8 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
     }
     taken.push(values);
     const before = parts[parts.length - 1]?.identity;
-    const goesOn = nameless && own.depth !== undefined && hasNames && before !== undefined;
+    const unnamed = own.sampleId === undefined && own.labNumber === undefined;
+    const goesOn = unnamed && own.depth !== undefined && hasNames && before !== undefined;
     const identity = { ...section, ...(goesOn ? pick(before) : {}), ...own };
     const candidates: Candidate[] = [];
     for (const column of plan.columns) {
@@ -238,21 +239,4 @@ function pick(identity: Identity): Identity {
     ...(labNumber === undefined ? {} : { labNumber }),
     ...(fieldName === undefined ? {} : { fieldName }),
   };
-}
-
-/** A column that says the same laboratory in every row. */
-export function laboratoryColumn(facts: Facts, block: Block): string | null {
-  for (let at = 0; at < facts.width; at++) {
-    if (
-      !/^(lab(oratory)?( name)?|analy[sz]ed by|tested by)$/i.test(
-        spoken(facts.at(block.base, at)).replace(/([a-z])([A-Z])/g, '$1 $2'),
-      )
-    )
-      continue;
-    const cells = new Set<string>();
-    for (let row = block.from; row < block.to; row++) if (facts.at(row, at) !== '') cells.add(facts.at(row, at));
-    const [only] = cells;
-    if (cells.size === 1 && only !== undefined && /\p{L}{3}/u.test(only)) return only;
-  }
-  return null;
 }

@@ -6,10 +6,10 @@ import type { ReadRecommendation } from '../types';
 import { analytesDown } from './analytesDown';
 import { blocksOf } from './blocks';
 import { type Facts, factsOf } from './facts';
-import { laboratoryColumn, samplesDown } from './samplesDown';
+import { samplesDown } from './samplesDown';
 import { spoken } from './spoken';
 import { withStackedHeads } from './stacked';
-import { laboratoryOf, legendOf, titleIdentity, titleStatements } from './titles';
+import { laboratoryColumn, laboratoryOf, legendOf, titleIdentity, titleStatements } from './titles';
 import { keyOf, type Ledger, type Sheet } from './types';
 
 export type SheetReading = {
@@ -51,7 +51,10 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
   const all = list === null ? shapes : [...shapes, list];
   for (const row of list?.rows ?? []) used.add(row);
   const around = facts.grid.flatMap((_, row) => (used.has(row) || (facts.rows[row]?.filled ?? 0) === 0 ? [] : [row]));
-  const legend = legendOf(facts, around);
+  const headings = new Set(
+    all.flatMap((shape) => shape.parts.flatMap((part) => part.candidates.map((one) => one.label.text.toLowerCase()))),
+  );
+  const legend = legendOf(facts, around, headings);
   const top = around.filter((row) => row < (blocks[0]?.from ?? 40));
   const over = facts.grid.flatMap((_, row) => (row < (blocks[0]?.base ?? 40) ? [row] : []));
   const heads = blocks.flatMap((block) => [...block.captionRows, block.base, ...block.underRows]);
@@ -63,10 +66,7 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
     recommendations: all.flatMap((shape) => shape.recommendations),
     shared: titleIdentity(facts, top),
     statements: titleStatements(facts, around),
-    laboratory:
-      laboratoryOf(facts, over) ??
-      blocks.map((block) => laboratoryColumn(facts, block)).find((name) => name !== null) ??
-      null,
+    laboratory: laboratoryColumn(facts) ?? laboratoryOf(facts, over),
     texts: [...around, ...heads].map((row) => (facts.grid[row] ?? []).filter((cell) => cell !== '').join(' ')),
     ledger,
   };

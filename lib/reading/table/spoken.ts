@@ -35,7 +35,7 @@ const SYMBOLS: Readonly<Record<string, string>> = {
 /** Units as codes write them, without the strokes that a code cannot hold. */
 const UNIT_CODES: readonly (readonly [RegExp, string])[] = [
   [/\b(lbs?|pounds?|#)[ ./]*(?:per )?(?:a|ac|acre)s?\b\.?/gi, 'lb/acre'],
-  [/\b[tT](?:ons?)?[ ./]?A(?:c|cre)?\b/g, 'ton/acre'],
+  [/\b(?:[tT](?:ons?)?[ ./]?A[Cc]?(?:re)?|t[ ./]ac(?:re)?)\b/g, 'ton/acre'],
   [/\bkg[ .]*(?:per )?ha(?:-1)?\b/gi, 'kg/ha'],
   [/\bmg[ .]*(?:per )?kg(?:-1)?\b/gi, 'mg/kg'],
   [/\bg[ .]kg\b/gi, 'g/kg'],

@@ -58,6 +58,11 @@ export function titleStatements(facts: Facts, rows: readonly number[]): Statemen
 const NAMED =
   /\b(laborator(y|ies)|labs?|soil testing|testing (service|cent(er|re))|analytical|agronomy services?|soil service|soil (health )?cent(er|re)|institute|bodenlabor|bodenproben|bodenuntersuchung|labor|laboratoire|laboratorio|laboratorium|jordpr\S+|agrolab|analyti(cs|k))\b/i;
 
+/** The cell beside a heading, unless it is a heading itself. */
+function headless(cell: string): string {
+  return fieldOf(cell) === null && !/^[\d\s/#-]*$/.test(cell) ? cell : '';
+}
+
 /** The laboratory's name from the lines over the first table. */
 export function laboratoryOf(facts: Facts, rows: readonly number[]): string | null {
   const cells = rows
@@ -66,7 +71,7 @@ export function laboratoryOf(facts: Facts, rows: readonly number[]): string | nu
       const line = facts.grid[row] ?? [];
       return line.flatMap((cell, column) => {
         const said = /^(lab(oratory)?( name)?|analy[sz]ed by|tested by|testing laboratory)\s*:?$/i.test(cell)
-          ? (line[column + 1] ?? '')
+          ? headless(line[column + 1] ?? '')
           : '';
         return said === '' ? [cell] : [`Laboratory: ${said}`];
       });
@@ -87,7 +92,11 @@ export function laboratoryOf(facts: Facts, rows: readonly number[]): string | nu
 }
 
 /** A list of codes with their units and methods, without a number ("P1, ppm, weak Bray"): what a heading alone does not say. */
-export function legendOf(facts: Facts, rows: readonly number[]): ReadonlyMap<string, string> {
+export function legendOf(
+  facts: Facts,
+  rows: readonly number[],
+  headings: ReadonlySet<string>,
+): ReadonlyMap<string, string> {
   const legend = new Map<string, string>();
   for (const row of rows) {
     const cells = (facts.grid[row] ?? []).filter((cell) => cell !== '');
@@ -100,7 +109,27 @@ export function legendOf(facts: Facts, rows: readonly number[]): ReadonlyMap<str
       continue;
     }
     const rest = cells.slice(1).join(' ');
-    if (unitIn(spoken(rest)) !== null && cells.length <= 6) legend.set((cells[0] ?? '').toLowerCase(), rest);
+    const known = headings.has((cells[0] ?? '').toLowerCase());
+    if ((known || unitIn(spoken(rest)) !== null) && cells.length <= 6) legend.set((cells[0] ?? '').toLowerCase(), rest);
   }
   return legend;
+}
+
+const LAB_HEAD = /^(lab(oratory)?( ?name)?|analy[sz]ed by|tested by|testing laboratory)$/i;
+
+/** A column that says the same laboratory in every row. */
+export function laboratoryColumn(facts: Facts): string | null {
+  for (let head = 0; head < Math.min(facts.grid.length, 40); head++) {
+    const at = (facts.grid[head] ?? []).findIndex((cell) => LAB_HEAD.test(cell.replace(/_/g, ' ')));
+    if (at < 0 || (facts.rows[head]?.filled ?? 0) < 3) continue;
+    const cells = new Set(
+      facts.grid
+        .slice(head + 1)
+        .map((row) => row[at] ?? '')
+        .filter((cell) => cell !== ''),
+    );
+    const [only] = cells;
+    if (cells.size === 1 && only !== undefined && /\p{L}{3}/u.test(only)) return only;
+  }
+  return null;
 }
