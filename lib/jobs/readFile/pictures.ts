@@ -76,7 +76,7 @@ export async function readPictureFile(input: { fileName: string; bytes: Uint8Arr
     const traced = await readScanTraced({
       fileName,
       pages: [scannedPage(1, seen, USUAL_SIDE)],
-      lookAgain: (_, spots) => seen.look(spots),
+      lookAgain: (_, spots, as) => seen.look(spots, as),
     });
     return unlessBlurred(traced, [seen]);
   });
@@ -129,7 +129,7 @@ export async function readPicturesOfPdf(
     const traced = await readScanTraced({
       fileName,
       pages,
-      lookAgain: async (number, spots) => (await seen.get(number)?.look(spots)) ?? [],
+      lookAgain: async (number, spots, as) => (await seen.get(number)?.look(spots, as)) ?? [],
     });
     const missed = bare.filter((number) => !seen.has(number));
     const warnings = traced.reading.warnings.filter((warning) => warning.code !== 'page-without-text');

@@ -1,5 +1,5 @@
 import type { Merged } from './types';
-import { isKnown, mended } from './vocabulary';
+import { isKnown, mended, unblurred } from './vocabulary';
 
 /** Letters that the engine takes for one another in the short words of units. */
 const UNITS: readonly (readonly [RegExp, string])[] = [
@@ -54,7 +54,8 @@ export function mendWords(words: readonly Merged[]): Merged[] {
     }
     const unit = unitsMended(word.text);
     if (unit !== word.text) return { ...word, text: unit };
-    const whole = isKnown(word.text) ? null : mended(word.text);
+    if (isKnown(word.text)) return word;
+    const whole = unblurred(word.text) ?? mended(word.text);
     return whole === null ? word : { ...word, text: whole };
   });
 }

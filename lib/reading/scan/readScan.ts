@@ -4,6 +4,7 @@ import { checkInk } from './ink';
 import { mendWords } from './mend';
 import { mergeViews } from './merge';
 import { pageOf } from './pages';
+import { isUnsure, withThirdLook } from './third';
 import { figuresOf, judge, pointDoubts, type Spot, spotOf } from './trust';
 import type { Merged, ScannedPage } from './types';
 
@@ -14,9 +15,24 @@ function isScan(page: AnyPage): page is ScannedPage {
   return 'views' in page;
 }
 
+/** Words looked at a third time on one page at most; more mean a page that cannot be read anyway. */
+const MOST_LOOKS = 80;
+
 /** Words of a scanned page: the views put together, compared with the ink, usual confusions undone. */
-function wordsOf(page: ScannedPage): Merged[] {
-  return mendWords(checkInk(mergeViews(page.views, page.letter), page.pieces, page.letter));
+async function wordsOf(page: ScannedPage, lookAgain: LookAgain): Promise<Merged[]> {
+  const merged = mergeViews(page.views, page.letter);
+  const unsure = merged.filter((word) => isUnsure(word, page.letter)).slice(0, MOST_LOOKS);
+  const room = 0.3 * page.letter;
+  const spots = unsure.map(({ x0, y0, x1, y1 }) => ({ x0: x0 - room, y0: y0 - room, x1: x1 + room, y1: y1 + room }));
+  const texts = spots.length === 0 ? [] : await lookAgain(page.number, spots, 'word');
+  const looked = new Map(unsure.map((word, index) => [word, withThirdLook(word, texts[index] ?? '')]));
+  return mendWords(
+    checkInk(
+      merged.map((word) => looked.get(word) ?? word),
+      page.pieces,
+      page.letter,
+    ),
+  );
 }
 
 function readWords(input: { fileName: string; pages: readonly AnyPage[] }, words: Words) {
@@ -86,7 +102,11 @@ export type TracedScan = {
 };
 
 /** Looks again at spots of one scanned page, each alone; the text seen at each, '' for nothing. */
-export type LookAgain = (page: number, spots: readonly Spot['box'][]) => Promise<readonly string[]>;
+export type LookAgain = (
+  page: number,
+  spots: readonly Spot['box'][],
+  as: 'number' | 'word',
+) => Promise<readonly string[]>;
 
 async function lookAt(
   spots: Iterable<Spot>,
@@ -103,6 +123,7 @@ async function lookAt(
     const texts = await lookAgain(
       page.number,
       here.map((spot) => frameOf(spot, page)),
+      'number',
     );
     for (const [index, spot] of here.entries()) seen.set(keyOf(spot), texts[index] ?? '');
   }
@@ -120,7 +141,9 @@ export async function readScanTraced(input: {
   pages: readonly AnyPage[];
   lookAgain: LookAgain;
 }): Promise<TracedScan> {
-  let words: Words = new Map(input.pages.filter(isScan).map((page) => [page.number, wordsOf(page)]));
+  const first = new Map<number, readonly Merged[]>();
+  for (const page of input.pages.filter(isScan)) first.set(page.number, await wordsOf(page, input.lookAgain));
+  let words: Words = first;
   let { reading, trace } = readWords(input, words);
   let spots = spotsOf(reading, input.pages, words);
   let looks = await lookAt(spots.values(), input.pages, input.lookAgain, new Map());

@@ -24,6 +24,47 @@ function collect(): ReadonlySet<string> {
 const WORDS = collect();
 const LONG = [...WORDS].filter((word) => /^[a-z]{6,}$/.test(word));
 
+/** What the engine cannot tell apart, made one: 0 and O, 1 and l and I, 5 and S, doubled letters, rn and m. */
+function blurredForm(text: string): string {
+  return text
+    .replace(/[0O]/g, 'o')
+    .replace(/[1I|]/g, 'l')
+    .replace(/[5]/g, 's')
+    .toLowerCase()
+    .replace(/rn/g, 'm')
+    .replace(/(.)\1/g, '$1');
+}
+
+/** Spellings as printed, by their blurred form; a form that stands for two spellings stands for neither. */
+function collectForms(): ReadonlyMap<string, string> {
+  const forms = new Map<string, string | null>();
+  const add = (text: string) => {
+    for (const word of text.split(/[\s(),;]+/)) {
+      if (word.length < 2 || !/[A-Za-z]/.test(word) || /[^\x21-\x7e]/.test(word)) continue;
+      const form = blurredForm(word);
+      const known = forms.get(form);
+      if (known === undefined) forms.set(form, word);
+      else if (known !== null && known.toLowerCase() !== word.toLowerCase()) forms.set(form, null);
+    }
+  };
+  for (const entry of ANALYTES) for (const text of [entry.symbol, ...entry.spellings]) add(text);
+  for (const entry of UNITS) entry.spellings.forEach(add);
+  for (const entry of METHODS) entry.spellings.forEach(add);
+  return new Map([...forms].flatMap(([form, word]): [string, string][] => (word === null ? [] : [[form, word]])));
+}
+
+const FORMS = collectForms();
+
+/** A word of units, symbols or methods in which a letter was taken for its double: "KCI", "NH40Ac", "Ib/A". */
+export function unblurred(text: string): string | null {
+  const core = /^[([]*(.*?)[)\],.;:*]*$/.exec(text)?.[1] ?? text;
+  if (core.length < 2 || !/[A-Za-z]/.test(core) || WORDS.has(core.toLowerCase())) return null;
+  const found = FORMS.get(blurredForm(core));
+  // Two characters are too few to go by, but for these: sample names look like that.
+  if (core.length === 2 && found !== undefined && !/^(lb|Cl|Al|OM)$/.test(found)) return null;
+  return found === undefined || found.toLowerCase() === core.toLowerCase() ? null : text.replace(core, found);
+}
+
 export function bare(text: string): string {
   return text.toLowerCase().replace(/^[^a-z0-9%]+|[^a-z0-9%+]+$/g, '');
 }
@@ -51,7 +92,7 @@ export function mended(text: string): string | null {
   const low = bare(text).replace(/0/g, 'o').replace(/1/g, 'l').replace(/5/g, 's');
   if (low.length < 6 || !/^[a-z]+$/.test(low)) return null;
   if (WORDS.has(low)) return bare(text) === low ? null : recased(text, low);
-  const near = LONG.filter((word) => oneOff(word, low));
+  const near = LONG.filter((word) => oneOff(word, low) && `${word}s` !== low);
   return near.length === 1 && near[0] !== undefined ? recased(text, near[0]) : null;
 }
 

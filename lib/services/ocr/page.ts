@@ -22,8 +22,8 @@ export type SeenPage = {
   readonly pieces: readonly Piece[];
   /** A box of the level picture as fractions of the page as stored. */
   readonly stored: (box: Spot) => readonly [number, number, number, number];
-  /** What stands at each spot when it is cut out, enlarged and read as a number and nothing else; '' for nothing. */
-  readonly look: (spots: readonly Spot[]) => Promise<readonly string[]>;
+  /** What stands at each spot when it is cut out, enlarged and read alone, as any word or as a number; '' for nothing. */
+  readonly look: (spots: readonly Spot[], as: 'number' | 'word') => Promise<readonly string[]>;
 };
 
 /** A spot is looked at again this much larger. */
@@ -97,10 +97,11 @@ async function lookAgain(
   picture: Grey,
   letter: number,
   spots: readonly Spot[],
+  only: string,
 ): Promise<readonly string[]> {
   if (spots.length === 0) return [];
   const { sheet, lines } = columnOf(picture, letter, spots);
-  const words = await engine.read(sheet, 'block', NUMBERS);
+  const words = await engine.read(sheet, 'block', only);
   return lines.map(({ top, bottom }) =>
     words
       .filter((word) => (word.y0 + word.y1) / 2 > top && (word.y0 + word.y1) / 2 < bottom)
@@ -146,6 +147,6 @@ export async function readPicture(engine: Engine, source: Grey): Promise<SeenPag
       const ys = corners.map((point) => Math.min(1, Math.max(0, point.y)));
       return [Math.min(...xs), Math.min(...ys), Math.max(...xs), Math.max(...ys)];
     },
-    look: (spots) => lookAgain(engine, picture, prepared.letter, spots),
+    look: (spots, as) => lookAgain(engine, picture, prepared.letter, spots, as === 'number' ? NUMBERS : ''),
   };
 }
