@@ -2,9 +2,18 @@ import { readdir } from 'node:fs/promises';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { listApplications } from '@/lib/data/applications/listApplications';
 import { recordApplication } from '@/lib/data/applications/recordApplication';
+import { createBatch } from '@/lib/data/batches/createBatch';
+import { getBatch } from '@/lib/data/batches/getBatch';
+import { getBatchPlace } from '@/lib/data/batches/getBatchPlace';
+import { listBatches } from '@/lib/data/batches/listBatches';
+import { listBatchSamples } from '@/lib/data/batches/listBatchSamples';
 import type { Ctx } from '@/lib/data/context';
+import { askCopy } from '@/lib/data/copies/askCopy';
+import { getCopy } from '@/lib/data/copies/getCopy';
 import { getEffects } from '@/lib/data/effects/getEffects';
 import { recheckEffects } from '@/lib/data/effects/recheckEffects';
+import { giveUpJob } from '@/lib/data/failedJobs/giveUpJob';
+import { listFailedJobs } from '@/lib/data/failedJobs/listFailedJobs';
 import { compareResults } from '@/lib/data/history/compareResults';
 import { getHistory } from '@/lib/data/history/getHistory';
 import { listLaboratories } from '@/lib/data/laboratories/listLaboratories';
@@ -16,7 +25,10 @@ import { listRules } from '@/lib/data/reminders/listRules';
 import { setRule } from '@/lib/data/reminders/setRule';
 import { getReport } from '@/lib/data/reports/getReport';
 import { listReports } from '@/lib/data/reports/listReports';
+import { saveReading } from '@/lib/data/reports/saveReading';
+import { startReading } from '@/lib/data/reports/startReading';
 import { typeReport } from '@/lib/data/reports/typeReport';
+import { uploadReport } from '@/lib/data/reports/uploadReport';
 import { exportResults } from '@/lib/data/results/exportResults';
 import { latestResults } from '@/lib/data/results/latestResults';
 import { listResults } from '@/lib/data/results/listResults';
@@ -34,10 +46,21 @@ import { getToday } from '@/lib/data/today/getToday';
 import type { PlotId, SiteId } from '@/lib/domain/ids';
 import { countingConnection } from '../support/countQueries';
 import { ctxAs, ctxWorker, makePlot, makeSite, makeTest, useWorld } from '../support/factory';
+import { pdfBytes, readResult, readSample, soilReading } from '../support/reports';
 
 const world = useWorld();
 
-type Ground = { siteId: SiteId; owner: Ctx; worker: Ctx; plotId: PlotId; reportId: string; a: string; b: string };
+type Ground = {
+  siteId: SiteId;
+  owner: Ctx;
+  worker: Ctx;
+  plotId: PlotId;
+  reportId: string;
+  a: string;
+  b: string;
+  batchId: string;
+  copy: { reportId: string; copyId: string };
+};
 
 /** A report in review with so many samples and rows. */
 async function makeReview(ctx: Ctx, siteId: SiteId, plotIds: readonly PlotId[]): Promise<string> {
@@ -48,6 +71,31 @@ async function makeReview(ctx: Ctx, siteId: SiteId, plotIds: readonly PlotId[]):
     await addRow({ ctx, input: { siteId, reportId, reportSampleId, analyte: 'soil_ph_water', value: '6.4' } });
   }
   return reportId;
+}
+
+/** A batch of so many files, all of them read, and as many jobs given up. */
+async function makeBatch(owner: Ctx, siteId: SiteId, plotIds: readonly PlotId[]) {
+  // The same moment as the owner's: the newest lines of the trail are then not all the worker's.
+  const worker = { ...(await ctxWorker()), now: owner.now };
+  const files = plotIds.map((_, at) => ({ name: `old-${at}.pdf`, bytes: 9 }));
+  const { batchId, fileIds } = await createBatch({ ctx: owner, input: { siteId, files } });
+  let reportId = '';
+  for (const [at, batchFileId] of fileIds.entries()) {
+    const sent = await uploadReport({
+      ctx: owner,
+      input: { siteId, fileName: 'old.pdf', bytes: pdfBytes(), batchFileId },
+    });
+    reportId = sent.reportId;
+    const task = await startReading({ ctx: worker, input: { siteId, id: reportId } });
+    if (!task) throw new Error('The report could not be taken.');
+    const results = [readResult({ analyte: 'soil_ph_water', printed: '6.4' })];
+    const reading = soilReading([readSample({ sampleId: `Bag ${at}`, results })]);
+    await saveReading({ ctx: worker, input: { lease: task.lease, reading } });
+    const given = { siteId, id: plotIds[at] ?? '', job: 'recheck-effects' as const, sentence: 'It stopped.' };
+    await giveUpJob({ ctx: worker, input: given });
+  }
+  const { id: copyId } = await askCopy({ ctx: owner, input: { siteId, reportId, page: 1 } });
+  return { batchId, copy: { reportId, copyId } };
 }
 
 async function makeGround(plots: number, years: number): Promise<Ground> {
@@ -76,9 +124,10 @@ async function makeGround(plots: number, years: number): Promise<Ground> {
   const [a] = results;
   const b = results.at(-2);
   if (!plotId || !a || !b) throw new Error('The ground is empty.');
+  const batch = await makeBatch(owner, siteId, plotIds);
   const reportId = await makeReview(owner, siteId, plotIds);
   await recheckEffects({ ctx: await ctxWorker(), input: { siteId, id: plotId } });
-  return { siteId, owner, worker: await ctxWorker(), plotId, reportId, a, b };
+  return { siteId, owner, worker: await ctxWorker(), plotId, reportId, a, b, ...batch };
 }
 
 const here = ({ siteId }: Ground) => ({ siteId });
@@ -109,10 +158,16 @@ const ASKED: Record<string, (ground: Ground) => Promise<unknown>> = {
   listTargets: (g) => listTargets({ ctx: g.owner, input: here(g) }),
   getSiteToday: (g) => getSiteToday({ ctx: g.owner, input: here(g) }),
   getToday: (g) => getToday({ ctx: g.owner, input: {} }),
+  listBatches: (g) => listBatches({ ctx: g.owner, input: here(g) }),
+  getBatch: (g) => getBatch({ ctx: g.owner, input: { ...here(g), batchId: g.batchId } }),
+  listBatchSamples: (g) => listBatchSamples({ ctx: g.owner, input: { ...here(g), batchId: g.batchId } }),
+  getBatchPlace: (g) => getBatchPlace({ ctx: g.owner, input: { ...here(g), reportId: g.copy.reportId } }),
+  listFailedJobs: (g) => listFailedJobs({ ctx: g.owner, input: here(g) }),
+  getCopy: (g) => getCopy({ ctx: g.owner, input: { ...here(g), ...g.copy } }),
   recheckEffects: (g) => recheckEffects({ ctx: g.worker, input: { ...here(g), id: g.plotId } }),
 };
-/** The first takes nothing but the person, the second a file; `…InSite` fetch one row and are no verbs. */
-const NO_LIST = /^(getMe|getReportFile|get\w+InSite)$/;
+/** The first takes nothing but the person, the next two a file; `…InSite` fetch one row and are no verbs. */
+const NO_LIST = /^(getMe|getReportFile|getCopyFile|get\w+InSite)$/;
 const MOST = 20;
 
 describe('the queries of a page', () => {
