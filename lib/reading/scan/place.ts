@@ -59,5 +59,28 @@ export function setOf(words: readonly Seen[]): Map<Seen, Set> {
       sets.set(word, { size: weighted((one) => one.size), base: weighted((one) => one.base) });
     }
   }
-  return sets;
+  return snapped(sets);
+}
+
+/** Words that stand on one line get one baseline, and one size where theirs hardly differ. */
+function snapped(sets: ReadonlyMap<Seen, Set>): Map<Seen, Set> {
+  const sorted = [...sets].sort(([, a], [, b]) => a.base - b.base);
+  const out = new Map<Seen, Set>();
+  let line: [Seen, Set][] = [];
+  const close = () => {
+    const base = median(line.map(([, set]) => set.base));
+    const size = median(line.map(([, set]) => set.size));
+    for (const [word, set] of line) {
+      const same = Math.max(set.size, size) < 1.12 * Math.min(set.size, size);
+      out.set(word, { base, size: same ? size : set.size });
+    }
+    line = [];
+  };
+  for (const entry of sorted) {
+    const first = line[0];
+    if (first !== undefined && entry[1].base - first[1].base > 0.3 * Math.min(first[1].size, entry[1].size)) close();
+    line.push(entry);
+  }
+  close();
+  return out;
 }
