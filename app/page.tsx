@@ -8,7 +8,7 @@ import { pageContext } from './_server/context';
 const ROUND = [
   {
     title: 'Drop the report',
-    said: 'PDF or CSV, as the laboratory sent it. It is read, and every number keeps its place on the page.',
+    said: 'PDF, scan, photograph, CSV or workbook, as the laboratory sent it. It is read, and every number keeps its place on the page.',
   },
   { title: 'Check it against its page', said: 'You confirm the values; nothing becomes history before that.' },
   { title: 'Record what you spread', said: 'Material, amount, day, and the change you mean it to make.' },

@@ -24,6 +24,8 @@ export const UPLOAD_ENDINGS = [
   '.png',
   '.xlsx',
   '.xls',
+  '.xml',
+  '.json',
 ] as const;
 /** Of a PDF or picture; data files and sheets end at 5 MB. */
 export const LARGEST_UPLOAD_BYTES = 20 * 1024 * 1024;
@@ -57,7 +59,8 @@ export const listReportsInput = z.strictObject({ state: reportStateSchema.option
 export const reportInput = z.strictObject({ reportId: idSchema });
 export const reportFileInput = z.strictObject({
   reportId: idSchema,
-  as: z.enum(['attachment', 'inline']).default('attachment'),
+  /** cells: a workbook's cells as JSON, as the reader found them. */
+  as: z.enum(['attachment', 'inline', 'cells']).default('attachment'),
 });
 export const reportReasonInput = z.strictObject({
   reportId: idSchema,

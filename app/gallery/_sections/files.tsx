@@ -17,13 +17,13 @@ export function FilesSection() {
         maxBytes={MAX}
         overLabel="Let go to send it to North bed"
         onFiles={(files) => setSaid(files.map((file) => `${file.name} taken.`))}
-        onRefused={(files) => setSaid(files.map((file) => refusedSentence(file, 'PDF and CSV', MAX)))}
+        onRefused={(files) => setSaid(files.map((file) => refusedSentence(file, 'PDF files and data files', MAX)))}
       >
         {({ open }) => (
           <div className="flex flex-wrap items-center gap-x-6 gap-y-3">
             <p className="flex-1 basis-64">
-              <span className="font-semibold">Drop a laboratory report here.</span> PDF or CSV, up to 20 MB, several at
-              once.
+              <span className="font-semibold">Drop a laboratory report here.</span> PDF or data file, up to 20 MB,
+              several at once.
             </p>
             <Button look="quiet" onClick={open}>
               Pick a file

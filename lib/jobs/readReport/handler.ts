@@ -7,7 +7,7 @@ import { startReading } from '@/lib/data/reports/startReading';
 import { Problem } from '@/lib/errors';
 import { log } from '@/lib/log';
 import type { Reading } from '@/lib/reading/types';
-import { getFile } from '@/lib/services/storage/storage';
+import { cellsKey, getFile, putFile } from '@/lib/services/storage/storage';
 import type { JobTools } from '../job';
 import type { SheetRows } from '../readFile/messages';
 import { readSheetRows } from '../readFile/readFile';
@@ -49,6 +49,22 @@ function whatWentWrong(error: unknown): { code: string; sentence: string } {
   };
 }
 
+const WORKBOOK = /\.xlsx?$/i;
+
+/** A workbook's cells are kept beside it, so that the review can show them without anybody opening the workbook again. */
+async function keepCells(input: {
+  task: { fileKey: string; fileName: string };
+  bytes: Uint8Array;
+  signal: AbortSignal | undefined;
+  readSheet: ReadSheet;
+}): Promise<void> {
+  const { task, bytes, signal, readSheet } = input;
+  const cells = await readSheet({ bytes, fileName: task.fileName, signal });
+  if (!cells.ok) return;
+  const text = JSON.stringify({ sheets: cells.sheets });
+  await putFile(cellsKey(task.fileKey), new TextEncoder().encode(text), 'application/json');
+}
+
 /** received -> reading -> in-review, unreadable or not-soil. A second delivery finds the lease taken and does nothing. */
 export const readReportWith =
   (readFile: ReadFile, readSheet: ReadSheet = readSheetRows) =>
@@ -75,6 +91,7 @@ export const readReportWith =
         },
       });
       await noted;
+      if (WORKBOOK.test(task.fileName)) await keepCells({ task, bytes, signal, readSheet });
       const saved = await saveReading({ ctx, input: { lease, reading } });
       if (!saved) log().warn({ reportId: lease.id }, 'another worker took this report over; this reading is dropped');
     } catch (error) {

@@ -32,8 +32,6 @@ const SENTENCES = {
     'This XML file breaks off or is not well formed, so it was not read. It is kept; fetch it once more, or type the numbers in.',
   'broken-json':
     'This JSON file breaks off or is not well formed, so it was not read. It is kept; fetch it once more, or type the numbers in.',
-  'not-lab-data':
-    'This file is not in the open laboratory format that Loamline reads. It is kept; ask the laboratory for PDF or CSV, or type the numbers in.',
   'not-a-sheet':
     'A spreadsheet of your own is taken as XLSX, XLS or CSV, and this file is none of them. It is kept; save the sheet as CSV and send that.',
   'own-sheet-too-large':

@@ -7,7 +7,7 @@ export type Sniffed =
       readonly ok: true;
       readonly kind: ReportKind;
       readonly contentType: string;
-      /** False for kinds that are stored but cannot be read yet. */
+      /** False for kinds that are stored and not read. */
       readonly readable: boolean;
     }
   | { readonly ok: false; readonly code: RefusalCode; readonly sentence: string };

@@ -64,6 +64,20 @@ export async function getFile(key: string, expectedSha256: string): Promise<Uint
   return bytes;
 }
 
+/** Where the cells of a workbook stand as plain text, beside the workbook itself. */
+export const cellsKey = (fileKey: string): string => `${fileKey}.cells.json`;
+
+/** What was made of a file and can be made again: it has no hash of its own. Null when there is none. */
+export async function getMade(key: string): Promise<Uint8Array | null> {
+  try {
+    const answer = await s3().send(new GetObjectCommand({ Bucket: env().S3_BUCKET, Key: key }));
+    return (await answer.Body?.transformToByteArray()) ?? null;
+  } catch (error) {
+    if (error instanceof NoSuchKey) return null;
+    throw Object.assign(notAnswering('The numbers are safe; the page itself can be shown later.'), { cause: error });
+  }
+}
+
 export async function deleteFile(key: string): Promise<void> {
   await s3().send(new DeleteObjectCommand({ Bucket: env().S3_BUCKET, Key: key }));
 }

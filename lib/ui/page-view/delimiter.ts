@@ -20,6 +20,14 @@ export function guessDelimiter(text: string): string {
   return best;
 }
 
+/** True when most lines are cells parted by one sign: such a text is shown as a table, as the reader takes it. */
+export function looksDelimited(text: string): boolean {
+  const lines = text.split(/\r\n?|\n/).filter((line) => line.trim() !== '');
+  const most = (least: number, sign: RegExp) =>
+    lines.filter((line) => (line.match(sign)?.length ?? 0) >= least).length >= 0.6 * lines.length;
+  return most(1, /\t/g) || most(2, /;/g) || most(2, /\|/g) || most(2, /,(?! )/g);
+}
+
 /** Text of a data file: by its byte-order mark, else UTF-8, else the old Windows set. */
 export function decodeText(bytes: Uint8Array): string {
   if (bytes[0] === 0xff && bytes[1] === 0xfe) return new TextDecoder('utf-16le').decode(bytes);

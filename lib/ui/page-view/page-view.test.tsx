@@ -80,3 +80,90 @@ describe('liveLine', () => {
     expect(liveLine(undefined)).toBe('');
   });
 });
+
+describe('a workbook', () => {
+  const cells = {
+    sheets: [
+      {
+        number: 1,
+        name: 'Main',
+        rows: [
+          ['Plot', 'pH'],
+          ['North bed', '6.4'],
+        ],
+      },
+      {
+        number: 3,
+        name: 'Trace',
+        rows: [
+          ['Plot', 'Zn'],
+          ['North bed', '1.2'],
+        ],
+      },
+    ],
+  };
+  const marks: readonly PageMark[] = [
+    { rowId: 'a', label: 'pH', rowNumber: 1, page: null, box: null, cell: { sheet: 1, row: 2, column: 2 } },
+    { rowId: 'b', label: 'Zinc', rowNumber: 2, page: null, box: null, cell: { sheet: 3, row: 2, column: 2 } },
+  ];
+  const shown = (over: Partial<PageViewProps>) =>
+    show({
+      source: { kind: 'cells', url: '/cells' },
+      fileName: 'spring.xlsx',
+      marks,
+      load: async () => bytes(JSON.stringify(cells)),
+      ...over,
+    });
+
+  it('brings the sheet of the focused row to the front and marks its cell', async () => {
+    shown({ highlightedRowId: 'b' });
+    expect((await screen.findByText('1.2')).hasAttribute('data-highlighted')).toBe(true);
+    expect(screen.queryByText('6.4')).toBeNull();
+    expect(screen.getByTestId('page-place').textContent).toBe('Sheet 3, line 2, column 2, row 2: Zinc');
+  });
+
+  it('shows another sheet when asked for it', async () => {
+    shown({});
+    await screen.findByText('6.4');
+    await userEvent.click(screen.getByRole('button', { name: 'Trace' }));
+    expect(screen.getByText('1.2')).toBeTruthy();
+  });
+
+  it('says so when its cells are not there', async () => {
+    shown({ load: async () => ({ ok: false, reason: 'gone' }) });
+    expect(await screen.findByText('This workbook cannot be shown here')).toBeTruthy();
+  });
+});
+
+describe('a text', () => {
+  const marks: readonly PageMark[] = [
+    { rowId: 'a', label: 'P', rowNumber: 1, page: null, box: null, cell: { sheet: 1, row: 2, column: 4 } },
+  ];
+  const shown = (text: string, over: Partial<PageViewProps> = {}) =>
+    show({
+      source: { kind: 'text', url: '/text' },
+      fileName: 'mail.txt',
+      marks,
+      load: async () => bytes(text),
+      ...over,
+    });
+
+  it('stands line by line with the number marked', async () => {
+    const onPick = shown('Results\nP: <0.5 ppm\n', { highlightedRowId: 'a' });
+    const mark = await screen.findByText('<0.5');
+    expect(mark.hasAttribute('data-highlighted')).toBe(true);
+    await userEvent.click(mark);
+    expect(onPick.mock.calls).toEqual([['a']]);
+  });
+
+  it('stands as a table when its cells are parted by tabs', async () => {
+    shown('Plot\tpH\tP\nNorth\t6.4\t41\n', { marks: [] });
+    expect((await screen.findByText('41')).tagName).toBe('TD');
+  });
+
+  it('never draws what stands in it', async () => {
+    shown('<a>\n<b>9</b><script>alert(1)</script>\n', { fileName: 'data.xml' });
+    expect(await screen.findByText(/script/)).toBeTruthy();
+    expect(document.querySelector('script')).toBeNull();
+  });
+});

@@ -1,9 +1,11 @@
 'use client';
 
+import { CellsView } from './cells-view';
 import { ImageView } from './image-view';
 import { liveLine } from './live-line';
 import { PdfView } from './pdf-view';
 import { CsvView, TableView } from './table-view';
+import { TextView } from './text-view';
 import type { PageViewProps } from './types';
 import { ViewPanel } from './view-states';
 
@@ -35,6 +37,10 @@ function Shown({ source, ...props }: Omit<PageViewProps, 'originalHref'>) {
       return <ImageView url={source.url} {...props} />;
     case 'csv':
       return <CsvView url={source.url} {...props} />;
+    case 'cells':
+      return <CellsView url={source.url} {...props} />;
+    case 'text':
+      return <TextView url={source.url} {...props} />;
     case 'table':
       return <TableView rows={source.rows} {...props} />;
     case 'unsupported':

@@ -5,6 +5,10 @@ export type PageViewSource =
   | { readonly kind: 'pdf'; readonly url: string }
   | { readonly kind: 'image'; readonly url: string }
   | { readonly kind: 'csv'; readonly url: string }
+  /** A workbook's cells as JSON, as the reader found them. */
+  | { readonly kind: 'cells'; readonly url: string }
+  /** A text, or XML or JSON, shown line by line. */
+  | { readonly kind: 'text'; readonly url: string }
   /** A sheet that the reader has already turned into rows. */
   | { readonly kind: 'table'; readonly rows: readonly (readonly string[])[] }
   | { readonly kind: 'unsupported'; readonly sentence: string }
@@ -19,8 +23,8 @@ export interface PageMark {
   readonly rowNumber: number;
   readonly page: number | null;
   readonly box: PageFractions | null;
-  /** For CSV and sheets, from 1. */
-  readonly cell: { readonly row: number; readonly column: number } | null;
+  /** For CSV, sheets and texts, from 1; the sheet is the first where it is left out. In a text the column is the character. */
+  readonly cell: { readonly sheet?: number; readonly row: number; readonly column: number } | null;
 }
 
 export type FetchedFile =

@@ -17,8 +17,9 @@ export default function UploadGuide() {
             and press the button for a report. A report with several samples may go onto any of its plots.
           </li>
           <li>
-            Wait while it is read; you may leave the page. PDF files, scans, photos and data files are read; a scanned
-            page takes some seconds longer. A file that was sent before is recognised and offered to open.
+            Wait while it is read; you may leave the page. PDF files, scans and photos are read, and so are data files:
+            CSV, workbooks (XLSX, XLS), plain text, and the open laboratory format as XML or JSON. A scanned page takes
+            some seconds longer. A file that was sent before is recognised and offered to open.
           </li>
           <li>
             Have a report only on paper? Scan it, or photograph it from straight above in even light, the whole sheet in

@@ -106,7 +106,7 @@ export function Inbox({ site, timeZone, today, plots, first, batches, shown, ...
         {data.reports.length === 0 ? (
           <EmptyState shape="page" title="No report yet">
             {rights.mayWork
-              ? 'Drop a laboratory’s PDF or CSV anywhere on this page, or pick one with the button. It is read, and its values stand here until you have looked at them beside the page.'
+              ? 'Drop a laboratory’s PDF, scan, photograph, data file or workbook anywhere on this page, or pick one with the button. It is read, and its values stand here until you have looked at them beside the page.'
               : 'Reports that are sent in stand here with how far they are.'}
           </EmptyState>
         ) : (

@@ -116,7 +116,10 @@ export function placeOf(row: ReviewRow): string {
 
 function printedPlace(row: ReviewRow): string {
   if (row.page !== null && row.box !== null) return `Page ${row.page}`;
-  if (row.cell) return `Line ${row.cell.row}, column ${row.cell.column}`;
+  if (row.cell) {
+    const sheet = Number(row.cell.sheet ?? 1) > 1 ? `Sheet ${row.cell.sheet}, line` : 'Line';
+    return `${sheet} ${row.cell.row}, column ${row.cell.column}`;
+  }
   return 'Entered by hand';
 }
 
@@ -240,7 +243,7 @@ export function marksOf(rows: readonly ReviewRow[], order: readonly string[], re
         rowNumber: at + 1,
         page: row.page,
         box: row.box,
-        cell: row.cell ? { row: row.cell.row, column: row.cell.column } : null,
+        cell: row.cell ? { sheet: Number(row.cell.sheet ?? 1) || 1, row: row.cell.row, column: row.cell.column } : null,
       },
     ];
   });
