@@ -36,10 +36,6 @@ export function spotOf(result: ReadResult, page: ScannedPage, words: readonly Me
   return { page: page.number, words: mine, box };
 }
 
-export function isNumberSpot(result: ReadResult, spot: Spot): boolean {
-  return spot.words.length > 0 && /\d/.test(result.printed);
-}
-
 export type Judged = { readonly ceiling: number; readonly doubts: readonly Remark[] };
 
 /** Highest confidence of a number from a scan, by what speaks for it. Set on tuning scans; see the reading tests. */
