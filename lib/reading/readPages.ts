@@ -5,13 +5,13 @@ import { cardRows } from './stages/cards';
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
-import { type ListRow, listRows, type Run } from './stages/down';
 import { type IdentityHit, identityHits } from './stages/identity';
 import { type Line, linesOf } from './stages/lines';
-import { rowsOfTable, type Table, type TableRow, tablesOf } from './stages/matrix';
+import { type ListRow, listRows } from './stages/list';
 import { type ProseRefusal, paragraphsOf, proseRows } from './stages/prose';
 import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommendations';
 import type { NotTaken } from './stages/roles';
+import type { Run } from './stages/runs';
 import {
   laboratoryName,
   notSoil,
@@ -22,6 +22,8 @@ import {
   zoneAt,
   zonesOf,
 } from './stages/sections';
+import { rowsOfTable, type TableRow } from './stages/tableRows';
+import { type Table, tablesOf } from './stages/tables';
 import { type NumberStyle, numberStyle } from './stages/values';
 import { type Upright, uprightWords } from './stages/words';
 import { type Page, type Reading, type Remark, refusedReading } from './types';

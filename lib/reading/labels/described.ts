@@ -32,6 +32,15 @@ function leads(word: string): boolean {
   return LEADS.has(word) || /-(extractable|soluble|available|exchangeable)$/.test(word);
 }
 
+/** True when every word only says how something was extracted, measured or counted. */
+export function onlyDescribes(text: string): boolean {
+  const words = normal(text.replace(/[/–—]/g, ' '))
+    .replace(SALTS, ' ')
+    .split(' ')
+    .filter((word) => word !== '');
+  return words.length > 0 && words.every((word) => DESCRIBES.has(word) || MOLAR.test(word));
+}
+
 /**
  * The name at the head of a long label whose other words only describe: "Phosphorus extractable with bicarbonate
  * (Olsen)". `find` answers for a normal form. Null when any other word could change the meaning.

@@ -41,9 +41,13 @@ function printedUnit(text: string, spelling: string): string {
   return at < 0 ? spelling : bare.slice(at, at + spelling.length);
 }
 
+/** No unit and no label is longer; a longer text is not looked through for one. */
+const LONGEST_UNIT = 80;
+const LONGEST_LABEL = 400;
+
 /** The unit when the text is a unit and nothing else. */
 export function unitOnly(text: string): { unit: UnitKey; printed: string } | null {
-  const found = unitIn(text);
+  const found = text.length > LONGEST_UNIT ? null : unitIn(text);
   if (found === null || found.rest !== '') return null;
   return { unit: found.unit, printed: text.replace(/^[([]|[)\]]$/g, '').trim() };
 }
@@ -243,6 +247,7 @@ const nameIn = remembered(
  * above it, which can add a unit, a method or "base saturation" but never name the analyte by themselves.
  */
 export function readLabel(text: string, captions: readonly string[] = []): Label | null {
+  if (text.length > LONGEST_LABEL) return null;
   const named = nameIn(text);
   if (named === null) {
     // "Particle size: sand", "Base saturation: calcium": what stands before the colon is the caption.

@@ -17,8 +17,12 @@ export function normal(text: string): string {
     .trim();
 }
 
+/** A word or cell longer than this is cut: nothing a laboratory prints in one is, and each pattern's time is bounded by it. */
+export const LONGEST_TEXT = 1_000;
+
 /** Control and bidirectional characters never reach the grid or a sentence. */
-export function clean(text: string): string {
+export function clean(given: string): string {
+  const text = given.length > LONGEST_TEXT ? given.slice(0, LONGEST_TEXT) : given;
   // Nearly every word is plain printable ASCII and needs no cleaning.
   if (/^[!-~]+$/.test(text)) return text;
   return (

@@ -1,7 +1,7 @@
 import { remark } from '../candidate';
 import { type Label, readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
-import type { ListRow } from './down';
+import type { ListRow } from './list';
 import { labelText } from './rowLabels';
 import { storedBox } from './words';
 

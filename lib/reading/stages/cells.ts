@@ -79,6 +79,16 @@ function parts(phrase: Phrase, style: NumberStyle): Phrase[] {
   return [phrase];
 }
 
+/** A unit set right behind its number belongs to it, wherever the columns part. */
+export function isUnitOf(value: PageCell | undefined, cell: PageCell): boolean {
+  return (
+    value?.meaning.kind === 'value' &&
+    value.meaning.unit === null &&
+    unitOnly(cell.phrase.text) !== null &&
+    cell.phrase.x0 - value.phrase.x1 < 1.1 * value.phrase.size
+  );
+}
+
 /** A row of a list: words first, then a unit, a number or a blank. */
 function inRow(before: readonly Phrase[], style: NumberStyle): boolean {
   const [first, ...rest] = before;

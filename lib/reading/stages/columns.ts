@@ -1,9 +1,11 @@
 import { analyte } from '@/lib/domain/analytes';
 import type { IdentityField } from '../candidate';
+import { onlyDescribes } from '../labels/described';
 import { type Label, methodIn, readLabel, unitIn, unitOnly } from '../labels/label';
-import type { CellLine, PageCell } from './cells';
+import { type CellLine, isUnitOf, type PageCell } from './cells';
 import { fieldOf } from './identity';
 import { type Phrase, phraseOf } from './lines';
+import { repeatedGroups } from './repeated';
 import { type Role, roleOf } from './roles';
 
 export type Column = {
@@ -40,10 +42,10 @@ function overlap(a: Span, b: Span): number {
   return Math.min(a.x1, b.x1) - Math.max(a.x0, b.x0);
 }
 
-/** Columns from the numbers and names of the data rows: cells that stand over one another. */
-export function spansOf(rows: readonly CellLine[]): Span[] {
+/** Columns from the numbers and names of the data rows: cells that stand over one another; units of a list have columns of their own. */
+export function spansOf(rows: readonly CellLine[], withUnits = false): Span[] {
   const cells = rows
-    .flatMap((row) => row.cells)
+    .flatMap((row) => row.cells.filter((cell, index) => withUnits || !isUnitOf(row.cells[index - 1], cell)))
     .filter((cell) => cell.meaning.kind !== 'rating')
     .map((cell) => ({ x0: cell.phrase.x0, x1: cell.phrase.x1 }))
     .sort((a, b) => a.x0 - b.x0);
@@ -126,7 +128,9 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
   const best = over.sort((a, b) => overlap(b, phrase) - overlap(a, phrase))[0];
   if (best !== undefined) {
     const at = stacks.indexOf(best);
-    const narrow = best.own.length > 0 && line.length < stacks.length && saysForSeveral(phrase.text);
+    const below = best.own.join(' ');
+    const names = readLabel(phrase.text) !== null && readLabel(below) === null;
+    const narrow = below !== '' && line.length < stacks.length && (names || saysForSeveral(phrase.text));
     if (narrow) captions.push(captionOf(phrase, line, stacks, at, at));
     else {
       best.own.unshift(phrase.text);
@@ -155,8 +159,9 @@ const CHARGED = new Set(['potassium', 'calcium', 'magnesium', 'sodium', 'exchang
 
 /** "Phosphorus" over "M3" and "Bray 1": the caption is the name, the column's own words are its method or unit. */
 function namedByCaption(own: string, caption: string): Label | null {
-  if (own === '' || roleOf(own, false) !== null || (readLabel(caption)?.strength ?? 0) < 0.97) return null;
-  const joined = readLabel(`${caption} ${own}`);
+  const name = readLabel(caption);
+  if (own === '' || roleOf(own, false) !== null || name === null || name.strength < 0.93) return null;
+  const joined = readLabel(`${caption} ${own}`) ?? (onlyDescribes(own) ? readLabel(caption, [own]) : null);
   return joined === null ? null : { ...joined, strength: Math.min(joined.strength, 0.97) };
 }
 
@@ -216,12 +221,15 @@ const ADVICE_UNITS = new Set([
 ]);
 
 function meaningOf(stack: Stack, first: boolean): Column {
-  const heading = stack.own.join(' ');
+  const heading = stack.own.join(' ').replace(/(\p{L})- (\p{Ll})/gu, '$1$2');
   const span = { x0: stack.x0, x1: stack.x1, heading };
   let label: Label | null = null;
   let unexplained = 0;
   for (let drop = 0; drop < Math.max(stack.own.length, 1) && label === null; drop++) {
-    label = readLabel(stack.own.slice(drop).join(' '), [...stack.own.slice(0, drop), ...stack.captions]);
+    label = readLabel(drop === 0 ? heading : stack.own.slice(drop).join(' '), [
+      ...stack.own.slice(0, drop),
+      ...stack.captions,
+    ]);
     unexplained = drop;
   }
   // A last line that is no unit we know ("mval/100 g") must not hide the analyte: the unit is then missing, and doubted.
@@ -248,6 +256,23 @@ function meaningOf(stack: Stack, first: boolean): Column {
   return { ...span, label, field: label === null ? field : null, role, position: stack.over ? 1 : 0.96, unexplained };
 }
 
+/** Captions over groups of columns that repeat one another, one caption a group; the phrases that were given away. */
+function overGroups(phrases: readonly Phrase[], stacks: readonly Stack[]): ReadonlySet<Phrase> {
+  const groups = repeatedGroups(stacks, (stack) => stack.own.join(' '));
+  const none = new Set<Phrase>();
+  if (groups.length === 0) return none;
+  const homes = groups.map((group) => {
+    const span = { x0: Math.min(...group.map((one) => one.x0)), x1: Math.max(...group.map((one) => one.x1)) };
+    return { group, over: phrases.filter((phrase) => overlap(span, phrase) > 0) };
+  });
+  if (homes.some(({ over }) => over.length > 1) || homes.filter(({ over }) => over.length === 1).length < 2)
+    return none;
+  if (new Set(homes.flatMap(({ over }) => over)).size < homes.flatMap(({ over }) => over).length) return none;
+  for (const { group, over } of homes)
+    for (const stack of group) for (const phrase of over) stack.captions.push(phrase.text);
+  return new Set(homes.flatMap(({ over }) => over));
+}
+
 /** Stage 5. Columns with the meaning of their stacked headings; captions that stretch over several are given to each. */
 export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]): Column[] {
   const spans = spansOf(rows);
@@ -255,7 +280,8 @@ export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]
   const captions: Caption[] = [];
   for (const line of [...header].reverse()) {
     const phrases = line.cells.flatMap((cell: PageCell) => partHeading(cell.phrase, spans));
-    for (const phrase of phrases) place(phrase, phrases, stacks, captions);
+    const grouped = overGroups(phrases, stacks);
+    for (const phrase of phrases) if (!grouped.has(phrase)) place(phrase, phrases, stacks, captions);
   }
   for (const caption of captions.reverse()) spreadCaption(caption, stacks);
   return stacks.map((stack, index) => meaningOf(stack, index === 0));

@@ -55,7 +55,7 @@ export function fieldWithValue(text: string): { field: IdentityField; value: str
   if (colon > 0) {
     const field = fieldOf(text.slice(0, colon));
     const value = text.slice(colon + 1).trim();
-    return field === null || value === '' ? null : { field, value };
+    return field === null || value === '' ? null : { field, value: value.split(/\s[·|•]\s/)[0]?.trim() ?? value };
   }
   // "Sample SP-1", "Plot 4": without a colon only a short name with a figure in it.
   const plain = /^(sample|plot|bed|field|sample id|sample no\.?)\s+(\S+(?: \S+){0,2})$/i.exec(text);
@@ -115,6 +115,7 @@ export function fieldsInside(words: readonly string[]): Inside[] {
       .slice(start.to, starts[index + 1]?.from ?? words.length)
       .join(' ')
       .replace(start.field === 'labNumber' || start.field === 'depth' ? /[),;].*$|\. .*$/ : /^$/, '')
+      .replace(/\s[·|•](\s.*)?$/, '')
       .replace(/[,;|·•.]+$/, '')
       .trim(),
     from: start.from,
@@ -147,6 +148,75 @@ function below(lines: readonly CellLine[], at: number, cell: PageCell): string |
     if (hit !== undefined) return isHeading(hit.phrase.text) ? null : hit.phrase.text;
   }
   return null;
+}
+
+/** The name of a sample stands over or before its laboratory number when nothing else names it. */
+function namesBeside(lines: readonly CellLine[], hits: readonly IdentityHit[]): IdentityHit[] {
+  return hits.flatMap((hit): IdentityHit[] => {
+    if (hit.field !== 'labNumber') return [];
+    const near = hits.some(
+      (other) =>
+        other.field === 'sampleId' &&
+        other.page === hit.page &&
+        Math.abs(other.y0 - hit.y0) < 40 &&
+        Math.abs(other.x0 - hit.x0) < 260,
+    );
+    if (near) return [];
+    const at = lines.findIndex((line) => line.line.page.number === hit.page && line.line.index === hit.line);
+    const [own, above] = [lines[at], lines[at - 1]];
+    const plain = (cell: PageCell | undefined) =>
+      cell !== undefined &&
+      cell.meaning.kind === 'text' &&
+      cell.phrase.words.length <= 5 &&
+      !isHeading(cell.phrase.text) &&
+      !/[:@]|\d{4}/.test(cell.phrase.text) &&
+      readLabel(cell.phrase.text) === null;
+    const before = own?.cells[0];
+    if (
+      before !== undefined &&
+      own !== undefined &&
+      own.cells.length <= 3 &&
+      plain(before) &&
+      before.phrase.x1 < hit.x0 + 1
+    )
+      return [
+        {
+          field: 'sampleId',
+          value: before.phrase.text,
+          page: hit.page,
+          line: hit.line,
+          x0: before.phrase.x0,
+          y0: before.phrase.y0,
+        },
+      ];
+    const number = own?.cells.find((cell) => cell.phrase.x0 <= hit.x0 && cell.phrase.x1 > hit.x0);
+    const over = above?.cells.find(
+      (cell) => number !== undefined && cell.phrase.x0 < number.phrase.x1 && cell.phrase.x1 > number.phrase.x0,
+    );
+    if (
+      over === undefined ||
+      number === undefined ||
+      above?.line.page !== own?.line.page ||
+      above === undefined ||
+      !plain(over) ||
+      above.cells.length < 1 ||
+      number.phrase.y0 - over.phrase.y1 > 1.2 * over.phrase.size
+    )
+      return [];
+    // The laboratory's own name over its address is no sample.
+    if (/\b(lab|labs|laborator|service|institute|university|street|road|box|centre|center)\b/i.test(over.phrase.text))
+      return [];
+    return [
+      {
+        field: 'sampleId',
+        value: over.phrase.text,
+        page: hit.page,
+        line: hit.line - 1,
+        x0: over.phrase.x0,
+        y0: over.phrase.y0,
+      },
+    ];
+  });
 }
 
 /** Stage 4a. Form boxes around the numbers: "label: value", label beside value, label over value. */
@@ -185,7 +255,7 @@ export function identityHits(lines: readonly CellLine[], taken: ReadonlySet<Cell
       if (value !== null && fits(field, value)) hits.push({ field, value, ...place });
     }
   }
-  return hits;
+  return [...hits, ...namesBeside(lines, hits)];
 }
 
 /** Hits that belong together, first one of each field kept. */

@@ -1,8 +1,8 @@
 import { type Candidate, remark } from '../candidate';
 import { type Label, readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox } from './cells';
-import type { ListRow } from './down';
 import { type Phrase, phraseOf } from './lines';
+import type { ListRow } from './list';
 import { type NumberStyle, ratingIn, readCell, type Value } from './values';
 import { type Placed, storedBox } from './words';
 
@@ -220,7 +220,7 @@ function pairsOf(words: readonly Placed[], piece: Piece, style: NumberStyle) {
       );
     });
     const link = after[0] === undefined ? '' : textOf(words, name.to, after[0].from);
-    const close =
+    const _close =
       after[0] !== undefined &&
       after[0].from - name.to <= 9 &&
       (link === '' || FOUND.test(` ${link} `) || /[:=(]$/.test(words[name.to - 1]?.text ?? ''));

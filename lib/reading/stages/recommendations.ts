@@ -2,8 +2,8 @@ import type { UnitKey } from '@/lib/domain/analytes';
 import { unitIn } from '../labels/label';
 import type { ReadRecommendation } from '../types';
 import type { CellLine } from './cells';
-import type { TableRow } from './matrix';
 import type { ZoneBox } from './sections';
+import type { TableRow } from './tableRows';
 import { storedBox } from './words';
 
 const AMOUNT = /(?<![\d.,/])(\d{1,3}(?:,\d{3})+|\d*\.?\d+)(?:\s*(?:-|–|to)\s*\d*\.?\d+)?\s*/;

@@ -6,6 +6,7 @@ import { spansOf } from './columns';
 import { ANY_DATE } from './dates';
 import { fieldOf, fieldWithValue } from './identity';
 import { type Phrase, phraseOf } from './lines';
+import { repeatedGroups } from './repeated';
 import { type Role, roleOf } from './roles';
 import type { Segment } from './rowLabels';
 import { ratingIn } from './values';
@@ -124,29 +125,8 @@ export function isHeadingLine(line: CellLine, within: Span): boolean {
   return roles.length >= 2 && roles.length >= 0.5 * cells.length;
 }
 
-/** Columns in groups that repeat one another: "found, target | found, target". */
-function repeatedGroups(columns: readonly Column[]): Column[][] {
-  const groups: Column[][] = [];
-  for (const column of columns) {
-    const own = column.own.join(' ').toLowerCase();
-    if (own === '') continue;
-    const last = groups[groups.length - 1];
-    if (last === undefined || last.some((other) => other.own.join(' ').toLowerCase() === own)) groups.push([column]);
-    else last.push(column);
-  }
-  const again = groups
-    .slice(1)
-    .every((group) =>
-      group.every((column) => groups[0]?.some((other) => other.own.join(' ') === column.own.join(' '))),
-    );
-  return groups.length >= 2 && again ? groups : [];
-}
-
 function placeLine(phrases: readonly Phrase[], columns: readonly Column[], size: number) {
-  const repeating = columns.filter(
-    (column) => columns.filter((other) => other.own.join(' ') === column.own.join(' ')).length >= 2,
-  );
-  const groups = repeatedGroups(repeating);
+  const groups = repeatedGroups(columns, (column) => column.own.join(' '));
   const spans = groups.map((group) => ({
     x0: Math.min(...group.map((one) => one.x0)),
     x1: Math.max(...group.map((one) => one.x1)),
@@ -244,7 +224,7 @@ function settle(column: Column, first: boolean): RunColumn {
 export function runColumns(segments: readonly Segment[], headings: readonly CellLine[], within: Span): RunColumn[] {
   const rows = segments.map((segment) => ({ ...segment.line, cells: segment.cells }));
   const labels = Math.max(...segments.map((segment) => segment.x1));
-  const columns: Column[] = spansOf(rows)
+  const columns: Column[] = spansOf(rows, true)
     .filter(
       (span) => span.x1 > labels - 1 || rows.some((row) => row.cells.some((cell) => overlap(cell.phrase, span) > 0)),
     )

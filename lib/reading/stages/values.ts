@@ -108,8 +108,12 @@ function tailOf(rest: string): Tail | null {
   return null;
 }
 
+/** No number with its sign, unit and rating is longer; a longer text is not looked through for one. */
+export const LONGEST_CELL = 200;
+
 /** What one cell says. A "+" glued to a rating letter ("221H+") is the rating's; after bare digits it means "or more". */
 export function readCell(raw: string, style: NumberStyle): CellMeaning {
+  if (raw.length > LONGEST_CELL) return { kind: 'text' };
   const bracketed = /^\((.+)\)$/.exec(raw.trim());
   if (bracketed !== null && /^[<>]?\s?\d/.test(bracketed[1] ?? '')) {
     const inside = readCell(bracketed[1] ?? '', style);

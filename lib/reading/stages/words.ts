@@ -47,7 +47,7 @@ function turnWord(word: Word, page: Page, turn: 0 | 90 | 180 | 270): Placed {
 function withoutLeaders(word: Placed): Placed[] {
   // Rules drawn with characters part the page for the eye only.
   if (/^[.…_]+$|^[|¦]+$|^[-=~*+|]{5,}$/.test(word.text)) return [];
-  const match = /^(.*?)([._·…]{4,})(.*)$/.exec(word.text);
+  const match = /^(.*?)([._·…]{4,})(.*)$/s.exec(word.text);
   if (match === null) return [word];
   const [head, dots, tail] = [match[1] ?? '', match[2] ?? '', match[3] ?? ''];
   const step = (word.x1 - word.x0) / word.text.length;
