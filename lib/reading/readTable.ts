@@ -142,7 +142,8 @@ export function readTableTraced(input: TableInput): { reading: Reading; trace: T
   const other = materials.find((one) => one !== null) ?? (soilSaid ? null : materialByNumbers(parts)) ?? null;
   const nothing = soil.length === 0 || (other !== null && materials.every((one) => one === null));
   const unsoiled = trace.untaken.some((one) => one.why === 'not-soil');
-  const warnings: Remark[] = [...(input.warnings ?? [])];
+  const remarks = new Map(soil.flatMap((one) => one.remarks.map((remark): [string, Remark] => [remark.code, remark])));
+  const warnings: Remark[] = [...(input.warnings ?? []), ...remarks.values()];
   if (other !== null || unsoiled) {
     const what = other ?? 'an analysis of something else';
     const some = nothing || parts.every((part) => part.candidates.length === 0);

@@ -1,16 +1,21 @@
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { asc, eq } from 'drizzle-orm';
 import { afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { laboratory, readingRow, recommendation, report, reportSample } from '@/db/schema';
 import { bringBack } from '@/lib/data/reports/bringBack';
 import { getReport } from '@/lib/data/reports/getReport';
+import { getReportFile } from '@/lib/data/reports/getReportFile';
 import { readAgain } from '@/lib/data/reports/readAgain';
 import { setAside } from '@/lib/data/reports/setAside';
 import { takeByHand } from '@/lib/data/reports/takeByHand';
 import { uploadReport } from '@/lib/data/reports/uploadReport';
 import { withSite } from '@/lib/data/transaction';
+import type { SheetRows } from '@/lib/jobs/readFile/messages';
 import { giveUpReport, type ReadFile, readReportWith } from '@/lib/jobs/readReport/handler';
 import { sweepUploads } from '@/lib/jobs/sweepUploads/handler';
 import { type Reading, refusedReading } from '@/lib/reading/types';
+import { REPORTS } from '../reading/compare';
 import { ctxAs, ctxWorker, makePlot, makeSite, type TestSite, useWorld } from '../support/factory';
 import { calmStore, pdfBytes, problemOf, readResult, readSample, soilReading, tellStore } from '../support/reports';
 
@@ -92,6 +97,40 @@ async function stand(id: string) {
 }
 const jobsFor = (id: string) =>
   world.owner()`select 1 from queue.job where data ->> 'id' = ${id} and name = 'read-report'`;
+
+describe('reading a workbook', () => {
+  const send = async (name: string) => {
+    const bytes = new Uint8Array(readFileSync(join(REPORTS, 'sheets', name)));
+    return (
+      await uploadReport({ ctx: await ctxAs(here.people.helper), input: { siteId: here.id, fileName: name, bytes } })
+    ).reportId;
+  };
+  const read = async (id: string, rows: SheetRows) =>
+    readReportWith(answering(twoSamples()), () => Promise.resolve(rows))({
+      ctx: await ctxWorker(),
+      payload: { siteId: here.id, id },
+      signal: new AbortController().signal,
+    });
+  const cells = async (id: string) =>
+    getReportFile({ ctx: await ctxAs(here.people.helper), input: { siteId: here.id, reportId: id, as: 'cells' } });
+
+  it('keeps its cells beside it for the review', async () => {
+    const id = await send('hidden-parts.xlsx');
+    const sheets = [{ number: 1, name: 'Results', rows: [['pH'], ['6.4']] }];
+    await read(id, { ok: true, sheets, remarks: [] });
+    const file = await cells(id);
+    expect(file.contentType).toBe('application/json');
+    expect(JSON.parse(new TextDecoder().decode(file.bytes))).toEqual({ sheets });
+    expect((await stand(id)).row.state).toBe('in-review');
+  });
+
+  it('goes without them when there are none', async () => {
+    const id = await send('days-from-1904.xlsx');
+    await read(id, { ok: false, error: { code: 'broken-sheet', sentence: 'It is damaged.' } });
+    await expect(cells(id)).rejects.toMatchObject({ code: 'not-found' });
+    expect((await stand(id)).row.state).toBe('in-review');
+  });
+});
 
 describe('reading a report', () => {
   it('writes samples, rows and recommendations, and brings the report to review', async () => {

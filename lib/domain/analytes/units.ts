@@ -9,7 +9,7 @@ const ROWS = [
     'mg/kg',
     'mg/kg',
     'mass',
-    'ppm PPM p.p.m. mg/kg mg/Kg|mg kg-1|mg·kg⁻¹|mg kg⁻¹ ug/g µg/g μg/g|parts per million|mg P/kg|mg N/kg|mg K/kg|mg S/kg|mg B/kg|mg Mg/kg|mg Ca/kg',
+    'ppm PPM p.p.m. mg/kg mg/Kg|mg kg-1|mg·kg⁻¹|mg kg⁻¹ ug/g µg/g μg/g|parts per million|mg P/kg|mg N/kg|mg K/kg|mg S/kg|mg B/kg|mg Ca/kg',
   ],
   ['mg/L', 'mg/L', 'volume', 'mg/L mg/l|mg L-1|mg/litre|mg/liter'],
   ['mg/dm3', 'mg/dm³', 'volume', 'mg/dm3 mg/dm³|mg dm-3'],

@@ -1,12 +1,13 @@
-import type { Candidate, Identity, SamplePart } from '../candidate';
+import type { Candidate, Identity, IdentityField, SamplePart } from '../candidate';
 import { methodIn, unitOnly } from '../labels/label';
 import { fieldWithValue } from '../stages/identity';
 import { roleOf } from '../stages/roles';
 import { ratingIn } from '../stages/values';
 import type { ReadRecommendation } from '../types';
+import { adviceInWords } from './advice';
 import { candidateOf } from './candidates';
 import type { Facts } from './facts';
-import { dateText, depthText, fieldOf, joinDepth, nameRank } from './fields';
+import { DATE_ASSUMED, dateText, depthText, fieldOf, isBareDate, joinDepth, nameRank } from './fields';
 import { type ColumnRole, roleIn, yearIn } from './headingRole';
 import { otherMaterial } from './material';
 import { isNoSample } from './names';
@@ -22,6 +23,8 @@ type ListColumn = {
   readonly head: string;
   readonly kind: Kind;
   readonly year: number | null;
+  /** The line over the heading, where it may name the sample. */
+  readonly over: string;
 };
 
 /** Rows of this stage: those in which a name of an analyte has a number somewhere to its right. */
@@ -81,8 +84,7 @@ function kindOf(facts: Facts, rows: readonly number[], at: number, heads: readon
     numbers < 0.3
   )
     return 'kind';
-  const field = fieldOf(head);
-  if (field !== null) return 'identity';
+  if (fieldOf(head) !== null || (isBareDate(head) && numbers < 0.3)) return 'identity';
   if (ANALYTE_HEAD.test(spoken(head)) && numbers < 0.3 && units < 0.6) return 'other';
   const role = roleIn(head) ?? (heads[1] === undefined || unitOnly(spoken(head)) === null ? null : roleIn(heads[1]));
   if (numbers > 0.3) {
@@ -136,6 +138,12 @@ function identityOfColumn(facts: Facts, free: readonly number[], last: number, l
     : identity;
 }
 
+/** A bare "Date" beside each sample is the day of sampling when no other column is; the reading says so. */
+function fieldIn(columns: readonly ListColumn[], head: string): IdentityField | null {
+  if (!isBareDate(head)) return fieldOf(head);
+  return columns.some((one) => fieldOf(one.head) === 'dateSampled') ? 'other' : 'dateSampled';
+}
+
 function rowIdentity(facts: Facts, columns: readonly ListColumn[], row: number): Identity {
   const identity: Identity = {};
   let rank = 0;
@@ -143,7 +151,7 @@ function rowIdentity(facts: Facts, columns: readonly ListColumn[], row: number):
   for (const column of columns) {
     if (column.kind !== 'identity') continue;
     const cell = facts.at(row, column.at);
-    const field = fieldOf(column.head);
+    const field = fieldIn(columns, column.head);
     if (cell === '' || field === null) continue;
     if (field === 'sampleId') {
       if (nameRank(column.head) <= rank) continue;
@@ -181,8 +189,14 @@ function columnsFor(facts: Facts, rows: readonly number[], first: number, labelA
   return Array.from({ length: facts.width }, (_, at): ListColumn => {
     const heads = headsOver(facts, first, at, labelAt);
     const head = heads[0] ?? '';
-    if (at === labelAt) return { at, head, kind: 'analyte', year: null };
-    return { at, head, kind: kindOf(facts, rows, at, heads, labelAt), year: yearIn(head) ?? yearIn(heads[1] ?? '') };
+    if (at === labelAt) return { at, head, kind: 'analyte', year: null, over: '' };
+    return {
+      at,
+      head,
+      kind: kindOf(facts, rows, at, heads, labelAt),
+      year: yearIn(head) ?? yearIn(heads[1] ?? ''),
+      over: heads[1] ?? '',
+    };
   });
 }
 
@@ -276,6 +290,14 @@ export function analytesDown(facts: Facts, free: readonly number[], ledger: Ledg
     const noSample = hasRowNames && own.sampleId !== undefined && isNoSample(own.sampleId, own);
     for (const column of columns) {
       const meaning = facts.meaning(row, column.at);
+      if (meaning.kind === 'text' && column.kind === 'recommendation') {
+        const advice = adviceInWords(
+          facts.at(row, column.at),
+          own.sampleId ?? section.sampleId ?? null,
+          facts.at(row, labelAt),
+        );
+        if (advice !== null) recommendations.push(advice);
+      }
       if (meaning.kind !== 'value') continue;
       if (!results.includes(column.at)) {
         note(ledger, row, column.at, notResultOf(column));
@@ -328,12 +350,7 @@ export function analytesDown(facts: Facts, free: readonly number[], ledger: Ledg
       const identity = hasRowNames
         ? { ...pickShared(section), ...own }
         : across
-          ? {
-              ...(column.head === '' || unitOnly(spoken(column.head)) !== null || column.kind === 'result'
-                ? {}
-                : { sampleId: column.head }),
-              ...identityAt(column.at),
-            }
+          ? { ...sampleOver(column), ...identityAt(column.at) }
           : { ...section, ...identityWhenAlone(identityAt(column.at), section) };
       const key = JSON.stringify(across ? [column.at, identity] : identity);
       const part = parts.get(key) ?? { identity, candidates: [] };
@@ -342,7 +359,19 @@ export function analytesDown(facts: Facts, free: readonly number[], ledger: Ledg
     }
   }
   const list: SamplePart[] = [...parts.values()];
-  return list.length === 0 ? null : { parts: list, recommendations, rows: used };
+  const assumed = columns.some(
+    (one) => one.kind === 'identity' && isBareDate(one.head) && fieldIn(columns, one.head) === 'dateSampled',
+  );
+  return list.length === 0
+    ? null
+    : { parts: list, recommendations, rows: used, remarks: assumed ? [DATE_ASSUMED] : [] };
+}
+
+/** The name of a sample over its column, or over the words "Result" and "Rating" that stand under it. */
+function sampleOver(column: ListColumn): Identity {
+  const name = column.kind === 'number' ? column.head : column.over;
+  const says = name !== '' && unitOnly(spoken(name)) === null && roleIn(name) === null && roleOf(name, false) === null;
+  return says && !ANALYTE_HEAD.test(spoken(name)) ? { sampleId: name } : {};
 }
 
 function cellOf(facts: Facts, row: number, at: number | null): string {

@@ -1,4 +1,4 @@
-import { type CellMeaning, type NumberStyle, readCell } from '../stages/values';
+import { type CellMeaning, LONGEST_CELL, type NumberStyle, readCell } from '../stages/values';
 
 const SCIENCE = /^([<>]\s*)?(\d+(?:[.,]\d+)?)[eE]([+-]?\d{1,2})$/;
 const NONE_FOUND =
@@ -25,7 +25,7 @@ function plain(text: string): string | null {
 /** What one cell of a data file says: as on a page, and in the further ways that data files have. */
 export function readTableCell(text: string, style: NumberStyle): CellMeaning {
   const direct = readCell(text, style);
-  if (direct.kind !== 'text') return direct;
+  if (direct.kind !== 'text' || text.length > LONGEST_CELL) return direct;
   const bare = {
     kind: 'value',
     printed: text,

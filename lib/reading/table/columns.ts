@@ -4,7 +4,7 @@ import { type Label, methodIn, unitIn, unitOnly } from '../labels/label';
 import { ratingIn } from '../stages/values';
 import type { Block } from './blocks';
 import type { Facts } from './facts';
-import { fieldOf } from './fields';
+import { fieldOf, isBareDate } from './fields';
 import { type ColumnRole, isWholeName, roleIn, withoutRole, yearIn } from './headingRole';
 import { labelOf, spoken } from './spoken';
 import { joined } from './stacked';
@@ -96,8 +96,8 @@ function shares(
   facts: Facts,
   block: Block,
   column: number,
-): { ratings: number; signs: number; units: number; numbers: number; filled: number } {
-  const counts = { ratings: 0, signs: 0, units: 0, numbers: 0, filled: 0 };
+): { ratings: number; signs: number; units: number; numbers: number; small: number; filled: number } {
+  const counts = { ratings: 0, signs: 0, units: 0, numbers: 0, small: 0, filled: 0 };
   const last = Math.min(block.to, block.from + 400);
   for (let row = block.from; row < last; row++) {
     const text = facts.at(row, column);
@@ -105,6 +105,7 @@ function shares(
     counts.filled += 1;
     if (/^([<>]|<=|>=|=|nd|u|j|b|lt|gt)$/i.test(text)) counts.signs += 1;
     else if (ratingIn(text) !== null) counts.ratings += 1;
+    if (/^[0-9][+-]?$/.test(text)) counts.small += 1;
     if (unitOnly(spoken(text)) !== null) counts.units += 1;
     if (facts.meaning(row, column).kind === 'value') counts.numbers += 1;
   }
@@ -198,6 +199,12 @@ function newestYear(columns: readonly Column[]): Column[] {
   });
 }
 
+/** A bare "Date" beside each sample is the day of sampling when no other column is; the reading says so. */
+function withDate(columns: Column[]): Column[] {
+  if (columns.some((column) => column.field === 'dateSampled')) return columns;
+  return columns.map((column) => (isBareDate(column.text) ? { ...column, field: 'dateSampled', role: null } : column));
+}
+
 /** Stage "columns": what each column of a table holds, from all its heading lines and from what stands in it. */
 export function columnsOf(facts: Facts, block: Block): Column[] {
   const plain = Array.from({ length: facts.width }, (_, at) => headingOf(facts, block, at));
@@ -211,6 +218,16 @@ export function columnsOf(facts: Facts, block: Block): Column[] {
         (one) => one !== column && one.label?.analyte === column.label?.analyte && one.role !== 'rating',
       );
       // "P level" is a rating beside "P (ppm)", and the result where it stands alone.
+      const classed = column.label.method === 'index' && content.small >= 0.8 * content.filled;
+      const weighed = plain.some(
+        (one) =>
+          one.label?.analyte === column.label?.analyte &&
+          one.label !== null &&
+          one.label.unit !== null &&
+          one.label.method !== 'index',
+      );
+      // "P index 2" beside "P 22 mg/L" is how the laboratory rates that number.
+      if (classed && weighed) return { ...column, role: 'rating' };
       const role = column.role === 'rating' && numeric && !another ? 'result' : (column.role ?? 'result');
       if (role === 'result' || role === 'date') {
         const ratingsOnly = content.ratings > 0 && content.numbers === 0 && content.ratings >= 0.6 * content.filled;
@@ -224,7 +241,7 @@ export function columnsOf(facts: Facts, block: Block): Column[] {
     if (content.filled > 0 && content.units >= 0.8 * content.filled) return { ...column, role: 'unit' };
     return column;
   });
-  return newestYear(kinds);
+  return withDate(newestYear(kinds));
 }
 
 /** The column of that role that goes with a result column: the one that names its analyte, else the nameless one beside it. */

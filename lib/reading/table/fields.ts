@@ -1,4 +1,4 @@
-import type { Identity, IdentityField } from '../candidate';
+import { type Identity, type IdentityField, remark } from '../candidate';
 import { fieldOf as pageField } from '../stages/identity';
 import { spoken } from './spoken';
 
@@ -52,6 +52,13 @@ function bare(text: string): string {
     .replace(/\s+/g, ' ')
     .trim();
 }
+
+export const isBareDate = (text: string): boolean => /^dates?$/i.test(text.trim());
+
+export const DATE_ASSUMED = remark(
+  'date-kind-assumed',
+  'The column "Date" does not say which day it means; it was taken as the day of sampling.',
+);
 
 const KNOWN = new Map<string, IdentityField | null>();
 

@@ -17,7 +17,7 @@ export type ColumnRole =
 const WORDS: readonly (readonly [ColumnRole, RegExp])[] = [
   [
     'recommendation',
-    /\b(rec(s|d|ommend(ed|ation|ations)?)? ?\d{0,2}\b\.?(?! (level|range|value))|to (be )?(apply|applied|add)|apply|application|fertili[sz]er( rate)?|suggested( rate)?|maintenance|build-?up|removal|crop need)\b/i,
+    /\b(rec(s|d|ommend(ed|ation|ations)?)? ?\d{0,2}\b\.?(?! (level|range|value))|to (be )?(apply|applied|add)|apply|application|fertili[sz]er( rate)?|suggested( rate)?|(nitrogen|n|phosphate|potash|p2o5|k2o|mgo|so3|nutrient|crop|magnesium|sulphur|sulfur) requirement|maintenance|build-?up|removal|crop need)\b/i,
   ],
   [
     'limit',

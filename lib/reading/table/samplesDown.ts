@@ -2,12 +2,12 @@ import type { Candidate, Identity, SamplePart } from '../candidate';
 import { unitIn } from '../labels/label';
 import { fieldWithValue } from '../stages/identity';
 import type { ReadRecommendation } from '../types';
+import { adviceInWords, adviceItem } from './advice';
 import type { Block } from './blocks';
 import { type Beside, candidateOf } from './candidates';
 import { type Column, columnsOf, companion } from './columns';
 import type { Facts } from './facts';
-import { dateText, depthText, joinDepth, nameRank } from './fields';
-import { withoutRole } from './headingRole';
+import { DATE_ASSUMED, dateText, depthText, isBareDate, joinDepth, nameRank } from './fields';
 import { otherMaterial } from './material';
 import { isNoSample, isSummary } from './names';
 import { spoken } from './spoken';
@@ -17,6 +17,8 @@ type Plan = {
   readonly columns: readonly Column[];
   readonly results: readonly (Column & { beside: Besides })[];
   readonly named: Column | null;
+  /** Columns of words before the numbers that may say what kind of row it is ("Found", "Desired"). */
+  readonly kinds: readonly number[];
 };
 type Besides = {
   readonly unit: number | null;
@@ -66,7 +68,10 @@ function planOf(facts: Facts, block: Block): Plan {
           texts.filter((text) => text !== '').length >= 0.5 * texts.length && texts.some((text) => /\p{L}/u.test(text))
         );
       }) ?? null);
-  return { columns, results, named };
+  const kinds = columns
+    .filter((one) => one.at < first && one.field === null && one.label === null && one.role === null && one !== named)
+    .map((one) => one.at);
+  return { columns, results, named, kinds };
 }
 
 /** What the cells of a row say of the sample. Of several name columns the one called a name or identity wins. */
@@ -107,6 +112,8 @@ function adviceAt(facts: Facts, plan: Plan, row: number, sampleId: string | null
   return plan.columns.flatMap((column) => {
     if (column.role !== 'recommendation') return [];
     const meaning = facts.meaning(row, column.at);
+    if (meaning.kind === 'text')
+      return adviceInWords(facts.at(row, column.at), sampleId, adviceItem(column.text)) ?? [];
     if (meaning.kind !== 'value' && meaning.kind !== 'range') return [];
     return [
       {
@@ -124,23 +131,6 @@ function adviceAt(facts: Facts, plan: Plan, row: number, sampleId: string | null
       },
     ];
   });
-}
-
-/** "Lime Rec (lb/ac)" advises lime. */
-export function adviceItem(heading: string): string {
-  const words = withoutRole(heading);
-  const unit = unitIn(words);
-  const bare = (unit === null ? words : cutText(words, unit.printed))
-    .replace(/\(\s*\)|\[\s*\]/g, ' ')
-    .replace(/[\s,;:([/-]+$/g, '')
-    .replace(/\s+/g, ' ')
-    .trim();
-  return bare === '' ? heading : bare;
-}
-
-function cutText(text: string, part: string): string {
-  const at = text.toLowerCase().indexOf(part.toLowerCase());
-  return at < 0 ? text : `${text.slice(0, at)} ${text.slice(at + part.length)}`;
 }
 
 /** A line between the rows that speaks of the samples under it: "Field: Mill meadow". */
@@ -185,7 +175,9 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
     const own = identityOf(facts, plan, row);
     const firstText = (facts.grid[row] ?? []).find((cell) => cell !== '') ?? '';
     rows.add(row);
-    if ([own.sampleId, firstText, facts.at(row, 0)].some((name) => name !== undefined && isNoSample(name, own))) {
+    const kinds = plan.kinds.map((at) => facts.at(row, at)).filter((text) => text !== '');
+    const names = [own.sampleId, firstText, facts.at(row, 0)].filter((name) => name !== undefined);
+    if (names.some((name) => isNoSample(name, own)) || kinds.some((kind) => isNoSample(kind, {}))) {
       bare(row, 'summary-row');
       continue;
     }
@@ -229,7 +221,8 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
     // A row of names and days without numbers still tells of its sample.
     if (candidates.length > 0 || !nameless) parts.push({ identity, candidates });
   }
-  return { parts, recommendations, rows };
+  const assumed = plan.columns.some((column) => column.field === 'dateSampled' && isBareDate(column.text));
+  return { parts, recommendations, rows, remarks: assumed ? [DATE_ASSUMED] : [] };
 }
 
 function pick(identity: Identity): Identity {

@@ -2,7 +2,7 @@ import type { Candidate, Identity, SamplePart } from '../candidate';
 import { methodIn, unitIn } from '../labels/label';
 import type { Statements } from '../stages/sections';
 import type { NumberStyle } from '../stages/values';
-import type { ReadRecommendation } from '../types';
+import type { ReadRecommendation, Remark } from '../types';
 import { analytesDown } from './analytesDown';
 import { blocksOf } from './blocks';
 import { type Facts, factsOf } from './facts';
@@ -22,6 +22,7 @@ export type SheetReading = {
   /** Lines that belong to no table: titles, notes, headings of columns. */
   readonly texts: readonly string[];
   readonly ledger: Ledger;
+  readonly remarks: readonly Remark[];
 };
 
 /** "P1" in the list of codes gives the unit and the method that the column's heading leaves out. */
@@ -69,6 +70,7 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
     laboratory: laboratoryColumn(facts) ?? laboratoryOf(facts, over),
     texts: [...around, ...heads].map((row) => (facts.grid[row] ?? []).filter((cell) => cell !== '').join(' ')),
     ledger,
+    remarks: all.flatMap((shape) => shape.remarks),
   };
 }
 

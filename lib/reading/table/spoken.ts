@@ -51,6 +51,7 @@ const UNIT_CODES: readonly (readonly [RegExp, string])[] = [
   [/\b[tT](?:on(?:ne)?s?)?[ .]ha\b/g, 't/ha'],
   [/\btons?[ .](?:per )?ac(?:re)?\b/gi, 'ton/acre'],
   [/\bparts per million\b/gi, 'ppm'],
+  [/\bmg (?:N|P|K|S|B|Mg|Ca|Na|Zn|Mn|Fe|Cu)\/kg\b/g, 'mg/kg'],
 ];
 
 /** Column codes are written "P_ppm", "pH.1to1" or "CaSat_pct"; for reading they are words. */
@@ -68,6 +69,7 @@ export function spoken(text: string): string {
     )
     .replace(/\b(K|Ca|Mg|Na|H)[ -]?(?:BS|Sat(?:n|ur)?)\b\.?/gi, '$1 saturation')
     .replace(/\b(?:BS|Sat)[ -](K|Ca|Mg|Na|H)\b/gi, '$1 saturation')
+    .replace(/\bOrg(?:anic)?\.? C\b/gi, 'Organic Carbon')
     .replace(/\bBase[ -]?Sat(?:uration)?\b\.?/gi, 'Base saturation')
     .replace(/\bBray[ -]?P?[ -]?([12])\b/gi, 'Bray $1')
     .replace(/\b(?:v\/v|w\/v|w:v|v:v)\b/gi, ' ')

@@ -1,5 +1,5 @@
 import type { SamplePart } from '../candidate';
-import type { ReadRecommendation } from '../types';
+import type { ReadRecommendation, Remark } from '../types';
 
 export type Grid = readonly (readonly string[])[];
 
@@ -40,6 +40,7 @@ export type Shape = {
   readonly recommendations: readonly ReadRecommendation[];
   /** Rows that belong to the table, so that the others can be read as titles and notes. */
   readonly rows: ReadonlySet<number>;
+  readonly remarks: readonly Remark[];
 };
 
 export const keyOf = (row: number, column: number): string => `${row}:${column}`;
