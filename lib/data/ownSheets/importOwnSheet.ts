@@ -3,7 +3,8 @@ import type { Transaction } from '@/db/client';
 import { ownSheet, readingRow, reportSample } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
 import { notFound, Problem } from '@/lib/errors';
-import type { AppliedMapping } from '@/lib/reading/ownSheet';
+import { type AppliedMapping, TYPED_BY_GROWER } from '@/lib/reading/ownSheet';
+import type { Reading } from '@/lib/reading/types';
 import { importSheetInput, type SheetImported } from '@/lib/schemas/ownSheets';
 import { getLivePlotInSite } from '../plots/getLivePlotInSite';
 import { lockPlots } from '../plots/lockPlots';
@@ -24,6 +25,18 @@ import { chosen, getSheetOfReport, mappingNow, rememberMapping } from './sheetSt
 const NO_PLOT = 'No plot was chosen for it.';
 const NO_DAY = 'The spreadsheet gives no day for it.';
 const NO_NUMBER = 'None of its numbers could be taken.';
+
+/** Whose numbers they are is said by the report; as a doubt of every row it would hide the real ones. */
+const unmarked = (reading: Reading): Reading => ({
+  ...reading,
+  samples: reading.samples.map((sample) => ({
+    ...sample,
+    results: sample.results.map((one) => ({
+      ...one,
+      doubts: one.doubts.filter((doubt) => doubt.code !== TYPED_BY_GROWER.code),
+    })),
+  })),
+});
 
 type Where = { tx: Transaction; siteId: SiteId };
 
@@ -106,7 +119,14 @@ export const importOwnSheet = siteVerb({
 
     const mapping = chosen(sheet, (await mappingNow(tx, siteId, sheet)).mapping, input);
     const applied = readMapped(sheet, mapping, row.fileName ?? '');
-    await writeReadingRows(tx, ctx, siteId, row, applied.reading, (sample) => plots.get(nameOf(sample)) ?? null);
+    await writeReadingRows(
+      tx,
+      ctx,
+      siteId,
+      row,
+      unmarked(applied.reading),
+      (sample) => plots.get(nameOf(sample)) ?? null,
+    );
     await leaveOut({ tx, siteId }, reportId, applied);
     const known = await tieToKnown({ tx, siteId }, row);
     const { samples, rows } = await loadReview(tx, siteId, reportId);

@@ -58,7 +58,7 @@ function dayOf(desk: Desk, row: number): { iso: string | null; printed: string |
         column,
         text,
         'date-missing',
-        'This row has no day of sampling; give it in the review.',
+        'This row has no day of sampling. Write it into the sheet if you know it.',
         false,
       );
     return { iso: null, printed: null };
@@ -66,8 +66,8 @@ function dayOf(desk: Desk, row: number): { iso: string | null; printed: string |
   const read = readDate(dateText(text), desk.mapping.dateOrder);
   if (read.ok) return { iso: read.iso, printed: text };
   const said = {
-    unreadable: `"${text}" could not be read as a day; give it in the review.`,
-    impossible: `"${text}" is not a possible day; give it in the review.`,
+    unreadable: `"${text}" could not be read as a day. Write it like 2024-04-10.`,
+    impossible: `"${text}" is not a possible day. Put it right in the sheet.`,
     ambiguous: `"${text}" can be day first or month first; choose how this sheet writes its dates.`,
   } as const;
   complain(desk, row, column, text, `date-${read.reason}`, said[read.reason], false);
@@ -295,7 +295,7 @@ export function applyMapping(input: { fileName: string; sheet: OwnRows; mapping:
         columnOf(mapping, 'sample-name'),
         '',
         'name-missing',
-        'This row has no name of a plot or sample; choose the plot in the review.',
+        'This row has no name of a plot or sample; all such rows are put to one plot.',
         false,
       );
     drafts.push(draft);

@@ -138,7 +138,7 @@ function doubtsOf(mapping: OwnMapping): Remark[] {
     doubts.push(
       remark(
         'no-date-column',
-        'No column seems to hold the day of sampling; choose it, or give the day in the review.',
+        'No column seems to hold the day of sampling; choose it; a sample without a day is left out.',
       ),
     );
   const bare = mapping.columns.filter(

@@ -31,6 +31,9 @@ export function ConfirmedNotice({ siteId, review, report }: { siteId: string; re
         </span>
       ))}
       {values > 0 ? '. They do not change any more; a wrong confirmation can be withdrawn with a reason.' : ''}
+      {report.origin === 'own-sheet' && values > 0
+        ? ' They come from a spreadsheet of your own: typed by the grower, with no laboratory page behind them.'
+        : ''}
       {report.origin === 'file' ? (
         <>
           {' '}

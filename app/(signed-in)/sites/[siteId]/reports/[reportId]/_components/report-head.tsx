@@ -20,6 +20,12 @@ type HeadProps = {
   refresh: () => Promise<void>;
 };
 
+const ORIGIN_WORDS: Record<Report['origin'], string> = {
+  file: 'sent in',
+  typed: 'typed in',
+  'own-sheet': 'own spreadsheet, sent in',
+};
+
 /** Name, state and what can be done with the whole report. */
 export function ReportHead({ path, siteId, report, role, personId, refresh }: HeadProps) {
   const { status, word } = STATE_WORDS[report.state];
@@ -39,7 +45,7 @@ export function ReportHead({ path, siteId, report, role, personId, refresh }: He
           <StatusWord status={status} className="mr-3 text-base">
             {word}
           </StatusWord>
-          {report.origin === 'typed' ? 'typed in' : 'sent in'} by {report.uploadedBy.name}, {onDay(report.uploadedAt)}
+          {ORIGIN_WORDS[report.origin]} by {report.uploadedBy.name}, {onDay(report.uploadedAt)}
           {report.revision > 1 ? `, reading ${report.revision} of the same file` : ''}
         </p>
       </div>

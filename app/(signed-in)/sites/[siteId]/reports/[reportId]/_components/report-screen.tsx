@@ -1,12 +1,13 @@
 'use client';
 
-import { useEffect, useRef } from 'react';
+import { type ComponentProps, useEffect, useRef } from 'react';
 import type { Report } from '@/lib/schemas/reports';
 import { useAnnounce } from '@/lib/ui/feedback/announce';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
 import { Skeleton } from '@/lib/ui/feedback/skeleton';
 import { BatchStrip } from './batch-strip';
 import { NotRead } from './not-read';
+import { LoadOwnSheet } from './own-sheet/load-own-sheet';
 import { ReadingProgress } from './reading-progress';
 import { ReportHead } from './report-head';
 import { hasReview, isWaiting } from './report-words';
@@ -36,7 +37,7 @@ export function ReportScreen(props: ReportScreenProps) {
       ) : null}
       {hasReview(report.state) ? (
         review ? (
-          <ReviewScreen {...props} path={path} live={live} review={review} report={report} />
+          <Reviewed {...props} path={path} live={live} review={review} report={report} />
         ) : live.problem ? null : (
           <div className="page-wrap max-w-[110rem]! py-6">
             <Skeleton label="Fetching the values" shape="table" rows={8} />
@@ -45,6 +46,14 @@ export function ReportScreen(props: ReportScreenProps) {
       ) : null}
     </>
   );
+}
+
+/** A grower's own sheet has columns to be read before there are rows. */
+function Reviewed(props: ComponentProps<typeof ReviewScreen>) {
+  const { path, role, live, report } = props;
+  const review = <ReviewScreen {...props} />;
+  if (report.origin !== 'own-sheet' || report.state !== 'in-review') return review;
+  return <LoadOwnSheet path={path} role={role} version={report.version} onImported={live.refresh} otherwise={review} />;
 }
 
 /** A state that changed by itself (the reader, another person) is said, and the focus stays where it is. */
