@@ -85,6 +85,18 @@ describe('a report held against the history of its plot', () => {
     expect(await warnings(now)).toEqual([]);
   });
 
+  it('asks once where two samples of one name go to a plot', async () => {
+    const { name, plotId } = await newPlot();
+    await confirm(await reading([sampleOf(name, '2025-04-10', [P('40')])]));
+    const now = await reading([sampleOf('Bag 9', '2026-04-10', [P('41')]), sampleOf('Bag 9', '2026-05-10', [P('42')])]);
+    const { samples } = await review(now);
+    for (const { id: reportSampleId, version } of samples) {
+      const input = { siteId: bench.here.id, reportId: now, reportSampleId, version, plotId };
+      await setSample({ ctx: bench.helper, input });
+    }
+    expect(await warnings(now)).toEqual(['sample-renamed']);
+  });
+
   it('keeps the reader’s own doubts, and lets "it is right" stand until the plot changes', async () => {
     const { name, plotId } = await newPlot();
     await confirm(await reading([sampleOf(name, '2025-04-10', [P('40')])]));

@@ -105,7 +105,7 @@ async function renewWarnings(
   said: readonly Doubt[],
 ): Promise<void> {
   const here = and(eq(report.siteId, siteId), eq(report.id, reportId));
-  const [row] = await tx.select({ warnings: report.warnings }).from(report).where(here);
+  const [row] = await tx.select({ warnings: report.warnings, origin: report.origin }).from(report).where(here);
   if (!row) return;
   const names = asked.flatMap((sample) => {
     const name = sample.fieldName ?? sample.printedName;
@@ -114,6 +114,9 @@ async function renewWarnings(
   const kept = row.warnings.filter(
     (one) => one.code !== 'sample-renamed' || !names.some((name) => one.sentence.startsWith(name)),
   );
-  const now = [...kept, ...said.map(({ code, sentence }) => ({ code, sentence }))];
+  // In a grower's own sheet each name was given its plot by hand; two samples of one name are one question.
+  const questions = row.origin === 'own-sheet' ? [] : said;
+  const once = new Map(questions.map(({ code, sentence }) => [sentence, { code, sentence }]));
+  const now = [...kept, ...once.values()];
   if (!sameDoubts(row.warnings, now)) await tx.update(report).set({ warnings: now }).where(here);
 }
