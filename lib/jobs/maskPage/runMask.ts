@@ -1,12 +1,15 @@
 import { fork } from 'node:child_process';
-import { existsSync } from 'node:fs';
+import { existsSync, readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { isFromMaskChild, type Masked, type NotMasked, type ToMaskChild } from './messages';
 
-const TIME_LIMIT_MS = 30_000;
+/** Reading a page from its picture takes most of it. */
+const TIME_LIMIT_MS = 75_000;
 const START_LIMIT_MS = 30_000;
 const HEAP_LIMIT_MB = 320;
+const MEMORY_LIMIT_BYTES = 1024 * 1024 * 1024;
+const MEMORY_CHECK_MS = 200;
 
 /** In development the child is the TypeScript file beside this one; in a bundle it is bundled beside the worker. */
 const CHILD_FILES = ['./child.ts', './maskPageChild.mjs'];
@@ -25,8 +28,18 @@ function childProgram(): { path: string; execArgv: string[] } {
 
 const TOO_SLOW: NotMasked = {
   ok: false,
-  sentence: 'Drawing this page took too long and was stopped. Describe the fault in words; no copy was made.',
+  sentence:
+    'Drawing this page took too much time or memory and was stopped. Describe the fault in words; no copy was made.',
 };
+
+/** Resident memory of a process where the system tells it (Linux); 0 elsewhere, where the heap limit alone holds. */
+function residentBytes(pid: number): number {
+  try {
+    return Number(readFileSync(`/proc/${pid}/statm`, 'utf8').split(' ')[1] ?? 0) * 4096;
+  } catch {
+    return 0;
+  }
+}
 
 /** Draws one page in a process of its own, killed past its time. Rejects when that process dies without an answer. */
 export function runMask(
@@ -49,6 +62,9 @@ export function runMask(
       kill();
     };
     let clock = setTimeout(late, START_LIMIT_MS);
+    const watch = setInterval(() => {
+      if (child.pid !== undefined && residentBytes(child.pid) > MEMORY_LIMIT_BYTES) late();
+    }, MEMORY_CHECK_MS);
     options.signal?.addEventListener('abort', kill, { once: true });
     child.on('message', (said: unknown) => {
       if (!isFromMaskChild(said)) return;
@@ -63,6 +79,7 @@ export function runMask(
     child.on('error', () => undefined);
     child.on('close', () => {
       clearTimeout(clock);
+      clearInterval(watch);
       options.signal?.removeEventListener('abort', kill);
       if (answer !== null) resolve(answer);
       else reject(new Error('The process that draws a page ended without an answer.'));

@@ -21,7 +21,9 @@ export function maskJson(
   pageText: string,
   pages: readonly object[] = [],
 ): unknown {
-  const hidden = new Set(hiddenWords.flatMap((word) => [plain(word), ...plain(word).split(' ')]).filter(Boolean));
+  // A part of a hidden day or telephone number is an ordinary number elsewhere.
+  const parts = hiddenWords.flatMap((word) => plain(word).split(' ')).filter((part) => !/^\d{1,4}$/.test(part));
+  const hidden = new Set([...hiddenWords.map(plain), ...parts].filter((text) => text !== ''));
   const joined = plain(pageText).replaceAll(' ', '');
   const maskToken = (token: string): string => {
     if (!/[\p{L}\p{N}]/u.test(token)) return token;

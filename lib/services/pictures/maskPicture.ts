@@ -15,7 +15,8 @@ const PAD_SHOWN = 0.12;
 const PAD_HIDDEN = 0.22;
 
 function spotOf(place: Place, { width, height }: Grey, pad: number): Spot {
-  const tall = (place.y1 - place.y0) * height;
+  // On a page that lies on its side a word is higher than wide; the smaller side is the height of its type.
+  const tall = Math.min((place.y1 - place.y0) * height, (place.x1 - place.x0) * width);
   const [px, py] = [tall * pad, tall * pad * 1.4];
   return {
     x0: Math.max(0, Math.floor(place.x0 * width - px)),

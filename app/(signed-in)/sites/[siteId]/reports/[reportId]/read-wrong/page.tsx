@@ -5,6 +5,8 @@ import { ReadWrong } from './_components/read-wrong';
 
 export const metadata = { title: 'This was read wrong' };
 
+const HAS_PAGES = new Set(['application/pdf', 'image/png', 'image/jpeg']);
+
 type PageProps = ReportParams & { searchParams: Promise<Record<string, string | string[] | undefined>> };
 
 export default async function ReadWrongPage({ params, searchParams }: PageProps) {
@@ -21,7 +23,7 @@ export default async function ReadWrongPage({ params, searchParams }: PageProps)
       name={report.fileName ?? 'Report typed in by hand'}
       pages={pages}
       first={Number.isInteger(asked) && asked >= 1 && asked <= pages ? asked : 1}
-      hasPages={report.contentType === 'application/pdf'}
+      hasPages={HAS_PAGES.has(report.contentType ?? '')}
     />
   );
 }

@@ -22,7 +22,7 @@ type WrongProps = {
   name: string;
   pages: number;
   first: number;
-  /** Only pages of a PDF are drawn. */
+  /** Only pages and pictures are drawn, no data files. */
   hasPages: boolean;
 };
 
@@ -76,9 +76,9 @@ export function ReadWrong({ siteId, reportId, name, pages, first, hasPages }: Wr
             ) : null}
           </form>
         ) : (
-          <Notice title="Only pages of a PDF can be copied">
-            Data files and pictures hold names where a program cannot be sure of them. Describe in words what was read
-            wrong: the label, what stands on the page, and what was read.
+          <Notice title="Only pages can be copied">
+            This file has no pages to draw. Describe in words what was read wrong: the label, what stands in the file,
+            and what was read.
           </Notice>
         )}
         {asked ? (
