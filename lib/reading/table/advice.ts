@@ -45,3 +45,26 @@ export function adviceInWords(text: string, sampleId: string | null, heading: st
     box: null,
   };
 }
+
+const ADVICE_UNITS: ReadonlySet<string> = new Set([
+  'lb/1000ft2',
+  'lb/100ft2',
+  'oz/1000ft2',
+  'oz/100ft2',
+  'oz/yd2',
+  'g/m2',
+  'cwt/acre',
+]);
+const AREA_UNITS: ReadonlySet<string> = new Set(['ton/acre', 't/ha', 'lb/acre', 'kg/ha']);
+
+export function isAdviceUnit(unit: string | null): boolean {
+  return unit !== null && ADVICE_UNITS.has(unit);
+}
+
+/** "Lime recommendation" names an analyte of the registry and is advice all the same; so is "Lime" by area. */
+export function isAdviceRow(name: string, unit: string | null): boolean {
+  if (/\brecommended (level|range)\b/i.test(name)) return false;
+  if (/\b(recommend\w*|rec|to apply|apply|needed|application)\b/i.test(name)) return true;
+  const byArea = unit !== null && AREA_UNITS.has(unit);
+  return byArea && /^(lime|limestone|gypsum)\b/i.test(name) && !/\b(req\w*|index)\b/i.test(name);
+}

@@ -1,405 +1,82 @@
-import type { Candidate, Identity, IdentityField, SamplePart } from '../candidate';
-import { methodIn, unitOnly } from '../labels/label';
-import { fieldWithValue } from '../stages/identity';
-import { roleOf } from '../stages/roles';
-import { ratingIn } from '../stages/values';
+import type { Candidate, Identity, SamplePart } from '../candidate';
+import { unitOnly } from '../labels/label';
 import type { ReadRecommendation } from '../types';
-import { adviceInWords } from './advice';
-import { candidateOf } from './candidates';
+import { adviceInWords, isAdviceRow, isAdviceUnit } from './advice';
+import { type Beside, candidateOf } from './candidates';
 import type { Facts } from './facts';
-import { DATE_ASSUMED, dateText, depthText, fieldOf, isBareDate, joinDepth, nameRank } from './fields';
-import { type ColumnRole, roleIn, yearIn } from './headingRole';
+import { DATE_ASSUMED, fieldOf, isBareDate } from './fields';
+import { chosenColumns, columnsFor, type Kind, type ListColumn, labelColumn, nearest } from './listColumns';
+import { fieldIn, identityOfColumn, isNamed, rowIdentity, sampleOver, sectionAt, sharedOf } from './listIdentity';
 import { otherMaterial } from './material';
 import { isNoSample } from './names';
 import { spoken } from './spoken';
 import { type Ledger, type NotResult, note, type Shape } from './types';
 
-const ANALYTE_HEAD =
-  /^(analytes?|tests?|parameters?|elements?|determinations?|determinands?|test ?names?|analys[ei]s|nutrients?|propert(y|ies)|measurements?|components?|items?|description|characteristics?|constituents?|compounds?|variables?|soil test|measure|indicator)( ?(name|description|desc|long name|short name|code|tested|measured))?$/i;
-
-type Kind = ColumnRole | 'analyte' | 'identity' | 'other' | 'number' | 'kind';
-type ListColumn = {
-  readonly at: number;
-  readonly head: string;
-  readonly kind: Kind;
-  readonly year: number | null;
-  /** The line over the heading, where it may name the sample. */
-  readonly over: string;
-};
-
-/** Rows of this stage: those in which a name of an analyte has a number somewhere to its right. */
-function labelColumn(facts: Facts, free: readonly number[]): { at: number; rows: number[] } | null {
-  let best: { at: number; rows: number[]; analytes: number } | null = null;
-  for (let column = 0; column < Math.min(facts.width, 40); column++) {
-    const analytes = new Set<string>();
-    const rows = free.filter((row) => {
-      const label = facts.label(row, column);
-      if (label === null) return false;
-      for (let at = 0; at < Math.min(facts.width, 120); at++) {
-        if (at !== column && facts.meaning(row, at).kind === 'value') {
-          analytes.add(label.analyte);
-          return true;
-        }
-      }
-      return false;
-    });
-    if (rows.length > (best?.rows.length ?? 0) || (rows.length === best?.rows.length && analytes.size > best.analytes))
-      best = { at: column, rows, analytes: analytes.size };
-  }
-  return best === null || best.rows.length < 2 || best.analytes < 2 ? null : best;
-}
-
-/** The heading over a column: the nearest filled cell above the rows, and the line over that when it is a caption. */
-function headsOver(facts: Facts, first: number, at: number, labelAt: number): string[] {
-  const heads: string[] = [];
-  for (let row = first - 1; row >= Math.max(0, first - 6); row--) {
-    const cell = facts.at(row, at);
-    const one = facts.rows[row];
-    if (one === undefined || one.filled === 0) {
-      if (heads.length > 0) break;
-      continue;
-    }
-    if (fieldOf(facts.at(row, labelAt)) !== null && !ANALYTE_HEAD.test(spoken(facts.at(row, labelAt)))) continue;
-    if (cell !== '') heads.push(cell);
-    if (heads.length === 2) break;
-  }
-  return heads;
-}
-
-function kindOf(facts: Facts, rows: readonly number[], at: number, heads: readonly string[], labelAt: number): Kind {
-  const [head = ''] = heads;
-  const cells = rows.map((row) => ({ row, text: facts.at(row, at) })).filter((cell) => cell.text !== '');
-  const share = (test: (text: string, row: number) => boolean) =>
-    cells.length === 0 ? 0 : cells.filter(({ text, row }) => test(text, row)).length / cells.length;
-  const numbers = share((_text, row) => facts.meaning(row, at).kind === 'value');
-  const units = share((text) => unitOnly(spoken(text)) !== null);
-  const ratings = share((text) => ratingIn(text) !== null);
-  const signs = share((text) => /^([<>]|<=|>=|=|nd|u|j|lt|gt)$/i.test(text));
-  const methods = share((text, row) => {
-    const label = facts.label(row, labelAt);
-    return label !== null && methodIn(label.analyte, spoken(text)) !== null;
-  });
-  if (
-    /^(sample |test |record |result )?(type|kind|matrix|material|medium|category|section|group)$/i.test(spoken(head)) &&
-    numbers < 0.3
-  )
-    return 'kind';
-  if (fieldOf(head) !== null || (isBareDate(head) && numbers < 0.3)) return 'identity';
-  if (ANALYTE_HEAD.test(spoken(head)) && numbers < 0.3 && units < 0.6) return 'other';
-  const role = roleIn(head) ?? (heads[1] === undefined || unitOnly(spoken(head)) === null ? null : roleIn(heads[1]));
-  if (numbers > 0.3) {
-    if (
-      role !== null &&
-      role !== 'rating' &&
-      role !== 'unit' &&
-      role !== 'method' &&
-      role !== 'qualifier' &&
-      role !== 'date'
-    )
-      return role;
-    return unitOnly(spoken(head)) === null && roleOf(head, false) !== 'result' ? 'number' : 'result';
-  }
-  if (signs >= 0.6) return 'qualifier';
-  if (units >= 0.6) return 'unit';
-  if (role === 'rating' && ratings > 0) return 'rating';
-  if (ratings >= 0.6) return 'rating';
-  if (role === 'unit' || role === 'method') return role;
-  if (methods >= 0.5) return 'method';
-  return numbers > 0 ? (role === 'result' ? 'result' : role === null ? 'number' : role) : (role ?? 'other');
-}
-
-/** What the lines of a transposed table say of the sample of one column: "Lab No" with that column's number. */
-function identityOfColumn(facts: Facts, free: readonly number[], last: number, labelAt: number, at: number): Identity {
-  const identity: Identity = {};
-  let [top, bottom, rank] = ['', '', 0];
-  let heading = '';
-  for (const row of free) {
-    if (row > last) break;
-    const name = facts.at(row, labelAt) || facts.at(row, 0);
-    const field = fieldOf(name);
-    const cell = facts.at(row, at);
-    if (field === null || cell === '') continue;
-    if (field === 'sampleId') {
-      if (nameRank(name) <= rank) continue;
-      rank = nameRank(name);
-      identity.sampleId = cell;
-    } else if (field === 'depth')
-      identity.depth ??= depthText(
-        cell,
-        `${name} ${facts.at(row, labelAt + 1) === cell ? '' : facts.at(row, labelAt + 1)}`,
-      );
-    else if (field === 'depthTop') [top, heading] = [cell, name];
-    else if (field === 'depthBottom') [bottom, heading] = [cell, `${heading} ${name}`];
-    else if (field === 'dateSampled' || field === 'dateReported') identity[field] ??= dateText(cell);
-    else identity[field] ??= cell;
-  }
-  return top !== '' && bottom !== ''
-    ? joinDepth({ ...identity, depthTop: top, depthBottom: bottom }, heading)
-    : identity;
-}
-
-/** A bare "Date" beside each sample is the day of sampling when no other column is; the reading says so. */
-function fieldIn(columns: readonly ListColumn[], head: string): IdentityField | null {
-  if (!isBareDate(head)) return fieldOf(head);
-  return columns.some((one) => fieldOf(one.head) === 'dateSampled') ? 'other' : 'dateSampled';
-}
-
-function rowIdentity(facts: Facts, columns: readonly ListColumn[], row: number): Identity {
-  const identity: Identity = {};
-  let rank = 0;
-  let heading = '';
-  for (const column of columns) {
-    if (column.kind !== 'identity') continue;
-    const cell = facts.at(row, column.at);
-    const field = fieldIn(columns, column.head);
-    if (cell === '' || field === null) continue;
-    if (field === 'sampleId') {
-      if (nameRank(column.head) <= rank) continue;
-      rank = nameRank(column.head);
-      identity.sampleId = cell;
-    } else if (field === 'depth') identity.depth ??= depthText(cell, column.head);
-    else if (field === 'dateSampled' || field === 'dateReported') identity[field] ??= dateText(cell);
-    else {
-      identity[field] ??= cell;
-      if (field === 'depthTop' || field === 'depthBottom') heading += ` ${column.head}`;
-    }
-  }
-  return joinDepth(identity, heading);
-}
-
-/** Lines of one sample after another: a "Sample: North bed" line starts the next one. */
-function sectionAt(facts: Facts, free: readonly number[], labelAt: number, row: number, since: number): Identity {
-  const identity: Identity = {};
-  for (const at of free) {
-    if (at >= row) break;
-    if (at <= since) continue;
-    for (const [column, cell] of (facts.grid[at] ?? []).entries()) {
-      if (cell === '') continue;
-      const whole = fieldWithValue(cell);
-      const field = whole?.field ?? fieldOf(cell);
-      const value = whole?.value ?? facts.at(at, column + 1);
-      if (field === null || value === '' || fieldOf(value) !== null || column > labelAt + 2) continue;
-      identity[field] = field === 'depth' ? depthText(value, cell) : /^date/.test(field) ? dateText(value) : value;
-    }
-  }
-  return identity;
-}
-
-function columnsFor(facts: Facts, rows: readonly number[], first: number, labelAt: number): ListColumn[] {
-  return Array.from({ length: facts.width }, (_, at): ListColumn => {
-    const heads = headsOver(facts, first, at, labelAt);
-    const head = heads[0] ?? '';
-    if (at === labelAt) return { at, head, kind: 'analyte', year: null, over: '' };
-    return {
-      at,
-      head,
-      kind: kindOf(facts, rows, at, heads, labelAt),
-      year: yearIn(head) ?? yearIn(heads[1] ?? ''),
-      over: heads[1] ?? '',
-    };
-  });
-}
-
-/** The columns whose numbers are results, and whether each is a sample of its own. */
-function chosenColumns(
-  columns: readonly ListColumn[],
-  hasRowNames: boolean,
-  named: (at: number) => boolean,
-): { chosen: ListColumn[]; across: boolean } {
-  const explicit = columns.filter((one) => one.kind === 'result');
-  const numeric = columns.filter((one) => one.kind === 'number');
-  const years = [...explicit, ...numeric].filter((one) => one.year !== null);
-  const distinct = new Set(years.map((one) => one.year));
-  if (distinct.size > 1) {
-    const newest = Math.max(...years.map((one) => one.year ?? 0));
-    return { chosen: years.filter((one) => one.year === newest).slice(0, 1), across: false };
-  }
-  if (explicit.length === 1 || (explicit.length > 0 && hasRowNames))
-    return { chosen: explicit.slice(0, 1), across: false };
-  if (explicit.length > 1) return { chosen: explicit, across: true };
-  if (hasRowNames) return { chosen: numeric.slice(0, 1), across: false };
-  const across = numeric.filter((one) => named(one.at) || (one.head !== '' && !isNoSample(one.head, {})));
-  return across.length > 0 ? { chosen: across, across: true } : { chosen: numeric.slice(0, 1), across: false };
-}
-
-/** The nearest column of a kind that belongs to a number's column: the only one, or the next to its right. */
-function nearest(
-  columns: readonly ListColumn[],
-  kind: Kind,
-  of: number,
-  alone: boolean,
-  results: readonly number[],
-): number | null {
-  const all = columns.filter((one) => one.kind === kind);
-  if (alone || all.length === 1) {
-    const only = all.find((one) => one.at > of) ?? all[0];
-    if (only === undefined) return null;
-    // One rating beside several samples belongs to the sample it stands beside.
-    return alone || kind === 'unit' || kind === 'method' || only.at === of + 1 ? only.at : null;
-  }
-  const next = results.find((at) => at > of) ?? Number.POSITIVE_INFINITY;
-  return (
-    all.find((one) => one.at > of && one.at < next)?.at ??
-    (kind === 'unit' || kind === 'method' ? (all[0]?.at ?? null) : null)
-  );
-}
-
 const ADVICE = /^(recommendation|recommended|advice|application|rec|fertili[sz]er)s?$/i;
 
-/** Stage "analytes down": one row a number, or one row an analyte with one sample or several across. */
-export function analytesDown(facts: Facts, free: readonly number[], ledger: Ledger): Shape | null {
+/** How the columns of one list are to be read. */
+type Plan = {
+  readonly labelAt: number;
+  readonly rows: readonly number[];
+  readonly columns: readonly ListColumn[];
+  /** Columns whose numbers are results. */
+  readonly chosen: readonly ListColumn[];
+  /** Each of them is a sample of its own. */
+  readonly across: boolean;
+  /** The sample's name stands in each row. */
+  readonly namesInRows: boolean;
+  readonly kindAt: number | null;
+  readonly identityAt: (column: number) => Identity;
+};
+
+function planOf(facts: Facts, free: readonly number[]): Plan | null {
   const found = labelColumn(facts, free);
   if (found === null) return null;
   const { at: labelAt, rows } = found;
   const [first = 0, last = 0] = [rows[0], rows[rows.length - 1]];
   const columns = columnsFor(facts, rows, first, labelAt);
-  const hasRowNames = columns.some(
+  const namesInRows = columns.some(
     (one) =>
       one.kind === 'identity' &&
       ['sampleId', 'labNumber', 'fieldName'].includes(fieldOf(one.head) ?? '') &&
-      rows.filter((row) => facts.at(row, one.at) !== '').length >= 0.5 * rows.length,
+      rows.some((row) => facts.at(row, one.at) !== ''),
   );
-  const identities = new Map<number, Identity>();
-  const identityAt = (at: number) => {
-    const known = identities.get(at) ?? identityOfColumn(facts, free, last, labelAt, at);
-    identities.set(at, known);
-    return known;
+  const known = new Map<number, Identity>();
+  const identityAt = (column: number) => {
+    const identity = known.get(column) ?? identityOfColumn(facts, free, last, labelAt, column);
+    known.set(column, identity);
+    return identity;
   };
-  const named = (at: number) => identityAt(at).sampleId !== undefined || identityAt(at).labNumber !== undefined;
-  const { chosen, across } = chosenColumns(columns, hasRowNames, named);
-  const results = chosen.map((one) => one.at);
-  const parts = new Map<string, { identity: Identity; candidates: Candidate[] }>();
-  const recommendations: ReadRecommendation[] = [];
-  const kindColumn = columns.find((one) => one.kind === 'kind')?.at;
-  let [since, section] = [-1, {} as Identity];
-  const used = new Set<number>(rows);
-  for (let row = Math.max(0, first - 3); row < first; row++)
-    if (free.includes(row) && columns.some((one) => one.head !== '' && facts.at(row, one.at) === one.head))
-      used.add(row);
-  for (const row of rows) {
-    const label = facts.label(row, labelAt);
-    if (label === null) continue;
-    const said = sectionAt(facts, free, labelAt, row, since);
-    since = row;
-    if (said.sampleId !== undefined || said.labNumber !== undefined) section = { ...pickShared(section), ...said };
-    else section = { ...section, ...said };
-    const kind = kindColumn === undefined ? '' : facts.at(row, kindColumn);
-    const why: NotResult | null =
-      otherMaterial(kind) !== null ? 'not-soil' : ADVICE.test(kind) ? 'recommendation' : null;
-    const own = hasRowNames ? rowIdentity(facts, columns, row) : {};
-    const noSample = hasRowNames && own.sampleId !== undefined && isNoSample(own.sampleId, own);
-    for (const column of columns) {
-      const meaning = facts.meaning(row, column.at);
-      if (meaning.kind === 'text' && column.kind === 'recommendation') {
-        const advice = adviceInWords(
-          facts.at(row, column.at),
-          own.sampleId ?? section.sampleId ?? null,
-          facts.at(row, labelAt),
-        );
-        if (advice !== null) recommendations.push(advice);
-      }
-      if (meaning.kind !== 'value') continue;
-      if (!results.includes(column.at)) {
-        note(ledger, row, column.at, notResultOf(column));
-        if (column.kind === 'recommendation')
-          recommendations.push(
-            adviceOf(
-              facts,
-              row,
-              column.at,
-              `${facts.at(row, labelAt)} ${column.head}`.trim(),
-              own.sampleId ?? section.sampleId ?? null,
-              meaning.value,
-              meaning.unit ?? label.unit,
-            ),
-          );
-        continue;
-      }
-      const unitAt = nearest(columns, 'unit', column.at, !across, results);
-      const beside = {
-        unit: unitAt === null ? '' : facts.at(row, unitAt),
-        method: cellOf(facts, row, nearest(columns, 'method', column.at, !across, results)),
-        rating: cellOf(facts, row, nearest(columns, 'rating', column.at, !across, results)),
-        qualifier: cellOf(facts, row, nearest(columns, 'qualifier', column.at, !across, results)),
-      };
-      const headUnit = unitOnly(spoken(column.head)) === null ? '' : column.head;
-      const candidate = candidateOf(
-        { ...label, text: facts.at(row, labelAt) },
-        meaning,
-        { sheet: facts.sheet.number, row, column: column.at },
-        { ...beside, unit: beside.unit === '' && label.unit === null ? headUnit : beside.unit },
-      );
-      const advice = isAdviceUnit(candidate.unit) || isAdviceRow(facts.at(row, labelAt));
-      if (why !== null || noSample || advice) {
-        note(ledger, row, column.at, why ?? (noSample ? 'summary-row' : 'recommendation'));
-        if (why === 'recommendation' || (why === null && !noSample))
-          recommendations.push(
-            adviceOf(
-              facts,
-              row,
-              column.at,
-              facts.at(row, labelAt),
-              own.sampleId ?? section.sampleId ?? null,
-              meaning.value,
-              candidate.unit,
-            ),
-          );
-        continue;
-      }
-      note(ledger, row, column.at, 'taken');
-      const identity = hasRowNames
-        ? { ...pickShared(section), ...own }
-        : across
-          ? { ...sampleOver(column), ...identityAt(column.at) }
-          : { ...section, ...identityWhenAlone(identityAt(column.at), section) };
-      const key = JSON.stringify(across ? [column.at, identity] : identity);
-      const part = parts.get(key) ?? { identity, candidates: [] };
-      part.candidates.push(candidate);
-      parts.set(key, part);
-    }
+  const choice = chosenColumns(columns, namesInRows, (column) => isNamed(identityAt(column)));
+  const kindAt = columns.find((one) => one.kind === 'kind')?.at ?? null;
+  return { labelAt, rows, columns, ...choice, namesInRows, kindAt, identityAt };
+}
+
+/** Heading lines over the list belong to it; the lines over those are titles. */
+function rowsUsed(facts: Facts, plan: Plan, free: ReadonlySet<number>): Set<number> {
+  const used = new Set<number>(plan.rows);
+  const first = plan.rows[0] ?? 0;
+  for (let row = Math.max(0, first - 3); row < first; row++) {
+    const heads = plan.columns.some((one) => one.head !== '' && facts.at(row, one.at) === one.head);
+    if (heads && free.has(row)) used.add(row);
   }
-  const list: SamplePart[] = [...parts.values()];
-  const assumed = columns.some(
-    (one) => one.kind === 'identity' && isBareDate(one.head) && fieldIn(columns, one.head) === 'dateSampled',
-  );
-  return list.length === 0
-    ? null
-    : { parts: list, recommendations, rows: used, remarks: assumed ? [DATE_ASSUMED] : [] };
+  return used;
 }
 
-/** The name of a sample over its column, or over the words "Result" and "Rating" that stand under it. */
-function sampleOver(column: ListColumn): Identity {
-  const name = column.kind === 'number' ? column.head : column.over;
-  const says = name !== '' && unitOnly(spoken(name)) === null && roleIn(name) === null && roleOf(name, false) === null;
-  return says && !ANALYTE_HEAD.test(spoken(name)) ? { sampleId: name } : {};
-}
-
-function cellOf(facts: Facts, row: number, at: number | null): string {
-  return at === null ? '' : facts.at(row, at);
-}
-
-/** In a list of one sample the lines over it have been heard already; what its own column says counts first. */
-function identityWhenAlone(own: Identity, section: Identity): Identity {
-  return section.sampleId === undefined && section.labNumber === undefined ? own : {};
-}
-
-function pickShared(identity: Identity): Identity {
-  const { sampleId: _sample, labNumber: _number, ...rest } = identity;
-  return rest;
-}
-
-/** "Lime recommendation" names an analyte of the registry and is advice all the same. */
-function isAdviceRow(name: string): boolean {
-  return (
-    /\b(recommend\w*|rec|to apply|apply|needed|application)\b/i.test(name) &&
-    !/\brecommended (level|range)\b/i.test(name)
-  );
-}
-
-function isAdviceUnit(unit: string | null): boolean {
-  return (
-    unit !== null && ['lb/1000ft2', 'lb/100ft2', 'oz/1000ft2', 'oz/100ft2', 'oz/yd2', 'g/m2', 'cwt/acre'].includes(unit)
-  );
+function besideAt(facts: Facts, plan: Plan, row: number, column: ListColumn, hasUnit: boolean): Beside {
+  const results = plan.chosen.map((one) => one.at);
+  const cell = (kind: Kind) => {
+    const at = nearest(plan.columns, kind, column.at, !plan.across, results);
+    return at === null ? '' : facts.at(row, at);
+  };
+  const unit = cell('unit');
+  const headUnit = unitOnly(spoken(column.head)) === null ? '' : column.head;
+  return {
+    unit: unit === '' && !hasUnit ? headUnit : unit,
+    method: cell('method'),
+    rating: cell('rating'),
+    qualifier: cell('qualifier'),
+  };
 }
 
 function notResultOf(column: ListColumn): NotResult {
@@ -415,14 +92,115 @@ function notResultOf(column: ListColumn): NotResult {
   return notes[column.kind] ?? (column.year === null ? 'other-column' : 'previous');
 }
 
-function adviceOf(
-  facts: Facts,
-  row: number,
-  at: number,
-  item: string,
-  sampleId: string | null,
-  amount: number | null,
-  unit: string | null,
-): ReadRecommendation {
-  return { sampleId, item, amount, printed: facts.at(row, at), unit, page: null, box: null };
+/** Walks the rows of a list with what has been said of the sample so far. */
+class Walk {
+  readonly parts = new Map<string, { identity: Identity; candidates: Candidate[] }>();
+  readonly recommendations: ReadRecommendation[] = [];
+  private section: Identity = {};
+  private own: Identity = {};
+  private since = -1;
+  constructor(
+    private readonly facts: Facts,
+    private readonly plan: Plan,
+    private readonly free: ReadonlySet<number>,
+    private readonly ledger: Ledger,
+  ) {}
+
+  private hear(row: number) {
+    const said = sectionAt(this.facts, this.free, row, this.since);
+    this.since = row;
+    this.section = isNamed(said) ? { ...sharedOf(this.section), ...said } : { ...this.section, ...said };
+    if (!this.plan.namesInRows) return;
+    const own = rowIdentity(this.facts, this.plan.columns, row);
+    // A name said once holds for the rows under it.
+    this.own = isNamed(own) || own.fieldName !== undefined ? own : { ...this.own, ...own };
+  }
+
+  private identityFor(column: ListColumn): Identity {
+    if (this.plan.namesInRows) return { ...sharedOf(this.section), ...this.own };
+    const ofColumn = this.plan.identityAt(column.at);
+    if (this.plan.across) return { ...sampleOver(column), ...ofColumn };
+    return isNamed(this.section) ? this.section : { ...this.section, ...ofColumn };
+  }
+
+  private advise(row: number, column: number, item: string, amount: number | null, unit: string | null) {
+    const sampleId = this.own.sampleId ?? this.section.sampleId ?? null;
+    const printed = this.facts.at(row, column);
+    this.recommendations.push({ sampleId, item, amount, printed, unit, page: null, box: null });
+  }
+
+  private besideResult(row: number, column: ListColumn) {
+    const { facts, plan } = this;
+    const name = facts.at(row, plan.labelAt);
+    const meaning = facts.meaning(row, column.at);
+    if (meaning.kind === 'value') note(this.ledger, row, column.at, notResultOf(column));
+    if (column.kind !== 'recommendation') return;
+    if (meaning.kind === 'value') {
+      const unit = meaning.unit ?? facts.label(row, plan.labelAt)?.unit ?? null;
+      this.advise(row, column.at, `${name} ${column.head}`.trim(), meaning.value, unit);
+    } else if (meaning.kind === 'text') {
+      const sampleId = this.own.sampleId ?? this.section.sampleId ?? null;
+      const advice = adviceInWords(facts.at(row, column.at), sampleId, name);
+      if (advice !== null) this.recommendations.push(advice);
+    }
+  }
+
+  row(row: number) {
+    const { facts, plan, ledger } = this;
+    const label = facts.label(row, plan.labelAt);
+    if (label === null) return;
+    this.hear(row);
+    const name = facts.at(row, plan.labelAt);
+    const kind = plan.kindAt === null ? '' : facts.at(row, plan.kindAt);
+    const noSample = this.own.sampleId !== undefined && isNoSample(this.own.sampleId, this.own);
+    for (const column of plan.columns) {
+      if (!plan.chosen.includes(column)) {
+        this.besideResult(row, column);
+        continue;
+      }
+      const meaning = facts.meaning(row, column.at);
+      if (meaning.kind !== 'value') continue;
+      const place = { sheet: facts.sheet.number, row, column: column.at };
+      const beside = besideAt(facts, plan, row, column, label.unit !== null);
+      const candidate = candidateOf({ ...label, text: name }, meaning, place, beside);
+      const why: NotResult | null =
+        otherMaterial(kind) !== null
+          ? 'not-soil'
+          : ADVICE.test(kind)
+            ? 'recommendation'
+            : noSample
+              ? 'summary-row'
+              : null;
+      const advice =
+        why === 'recommendation' ||
+        (why === null && (isAdviceUnit(candidate.unit) || isAdviceRow(name, candidate.unit)));
+      if (advice) this.advise(row, column.at, name, meaning.value, candidate.unit);
+      if (advice || why !== null) {
+        note(ledger, row, column.at, why ?? 'recommendation');
+        continue;
+      }
+      note(ledger, row, column.at, 'taken');
+      const identity = this.identityFor(column);
+      const key = JSON.stringify(plan.across ? [column.at, identity] : identity);
+      const part = this.parts.get(key) ?? { identity, candidates: [] };
+      part.candidates.push(candidate);
+      this.parts.set(key, part);
+    }
+  }
+}
+
+/** Stage "analytes down": one row a number, or one row an analyte with one sample or several across. */
+export function analytesDown(facts: Facts, freeRows: readonly number[], ledger: Ledger): Shape | null {
+  const plan = planOf(facts, freeRows);
+  if (plan === null) return null;
+  const free = new Set(freeRows);
+  const walk = new Walk(facts, plan, free, ledger);
+  for (const row of plan.rows) walk.row(row);
+  const parts: SamplePart[] = [...walk.parts.values()];
+  if (parts.length === 0) return null;
+  const assumed = plan.columns.some(
+    (one) => one.kind === 'identity' && isBareDate(one.head) && fieldIn(plan.columns, one.head) === 'dateSampled',
+  );
+  const remarks = assumed ? [DATE_ASSUMED] : [];
+  return { parts, recommendations: walk.recommendations, rows: rowsUsed(facts, plan, free), remarks };
 }

@@ -15,6 +15,8 @@ export type Block = {
 };
 
 const MOST_CAPTIONS = 4;
+/** "0-6", "6 to 24 in": in a heading it is the depth of its column. */
+export const DEPTH = /^\d{1,3}\s*(?:-|–|to)\s*\d{1,3}\s*(?:in(?:ches)?|cm|"|”)?$/i;
 
 function isHead(facts: Facts, row: number): boolean {
   const one = facts.rows[row];
@@ -76,6 +78,8 @@ function saysMore(facts: Facts, base: number, row: number): boolean {
       /^(units?|su|none|std|index|ratio|s\.?u\.?)$/i.test(text),
   );
   if (telling.length >= 0.5 * filled.length) return true;
+  // Depths of the columns, with the units on the next line.
+  if (filled.filter(({ text }) => DEPTH.test(text)).length >= 0.5 * filled.length && filled.length > 1) return true;
   const words = filled.filter(
     ({ text, label }) => /[A-Za-z]{2}/.test(text) && label !== null && facts.meaning(row, 0).kind !== 'date',
   );

@@ -2,7 +2,7 @@ import { type AnalyteKey, analyte, type UnitKey, unitOf } from '@/lib/domain/ana
 import type { IdentityField } from '../candidate';
 import { type Label, methodIn, unitIn, unitOnly } from '../labels/label';
 import { ratingIn } from '../stages/values';
-import type { Block } from './blocks';
+import { type Block, DEPTH } from './blocks';
 import type { Facts } from './facts';
 import { fieldOf, isBareDate } from './fields';
 import { type ColumnRole, isWholeName, roleIn, withoutRole, yearIn } from './headingRole';
@@ -19,6 +19,8 @@ export type Column = {
   readonly field: IdentityField | null;
   readonly role: ColumnRole | null;
   readonly year: number | null;
+  /** The depth that a heading line gives to this column alone. */
+  readonly depth: string | null;
 };
 
 const ADVICE_UNITS: ReadonlySet<UnitKey> = new Set<UnitKey>([
@@ -135,12 +137,14 @@ function headingOf(facts: Facts, block: Block, at: number): Column {
   const bare = withoutRole(own);
   let role = isWholeName(own) && !/\b(rec\w*|needed)\b/i.test(own) ? null : roleIn(own);
   if (role === 'date' || role === null || role === 'result') {
-    const over = [...captions, ...under].map((text) => (isWholeName(text) ? null : roleIn(text)));
+    const over = [...captions, ...under].map((text) => (isWholeName(text) || DEPTH.test(text) ? null : roleIn(text)));
     const strong = over.find(
       (one) => one !== null && one !== 'date' && one !== 'result' && one !== 'method' && one !== 'unit',
     );
     role = strong ?? role;
   }
+  // "Index" under the analyte's name is how the laboratory rates the number beside it.
+  if (role === null && [own, ...under].some((text) => /^index$/i.test(text))) role = 'rating';
   if (role === 'qualifier' && content.numbers > 0.4 * content.filled) role = null;
   const around = [...captions].reverse();
   const label =
@@ -156,6 +160,7 @@ function headingOf(facts: Facts, block: Block, at: number): Column {
           ],
           [...around, ...under],
         );
+  if (label === null && field === null && NITROGEN.test(bare) && isAreaText(whole)) role = 'recommendation';
   const settled = label === null ? null : { ...settledLabel(label, around, under), text: own === '' ? whole : own };
   return {
     at,
@@ -165,7 +170,16 @@ function headingOf(facts: Facts, block: Block, at: number): Column {
     field,
     role,
     year: yearIn(own) ?? yearIn(captions.join(' ')),
+    depth: lines.find((line) => DEPTH.test(line)) ?? null,
   };
+}
+
+/** Nitrogen by area is advice: no soil test of that bare name is reported so. */
+const NITROGEN = /^(n|nitrogen)( \(n\))?( (lb|kg).*)?$/i;
+
+function isAreaText(text: string): boolean {
+  const unit = unitIn(spoken(text))?.unit;
+  return unit !== undefined && (AREA.has(unit) || ADVICE_UNITS.has(unit));
 }
 
 function isAdvice(column: Column, all: readonly Column[]): boolean {

@@ -73,10 +73,23 @@ export function withoutRole(text: string): string {
     .trim();
 }
 
-/** The year a heading is about, or null. "2024" and "Fall 2024" have one; "2,000" and a date have none. */
+const SEASONS: readonly (readonly [RegExp, number])[] = [
+  [/\b(winter|jan|feb)/i, 0.1],
+  [/\b(spring|mar|apr|may)/i, 0.3],
+  [/\b(summer|jun|jul|aug)/i, 0.6],
+  [/\b(fall|autumn|sep|oct|nov|dec)/i, 0.9],
+];
+
+/**
+ * The year a heading is about, with the season as its part, or null. "2024", "Fall 2024" and "2024-10" have one; "2,000"
+ * and a whole date have none.
+ */
 export function yearIn(text: string): number | null {
+  const month = /(?<![\d/.-])((?:19|20)\d\d)[-/](\d{1,2})(?![\d/.-])/.exec(text);
+  if (month !== null) return Number(month[1]) + Number(month[2]) / 12;
   const found = [...text.matchAll(/(?<![\d/.-])((?:19|20)\d\d)(?![\d/.-])/g)];
-  return found.length === 1 ? Number(found[0]?.[1]) : null;
+  const season = SEASONS.find(([pattern]) => pattern.test(text))?.[1] ?? 0;
+  return found.length === 1 ? Number(found[0]?.[1]) + season : null;
 }
 
 /** A heading that is an analyte's name as it stands is no role, whatever words are in it ("Excess lime"). */

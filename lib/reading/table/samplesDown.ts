@@ -19,6 +19,8 @@ type Plan = {
   readonly named: Column | null;
   /** Columns of words before the numbers that may say what kind of row it is ("Found", "Desired"). */
   readonly kinds: readonly number[];
+  /** The heading of the depth column, which may hold the unit of the depths in other headings. */
+  readonly depthHeading: string;
 };
 type Besides = {
   readonly unit: number | null;
@@ -71,7 +73,8 @@ function planOf(facts: Facts, block: Block): Plan {
   const kinds = columns
     .filter((one) => one.at < first && one.field === null && one.label === null && one.role === null && one !== named)
     .map((one) => one.at);
-  return { columns, results, named, kinds };
+  const depthHeading = columns.find((one) => one.field === 'depth')?.whole ?? '';
+  return { columns, results, named, kinds, depthHeading };
 }
 
 /** What the cells of a row say of the sample. Of several name columns the one called a name or identity wins. */
@@ -181,6 +184,13 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
       bare(row, 'summary-row');
       continue;
     }
+    const yearOnly =
+      /^(19|20)\d\d$/.test(own.sampleId ?? '') &&
+      parts.some((part) => !/^(19|20)\d\d$/.test(part.identity.sampleId ?? '2000'));
+    if (yearOnly) {
+      bare(row, 'previous');
+      continue;
+    }
     if (isOtherMaterial(facts, plan, row)) {
       bare(row, 'not-soil');
       continue;
@@ -199,7 +209,7 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
     const unnamed = own.sampleId === undefined && own.labNumber === undefined;
     const goesOn = unnamed && own.depth !== undefined && hasNames && before !== undefined;
     const identity = { ...section, ...(goesOn ? pick(before) : {}), ...own };
-    const candidates: Candidate[] = [];
+    const candidates = new Map<string | null, Candidate[]>();
     for (const column of plan.columns) {
       if (facts.meaning(row, column.at).kind === 'value' && column.role !== 'result')
         note(ledger, row, column.at, noteOf(column));
@@ -208,7 +218,9 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
       const meaning = facts.meaning(row, column.at);
       if (meaning.kind !== 'value' || column.label === null) continue;
       note(ledger, row, column.at, 'taken');
-      candidates.push(
+      const same = candidates.get(column.depth) ?? [];
+      candidates.set(column.depth, same);
+      same.push(
         candidateOf(
           column.label,
           meaning,
@@ -219,7 +231,11 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
     }
     recommendations.push(...adviceAt(facts, plan, row, identity.sampleId ?? null));
     // A row of names and days without numbers still tells of its sample.
-    if (candidates.length > 0 || !nameless) parts.push({ identity, candidates });
+    if (candidates.size === 0 && !nameless) parts.push({ identity, candidates: [] });
+    for (const [depth, some] of candidates) {
+      const own = depth === null ? {} : { depth: depthText(depth, plan.depthHeading) };
+      parts.push({ identity: { ...identity, ...own }, candidates: some });
+    }
   }
   const assumed = plan.columns.some((column) => column.field === 'dateSampled' && isBareDate(column.text));
   return { parts, recommendations, rows, remarks: assumed ? [DATE_ASSUMED] : [] };

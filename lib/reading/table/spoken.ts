@@ -50,6 +50,8 @@ const UNIT_CODES: readonly (readonly [RegExp, string])[] = [
   [/\b(?:pct|prct|perc|percent(?:age)?|per cent)\b\.?/gi, '%'],
   [/\b[tT](?:on(?:ne)?s?)?[ .]ha\b/g, 't/ha'],
   [/\btons?[ .](?:per )?ac(?:re)?\b/gi, 'ton/acre'],
+  [/\b(?:lbs?|pounds?|#)[ ./]*(?:per )?1,?000 ?(?:sq\.? ?ft\.?|sqft|sf|ft2|ft²|square feet)/gi, 'lb/1000ft2'],
+  [/\b(?:lbs?|pounds?|#)[ ./]*(?:per )?100 ?(?:sq\.? ?ft\.?|sqft|sf|ft2|ft²|square feet)/gi, 'lb/100ft2'],
   [/\bparts per million\b/gi, 'ppm'],
   [/\bmg (?:N|P|K|S|B|Mg|Ca|Na|Zn|Mn|Fe|Cu)\/kg\b/g, 'mg/kg'],
 ];
@@ -73,6 +75,9 @@ export function spoken(text: string): string {
     .replace(/\bBase[ -]?Sat(?:uration)?\b\.?/gi, 'Base saturation')
     .replace(/\bBray[ -]?P?[ -]?([12])\b/gi, 'Bray $1')
     .replace(/\b(?:v\/v|w\/v|w:v|v:v)\b/gi, ' ')
+    .replace(/\bpH[ -]?Wert\b/gi, 'pH')
+    .replace(/\bKCl[ -]?40\b/gi, 'KCl-40')
+    .replace(/\bK[ -]Colwell\b/g, 'Colwell K')
     .replace(/\b(NO3|NH4|SO4)[ -]?([NS])\b/gi, '$1-$2');
   for (const [code, unit] of UNIT_CODES) words = words.replace(code, unit);
   return words.replace(/\s+/g, ' ').trim();

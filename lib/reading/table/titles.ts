@@ -33,6 +33,8 @@ export function titleIdentity(facts: Facts, rows: readonly number[]): Identity {
   return identity;
 }
 
+const ALL_IN = /^(all )?(units?|results?|values|concentrations?)( of measure| are| reported| given)?\s*(:|=|in|as)?\s/i;
+
 /** What is said once of all numbers: a unit ("Units: mg/kg") and methods ("Extraction: Mehlich-3"). */
 export function titleStatements(facts: Facts, rows: readonly number[]): Statements {
   const lines = rows.map((row) =>
@@ -44,13 +46,11 @@ export function titleStatements(facts: Facts, rows: readonly number[]): Statemen
   const texts = lines.filter((line) => line !== '');
   const found = statementsOf(texts);
   if (found.unit !== null) return found;
-  const said = texts.find(
-    (line) =>
-      /^(all )?(units?|results?|values|concentrations?)( of measure| are| reported| given)?\s*(:|=|in|as)?\s/i.test(
-        line,
-      ) && line.length < 80,
-  );
-  const unit = said === undefined ? null : unitIn(said);
+  const unit =
+    texts
+      .filter((line) => ALL_IN.test(line) && line.length < 140)
+      .map((line) => unitIn(line))
+      .find((one) => one !== null) ?? null;
   const mass = unit !== null && ['mg/kg', 'lb/acre', 'kg/ha', 'mg/L', 'mg/dm3'].includes(unit.unit);
   return mass && unit !== null ? { ...found, unit: { unit: unit.unit, printed: unit.printed } } : found;
 }
