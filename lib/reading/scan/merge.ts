@@ -22,8 +22,28 @@ function isRubbish(word: Seen, letter: number): boolean {
   return w > (word.text.length + 1) * Math.max(h, letter) * 1.6 && word.certainty < 0.6;
 }
 
-/** Words of all views that stand in one place; a word over several lines joins nothing. */
-function groupsOf(words: readonly Numbered[], letter: number): Group[] {
+/** A word that lies over words of several lines of another view is two lines taken for one. */
+function overSeveralLines(words: readonly Numbered[]): ReadonlySet<Numbered> {
+  const found = new Set<Numbered>();
+  const sorted = [...words].sort((a, b) => a.y0 - b.y0);
+  for (const word of words) {
+    const tall = word.y1 - word.y0;
+    const under = sorted.filter(
+      (other) =>
+        other.view !== word.view &&
+        other.y0 < word.y1 &&
+        other.y1 > word.y0 &&
+        other.y1 - other.y0 < tall / 1.6 &&
+        overlap(word, other) > 0.4,
+    );
+    const [top, bottom] = [under[0], under[under.length - 1]];
+    if (top !== undefined && bottom !== undefined && bottom.y0 > top.y1 - 0.2 * (top.y1 - top.y0)) found.add(word);
+  }
+  return found;
+}
+
+/** Words of all views that stand in one place. */
+function groupsOf(words: readonly Numbered[]): Group[] {
   const sorted = [...words].sort((a, b) => a.y0 - b.y0);
   const parent = sorted.map((_, index) => index);
   const root = (at: number): number => {
@@ -35,12 +55,7 @@ function groupsOf(words: readonly Numbered[], letter: number): Group[] {
     for (let other = index + 1; other < sorted.length; other++) {
       const next = sorted[other];
       if (next === undefined || next.y0 > word.y1) break;
-      if (next.view === word.view) continue;
-      const tall = Math.max(word.y1 - word.y0, next.y1 - next.y0);
-      const small = Math.min(word.y1 - word.y0, next.y1 - next.y0);
-      if (tall > 2 * small && tall > 2 * letter && /[A-Za-z0-9]/.test(word.text) && /[A-Za-z0-9]/.test(next.text))
-        continue;
-      if (overlap(word, next) > 0.4) parent[root(other)] = root(index);
+      if (next.view !== word.view && overlap(word, next) > 0.4) parent[root(other)] = root(index);
     }
   }
   const groups = new Map<number, Group>();
@@ -74,6 +89,10 @@ function likely(words: readonly Seen[]): number {
   );
 }
 
+function heightOf(words: readonly Seen[]): number {
+  return Math.max(...words.map((word) => word.y1 - word.y0));
+}
+
 function certaintyOf(words: readonly Seen[]): number {
   const letters = words.reduce((sum, word) => sum + word.text.length, 0);
   return words.reduce((sum, word) => sum + word.certainty * word.text.length, 0) / (letters || 1);
@@ -88,14 +107,18 @@ export function mergeViews(views: readonly (readonly Seen[])[], letter: number):
     view.filter((word) => !isRubbish(word, letter)).map((word) => ({ ...word, view: index })),
   );
   const merged: Merged[] = [];
-  for (const { members } of groupsOf(words, letter)) {
+  const wide = overSeveralLines(words);
+  for (const { members } of groupsOf(words.filter((word) => !wide.has(word)))) {
     const byView = views
       .map((_, view) => members.filter((word) => word.view === view).sort((a, b) => a.x0 - b.x0))
       .filter((list) => list.length > 0);
     const texts = byView.map(joined);
+    const lowest = Math.min(...byView.map(heightOf)) || 1;
     const scored = byView.map((list, index) => {
       const votes = texts.filter((text) => text === texts[index]).length;
-      return { list, votes, score: votes + certaintyOf(list) + 0.5 * likely(list) };
+      // Of equal readings the one with the closer box: the other reaches into a neighbour's line.
+      const loose = heightOf(list) / lowest - 1;
+      return { list, votes, score: votes + certaintyOf(list) + 0.5 * likely(list) - 0.1 * loose };
     });
     const best = scored.reduce((a, b) => (b.score > a.score ? b : a));
     const text = joined(best.list);

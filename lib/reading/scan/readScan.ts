@@ -19,7 +19,7 @@ function isScan(page: AnyPage): page is ScannedPage {
 const MOST_LOOKS = 80;
 
 /** Words of a scanned page: the views put together, compared with the ink, usual confusions undone. */
-async function wordsOf(page: ScannedPage, lookAgain: LookAgain): Promise<Merged[]> {
+export async function wordsOf(page: ScannedPage, lookAgain: LookAgain): Promise<Merged[]> {
   const merged = mergeViews(page.views, page.letter);
   const unsure = merged.filter((word) => isUnsure(word, page.letter)).slice(0, MOST_LOOKS);
   const room = 0.3 * page.letter;

@@ -24,7 +24,7 @@ function collect(): ReadonlySet<string> {
 const WORDS = collect();
 const LONG = [...WORDS].filter((word) => /^[a-z]{6,}$/.test(word));
 
-/** What the engine cannot tell apart, made one: 0 and O, 1 and l and I, 5 and S, doubled letters, rn and m. */
+/** What the engine cannot tell apart, made one: 0 and O, 1 and l and I, 5 and S, rn and m; a doubled o is a 0 that stands beside an O. */
 function blurredForm(text: string): string {
   return text
     .replace(/[0O]/g, 'o')
@@ -32,7 +32,7 @@ function blurredForm(text: string): string {
     .replace(/[5]/g, 's')
     .toLowerCase()
     .replace(/rn/g, 'm')
-    .replace(/(.)\1/g, '$1');
+    .replace(/oo/g, 'o');
 }
 
 /** Spellings as printed, by their blurred form; a form that stands for two spellings stands for neither. */

@@ -14,7 +14,7 @@ export type Decoded =
       readonly width: number;
       readonly height: number;
     }
-  | { readonly ok: false; readonly reason: 'picture-broken' | 'picture-too-large' };
+  | { readonly ok: false; readonly reason: 'picture-broken' | 'picture-truncated' | 'picture-too-large' };
 
 /** Turned as the camera's note says (EXIF orientation 1 to 8). */
 function turned(picture: Grey, orientation: number): Grey {
@@ -45,10 +45,26 @@ function turned(picture: Grey, orientation: number): Grey {
   return { width, height, data: out };
 }
 
+const isPng = (bytes: Uint8Array) => bytes[0] === 0x89;
+
+/** Points that the header of a PNG states; the decoder takes some of them for a fault instead of for too many. */
+function statedPixels(bytes: Uint8Array): number {
+  if (!isPng(bytes) || bytes.length < 24 || Buffer.from(bytes.subarray(12, 16)).toString('latin1') !== 'IHDR') return 0;
+  const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
+  return view.getUint32(16) * view.getUint32(20);
+}
+
+/** A picture that could not be opened and lacks the mark with which its kind ends. */
+function isCutOff(bytes: Uint8Array): boolean {
+  const tail = Buffer.from(bytes.subarray(Math.max(0, bytes.length - 4096)));
+  return isPng(bytes) ? !tail.includes('IEND') : tail.lastIndexOf(Buffer.from([0xff, 0xd9])) < 0;
+}
+
 /** PNG or JPEG to a grey picture, turned upright after its EXIF note. Its size is judged from the header alone. */
 export async function decodePicture(bytes: Uint8Array): Promise<Decoded> {
   sharp.cache(false);
   sharp.concurrency(1);
+  if (statedPixels(bytes) > MAX_PIXELS) return { ok: false, reason: 'picture-too-large' };
   try {
     const open = () => sharp(bytes, { limitInputPixels: MAX_PIXELS, failOn: 'error', sequentialRead: true });
     const head = await open().metadata();
@@ -66,6 +82,7 @@ export async function decodePicture(bytes: Uint8Array): Promise<Decoded> {
     return { ok: true, picture, width: picture.width, height: picture.height };
   } catch (error) {
     const message = error instanceof Error ? error.message : '';
-    return { ok: false, reason: /pixel limit|too large/i.test(message) ? 'picture-too-large' : 'picture-broken' };
+    if (/pixel limit|too large/i.test(message)) return { ok: false, reason: 'picture-too-large' };
+    return { ok: false, reason: isCutOff(bytes) ? 'picture-truncated' : 'picture-broken' };
   }
 }
