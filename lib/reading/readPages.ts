@@ -5,23 +5,17 @@ import { cardRows } from './stages/cards';
 import { type CellLine, cellsOf } from './stages/cells';
 import { type Context, contextAt, contextsOf, withShared } from './stages/contexts';
 import { ANY_DATE } from './stages/dates';
+import type { Edge } from './stages/edges';
 import { type IdentityHit, identityHits } from './stages/identity';
 import { type Line, linesOf } from './stages/lines';
 import { type ListRow, listRows } from './stages/list';
+import { notSoil, SOIL_WORDS } from './stages/matter';
+import { edgesOf } from './stages/panels';
 import { type ProseRefusal, paragraphsOf, proseRows } from './stages/prose';
 import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommendations';
 import type { NotTaken } from './stages/roles';
 import type { Run } from './stages/runs';
-import {
-  laboratoryName,
-  notSoil,
-  SOIL_WORDS,
-  type Statements,
-  statementsOf,
-  type ZoneBox,
-  zoneAt,
-  zonesOf,
-} from './stages/sections';
+import { laboratoryName, type Statements, statementsOf, type ZoneBox, zoneAt, zonesOf } from './stages/sections';
 import { rowsOfTable, type TableRow } from './stages/tableRows';
 import { type Table, tablesOf } from './stages/tables';
 import { type NumberStyle, numberStyle } from './stages/values';
@@ -32,6 +26,8 @@ import { type Page, type Reading, type Remark, refusedReading } from './types';
 export type Trace = {
   readonly pages: readonly Upright[];
   readonly lines: readonly CellLine[];
+  /** Upright edges between parts of a page that have lines of their own. */
+  readonly edges: readonly (Edge & { readonly page: number })[];
   readonly zones: readonly ZoneBox[];
   readonly tables: readonly Table[];
   readonly listRows: readonly ListRow[];
@@ -95,7 +91,7 @@ function partsOf(tables: readonly TableRow[], list: readonly ListRow[], contexts
       row.identity.fieldName !== undefined;
     const identity = own
       ? withShared(row.identity, shared)
-      : { ...row.identity, ...contextAt(contexts, page, y)?.identity };
+      : { ...row.identity, ...contextAt(contexts, page, y, row.line.cells[0]?.phrase.x0)?.identity };
     return { page, y, part: { identity, candidates: row.candidates } };
   });
   const byContext = new Map<Context | Identity | null, { page: number; y: number; candidates: Candidate[] }>();
@@ -134,11 +130,29 @@ function soilPages(
   return { soil, other };
 }
 
-function traced(pages: readonly Upright[]): { lines: CellLine[]; texts: string[]; style: NumberStyle } {
-  const plain: Line[] = pages.flatMap((page) => linesOf(page));
+type Seen = { lines: CellLine[]; texts: string[]; style: NumberStyle; edges: (Edge & { page: number })[] };
+
+function traced(pages: readonly Upright[]): Seen {
+  const whole: Line[] = pages.flatMap((page) => linesOf(page));
   const style = numberStyle(pages.flatMap((page) => page.words.map((word) => word.text)));
-  const texts = plain.map((line) => line.text);
-  return { lines: cellsOf(plain, style, legendOf(texts)), texts, style };
+  const legend = legendOf(whole.map((line) => line.text));
+  const first = cellsOf(whole, style, legend);
+  const edges = new Map(pages.map((page) => [page, edgesOf(page, first)]));
+  const parted = pages.some((page) => (edges.get(page)?.length ?? 0) > 0);
+  const lines = parted
+    ? cellsOf(
+        pages.flatMap((page) => linesOf(page, edges.get(page))),
+        style,
+        legend,
+      )
+    : first;
+  const texts = lines.map((line) => line.line.text);
+  return {
+    lines,
+    texts,
+    style,
+    edges: [...edges].flatMap(([page, list]) => list.map((edge) => ({ ...edge, page: page.number }))),
+  };
 }
 
 /**
@@ -156,7 +170,7 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const bare = upright.filter((page) => page.words.length < 3);
   if (bare.length === upright.length)
     return { reading: refusedReading({ file, pages: count, error: NO_TEXT }), trace: null };
-  const { lines, texts, style } = traced(upright);
+  const { lines, texts, style, edges } = traced(upright);
   const { soil, other } = soilPages(lines, upright);
   const warnings: Remark[] = [];
   if (bare.length > 0)
@@ -208,6 +222,7 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const trace: Trace = {
     pages: upright,
     lines,
+    edges,
     zones,
     tables,
     listRows: rows,

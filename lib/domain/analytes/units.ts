@@ -62,7 +62,12 @@ const ROWS = [
     'meq/100cm3 cmolc/dm3 cmol/dm3 cmol(+)/dm3 cmolc/dm³|meq/100 cm³|meq/100 cm3',
   ],
   ['meq/L', 'meq/L', 'charge', 'meq/L mmolc/L me/L meq/l'],
-  ['%', '%', 'share', '% pct pct. percent Percent percentage Percentage|per cent|g/100g|g/100 g|% of CEC|% CEC|%CEC|% by wt|% w/w'],
+  [
+    '%',
+    '%',
+    'share',
+    '% pct pct. percent Percent percentage Percentage|per cent|g/100g|g/100 g|% of CEC|% CEC|%CEC|% by wt|% w/w',
+  ],
   ['dS/m', 'dS/m', 'none', 'dS/m ds/m mmhos/cm mmho/cm mmhos millimhos/cm mS/cm'],
   ['mS/m', 'mS/m', 'none', 'mS/m'],
   ['uS/cm', 'µS/cm', 'none', 'uS/cm µS/cm μS/cm umhos/cm'],

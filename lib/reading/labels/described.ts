@@ -12,7 +12,8 @@ const DESCRIBES = new Set(
   suspension test the titration to topsoil total turbidimetric units using value volume water weight wet with walkley
   black walkley-black strong weak acid-extractable water-soluble plant-available acetate ammonium nh4oac nh4cl kcl cacl2 bacl2 hcl hcl-extractable
   nahco3 al cal p1 p2 i ii iii 1 2 3 dry-ash h2o water-extractable mineral element elemental reserve active potential
-  per unit cec acidity screening regia capacity cation cations ph saturation ammonium share natural acid edta-extractable nitric perchloric
+  one part parts five two half equal used lime requirement guide binding held that is complex sikora smp woodruff adams
+  evans adams-evans sand fresh standard routine your analysed analyzed tested acid-soluble per unit cec acidity screening regia capacity cation cations ph saturation ammonium share natural acid edta-extractable nitric perchloric
   digest digestion saturate slurry solids deionised deionized distilled`
     .split(/\s+/)
     .filter((word) => word !== ''),
@@ -23,7 +24,7 @@ const MOLAR = /^(\d+(\.\d+)?)?-?[mn]$|^\d+(\.\d+)?$|^\d+(\.\d+)?:\d+(\.\d+)?$|^n
 const SALTS =
   /\b(0?\.?\d* ?m )?(calcium|ammonium|potassium|barium|sodium|magnesium|lithium) (chloride|acetate|nitrate|bicarbonate|sulfate|sulphate|lactate|oxalate|fluoride|citrate|phosphate)s?\b/g;
 const LEADS = new Set(
-  'hot water dtpa available extractable exchangeable soluble plant-available total soil residual readily plant test mehlich olsen active estimated water-soluble reaction exch avail extr acid-extractable mineral'.split(
+  'acidity of the soil measured determined hot water dtpa available extractable exchangeable soluble plant-available total soil residual readily plant test mehlich olsen active estimated water-soluble reaction exch avail extr acid-extractable mineral'.split(
     ' ',
   ),
 );

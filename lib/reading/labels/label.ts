@@ -196,7 +196,7 @@ function besideBrackets(raw: string): { analyte: AnalyteKey; strength: number; a
   const match = /^([^()]+)\(([^()]+)\)\s*$/.exec(raw);
   if (match === null || CHANGES.test(raw)) return null;
   const [outside, inside] = [(match[1] ?? '').trim(), (match[2] ?? '').trim()];
-  if (outside.split(' ').length > 4 || inside.split(' ').length > 5) return null;
+  if (outside.split(' ').length > 4 || inside.split(' ').length > 8) return null;
   const sides = [outside, inside].map((part) => {
     const plain = normal(part);
     return lookUp(plain, part) ?? lookUp(cutMethods(plain), part) ?? describedName(part, (name) => lookUp(name, part));
@@ -236,6 +236,17 @@ const nameIn = remembered(
     if (fourth !== null) return { ...fourth, strength: 0.96 };
     const same = twoNames(withoutUnit) ?? sameInAllParts(raw);
     if (same !== null) return { analyte: same, strength: 0.97, ambiguous: null };
+    const share =
+      /^(?:share|portion|part|percent(?:age)?|saturation)\b.*\b(?:with|by|of|:)\s+(calcium|magnesium|potassium|sodium|hydrogen|bases)$/.exec(
+        withoutUnit,
+      );
+    const held =
+      share === null
+        ? null
+        : share[1] === 'bases'
+          ? lookUp('base saturation', 'base saturation')
+          : lookUp(share[1] ?? '', share[1] ?? '');
+    if (held !== null) return { ...held, strength: 0.955 };
     const described = describedName(withoutUnit, (plain) => lookUp(plain, raw));
     if (described !== null) return { ...described, strength: 0.955 };
     return besideBrackets(raw);
@@ -270,6 +281,7 @@ export function readLabel(text: string, captions: readonly string[] = []): Label
     if (!/total/i.test(text)) key = share;
   }
   if (key === 'ec' && unit?.unit === 'mg/kg') key = 'tss';
+  if (key === 'soil_ph_water' && /\bbuffer\b/i.test(text)) key = 'buffer_ph';
   if (
     key === 'soil_ph_water' &&
     /cacl ?2|calcium chloride|\bkcl\b|potassium chloride|\bsalt\b/i.test(all.normalize('NFKC'))

@@ -42,11 +42,24 @@ function overlap(a: Span, b: Span): number {
   return Math.min(a.x1, b.x1) - Math.max(a.x0, b.x0);
 }
 
+/** The words of a row headed "Mean of all customers" may run over the columns of names and numbers. */
+function liesOverSeveral(cell: PageCell, rows: readonly CellLine[]): boolean {
+  if (cell.meaning.kind !== 'text' || cell.phrase.words.length < 2) return false;
+  const covered = rows.filter(
+    (row) =>
+      row.line !== undefined &&
+      row.cells.filter(
+        (other) => other !== cell && overlap(other.phrase, cell.phrase) > 0.5 * (other.phrase.x1 - other.phrase.x0),
+      ).length >= 2,
+  );
+  return covered.length >= 2;
+}
+
 /** Columns from the numbers and names of the data rows: cells that stand over one another; units of a list have columns of their own. */
 export function spansOf(rows: readonly CellLine[], withUnits = false): Span[] {
   const cells = rows
     .flatMap((row) => row.cells.filter((cell, index) => withUnits || !isUnitOf(row.cells[index - 1], cell)))
-    .filter((cell) => cell.meaning.kind !== 'rating')
+    .filter((cell) => cell.meaning.kind !== 'rating' && !liesOverSeveral(cell, rows))
     .map((cell) => ({ x0: cell.phrase.x0, x1: cell.phrase.x1 }))
     .sort((a, b) => a.x0 - b.x0);
   const spans: Span[] = [];
@@ -187,6 +200,10 @@ const WIDER = 0.12;
 
 /** A caption is centred over its group: the widest run of columns that can take it and has it in the middle. */
 function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
+  if (caption.title && caption.last - caption.first + 1 === stacks.length) {
+    for (const stack of stacks) stack.captions.push(caption.text);
+    return;
+  }
   let [low, high] = [caption.first, caption.last];
   while (!caption.blocked.has(low - 1) && takesCaption(stacks[low - 1], caption.text)) low -= 1;
   while (!caption.blocked.has(high + 1) && takesCaption(stacks[high + 1], caption.text)) high += 1;
@@ -247,13 +264,37 @@ function meaningOf(stack: Stack, first: boolean): Column {
     (label?.unit != null && ADVICE_UNITS.has(label.unit));
   let role: Role | null = advice ? 'recommendation' : roleOf(heading, first);
   if (label !== null && !advice) {
-    role = /\b(desired|optimum|target|ideal)\b/i.test(all)
+    role = /\b(desired|optimum|target|ideal|wanted)\b/i.test(all)
       ? 'desired'
       : /\b(previous|last|prior)\b/i.test(all)
         ? 'previous'
         : null;
   }
   return { ...span, label, field: label === null ? field : null, role, position: stack.over ? 1 : 0.96, unexplained };
+}
+
+/** "Found, in pounds per acre          Mehlich 3": one or two phrases over a whole table, the first at its left edge. */
+function isTitle(phrases: readonly Phrase[], stacks: readonly Stack[]): boolean {
+  const [first] = phrases;
+  const [left] = stacks;
+  if (first === undefined || left === undefined || phrases.length > 2 || stacks.length < 4) return false;
+  if (first.x0 > left.x0 + first.size || first.words.length < 2) return false;
+  const numeric = stacks.slice(1).filter((stack) => overlap(stack, first) > 0);
+  return (
+    numeric.length <= 1 &&
+    phrases.every((phrase) => readLabel(phrase.text) === null && fieldOf(phrase.text) === null) &&
+    phrases.some((phrase) => saysAll(phrase.text))
+  );
+}
+
+/** A heading over the names of a table that gives a unit or a method and is no field or analyte itself. */
+function saysAll(text: string): boolean {
+  return (
+    text.length > 6 &&
+    fieldOf(text) === null &&
+    readLabel(text) === null &&
+    (unitIn(text) !== null || /mehlich|morgan|olsen|bray|dtpa|acetate|saturation/i.test(text))
+  );
 }
 
 /** Captions over groups of columns that repeat one another, one caption a group; the phrases that were given away. */
@@ -280,10 +321,20 @@ export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]
   const captions: Caption[] = [];
   for (const line of [...header].reverse()) {
     const phrases = line.cells.flatMap((cell: PageCell) => partHeading(cell.phrase, spans));
+    if (isTitle(phrases, stacks)) {
+      for (const phrase of phrases)
+        captions.push({ ...captionOf(phrase, [phrase], stacks, 0, stacks.length - 1), title: true });
+      continue;
+    }
     const grouped = overGroups(phrases, stacks);
     for (const phrase of phrases) if (!grouped.has(phrase)) place(phrase, phrases, stacks, captions);
   }
   for (const caption of captions.reverse()) spreadCaption(caption, stacks);
+  // "Main nutrients, lb/acre (Mehlich 3)" over the names speaks for every column.
+  const [names, ...others] = stacks;
+  const title = names?.own.join(' ') ?? '';
+  if (names !== undefined && saysAll(title))
+    for (const stack of others) if (takesCaption(stack, title)) stack.captions.push(title);
   return stacks.map((stack, index) => meaningOf(stack, index === 0));
 }
 

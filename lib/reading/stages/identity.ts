@@ -59,7 +59,7 @@ export function fieldWithValue(text: string): { field: IdentityField; value: str
   }
   // "Sample SP-1", "Plot 4": without a colon only a short name with a figure in it.
   const plain = /^(sample|plot|bed|field|sample id|sample no\.?)\s+(\S+(?: \S+){0,2})$/i.exec(text);
-  if (plain !== null && /\d/.test(plain[2] ?? '') && !/^(no|id|number|date|depth|of)\b/i.test(plain[2] ?? ''))
+  if (plain !== null && /\d|^[A-Z]$/.test(plain[2] ?? '') && !/^(no|id|number|date|depth|of)\b/i.test(plain[2] ?? ''))
     return { field: 'sampleId', value: (plain[2] ?? '').trim() };
   const words = text.split(' ');
   for (let cut = Math.min(words.length - 1, 4); cut >= 1; cut--) {

@@ -1,3 +1,4 @@
+import { type Edge, partAt } from './edges';
 import { uprightHeads } from './uprightHeads';
 import type { Placed, Upright } from './words';
 
@@ -61,9 +62,30 @@ function groupByLine(words: readonly Placed[]): Placed[][] {
   return groups.map((group) => group.words.sort((a, b) => a.x0 - b.x0));
 }
 
+/** Lines of the whole width and, where parts stand side by side, the lines of each part together. */
+function ordered(words: readonly Placed[], edges: readonly Edge[]): Placed[][] {
+  if (edges.length === 0) return groupByLine(words);
+  const parts = new Map<string, { y: number; part: number; words: Placed[] }>();
+  const sections = [...edges].sort((a, b) => a.y0 - b.y0);
+  for (const word of words) {
+    const part = partAt(edges, (word.x0 + word.x1) / 2, middle(word));
+    const section =
+      part === 0
+        ? sections.filter((edge) => edge.y1 <= middle(word)).length + 0.5
+        : sections.filter((edge) => edge.y0 < middle(word)).length;
+    const key = `${part === 0 ? 'whole' : 'part'} ${part === 0 ? section : ''} ${part}`;
+    const group = parts.get(key) ?? { y: middle(word), part, words: [] };
+    group.words.push(word);
+    group.y = Math.min(group.y, middle(word));
+    parts.set(key, group);
+  }
+  return [...parts.values()].sort((a, b) => a.y - b.y || a.part - b.part).flatMap((group) => groupByLine(group.words));
+}
+
 /** Stage 2. Words to lines, lines to phrases, by position alone. */
-export function linesOf(page: Upright): Line[] {
-  return groupByLine([...page.words, ...uprightHeads(page)]).map((words, index) => {
+export function linesOf(page: Upright, edges: readonly Edge[] = []): Line[] {
+  const all = [...page.words, ...uprightHeads(page)];
+  return ordered(all, edges).map((words, index) => {
     const phrases: Phrase[] = [];
     let run: Placed[] = [];
     for (const word of words) {

@@ -80,7 +80,7 @@ function neighbours(lines: readonly CellLine[], at: number, cell: PageCell, end:
     const line = lines[index];
     if (line === undefined || line.line.page !== cell.phrase.page) break;
     const gap = step < 0 ? edge.phrase.y0 - line.line.y1 : line.line.y0 - edge.phrase.y1;
-    if (gap > TIGHT * cell.phrase.size) break;
+    if (gap > TIGHT * cell.phrase.size || gap < -2.5 * cell.phrase.size) break;
     const part = partAt(line, cell, end);
     if (part === null) {
       // A line of another block may lie between two lines of this label.

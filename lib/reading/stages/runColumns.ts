@@ -61,6 +61,14 @@ function parted(phrase: Phrase, columns: readonly Span[]): Phrase[] {
 function fieldLine(line: CellLine, within: Span): { field: IdentityField; cells: readonly PageCell[] } | null {
   const [first, ...rest] = line.cells.filter((cell) => overlap(cell.phrase, within) > 0);
   if (first === undefined || rest.length === 0) return null;
+  // "Lab no. 161 | Lab no. 162": the field with its answer over each column.
+  const each = [first, ...rest].map((cell) => ({ cell, said: fieldWithValue(cell.phrase.text) }));
+  const same = each[0]?.said?.field;
+  if (same !== undefined && each.every(({ said }) => said?.field === same))
+    return {
+      field: same,
+      cells: each.map(({ cell, said }) => ({ ...cell, phrase: { ...cell.phrase, text: said?.value ?? '' } })),
+    };
   const field = fieldOf(first.phrase.text);
   if (field === null) return null;
   const other = rest.some((cell) => fieldOf(cell.phrase.text) !== null || /:\s*\S/.test(cell.phrase.text));
@@ -82,8 +90,8 @@ function isYear(cell: PageCell): boolean {
 function canHead(line: CellLine, within: Span, busy: ReadonlySet<CellLine>): PageCell[] | null {
   const cells = line.cells.filter((cell) => overlap(cell.phrase, within) > 0);
   if (cells.length === 0) return [];
-  if (cells.some((cell) => fieldWithValue(cell.phrase.text) !== null)) return null;
   if (fieldLine(line, within) !== null) return cells;
+  if (cells.some((cell) => fieldWithValue(cell.phrase.text) !== null)) return null;
   if (busy.has(line)) return null;
   const numbers = cells.filter((cell) => cell.meaning.kind === 'value' && !isYear(cell));
   if (numbers.length > 0) return null;
@@ -109,6 +117,7 @@ export function headingsOver(
     const cells = canHead(line, within, busy);
     if (cells === null) break;
     if (cells.length === 0) continue;
+    if (line.line.y0 > under.line.y1) break;
     const distance = under.line.y0 - line.line.y1;
     if (distance > (found.length === 0 ? 4.5 : 2.6) * Math.max(line.line.size, first.line.line.size)) break;
     found.unshift(line);
@@ -121,7 +130,9 @@ export function headingsOver(
 export function isHeadingLine(line: CellLine, within: Span): boolean {
   const cells = line.cells.filter((cell) => overlap(cell.phrase, within) > 0);
   if (cells.length < 2 || cells.some((cell) => cell.meaning.kind === 'value' && !isYear(cell))) return false;
-  const roles = cells.filter((cell, index) => roleOf(cell.phrase.text, index === 0) !== null);
+  const roles = cells.filter(
+    (cell, index) => roleOf(cell.phrase.text, index === 0) !== null || unitOnly(cell.phrase.text) !== null,
+  );
   return roles.length >= 2 && roles.length >= 0.5 * cells.length;
 }
 

@@ -36,6 +36,7 @@ export function runsOf(lines: readonly CellLine[], segments: readonly Segment[],
       const between = lines.slice((index.get(last.line) ?? 0) + 1, index.get(segment.line));
       return (
         !between.some((line) => isHeadingLine(line, run.span)) &&
+        segment.line.line.y0 >= last.line.line.y0 &&
         segment.line.line.y0 - last.line.line.y1 < 14 * segment.line.line.size
       );
     });

@@ -44,8 +44,10 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
     const alone = line.cells.length === 1;
     for (const [index, { zone, cell }] of found.entries()) {
       // A line of column headings ("Test, Method, Result") is no section heading.
-      if (!alone && found.length < line.cells.length && !(zone === 'recommendation' && line.cells.length === 2))
-        continue;
+      const last = line.cells[line.cells.length - 1] === cell;
+      const apart = last && cell.phrase.x0 - (line.cells[line.cells.length - 2]?.phrase.x1 ?? 0) > 2 * cell.phrase.size;
+      const beside = zone === 'recommendation' && (line.cells.length === 2 || apart);
+      if (!alone && found.length < line.cells.length && !beside) continue;
       const width = cell.phrase.page.width;
       const next = found[index + 1];
       const sided = found.length > 1 || cell.phrase.x0 > 0.52 * width;
@@ -151,34 +153,6 @@ export function statementsOf(texts: readonly string[]): Statements {
     }
   }
   return { unit, methods };
-}
-
-const NOT_SOIL: readonly (readonly [string, RegExp])[] = [
-  [
-    'a plant tissue test',
-    /\b(plant (tissue|analysis)|tissue (test|analysis)|leaf (analysis|tissue)|petiole|foliar analysis)\b/i,
-  ],
-  ['a water test', /\b((irrigation |well |drinking )?water (analysis|test|quality|report|suitability))\b/i],
-  ['a compost or manure test', /\b((compost|manure|biosolids) (analysis|test|report))\b/i],
-  ['a fertiliser analysis', /\bfertili[sz]er (analysis|solution analysis|test report)\b/i],
-  ['a potting mix test', /\b(potting (mix|media)|greenhouse media|soilless (media|mix)) (analysis|test|report)\b/i],
-];
-
-/** Words of a soil report; "Soil Testing Service" is a laboratory's name and says nothing. */
-export const SOIL_WORDS =
-  /\bsoil (test|analysis|analyses|report|sample|fertility)s?\b(?! (laborator|lab|service|cent))/i;
-
-/** What a page is when it is not about soil, from its larger type and its "sample type"; null for soil. */
-export function notSoil(lines: readonly CellLine[]): string | null {
-  const cells = lines.flatMap((line) => line.cells);
-  const sizes = cells.map((cell) => cell.phrase.size).sort((a, b) => a - b);
-  const usual = sizes[Math.floor(sizes.length / 2)] ?? 10;
-  const titles = cells.filter(
-    (cell) => cell.phrase.size > 1.15 * usual || /^(sample|matrix|material) ?(type)?:/i.test(cell.phrase.text),
-  );
-  const text = titles.map((cell) => cell.phrase.text).join(' | ');
-  if (SOIL_WORDS.test(text)) return null;
-  return NOT_SOIL.find(([, pattern]) => pattern.test(text))?.[0] ?? null;
 }
 
 /** The laboratory's name: the largest type near the top that calls itself a laboratory or a testing service. */

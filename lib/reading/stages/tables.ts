@@ -41,6 +41,7 @@ function headerAbove(lines: readonly CellLine[], at: number, taken: ReadonlySet<
       break;
     }
     const gap = under.line.y0 - line.line.y1;
+    if (line.line.y0 > under.line.y1) break;
     if (gap > (header.length === 0 ? 4 : 2.2) * line.line.size) break;
     header.unshift(line);
     under = line;
@@ -92,7 +93,7 @@ function rowsFrom(lines: readonly CellLine[], at: number): CellLine[] {
   for (const line of lines.slice(at)) {
     if (last !== undefined) {
       if (!samePage(line, last)) break;
-      if (line.line.y0 - last.line.y1 > 5 * last.line.size) break;
+      if (line.line.y0 - last.line.y1 > 5 * last.line.size || line.line.y1 < last.line.y0) break;
       const headings = labelsIn(line);
       if (headings >= 3 && line.values <= 1 && !isRatingRow(line)) break;
       if (labelledPairs(line) >= 2 || isRoleLine(line) || (rows[0] !== undefined && beginsList(line, rows[0]))) break;

@@ -1,5 +1,7 @@
 import type { CellLine, PageCell } from './cells';
 import type { Column } from './columns';
+import { ANY_DATE, readDate } from './dates';
+import { isCode } from './identity';
 import type { Table } from './tables';
 
 const YEAR =
@@ -8,6 +10,9 @@ const YEAR =
 type Seen = { readonly row: CellLine; readonly year: number; readonly text: string };
 
 function yearOf(text: string): number | null {
+  const dated = ANY_DATE.test(text) ? readDate(text, 'month-first') : null;
+  if (dated?.ok)
+    return Number(dated.iso.slice(0, 4)) + Number(dated.iso.slice(5, 7)) / 12 + Number(dated.iso.slice(8, 10)) / 400;
   const match = YEAR.exec(text.trim());
   const year = match?.[1] ?? match?.[2];
   if (year === undefined) return null;
@@ -46,7 +51,9 @@ export function earlierYears(
     const usual = [...gaps].sort((a, b) => a - b)[Math.floor(gaps.length / 4)] ?? 0;
     const groups: Seen[][] = [];
     for (const [index, one] of seen.entries()) {
-      const named = one.row.cells.some((cell) => at(cell)?.field === 'sampleId' && at(cell) !== column);
+      const named = one.row.cells.some(
+        (cell) => at(cell)?.field === 'sampleId' && at(cell) !== column && !isCode(cell.phrase.text),
+      );
       const apart = index > 0 && (gaps[index - 1] ?? 0) > Math.max(1.6 * usual, usual + 0.6 * one.row.line.size);
       const last = groups[groups.length - 1];
       const again = last?.some((other) => other.year === one.year && other.text === one.text) ?? false;
