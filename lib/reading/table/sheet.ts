@@ -6,6 +6,7 @@ import type { ReadRecommendation, Remark } from '../types';
 import { analytesDown } from './analytesDown';
 import { blocksOf } from './blocks';
 import { type Facts, factsOf } from './facts';
+import { sampleList } from './sampleList';
 import { samplesDown } from './samplesDown';
 import { spoken } from './spoken';
 import { withStackedHeads } from './stacked';
@@ -51,6 +52,10 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
   const list = analytesDown(facts, free, ledger);
   const all = list === null ? shapes : [...shapes, list];
   for (const row of list?.rows ?? []) used.add(row);
+  const listed = sampleList(
+    facts,
+    free.filter((row) => !used.has(row)),
+  );
   const around = facts.grid.flatMap((_, row) => (used.has(row) || (facts.rows[row]?.filled ?? 0) === 0 ? [] : [row]));
   const headings = new Set(
     all.flatMap((shape) => shape.parts.flatMap((part) => part.candidates.map((one) => one.label.text.toLowerCase()))),
@@ -61,9 +66,12 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
   const heads = blocks.flatMap((block) => [...block.captionRows, block.base, ...block.underRows]);
   return {
     facts,
-    parts: all.flatMap((shape) =>
-      shape.parts.map((part) => ({ ...part, candidates: part.candidates.map((one) => withLegend(one, legend)) })),
-    ),
+    parts: [
+      ...listed,
+      ...all.flatMap((shape) =>
+        shape.parts.map((part) => ({ ...part, candidates: part.candidates.map((one) => withLegend(one, legend)) })),
+      ),
+    ],
     recommendations: all.flatMap((shape) => shape.recommendations),
     shared: titleIdentity(facts, top),
     statements: titleStatements(facts, around),

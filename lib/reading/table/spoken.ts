@@ -69,10 +69,10 @@ export function spoken(text: string): string {
       /\bMehlich[\s-]*(\d|I{1,3})(?![\dI])/gi,
       (_all, number: string) => `Mehlich-${/i/i.test(number) ? number.length : number}`,
     )
+    .replace(/\bBase[ -]?Sat(?:uration)?\b\.?/gi, 'Base saturation')
     .replace(/\b(K|Ca|Mg|Na|H)[ -]?(?:BS|Sat(?:n|ur)?)\b\.?/gi, '$1 saturation')
     .replace(/\b(?:BS|Sat)[ -](K|Ca|Mg|Na|H)\b/gi, '$1 saturation')
     .replace(/\bOrg(?:anic)?\.? C\b/gi, 'Organic Carbon')
-    .replace(/\bBase[ -]?Sat(?:uration)?\b\.?/gi, 'Base saturation')
     .replace(/\bBray[ -]?P?[ -]?([12])\b/gi, 'Bray $1')
     .replace(/\b(?:v\/v|w\/v|w:v|v:v)\b/gi, ' ')
     .replace(/\bpH[ -]?Wert\b/gi, 'pH')
