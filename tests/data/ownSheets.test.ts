@@ -252,6 +252,14 @@ describe('a grower’s own spreadsheet', () => {
     expect(refused).toMatchObject({ state: 'unreadable', refusal: { code: 'not-a-sheet' } });
   });
 
+  it('says how many samples are taken at once, and imports none of more', async () => {
+    const here = await place();
+    const lines = Array.from({ length: 1001 }, (_, at) => `North,${2019 + (at % 5)}-04-10,6.${at % 9}`);
+    const reportId = await send(here, ['Bed,Date,pH', ...lines].join('\n'));
+    expect(await problemOf(bring(here, reportId))).toMatchObject({ code: 'too-large', reason: 'too-many-samples' });
+    expect((await look(here, reportId)).report.state).toBe('in-review');
+  });
+
   it('imports nothing at all when no name has a plot', async () => {
     const here = await place();
     const reportId = await send(here);

@@ -1,5 +1,6 @@
 import { readdir } from 'node:fs/promises';
 import { beforeAll, describe, expect, it } from 'vitest';
+import { layoutMemory } from '@/db/schema';
 import { listApplications } from '@/lib/data/applications/listApplications';
 import { recordApplication } from '@/lib/data/applications/recordApplication';
 import { createBatch } from '@/lib/data/batches/createBatch';
@@ -17,6 +18,9 @@ import { listFailedJobs } from '@/lib/data/failedJobs/listFailedJobs';
 import { compareResults } from '@/lib/data/history/compareResults';
 import { getHistory } from '@/lib/data/history/getHistory';
 import { listLaboratories } from '@/lib/data/laboratories/listLaboratories';
+import { listLayouts } from '@/lib/data/learning/listLayouts';
+import { getOwnSheet } from '@/lib/data/ownSheets/getOwnSheet';
+import { saveSheetRows } from '@/lib/data/ownSheets/saveSheetRows';
 import { getPlot } from '@/lib/data/plots/getPlot';
 import { listPlots } from '@/lib/data/plots/listPlots';
 import { collectDue } from '@/lib/data/reminders/collectDue';
@@ -43,6 +47,7 @@ import { listMySites } from '@/lib/data/sites/listMySites';
 import { listTargets } from '@/lib/data/targets/listTargets';
 import { getSiteToday } from '@/lib/data/today/getSiteToday';
 import { getToday } from '@/lib/data/today/getToday';
+import { withSite } from '@/lib/data/transaction';
 import type { PlotId, SiteId } from '@/lib/domain/ids';
 import { countingConnection } from '../support/countQueries';
 import { ctxAs, ctxWorker, makePlot, makeSite, makeTest, useWorld } from '../support/factory';
@@ -60,6 +65,7 @@ type Ground = {
   b: string;
   batchId: string;
   copy: { reportId: string; copyId: string };
+  sheetId: string;
 };
 
 /** A report in review with so many samples and rows. */
@@ -91,11 +97,48 @@ async function makeBatch(owner: Ctx, siteId: SiteId, plotIds: readonly PlotId[])
     const results = [readResult({ analyte: 'soil_ph_water', printed: '6.4' })];
     const reading = soilReading([readSample({ sampleId: `Bag ${at}`, results })]);
     await saveReading({ ctx: worker, input: { lease: task.lease, reading } });
+    await learn(siteId, reportId, owner.actor.kind === 'person' ? owner.actor.person.id : '');
     const given = { siteId, id: plotIds[at] ?? '', job: 'recheck-effects' as const, sentence: 'It stopped.' };
     await giveUpJob({ ctx: worker, input: given });
   }
   const { id: copyId } = await askCopy({ ctx: owner, input: { siteId, reportId, page: 1 } });
   return { batchId, copy: { reportId, copyId } };
+}
+
+/** What a confirmed report taught of its layout, each of a layout of its own. */
+const learn = (siteId: SiteId, reportId: string, by: string) =>
+  withSite(siteId, (tx) =>
+    tx.insert(layoutMemory).values({
+      siteId,
+      reportId,
+      fingerprint: reportId,
+      laboratory: 'long lane bench',
+      shape: 'page-down',
+      headings: ['p', 'ph'],
+      lessons: [],
+      learntBy: by,
+    }),
+  );
+
+/** A grower's own sheet with so many names. */
+async function makeSheet(owner: Ctx, siteId: SiteId, names: number): Promise<string> {
+  const input = {
+    siteId,
+    fileName: 'own.csv',
+    bytes: new TextEncoder().encode(`Bed,Date,pH\n${siteId},2019-04-10,6.1\n`),
+  };
+  const { reportId } = await uploadReport({ ctx: owner, input: { ...input, ownSheet: 'true' } });
+  const worker = await ctxWorker();
+  const task = await startReading({ ctx: worker, input: { siteId, id: reportId } });
+  if (!task) throw new Error('The sheet could not be taken.');
+  const lines = Array.from({ length: names }, (_, at) => [`Bed ${at}`, '2019-04-10', '6.1']);
+  const rows = {
+    ok: true as const,
+    sheets: [{ number: 1, name: null, rows: [['Bed', 'Date', 'pH'], ...lines] }],
+    remarks: [],
+  };
+  await saveSheetRows({ ctx: worker, input: { lease: task.lease, rows } });
+  return reportId;
 }
 
 async function makeGround(plots: number, years: number): Promise<Ground> {
@@ -126,8 +169,9 @@ async function makeGround(plots: number, years: number): Promise<Ground> {
   if (!plotId || !a || !b) throw new Error('The ground is empty.');
   const batch = await makeBatch(owner, siteId, plotIds);
   const reportId = await makeReview(owner, siteId, plotIds);
+  const sheetId = await makeSheet(owner, siteId, plotIds.length);
   await recheckEffects({ ctx: await ctxWorker(), input: { siteId, id: plotId } });
-  return { siteId, owner, worker: await ctxWorker(), plotId, reportId, a, b, ...batch };
+  return { siteId, owner, worker: await ctxWorker(), plotId, reportId, a, b, sheetId, ...batch };
 }
 
 const here = ({ siteId }: Ground) => ({ siteId });
@@ -138,6 +182,8 @@ const ASKED: Record<string, (ground: Ground) => Promise<unknown>> = {
   getHistory: (g) => getHistory({ ctx: g.owner, input: { ...here(g), plotId: g.plotId } }),
   compareResults: (g) =>
     compareResults({ ctx: g.owner, input: { ...here(g), analyte: 'soil_ph_water', a: g.a, b: g.b } }),
+  listLayouts: (g) => listLayouts({ ctx: g.owner, input: here(g) }),
+  getOwnSheet: (g) => getOwnSheet({ ctx: g.owner, input: { ...here(g), reportId: g.sheetId } }),
   listLaboratories: (g) => listLaboratories({ ctx: g.owner, input: here(g) }),
   getPlot: (g) => getPlot({ ctx: g.owner, input: { ...here(g), plotId: g.plotId } }),
   listPlots: (g) => listPlots({ ctx: g.owner, input: here(g) }),

@@ -22,9 +22,18 @@ import { siteVerb } from '../verb';
 import { faultsOf, nameOf, readMapped } from './readMapped';
 import { chosen, getSheetOfReport, mappingNow, rememberMapping } from './sheetStore';
 
+/** More than thirty plots have in thirty years. */
+const MOST_SAMPLES = 1_000;
 const NO_PLOT = 'No plot was chosen for it.';
 const NO_DAY = 'The spreadsheet gives no day for it.';
 const NO_NUMBER = 'None of its numbers could be taken.';
+
+function takeable(applied: AppliedMapping): AppliedMapping {
+  const { length } = applied.reading.samples;
+  if (length <= MOST_SAMPLES) return applied;
+  const sentence = `This sheet holds ${length} samples, and ${MOST_SAMPLES} are taken at once. Nothing was imported; cut the sheet into parts and send each.`;
+  throw new Problem('too-large', sentence, { reason: 'too-many-samples' });
+}
 
 /** Whose numbers they are is said by the report; as a doubt of every row it would hide the real ones. */
 const unmarked = (reading: Reading): Reading => ({
@@ -45,13 +54,15 @@ async function leaveOut({ tx, siteId }: Where, reportId: string, applied: Applie
   const { samples, rows } = await loadReview(tx, siteId, reportId);
   const reasons = new Map<string, string[]>();
   const removed: string[] = [];
+  const bySample = new Map<string, string[]>();
+  for (const row of rows) bySample.set(row.reportSampleId, [...(bySample.get(row.reportSampleId) ?? []), row.id]);
   for (const sample of samples) {
     const read = applied.reading.samples[sample.ordinal - 1];
     if (!read) throw new Error('A sample of the sheet went missing.');
-    const mine = rows.filter((row) => row.reportSampleId === sample.id);
+    const mine = bySample.get(sample.id) ?? [];
     const faults = faultsOf(read);
     const bad = mine.filter((_, at) => faults[at] !== null);
-    removed.push(...bad.map((row) => row.id));
+    removed.push(...bad);
     const none = bad.length === mine.length;
     const reason = sample.plotId === null ? NO_PLOT : sample.takenOn === null ? NO_DAY : none ? NO_NUMBER : null;
     if (reason !== null) reasons.set(reason, [...(reasons.get(reason) ?? []), sample.id]);
@@ -118,7 +129,7 @@ export const importOwnSheet = siteVerb({
     await lockPlots(tx, siteId, plotIds);
 
     const mapping = chosen(sheet, (await mappingNow(tx, siteId, sheet)).mapping, input);
-    const applied = readMapped(sheet, mapping, row.fileName ?? '');
+    const applied = takeable(readMapped(sheet, mapping, row.fileName ?? ''));
     await writeReadingRows(
       tx,
       ctx,

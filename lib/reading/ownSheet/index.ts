@@ -6,11 +6,7 @@ export { applyMapping, TYPED_BY_GROWER } from './apply';
 export { proposeMapping } from './propose';
 export type {
   AppliedMapping,
-  ColumnMeaning,
   OwnColumn,
-  OwnLayout,
   OwnMapping,
   OwnRows,
-  ProposedMapping,
-  RowProblem,
 } from './types';

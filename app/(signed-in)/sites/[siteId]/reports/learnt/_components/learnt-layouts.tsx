@@ -55,7 +55,12 @@ export function LearntLayouts({ siteId, first, mayForget }: Props) {
           title={laboratoryWords(layout)}
           {...(at % 2 === 1 ? { ground: 'white' as const } : {})}
         >
-          <OneLayout home={home} layout={layout} {...(mayForget ? { onForget: () => forget(layout) } : {})} />
+          <OneLayout
+            home={home}
+            number={at + 1}
+            layout={layout}
+            {...(mayForget ? { onForget: () => forget(layout) } : {})}
+          />
         </Stretch>
       ))}
     </>
@@ -64,10 +69,13 @@ export function LearntLayouts({ siteId, first, mayForget }: Props) {
 
 function OneLayout({
   home,
+  number,
   layout,
   onForget,
 }: {
   home: string;
+  /** Tells two forms of one laboratory apart for those who only hear the page. */
+  number: number;
   layout: LearntLayout;
   onForget?: () => Promise<ApiResult<unknown>>;
 }) {
@@ -104,7 +112,7 @@ function OneLayout({
         ) : null}
       </div>
       <DataTable
-        caption={`Labels of ${laboratoryWords(layout)} and what they meant`}
+        caption={`Labels of ${laboratoryWords(layout)} and what they meant, form ${number}`}
         hideCaption
         rows={rows}
         rowKey={(row) => String(row.at)}
