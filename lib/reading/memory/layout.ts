@@ -42,14 +42,14 @@ export function plainLaboratory(name: string | null): string {
     .trim();
 }
 
-/** A label without what may change from year to year: its unit, a target range, a year. */
+/** A label without what may change from year to year: its unit, a target range, a year. '' when nothing else is left: it names nothing. */
 export function plainLabel(printed: string): string {
   const bare = printed
     .replace(/\(\s*[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*[^)]*\)/g, ' ')
     .replace(/\b(19|20)\d\d\b/g, ' ');
   const unit = unitIn(bare);
   const rest = unit === null ? normal(bare) : unit.rest;
-  return rest.replace(/\s+/g, ' ').trim() || normal(printed);
+  return rest.replace(/\s+/g, ' ').trim();
 }
 
 /** How many groups the numbers fall into when neighbours within `near` are one group. */

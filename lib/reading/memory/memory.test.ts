@@ -114,6 +114,13 @@ describe('a layout', () => {
   it('calls a label the same with and without its unit', () => {
     expect(['P (ppm)', 'P, lb/acre', 'P'].map(plainLabel)).toEqual(['p', 'p', 'p']);
   });
+  it('learns nothing from a label that is only a unit', () => {
+    expect(['ppm', 'meq/100 g', '2025'].map(plainLabel)).toEqual(['', '', '']);
+    const bare = row({ analyte: 'phosphorus', label: 'ppm' });
+    expect(lessonsOf([confirmed(bare)])).toEqual([]);
+    const zinc = row({ analyte: 'zinc', label: 'ppm' });
+    expect(applyMemory(reading([zinc, K]), memory([confirmed(bare)])).samples[0]?.results[0]).toEqual(zinc);
+  });
 });
 
 const UNIT_MISSING = { code: 'unit-missing', sentence: 'The page gives no unit for this number.' };
