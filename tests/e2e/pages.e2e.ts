@@ -105,7 +105,13 @@ describe('Every page', () => {
       // Their own site in front, then ids of another: like ids that nobody has.
       if (!/\[(?!siteId)/.test(route)) continue;
       const siteId = theirs.site.id;
-      const missing = { siteId, plotId: randomUUID(), reportId: randomUUID(), targetKey: randomUUID() };
+      const missing = {
+        siteId,
+        plotId: randomUUID(),
+        reportId: randomUUID(),
+        targetKey: randomUUID(),
+        batchId: randomUUID(),
+      };
       const notTheirs = await looks(filled(route, { ...mine.parts, siteId }));
       expect(notTheirs, `own site, then their ${route}`).toEqual(await looks(filled(route, missing)));
     }

@@ -51,8 +51,19 @@ export async function makeGround(name: string): Promise<Ground> {
     name: 'Exhibition onions',
     bands: [{ analyte: 'soil_ph_water', low: 6.3, high: 6.8 }],
   });
-  const reportId = await owner.upload(site.id, 'fixtures/reports/main-job/last-spring.pdf', plotId);
-  return { site, cookies, parts: { siteId: site.id, plotId, reportId, targetKey } };
+  const { batchId, fileIds } = await owner.send<{ batchId: string; fileIds: string[] }>(
+    'POST',
+    `/sites/${site.id}/batches`,
+    {
+      files: [
+        { name: 'last-spring.pdf', bytes: 3000 },
+        { name: 'empty.pdf', bytes: 0, refusal: 'This file is empty, so nothing was sent.' },
+        { name: 'a-report-with-a-very-long-name-from-the-drawer-of-the-shed-spring-2019.pdf', bytes: 90000 },
+      ],
+    },
+  );
+  const reportId = await owner.upload(site.id, 'fixtures/reports/main-job/last-spring.pdf', plotId, fileIds[0]);
+  return { site, cookies, parts: { siteId: site.id, plotId, reportId, targetKey, batchId } };
 }
 
 /** One living link of each kind that a mail carries, by the folder of its page. */

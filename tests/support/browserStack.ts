@@ -62,7 +62,7 @@ export async function setClock(moment: string | null): Promise<void> {
 export type Caller = {
   get: <T>(place: string) => Promise<T>;
   send: <T>(method: 'POST' | 'PUT' | 'PATCH', place: string, body: unknown) => Promise<T>;
-  upload: (siteId: string, file: string, plotId?: string) => Promise<string>;
+  upload: (siteId: string, file: string, plotId?: string, batchFileId?: string) => Promise<string>;
 };
 
 /** The same API as the screens, for what a test needs to stand there before it begins. */
@@ -78,10 +78,11 @@ export function callAs(cookie: string): Caller {
     get,
     send: (method, place, body) =>
       call(method, place, { body: JSON.stringify(body), headers: { 'content-type': 'application/json' } }),
-    upload: async (siteId, file, plotId) => {
+    upload: async (siteId, file, plotId, batchFileId) => {
       const form = new FormData();
       form.set('file', new Blob([await readFile(file)]), path.basename(file));
       if (plotId) form.set('plotId', plotId);
+      if (batchFileId) form.set('batchFileId', batchFileId);
       const { reportId } = await call<{ reportId: string }>('POST', `/sites/${siteId}/uploads`, { body: form });
       const place = `/sites/${siteId}/reports/${reportId}`;
       const isRead = ({ state }: { state: string }) => state !== 'received' && state !== 'reading';
