@@ -70,6 +70,13 @@ function settleUnit(
   }
   if (unit !== null) return { unit, printed: unitPrinted, doubts: [] };
   if (candidate.method === 'index') return { unit: 'index', printed: null, doubts: [] };
+  const keyed = statements.units?.get(candidate.label.analyte);
+  if (keyed !== undefined)
+    return {
+      unit: keyed.unit,
+      printed: keyed.printed,
+      doubts: [remark('unit-from-statement', 'The unit is given in a note of the page, not beside the number.')],
+    };
   if (statements.unit !== null && entry.unit === 'mg/kg') {
     return { unit: statements.unit.unit, printed: statements.unit.printed, doubts: [] };
   }

@@ -20,6 +20,24 @@ const DESCRIBES = new Set(
 );
 
 const MOLAR = /^(\d+(\.\d+)?)?-?[mn]$|^\d+(\.\d+)?$|^\d+(\.\d+)?:\d+(\.\d+)?$|^n$/;
+/** "Potassium (K) exchangeable": the symbol beside its own name. */
+const SYMBOLS: Readonly<Record<string, string>> = {
+  p: 'phosphorus',
+  k: 'potassium',
+  s: 'sulfur',
+  b: 'boron',
+  ca: 'calcium',
+  mg: 'magnesium',
+  na: 'sodium',
+  zn: 'zinc',
+  mn: 'manganese',
+  fe: 'iron',
+  cu: 'copper',
+  al: 'aluminum',
+  h: 'hydrogen',
+  ph: 'soil acidity',
+};
+
 /** A second nutrient may stand in a label as its extractant: "calcium chloride", "sodium bicarbonate". */
 const SALTS =
   /\b(0?\.?\d* ?m )?(calcium|ammonium|potassium|barium|sodium|magnesium|lithium) (chloride|acetate|nitrate|bicarbonate|sulfate|sulphate|lactate|oxalate|fluoride|citrate|phosphate)s?\b/g;
@@ -58,9 +76,7 @@ export function describedName<T>(text: string, find: (plain: string) => T | null
       const found = find(name);
       if (found === null) continue;
       const rest = words.slice(to);
-      const described = rest.every(
-        (word) => DESCRIBES.has(word) || MOLAR.test(word) || name.startsWith(word) || word.length === 1,
-      );
+      const described = rest.every((word) => DESCRIBES.has(word) || MOLAR.test(word) || SYMBOLS[word] === name);
       return described ? found : null;
     }
   }

@@ -1,4 +1,4 @@
-import { type AnalyteKey, analyte, type MethodKey, methodsOf, type UnitKey } from '@/lib/domain/analytes';
+import { type AnalyteKey, analyte, METHODS, type MethodKey, methodsOf, type UnitKey } from '@/lib/domain/analytes';
 import { describedName } from './described';
 import { METHOD_SPELLINGS, NAMES, UNIT_SPELLINGS } from './dictionary';
 import { findWhole, normal } from './normal';
@@ -80,7 +80,36 @@ export function methodIn(key: AnalyteKey, text: string): { method: MethodKey; pr
     if (wanted.length <= (best?.length ?? 0)) continue;
     if (findWhole(plain, wanted) >= 0) best = { method, printed: spelling, length: wanted.length };
   }
-  return best ?? suspension(key, text);
+  return best ?? suspension(key, text) ?? extractantIn(key, plain);
+}
+
+const EXTRACTED = new Set(['nutrients', 'micronutrients', 'metals']);
+const EXTRACTANTS: ReadonlySet<MethodKey> = new Set<MethodKey>([
+  'M3',
+  'M1',
+  'Colwell',
+  'KCl40',
+  'NH4OAc',
+  'DTPA',
+  'hot_water',
+  'mod_Morgan',
+  'Morgan',
+  'AB_DTPA',
+  'H3A',
+  'NH4NO3',
+  'DTPA_Sorbitol',
+  'MCP',
+]);
+const EXTRACTANT_SPELLINGS = METHODS.filter((method) => EXTRACTANTS.has(method.key))
+  .flatMap((method) => method.spellings.map((spelling) => ({ method: method.key, spelling, wanted: loose(spelling) })))
+  .filter((entry) => entry.wanted.length > 3)
+  .sort((a, b) => b.wanted.length - a.wanted.length);
+
+/** An extractant that the registry lists for other elements: "K Colwell", "Mg, ammonium nitrate". */
+function extractantIn(key: AnalyteKey, plain: string): { method: MethodKey; printed: string; length: number } | null {
+  if (!EXTRACTED.has(analyte(key).group) || key === 'phosphorus') return null;
+  const found = EXTRACTANT_SPELLINGS.find(({ wanted }) => findWhole(plain, wanted) >= 0);
+  return found === undefined ? null : { method: found.method, printed: found.spelling, length: found.wanted.length };
 }
 
 const SUSPENSIONS: Readonly<Record<string, MethodKey>> = {

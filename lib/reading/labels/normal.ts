@@ -8,6 +8,7 @@ export function normal(text: string): string {
     .replace(/[\u2010-\u2015\u2212]/g, '-')
     .replace(/[\u03bc\u00b5]/g, 'u')
     .toLowerCase()
+    .replace(/\b(bray|mehlich)(\d)\b/g, '$1 $2')
     .replace(/[*†‡§]/g, ' ')
     .replace(/[()[\]{},;"]/g, ' ')
     .replace(/\.(?!\d)/g, ' ')

@@ -26,6 +26,7 @@ type Found = {
   column: RunColumn | null;
   unit: Value['unit'];
   unitPrinted: string | null;
+  unitFrom: 'heading' | 'row';
   rating: string | null;
   /** Words just before the number on its own line: "Found", "Desired". */
   said: Role | null;
@@ -58,6 +59,7 @@ export function valuesOf(segment: Segment, run: Run): { found: Found[]; words: s
         cell,
         column,
         unit: cell.meaning.unit ?? column?.unit?.unit ?? ahead?.unit ?? null,
+        unitFrom: cell.meaning.unit === null && column?.unit != null ? 'heading' : 'row',
         unitPrinted: cell.meaning.unitPrinted ?? column?.unit?.printed ?? ahead?.printed ?? null,
         rating: cell.meaning.rating,
         said,
@@ -71,14 +73,14 @@ export function valuesOf(segment: Segment, run: Run): { found: Found[]; words: s
       column?.role !== 'unit'
     ) {
       // A unit right behind its number outranks the unit over the column.
-      [last.unit, last.unitPrinted] = [unit.unit, unit.printed];
+      [last.unit, last.unitPrinted, last.unitFrom] = [unit.unit, unit.printed, 'row'];
     } else if (unit !== null) {
       for (const one of column?.role === 'unit'
         ? found.filter((other) => other.unit === null)
         : last === undefined
           ? []
           : [last])
-        if (one.unit === null) [one.unit, one.unitPrinted] = [unit.unit, unit.printed];
+        if (one.unit === null) [one.unit, one.unitPrinted, one.unitFrom] = [unit.unit, unit.printed, 'row'];
       if (found.length === 0) ahead = unit;
     } else if (cell.meaning.kind === 'rating' && last !== undefined) {
       const owner =

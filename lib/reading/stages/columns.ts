@@ -251,7 +251,13 @@ function meaningOf(stack: Stack, first: boolean): Column {
   }
   // A last line that is no unit we know ("mval/100 g") must not hide the analyte: the unit is then missing, and doubted.
   if (label === null && stack.own.length > 1) {
-    label = readLabel(stack.own.slice(0, -1).join(' '), stack.captions);
+    label = readLabel(
+      stack.own
+        .slice(0, -1)
+        .join(' ')
+        .replace(/(\p{L})- (\p{Ll})/gu, '$1$2'),
+      [stack.own[stack.own.length - 1] ?? '', ...stack.captions],
+    );
     unexplained = 1;
     if (label !== null) label = { ...label, strength: Math.min(label.strength, 0.9) };
   }
@@ -304,7 +310,7 @@ function overGroups(phrases: readonly Phrase[], stacks: readonly Stack[]): Reado
   if (groups.length === 0) return none;
   const homes = groups.map((group) => {
     const span = { x0: Math.min(...group.map((one) => one.x0)), x1: Math.max(...group.map((one) => one.x1)) };
-    return { group, over: phrases.filter((phrase) => overlap(span, phrase) > 0) };
+    return { group, over: group.length < 2 ? [] : phrases.filter((phrase) => overlap(span, phrase) > 0) };
   });
   if (homes.some(({ over }) => over.length > 1) || homes.filter(({ over }) => over.length === 1).length < 2)
     return none;

@@ -21,9 +21,10 @@ function iso(year: number, month: number, day: number): ReadDate {
   return { ok: true, iso: `${year}-${two(month)}-${two(day)}`, assumed: false };
 }
 
-/** Four printed digits are the year as printed ("0023" stays impossible); two digits are of this century. */
+/** Four printed digits are the year as printed ("0023" stays impossible); two digits from 70 on are of the last century. */
 function yearOf(text: string): number {
-  return text.length === 2 ? 2000 + Number(text) : Number(text);
+  if (text.length !== 2) return Number(text);
+  return Number(text) >= 70 ? 1900 + Number(text) : 2000 + Number(text);
 }
 
 function monthOf(name: string): number {

@@ -150,6 +150,47 @@ function below(lines: readonly CellLine[], at: number, cell: PageCell): string |
   return null;
 }
 
+const PAIR =
+  /([\p{L}\p{N}][\p{L}\p{N}'’-]*(?: [\p{L}\p{N}'’-]+){0,3}?) \((?:lab(?:oratory)?\.? ?(?:no|nr|number)?\.?:? ?)([A-Z]{0,4}[ -]?[\dA-Z./-]*\d)\)/giu;
+const NO_NAME = /^(re|and|samples?|soil|the|of|two|three|for|your|beds?|plots?)$/i;
+
+/**
+ * "Soil samples Bed A (lab. no. 1180) and Bed B (lab. no. 1181)" in the head of a letter; further down each name stands
+ * over what is told of it.
+ */
+function toldBefore(lines: readonly CellLine[], taken: ReadonlySet<CellLine>): IdentityHit[] {
+  const free = lines.filter((line) => !taken.has(line));
+  const text = free.map((line) => line.line.text).join(' ');
+  const pairs = [...text.matchAll(PAIR)].map((match) => {
+    const words = (match[1] ?? '').split(' ');
+    while (words.length > 1 && NO_NAME.test(words[0] ?? '') && !/^bed|^plot/i.test(words[0] ?? '')) words.shift();
+    return { name: words.join(' '), number: match[2] ?? '' };
+  });
+  if (pairs.length < 2) return [];
+  return free.flatMap((line): IdentityHit[] => {
+    const [cell] = line.cells;
+    if (cell === undefined) return [];
+    const lower = cell.phrase.text.toLowerCase();
+    const pair = pairs.find(
+      ({ name }) =>
+        lower === name.toLowerCase() ||
+        lower.startsWith(`${name.toLowerCase()}. `) ||
+        lower.startsWith(`${name.toLowerCase()}: `),
+    );
+    if (pair === undefined) return [];
+    const place = { page: cell.phrase.page.number, line: line.line.index, x0: cell.phrase.x0, y0: cell.phrase.y0 };
+    return [
+      { field: 'sampleId', value: pair.name, ...place },
+      { field: 'labNumber', value: pair.number, ...place },
+    ];
+  });
+}
+
+/** "SAMPLE EAST RIDGE" is the sample called East Ridge. */
+function bareName(text: string): string {
+  return text.replace(/^(sample|plot|bed|field)( (id|name|no\.?))?[: ]+(?=\S)/i, '');
+}
+
 /** The name of a sample stands over or before its laboratory number when nothing else names it. */
 function namesBeside(lines: readonly CellLine[], hits: readonly IdentityHit[]): IdentityHit[] {
   return hits.flatMap((hit): IdentityHit[] => {
@@ -182,7 +223,7 @@ function namesBeside(lines: readonly CellLine[], hits: readonly IdentityHit[]): 
       return [
         {
           field: 'sampleId',
-          value: before.phrase.text,
+          value: bareName(before.phrase.text),
           page: hit.page,
           line: hit.line,
           x0: before.phrase.x0,
@@ -209,7 +250,7 @@ function namesBeside(lines: readonly CellLine[], hits: readonly IdentityHit[]): 
     return [
       {
         field: 'sampleId',
-        value: over.phrase.text,
+        value: bareName(over.phrase.text),
         page: hit.page,
         line: hit.line - 1,
         x0: over.phrase.x0,
@@ -254,6 +295,11 @@ export function identityHits(lines: readonly CellLine[], taken: ReadonlySet<Cell
       const value = beside && fits(field, right.phrase.text) ? right.phrase.text : below(lines, at, cell);
       if (value !== null && fits(field, value)) hits.push({ field, value, ...place });
     }
+  }
+  const told = toldBefore(lines, taken);
+  if (told.length > 0) {
+    const codes = new Set(told.map((one) => one.value));
+    return [...hits.filter((hit) => !codes.has(hit.value)), ...told];
   }
   return [...hits, ...namesBeside(lines, hits)];
 }

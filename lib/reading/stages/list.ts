@@ -17,6 +17,11 @@ export type ListRow = {
   readonly identity: Identity | null;
 };
 
+/** Columns of one amount in several units: there the heading of the column decides, not the label. */
+function severalUnits(run: Run): boolean {
+  return new Set(run.columns.flatMap((column) => column.unit?.unit ?? [])).size > 1;
+}
+
 function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly CellLine[], at: number): ListRow[] {
   const { found, words } = valuesOf(segment, run);
   for (const one of found) {
@@ -55,7 +60,10 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly Cel
         label: { ...better, text: label.text },
         value: one.value,
         rating: one.rating,
-        unit: one.unit ?? label.unit,
+        unit:
+          one.unitFrom === 'heading' && label.unit !== null && !severalUnits(run)
+            ? label.unit
+            : (one.unit ?? label.unit),
         unitPrinted: one.unit === null ? label.unitPrinted : one.unitPrinted,
         method: taken,
         methodPrinted: label.methodPrinted ?? method?.printed ?? headMethod?.printed ?? null,

@@ -78,10 +78,9 @@ export function notSoil(lines: readonly CellLine[]): string | null {
   const usual = sizes[Math.floor(sizes.length / 2)] ?? 10;
   const page = lines[0]?.line.page;
   const top = (page?.height ?? 0) * 0.4;
-  const isTitle = (cell: (typeof cells)[number]) =>
-    cell.phrase.size > 1.12 * usual || (cell.phrase.y0 < top && cell.phrase.words.length <= 9);
+  const isTitle = (cell: (typeof cells)[number]) => cell.phrase.size > 1.12 * usual || cell.phrase.y0 < top;
   const typed = cells.filter((cell) => /^(sample|matrix|material)( type)?:/i.test(cell.phrase.text));
-  const titles = cells.filter(isTitle).map((cell) => cell.phrase.text);
+  const titles = cells.filter(isTitle).map((cell) => cell.phrase.text.split(' ').slice(0, 9).join(' '));
   const all = cells.map((cell) => cell.phrase.text).join(' | ');
   const soilTitle = titles.some((text) => SOIL_WORDS.test(text)) ? 4 : 0;
   const soilType = typed.some((cell) => /\bsoil\b/i.test(cell.phrase.text)) ? 5 : 0;

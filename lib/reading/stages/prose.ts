@@ -100,7 +100,8 @@ function textOf(words: readonly Placed[], from: number, to: number): string {
   return words
     .slice(from, to)
     .map((word) => word.text)
-    .join(' ');
+    .join(' ')
+    .replace(/(\p{L})- (\p{Ll})/gu, '$1$2');
 }
 
 /** A short symbol in running text counts only beside a number or in brackets: "P 45", "(K)". */
@@ -122,7 +123,7 @@ function namesIn(words: readonly Placed[], piece: Piece): Name[] {
     let best: Name | null = null;
     for (let to = Math.min(piece.to, at + MOST_NAME_WORDS); to > at && best === null; to--) {
       const text = bare(textOf(words, at, to));
-      if (text === '' || /^\d/.test(text)) continue;
+      if (text === '' || /^\d/.test(text) || /[,;:.] /.test(text)) continue;
       const label = readLabel(text);
       if (label !== null && label.strength >= 0.97 && symbolHere(words, at, to)) best = { from: at, to, label };
     }
@@ -182,7 +183,7 @@ function refusalOf(words: readonly Placed[], sentence: Piece, name: Name, number
   const between = textOf(words, Math.min(name.to, number.to), Math.max(name.from, number.from));
   const before = textOf(words, clauseFrom, start);
   const near = `${before} ${between}`;
-  const after = textOf(words, end, end + 8);
+  const after = textOf(words, end, Math.min(sentence.to, end + 8));
   if (number.unit !== null && /ft2|yd2|g\/m2|ton\/|cwt/.test(number.unit)) return 'unit of an amount to spread';
   if (APPLY.test(`${before} ${between} ${after.split(/[,;.]/)[0] ?? ''}`)) return 'an amount to spread';
   if (

@@ -2,6 +2,7 @@ import { ANALYTES, type AnalyteKey, METHODS, type UnitKey } from '@/lib/domain/a
 import { methodIn, unitIn } from '../labels/label';
 import { findWhole, normal } from '../labels/normal';
 import type { CellLine } from './cells';
+import { fieldsInside, fieldWithValue } from './identity';
 
 export type Zone = 'results' | 'recommendation' | 'notes';
 export type ZoneBox = {
@@ -46,7 +47,8 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
       // A line of column headings ("Test, Method, Result") is no section heading.
       const last = line.cells[line.cells.length - 1] === cell;
       const apart = last && cell.phrase.x0 - (line.cells[line.cells.length - 2]?.phrase.x1 ?? 0) > 2 * cell.phrase.size;
-      const beside = zone === 'recommendation' && (line.cells.length === 2 || apart);
+      const only = line.cells[0] === cell && /^recommendations?:?$/i.test(cell.phrase.text);
+      const beside = zone === 'recommendation' && (line.cells.length === 2 || apart || only);
       if (!alone && found.length < line.cells.length && !beside) continue;
       const width = cell.phrase.page.width;
       const next = found[index + 1];
@@ -61,10 +63,22 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
       });
     }
   }
+  // What is told of the next sample is no advice for the one before.
+  const samples = lines.flatMap((line) =>
+    line.cells
+      .filter((cell) => {
+        const said = [
+          ...fieldsInside(cell.phrase.words.map((word) => word.text)),
+          ...[fieldWithValue(cell.phrase.text)].flatMap((one) => one ?? []),
+        ];
+        return said.some((one) => one.field === 'sampleId' || one.field === 'labNumber');
+      })
+      .map((cell) => ({ page: cell.phrase.page.number, x0: cell.phrase.x0, x1: cell.phrase.x1, y: cell.phrase.y0 })),
+  );
   return heads.map((head) => {
-    const ends = heads.find(
-      (other) => other.page === head.page && other.y > head.y + 1 && other.x0 < head.x1 && other.x1 > head.x0,
-    );
+    const ends = [...heads, ...(head.zone === 'recommendation' ? samples : [])]
+      .sort((a, b) => a.y - b.y)
+      .find((other) => other.page === head.page && other.y > head.y + 1 && other.x0 < head.x1 && other.x1 > head.x0);
     return {
       unit: head.unit,
       zone: head.zone,
@@ -89,6 +103,8 @@ export type Statements = {
   /** Unit that the document says all results are in. */
   readonly unit: { unit: UnitKey; printed: string } | null;
   readonly methods: ReadonlyMap<AnalyteKey, { method: ReturnType<typeof methodIn>; printed: string }>;
+  /** Units that a key or footnote gives by analyte. */
+  readonly units?: ReadonlyMap<AnalyteKey, { unit: UnitKey; printed: string }>;
 };
 
 const ALL_RESULTS =
@@ -112,17 +128,53 @@ function analytesNamed(text: string): AnalyteKey[] {
     const byName = names.some((name) => findWhole(plain, name) >= 0);
     if (bySymbol || byName) found.add(key);
   }
+  const groups: readonly (readonly [RegExp, readonly AnalyteKey[]])[] = [
+    [/\b(micro-?nutrients?|trace elements?|minor elements?)\b/i, ['boron', 'zinc', 'manganese', 'iron', 'copper']],
+    [
+      /\b(all |other |major |macro-?)?nutrients\b|\ball elements\b/i,
+      ['phosphorus', 'potassium', 'calcium', 'magnesium', 'sulfur'],
+    ],
+    [/\b(exchangeable )?(cations|bases)\b/i, ['potassium', 'calcium', 'magnesium', 'sodium']],
+  ];
+  for (const [pattern, keys] of groups) if (pattern.test(text)) for (const key of keys) found.add(key);
   if (found.has('buffer_ph') && !/(^|[,;:&] ?|and )pH\b(?! buffer)/.test(text.replace(/buffer pH/gi, '')))
     found.delete('soil_ph_water');
   return [...found];
+}
+
+/** "P, K, Ca and Mg in ppm; CEC in meq/100 g": units by analyte, in clauses without any other number. */
+function unitsOf(text: string): [AnalyteKey, { unit: UnitKey; printed: string }][] {
+  return text.split(/;|\.\s|\s\|\s|\s·\s/).flatMap((clause): [AnalyteKey, { unit: UnitKey; printed: string }][] => {
+    if (clause.length > 160) return [];
+    const found = unitIn(clause);
+    if (
+      found === null ||
+      ['ton/acre', 'lb/1000ft2', 'lb/100ft2', 'oz/1000ft2', 'oz/100ft2', 'g/m2', 't/ha'].includes(found.unit)
+    )
+      return [];
+    const bare = clause
+      .replace(found.printed, ' ')
+      .replace(/\b(P2O5|K2O|NO3|NH4|SO4|H2O|CaCl2|1:\d(\.\d)?|100)\b/g, ' ');
+    if (/\d/.test(bare) || !/\b(in|as|are|is|=|:)|[:=]/i.test(clause)) return [];
+    return analytesNamed(clause.replace(found.printed, ' ')).map((key) => [
+      key,
+      { unit: found.unit, printed: found.printed },
+    ]);
+  });
 }
 
 /** Stage 4c. What the page says once for all its numbers: "P, K, Ca, Mg: Mehlich-3; organic matter: loss on ignition". */
 export function statementsOf(texts: readonly string[]): Statements {
   const methods = new Map<AnalyteKey, { method: ReturnType<typeof methodIn>; printed: string }>();
   let unit: Statements['unit'] = null;
+  const units = new Map<AnalyteKey, { unit: UnitKey; printed: string }>();
   const everyone = new Set<AnalyteKey>();
   for (const text of texts) {
+    for (const [key, found] of unitsOf(text)) if (!units.has(key)) units.set(key, found);
+    const unless =
+      /\(?([^()]{2,24}?) (?:unless|except where|if not) (?:otherwise )?(?:shown|stated|noted|given|marked)/i.exec(text);
+    const general = unless === null ? null : unitIn(unless[1] ?? '');
+    if (unit === null && general !== null) unit = { unit: general.unit, printed: general.printed };
     if (unit === null && ALL_RESULTS.test(text)) {
       const found = unitIn(text.slice(text.search(ALL_RESULTS)));
       if (found !== null && ['mg/kg', 'lb/acre', 'kg/ha', 'mg/L', 'mg/dm3'].includes(found.unit))
@@ -152,7 +204,7 @@ export function statementsOf(texts: readonly string[]): Statements {
       }
     }
   }
-  return { unit, methods };
+  return { unit, methods, units };
 }
 
 /** The laboratory's name: the largest type near the top that calls itself a laboratory or a testing service. */

@@ -12,7 +12,7 @@ export type Table = {
   readonly borrowed: boolean;
 };
 
-const HEADER_LINES = 9;
+const HEADER_LINES = 15;
 
 function samePage(a: CellLine, b: CellLine): boolean {
   return a.line.page === b.line.page;
