@@ -1,6 +1,8 @@
+import { hasHidden, plainReading } from '@/lib/reading/plain';
 import { type Reading, refusedReading } from '@/lib/reading/types';
 import { wordsOfPdf } from '@/lib/services/pdf/words';
 import { refusal } from '@/lib/services/reading/refusals';
+import { confine } from './confine';
 import { readDataFile } from './dataFile';
 import { MAX_PAGES } from './limits';
 import { type FromChild, isDataKind, type ToChild } from './messages';
@@ -18,15 +20,19 @@ const tell: Told = {
 };
 
 async function read(input: ToChild): Promise<Reading> {
-  if (isDataKind(input.kind)) return readDataFile({ ...input, kind: input.kind });
-  if (input.kind === 'picture') return (await readPictureFile(input, tell)).reading;
+  if (isDataKind(input.kind)) {
+    const { reading, hidden } = await readDataFile({ ...input, kind: input.kind });
+    return plainReading(reading, hidden);
+  }
+  if (input.kind === 'picture') return plainReading((await readPictureFile(input, tell)).reading, false);
   const words = await wordsOfPdf({
     bytes: input.bytes,
     maxPages: MAX_PAGES,
     onPage: tell.page,
   });
   if (!words.ok) return refusedReading({ file: input.fileName, pages: words.pages, error: refusal(words.reason) });
-  return readPdfPages({ ...input, pages: words.pages }, tell);
+  const hidden = words.pages.some((page) => page.words.some((word) => hasHidden(word.text)));
+  return plainReading(await readPdfPages({ ...input, pages: words.pages }, tell), hidden);
 }
 
 async function answer(input: ToChild): Promise<FromChild> {
@@ -36,6 +42,7 @@ async function answer(input: ToChild): Promise<FromChild> {
   return { type: 'done', reading: await read(input) };
 }
 
+confine();
 process.on('disconnect', () => process.exit(1));
 process.once('message', (message: ToChild) => {
   answer(message).then(

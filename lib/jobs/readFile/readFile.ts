@@ -5,8 +5,8 @@ import { type Reading, refusedReading } from '@/lib/reading/types';
 import { bundleProgram } from '@/lib/services/program/bundle';
 import { type RefusalCode, refusal } from '@/lib/services/reading/refusals';
 import { maxBytesOf, sniffReport } from '@/lib/services/reading/sniff';
+import { confinedArguments } from './confine';
 import {
-  HEAP_LIMIT_MB,
   LONGEST_TIME_MS,
   MEMORY_CHECK_MS,
   MEMORY_LIMIT_BYTES,
@@ -37,6 +37,9 @@ function residentBytes(pid: number): number {
   }
 }
 
+/** How a process ends that its own limit of memory stops. */
+const OUT_OF_MEMORY: ReadonlySet<string> = new Set(['SIGABRT', 'SIGTRAP', 'SIGILL']);
+
 type RunInput = {
   message: ToChild;
   timeLimitMs: number;
@@ -57,7 +60,9 @@ async function run(input: RunInput): Promise<Final> {
   return new Promise((resolve, reject) => {
     // No environment: the process that opens strangers' files holds no secret.
     const child: ChildProcess = fork(path, [], {
-      execArgv: [`--max-old-space-size=${HEAP_LIMIT_MB}`],
+      execArgv: confinedArguments(),
+      // Its working folder is none that it could fill.
+      cwd: '/',
       env: { NODE_ENV: 'production' },
       serialization: 'advanced',
       stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
@@ -69,7 +74,8 @@ async function run(input: RunInput): Promise<Final> {
       child.kill('SIGKILL');
     };
     const onAbort = () => child.kill('SIGKILL');
-    let began = Date.now();
+    const forked = Date.now();
+    let began = forked;
     let clock = setTimeout(() => kill('too-slow'), START_LIMIT_MS);
     const watch = setInterval(() => {
       if (child.pid !== undefined && residentBytes(child.pid) > input.memoryLimitBytes) kill('too-much-memory');
@@ -83,21 +89,28 @@ async function run(input: RunInput): Promise<Final> {
         clock = setTimeout(() => kill('too-slow'), input.timeLimitMs);
         child.send(input.message);
       } else if (message.type === 'scans') {
-        const whole = Math.min(LONGEST_TIME_MS, input.timeLimitMs + message.pages * SCAN_TIME_MS);
+        const whole = began + input.timeLimitMs + message.pages * SCAN_TIME_MS;
         clearTimeout(clock);
-        clock = setTimeout(() => kill('too-slow'), whole - (Date.now() - began));
+        clock = setTimeout(() => kill('too-slow'), Math.min(whole, forked + LONGEST_TIME_MS) - Date.now());
       } else if (message.type === 'page') input.onPage?.(message.page, message.of);
       else final = message;
     });
-    child.on('error', () => undefined);
-    child.on('close', (_code, signal) => {
+    const end = (failed: RefusalCode | Error) => {
       clearTimeout(clock);
       clearInterval(watch);
       input.signal?.removeEventListener('abort', onAbort);
       if (input.signal?.aborted) reject(new DOMException('Reading was stopped.', 'AbortError'));
       else if (final !== null) resolve(final);
-      else resolve(refuse(killedFor ?? (signal === 'SIGABRT' ? 'too-much-memory' : 'crashed')));
+      else if (failed instanceof Error) reject(failed);
+      else resolve(refuse(killedFor ?? failed));
+    };
+    child.on('error', (error) => {
+      // A machine too full for one more process says nothing about the file: the job is tried again.
+      if (child.pid === undefined) end(error);
     });
+    child.on('close', (_code, signal) =>
+      end(signal !== null && OUT_OF_MEMORY.has(signal) ? 'too-much-memory' : 'crashed'),
+    );
     if (input.signal?.aborted) onAbort();
   });
 }

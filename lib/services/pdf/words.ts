@@ -1,9 +1,17 @@
 import { createRequire } from 'node:module';
 import { dirname, join } from 'node:path';
+import { unpacksTooLarge } from './bombs';
 import type { PdfPage, PdfWord } from './types';
 import { relativeWidth } from './widths';
 
-export type PdfRefusal = 'not-a-pdf' | 'empty' | 'encrypted' | 'truncated' | 'broken' | 'too-many-pages';
+export type PdfRefusal =
+  | 'not-a-pdf'
+  | 'empty'
+  | 'encrypted'
+  | 'truncated'
+  | 'broken'
+  | 'too-many-pages'
+  | 'pdf-unpacks-too-large';
 
 export type PdfWords =
   | { readonly ok: true; readonly pages: readonly PdfPage[]; readonly pagesWithText: number }
@@ -115,6 +123,7 @@ export async function wordsOfPdf(input: {
   if (input.bytes.length === 0) return { ok: false, reason: 'empty', pages: 0 };
   if (!looksLikePdf(input.bytes)) return { ok: false, reason: 'not-a-pdf', pages: 0 };
   if (isCutOff(input.bytes)) return { ok: false, reason: 'truncated', pages: 0 };
+  if (await unpacksTooLarge(input.bytes)) return { ok: false, reason: 'pdf-unpacks-too-large', pages: 0 };
   const { getDocument } = await import('pdfjs-dist/legacy/build/pdf.mjs');
   const { fonts, maps } = assets();
   const task = getDocument({

@@ -51,7 +51,8 @@ function looksLikeText(bytes: Uint8Array): boolean {
   const zeros = head.reduce((count, byte) => count + (byte === 0 ? 1 : 0), 0);
   if (zeros > 0) return zeros > head.length / 4 && zeros <= head.length / 2 + 1;
   const strange = head.reduce((count, byte) => count + (byte < 9 || (byte > 13 && byte < 32) ? 1 : 0), 0);
-  return strange <= head.length / 100;
+  // A short text may hold a few; they are left out of what is read.
+  return strange <= Math.max(3, head.length / 100);
 }
 
 /** The start of a text, whatever its encoding, in small letters. */

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { zipDirectory } from './zip';
+import { zipDirectory, zipIsCutOff, zipUnpacked } from './zip';
 
 /** Merged cells, rows and columns from 0, ends included. */
 type Merge = { readonly top: number; readonly left: number; readonly bottom: number; readonly right: number };
@@ -20,7 +20,7 @@ export type Workbook =
     }
   | {
       readonly ok: false;
-      readonly reason: 'encrypted-sheet' | 'broken-sheet' | 'unpacks-too-large' | 'table-too-large';
+      readonly reason: 'encrypted-sheet' | 'sheet-truncated' | 'broken-sheet' | 'unpacks-too-large' | 'table-too-large';
     };
 
 const MOST_UNPACKED = 100 * 1024 * 1024;
@@ -184,6 +184,7 @@ function remarksOf(counts: Counts): { code: string; sentence: string }[] {
 function open(
   tools: Tools,
   bytes: Uint8Array,
+  styled: boolean,
 ): { ok: true; book: Book } | { ok: false; reason: 'encrypted-sheet' | 'broken-sheet' } {
   try {
     const raw: unknown = tools.read(bytes, {
@@ -191,7 +192,8 @@ function open(
       dense: true,
       cellNF: true,
       cellText: true,
-      cellStyles: true,
+      // Without a table of styles each cell costs the package an error of its own, and nothing says what is hidden.
+      cellStyles: styled,
       cellHTML: false,
       cellDates: false,
       bookVBA: false,
@@ -208,17 +210,21 @@ function open(
 /**
  * A workbook (XLSX or XLS) as plain text of its cells, as a person sees them: formatted numbers as shown, days as ISO,
  * formulas by the numbers kept with them. Called only in the process that is killed past its limits. Nothing in the
- * workbook is executed. Bombs are refused by the sizes their own directory states, before anything is unpacked.
+ * workbook is executed. Bombs are refused by the sizes their own directory states, and by those they really have.
  */
 export async function workbookOf(bytes: Uint8Array): Promise<Workbook> {
+  let styled = true;
   if (bytes[0] === 0x50) {
     const directory = zipDirectory(bytes);
-    if (directory === null) return { ok: false, reason: 'broken-sheet' };
+    if (directory === null) return { ok: false, reason: zipIsCutOff(bytes) ? 'sheet-truncated' : 'broken-sheet' };
     if (directory.unpacked > MOST_UNPACKED || directory.entries > MOST_ENTRIES)
+      return { ok: false, reason: 'unpacks-too-large' };
+    styled = directory.names.some((name) => /styles\.(xml|bin)$/i.test(name));
+    if ((await zipUnpacked(bytes, directory, MOST_UNPACKED)) > MOST_UNPACKED)
       return { ok: false, reason: 'unpacks-too-large' };
   }
   const tools = await loadTools();
-  const opened = open(tools, bytes);
+  const opened = open(tools, bytes, styled);
   if (!opened.ok) return opened;
   const { book } = opened;
   if (book.SheetNames.length > MOST_SHEETS) return { ok: false, reason: 'table-too-large' };
