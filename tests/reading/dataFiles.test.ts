@@ -26,7 +26,7 @@ async function read(path: string): Promise<Reading> {
   const fileName = basename(path);
   const sniffed = sniffReport({ bytes, fileName });
   if (!sniffed.ok || !isDataKind(sniffed.kind)) throw new Error(`${fileName} is no data file`);
-  return readDataFile({ kind: sniffed.kind, fileName, bytes });
+  return (await readDataFile({ kind: sniffed.kind, fileName, bytes })).reading;
 }
 
 const counts = { files: 0, cells: 0, right: 0, taken: 0, sure: 0, sureWrong: 0 };

@@ -4,6 +4,7 @@ import { readPagesTraced, type Trace } from '@/lib/reading/readPages';
 import type { Reading } from '@/lib/reading/types';
 import { wordsOfPdf } from '@/lib/services/pdf/words';
 import { sniffReport } from '@/lib/services/reading/sniff';
+import { drawTable } from './drawTable';
 import { MAX_PAGES } from './limits';
 import { readPictureFile, readPicturesOfPdf, type Told } from './pictures';
 
@@ -105,8 +106,10 @@ async function tracedFile(input: { bytes: Uint8Array; fileName: string }) {
   return { level: reading, trace };
 }
 
-/** Writes DIR/<file>.page-<n>.svg for each page of a PDF or picture; data files have no page and get nothing. */
+/** Writes DIR/<file>.page-<n>.svg for each page of a PDF or picture, DIR/<file>.sheet-<n>.svg for each sheet of a data file. */
 export async function drawFile(input: { bytes: Uint8Array; fileName: string; directory: string }): Promise<void> {
+  const sniffed = sniffReport(input);
+  if (sniffed.ok && ['csv', 'xlsx', 'xls'].includes(sniffed.kind)) return drawTable(input);
   const traced = await tracedFile(input);
   if (traced === null || traced.trace === null) return;
   for (const page of traced.trace.pages) {
