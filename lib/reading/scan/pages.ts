@@ -5,6 +5,8 @@ import type { Merged, ScannedPage } from './types';
 /** Share of the type size above and below the baseline that a word's box covers; as for words of a text layer. */
 const ABOVE = 0.74;
 const BELOW = 0.06;
+/** White that belongs to a character on each side of its ink. */
+const BESIDE = 0.04;
 
 /** The merged words of a level page as a page of placed words, in fractions of the level page. */
 export function pageOf(page: ScannedPage, words: readonly Merged[]): Page {
@@ -13,10 +15,12 @@ export function pageOf(page: ScannedPage, words: readonly Merged[]): Page {
   for (const word of words) {
     const set = sets.get(word);
     if (set === undefined) continue;
+    const middle = (word.x0 + word.x1) / 2;
+    const typed = set.advance === undefined ? 0 : (word.text.length * set.advance) / 2;
     placed.push({
       text: word.text,
-      x0: word.x0 / page.width,
-      x1: word.x1 / page.width,
+      x0: Math.min(word.x0 - BESIDE * set.size, middle - typed) / page.width,
+      x1: Math.max(word.x1 + BESIDE * set.size, middle + typed) / page.width,
       y0: (set.base - ABOVE * set.size) / page.height,
       y1: (set.base + BELOW * set.size) / page.height,
       size: set.size / page.scale,

@@ -19,7 +19,12 @@ function reach(text: string): { up: number; down: number } {
   return { up, down };
 }
 
-export type Set = { readonly size: number; readonly base: number };
+export type Set = {
+  readonly size: number;
+  readonly base: number;
+  /** Width that each character takes in typewriter type. */
+  readonly advance?: number;
+};
 
 function median(values: readonly number[]): number {
   const sorted = [...values].sort((a, b) => a - b);
@@ -34,12 +39,34 @@ function ownSet(word: Seen): Set | null {
   return { size, base: word.y1 - down * size };
 }
 
+/** Advance of a typewriter's characters as a share of the type size. */
+const TYPEWRITER_ADVANCE = 0.6;
+
+/**
+ * Size of a typewriter's type on this page, or null: all its characters are as wide, so ink width over characters hardly
+ * differs from word to word, and its capitals are lower than other type's.
+ */
+function typewriterSize(words: readonly Seen[]): number | null {
+  const pitches = words
+    .filter((word) => /^[A-Za-z0-9./%-]{5,}$/.test(word.text) && word.certainty > 0.7)
+    .map((word) => (word.x1 - word.x0) / (word.text.length - 0.25));
+  if (pitches.length < 8) return null;
+  const usual = median(pitches);
+  const same = pitches.filter((pitch) => Math.abs(pitch - usual) < 0.05 * usual).length;
+  return same > 0.8 * pitches.length ? usual / TYPEWRITER_ADVANCE : null;
+}
+
 /**
  * Type size and baseline of each word, evened out with its neighbours on the same line: ink boxes differ with the
  * letters in them, and the stages of the reader compare baselines and sizes.
  */
 export function setOf(words: readonly Seen[]): Map<Seen, Set> {
-  const own = words.map((word) => ({ word, set: ownSet(word) }));
+  const typed = typewriterSize(words);
+  const own = words.map((word) => {
+    const set = ownSet(word);
+    const wide = typed !== null && set !== null && set.size < typed && set.size > 0.6 * typed;
+    return { word, set: wide ? { ...set, size: typed } : set };
+  });
   const usual = median(own.flatMap(({ set }) => set?.size ?? [])) || 1;
   const known = own.flatMap(({ word, set }) => (set === null ? [] : [{ word, set }]));
   const sets = new Map<Seen, Set>();
@@ -59,7 +86,9 @@ export function setOf(words: readonly Seen[]): Map<Seen, Set> {
       sets.set(word, { size: weighted((one) => one.size), base: weighted((one) => one.base) });
     }
   }
-  return snapped(sets);
+  const placed = snapped(sets);
+  if (typed === null) return placed;
+  return new Map([...placed].map(([word, set]) => [word, { ...set, advance: typed * TYPEWRITER_ADVANCE }]));
 }
 
 /** Words that stand on one line get one baseline, and one size where theirs hardly differ. */

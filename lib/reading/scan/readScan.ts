@@ -1,10 +1,11 @@
 import { readPagesTraced, type Trace } from '../readPages';
 import type { Page, Reading, ReadResult } from '../types';
 import { checkInk } from './ink';
+import { leftover } from './leftover';
 import { mendWords } from './mend';
 import { mergeViews } from './merge';
 import { pageOf } from './pages';
-import { isUnsure, withThirdLook } from './third';
+import { covers, foundLater, isStray, isUnsure, withThirdLook } from './third';
 import { figuresOf, judge, pointDoubts, type Spot, spotOf } from './trust';
 import type { Merged, ScannedPage } from './types';
 
@@ -22,17 +23,22 @@ const MOST_LOOKS = 80;
 export async function wordsOf(page: ScannedPage, lookAgain: LookAgain): Promise<Merged[]> {
   const merged = mergeViews(page.views, page.letter);
   const unsure = merged.filter((word) => isUnsure(word, page.letter)).slice(0, MOST_LOOKS);
+  const sure = new Set(merged.filter((word) => !unsure.includes(word) || word.certainty >= 0.55));
+  const free = leftover(page.pieces, [...sure], page.letter);
   const room = 0.3 * page.letter;
-  const spots = unsure.map(({ x0, y0, x1, y1 }) => ({ x0: x0 - room, y0: y0 - room, x1: x1 + room, y1: y1 + room }));
+  const spots = [...unsure, ...free].map(({ x0, y0, x1, y1 }) => ({
+    x0: x0 - room,
+    y0: y0 - room,
+    x1: x1 + room,
+    y1: y1 + room,
+  }));
   const texts = spots.length === 0 ? [] : await lookAgain(page.number, spots, 'word');
   const looked = new Map(unsure.map((word, index) => [word, withThirdLook(word, texts[index] ?? '')]));
-  return mendWords(
-    checkInk(
-      merged.map((word) => looked.get(word) ?? word),
-      page.pieces,
-      page.letter,
-    ),
-  );
+  const found = free.flatMap((box, index) => foundLater(box, texts[unsure.length + index] ?? '', page.views.length));
+  const kept = merged
+    .map((word) => looked.get(word) ?? word)
+    .filter((word) => !isStray(word) && !found.some((later) => covers(later, word)));
+  return mendWords(checkInk([...kept, ...found], page.pieces, page.letter));
 }
 
 function readWords(input: { fileName: string; pages: readonly AnyPage[] }, words: Words) {

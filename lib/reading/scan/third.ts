@@ -1,4 +1,4 @@
-import type { Merged } from './types';
+import type { Ink, Merged } from './types';
 import { isKnown, isNumber, mended, unblurred } from './vocabulary';
 
 function makesSense(text: string): boolean {
@@ -32,4 +32,24 @@ export function withThirdLook(word: Merged, text: string): Merged {
     certainty: Math.max(word.certainty, 0.6),
     others: [word.text, ...others].filter(makesSense),
   };
+}
+
+/** What one look alone saw, without certainty or sense: lines of dashes, borders, shades. */
+export function isStray(word: Merged): boolean {
+  if (!/[A-Za-z0-9%<>]/.test(word.text)) return word.support <= 1 && word.certainty < 0.85;
+  return word.support <= 1 && word.certainty < 0.5 && !makesSense(word.text);
+}
+
+/** A word that only the look at left-over ink saw; nothing unless it makes sense. */
+export function foundLater(box: Ink, text: string, of: number): Merged[] {
+  const seen = text.trim();
+  if (!makesSense(seen) || (seen.length === 1 && !/[0-9]/.test(seen))) return [];
+  return [{ ...box, text: seen, certainty: 0.6, support: 1, others: [], of, point: 'unknown' }];
+}
+
+/** True when a word that was found later stands where an uncertain one was taken. */
+export function covers(later: Merged, word: Merged): boolean {
+  const w = Math.min(later.x1, word.x1) - Math.max(later.x0, word.x0);
+  const h = Math.min(later.y1, word.y1) - Math.max(later.y0, word.y0);
+  return word.certainty < 0.7 && w > 0.5 * (word.x1 - word.x0) && h > 0.4 * (word.y1 - word.y0);
 }

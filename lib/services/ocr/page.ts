@@ -92,6 +92,23 @@ function columnOf(picture: Grey, letter: number, spots: readonly Spot[]): { shee
   return { sheet: { width, height, data }, lines };
 }
 
+/** The spot drawn close around the ink that belongs to it, so that no neighbour's line is in the cut. */
+function tight(spot: Spot, pieces: readonly Piece[], letter: number): Spot {
+  const mine = pieces.filter((piece) => {
+    const w = Math.min(piece.x1, spot.x1) - Math.max(piece.x0, spot.x0);
+    const h = Math.min(piece.y1, spot.y1) - Math.max(piece.y0, spot.y0);
+    return w > 0 && h > 0 && w * h > 0.6 * (piece.x1 - piece.x0) * (piece.y1 - piece.y0);
+  });
+  if (mine.length === 0) return spot;
+  const room = Math.max(2, 0.1 * letter);
+  return {
+    x0: Math.min(...mine.map((piece) => piece.x0)) - room,
+    y0: Math.min(...mine.map((piece) => piece.y0)) - room,
+    x1: Math.max(...mine.map((piece) => piece.x1)) + room,
+    y1: Math.max(...mine.map((piece) => piece.y1)) + room,
+  };
+}
+
 async function lookAgain(
   engine: Engine,
   picture: Grey,
@@ -128,6 +145,7 @@ export async function readPicture(engine: Engine, source: Grey): Promise<SeenPag
   const head = await standsOnHead(engine, prepared);
   const picture = head ? upsideDown(prepared.picture) : prepared.picture;
   const toStored = head ? mapUpsideDown(prepared.toStored, prepared.picture) : prepared.toStored;
+  const pieces = smallPieces(picture, prepared.letter);
   const views = [await engine.read(picture, 'sparse'), await engine.read(picture, 'block')];
   return {
     width: picture.width,
@@ -135,7 +153,7 @@ export async function readPicture(engine: Engine, source: Grey): Promise<SeenPag
     letter: prepared.letter,
     side: prepared.side * prepared.scale,
     views,
-    pieces: smallPieces(picture, prepared.letter),
+    pieces,
     stored: ({ x0, y0, x1, y1 }) => {
       const corners = [
         carry(toStored, x0, y0),
@@ -147,6 +165,9 @@ export async function readPicture(engine: Engine, source: Grey): Promise<SeenPag
       const ys = corners.map((point) => Math.min(1, Math.max(0, point.y)));
       return [Math.min(...xs), Math.min(...ys), Math.max(...xs), Math.max(...ys)];
     },
-    look: (spots, as) => lookAgain(engine, picture, prepared.letter, spots, as === 'number' ? NUMBERS : ''),
+    look: (spots, as) => {
+      const close = spots.map((spot) => tight(spot, pieces, prepared.letter));
+      return lookAgain(engine, picture, prepared.letter, close, as === 'number' ? NUMBERS : '');
+    },
   };
 }

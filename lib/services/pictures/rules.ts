@@ -99,6 +99,39 @@ function withoutSpecks(grey: Uint8Array, pieces: readonly Piece[], width: number
   }
 }
 
+/** So many small strokes or points close together on one line are a drawn line, not writing. */
+const DRAWN = 10;
+
+/** Rows of dashes and leading dots made white: they say nothing and are read as words. */
+function withoutDashes(grey: Uint8Array, pieces: readonly Piece[], width: number, type: number): void {
+  const flat = pieces
+    .filter((piece) => piece.y1 - piece.y0 < 0.3 * type && piece.x1 - piece.x0 < 1.6 * type)
+    .sort((a, b) => a.y1 - b.y1 || a.x0 - b.x0);
+  const rows: Piece[][] = [];
+  for (const piece of flat) {
+    const row = rows[rows.length - 1];
+    const first = row?.[0];
+    if (row !== undefined && first !== undefined && piece.y1 - first.y1 <= 0.15 * type) row.push(piece);
+    else rows.push([piece]);
+  }
+  for (const row of rows) {
+    let run: Piece[] = [];
+    const close = () => {
+      if (run.length >= DRAWN)
+        for (const piece of run)
+          for (let y = piece.y0 - 1; y <= piece.y1; y++)
+            grey.fill(255, y * width + piece.x0 - 1, y * width + piece.x1 + 1);
+      run = [];
+    };
+    for (const piece of row.sort((a, b) => a.x0 - b.x0)) {
+      const last = run[run.length - 1];
+      if (last !== undefined && piece.x0 - last.x1 > 0.9 * type) close();
+      run.push(piece);
+    }
+    close();
+  }
+}
+
 /** The picture without ruling lines and lone specks. `type` is the usual height of its letters, in points. */
 export function withoutRules(picture: Grey, faint: Ink, type: number): Grey {
   const data = Uint8Array.from(picture.data);
@@ -109,7 +142,9 @@ export function withoutRules(picture: Grey, faint: Ink, type: number): Grey {
   wipe(data, faint, down, acrossMask, thick);
   const left: Ink = { ...faint, data: new Uint8Array(data.length) };
   for (let at = 0; at < data.length; at++) left.data[at] = (data[at] ?? 255) < SPECK_INK ? 1 : 0;
-  withoutSpecks(data, piecesOf(left), picture.width, type);
+  const pieces = piecesOf(left);
+  withoutDashes(data, pieces, picture.width, type);
+  withoutSpecks(data, pieces, picture.width, type);
   return { ...picture, data };
 }
 
