@@ -25,6 +25,11 @@ export default function UploadGuide() {
             Have a report only on paper? Scan it, or photograph it from straight above in even light, the whole sheet in
             the picture. It can also be typed in with no file at all.
           </li>
+          <li>
+            Numbers that came in a mail are pasted under Reports: the text is kept and read like a file. A spreadsheet
+            of your own with old results is brought in there as well; you say once what each column holds, and its
+            values stand in the history as typed by you.
+          </li>
         </Steps>
       </Part>
       <Part title="Check it against its page">
@@ -40,6 +45,56 @@ export default function UploadGuide() {
           </li>
           <li>Confirm. From then on the values are history.</li>
         </Steps>
+      </Part>
+      <Part title="What it learns from you">
+        <Points>
+          <li>
+            A confirmed report keeps what each label of its form meant: analyte, method and unit. The next report of
+            that form is read with it, and its rows say on which day you confirmed that.
+          </li>
+          <li>
+            It fills only what a page leaves open. Where a page says something else, it asks; no doubt is ever taken
+            away. What one site learnt reaches no other.
+          </li>
+          <li>
+            Reports, What was learnt: every form with its labels, and a button that forgets it. Withdrawing a
+            confirmation takes back what only that report taught.
+          </li>
+          <li>
+            Rows are held against the history of their plot too: a number that is twice the last one, another unit or
+            method, a sample under a new name.
+          </li>
+        </Points>
+      </Part>
+      <Part title="Old years at once">
+        <Steps>
+          <li>
+            Drop up to a hundred files at once on the site or under Reports. They get a list of their own: what is being
+            sent, read, ready or refused, each with its reason. Leave the page in the middle and nothing is lost; choose
+            the folder again, and only what is missing is sent.
+          </li>
+          <li>
+            Give all samples their plots on that list. Choose rows with the space bar, Shift and the arrows, then the
+            plot. Where a name fits a plot, or was confirmed for one before, that plot is proposed.
+          </li>
+          <li>
+            Review one after another: after each confirmation the next report of the list stands under Enter, and Alt+R
+            goes to it from anywhere. Tick the box to be written to once all are read.
+          </li>
+        </Steps>
+      </Part>
+      <Part title="When a page was read wrong">
+        <Points>
+          <li>
+            On the report, This was read wrong makes a copy of the page on which everything but values, units, analytes,
+            methods, ratings and headings is blacked out, with what the reader made of it. Nothing is sent: you look at
+            it, and take it or throw it away. It is cleared away after a day.
+          </li>
+          <li>
+            What failed every time it was tried stands under Settings, What was given up. An owner has it done again
+            with one button.
+          </li>
+        </Points>
       </Part>
       <Part title="Good to know">
         <Points>

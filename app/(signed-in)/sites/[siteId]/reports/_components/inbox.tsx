@@ -101,7 +101,7 @@ export function Inbox({ site, timeZone, today, plots, first, batches, shown, ...
           batchHref={(id) => `${home}/reports/batches/${id}`}
           mayType={`${home}/reports/new`}
         />
-        <OpenBatches siteId={site.id} first={batches} />
+        <OpenBatches siteId={site.id} first={batches} timeZone={timeZone} />
         <Stuck first={data} />
         {data.reports.length === 0 ? (
           <EmptyState shape="page" title="No report yet">

@@ -21,8 +21,11 @@ export function batchStanding({ counts }: Pick<BatchHead, 'counts'>): string {
   return parts.length > 0 ? parts.join(', ') : 'all gone through';
 }
 
+type OpenProps = { siteId: string; first: BatchList; timeZone: string };
+
 /** Many files sent at once that still ask something of somebody, each with the way to its list. */
-export function OpenBatches({ siteId, first }: { siteId: string; first: BatchList }) {
+export function OpenBatches({ siteId, first, timeZone }: OpenProps) {
+  const day = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', year: 'numeric', timeZone });
   const { data = first } = useApi<BatchList>(`/sites/${siteId}/batches`, {
     fallback: first,
     refreshMs: (latest) => ((latest ?? first).batches.some(isMoving) ? WHILE_MOVING_MS : 0),
@@ -39,7 +42,9 @@ export function OpenBatches({ siteId, first }: { siteId: string; first: BatchLis
             {counted(batch.counts.files, 'file')} sent at once
           </Link>
           <StatusWord status={isMoving(batch) ? 'working' : 'needs-you'}>{batchStanding(batch)}</StatusWord>
-          <span className="text-sm text-clay">by {batch.createdBy.name}</span>
+          <span className="text-sm text-clay">
+            by {batch.createdBy.name}, {day.format(new Date(batch.createdAt))}
+          </span>
         </li>
       ))}
     </ul>

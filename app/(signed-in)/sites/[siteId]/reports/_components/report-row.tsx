@@ -93,7 +93,7 @@ function RowActions(props: ReportRowProps & { name: string }) {
     <>
       {report.state === 'in-review' && mayWork ? (
         <LinkButton href={path} size="small" className="min-h-(--target)">
-          {reviewLabel(report.samples.all)}
+          {report.origin === 'own-sheet' ? 'Say what its columns hold' : reviewLabel(report.samples.all)}
           {of}
         </LinkButton>
       ) : null}

@@ -1,6 +1,16 @@
 import { describe, expect, it } from 'vitest';
 import { makeReviewSample, makeRow } from '@/tests/support/review-rows';
-import { columnsFor, doubtsOf, placeOf, printedWords, stableOrder, toGridRow, twinOf, valueFault } from './review-rows';
+import {
+  columnsFor,
+  doubtsOf,
+  notesOf,
+  placeOf,
+  printedWords,
+  stableOrder,
+  toGridRow,
+  twinOf,
+  valueFault,
+} from './review-rows';
 
 describe('doubtsOf', () => {
   it('puts each doubt at the cell it is about', () => {
@@ -119,5 +129,24 @@ describe('twinOf', () => {
     const out = { ...first, leftOutReason: 'not ours' };
     const second = makeReviewSample('b', { ordinal: 2 });
     expect(twinOf(second, [out, second])).toBeUndefined();
+  });
+});
+
+describe('what an earlier confirmation of the form answers', () => {
+  const learnt = (filled: readonly string[]) => ({ on: '2025-05-03', filled: [...filled] });
+  it('stands under the cells it filled, until somebody changes them', () => {
+    const row = makeRow('a', { learnt: learnt(['unit', 'method']), unit: 'mg/kg', method: 'M3' });
+    expect(notesOf(row)).toEqual({
+      unit: 'as you confirmed on 3 May 2025',
+      method: 'as you confirmed on 3 May 2025',
+    });
+    const original = { analyte: row.analyte, printed: row.printed, value: row.value, qualifier: row.qualifier };
+    const edited = { ...row, unit: 'lb/acre', original: { ...original, unit: 'mg/kg', method: 'M3', form: row.form } };
+    expect(Object.keys(notesOf(edited))).toEqual(['method']);
+  });
+  it('is said beside the place where page and memory agree', () => {
+    expect(placeOf(makeRow('a', { learnt: learnt([]) }))).toBe('Page 1, as you confirmed on 3 May 2025');
+    expect(placeOf(makeRow('a', { learnt: learnt(['unit']) }))).toBe('Page 1');
+    expect(placeOf(makeRow('a'))).toBe('Page 1');
   });
 });

@@ -1,6 +1,7 @@
 'use client';
 
-import { useEffect, useState } from 'react';
+import { useRouter } from 'next/navigation';
+import { useEffect, useRef, useState } from 'react';
 import type { Batch, BatchSamples } from '@/lib/schemas/batches';
 import { LinkButton } from '@/lib/ui/actions/link-button';
 import { ProblemNotice } from '@/lib/ui/feedback/problem-notice';
@@ -44,7 +45,7 @@ export function BatchScreen({ site, first, firstSamples, timeZone, mayWork, mine
     reload,
   } = useApi<Batch>(path, {
     fallback: first,
-    refreshMs: (latest) => (sending ? WHILE_SENDING_MS : isMoving(latest ?? first) ? WHILE_READ_MS : 0),
+    refreshMs: (latest) => (isMoving(latest ?? first) ? WHILE_READ_MS : 0),
   });
   const { counts, files } = batch;
   const moving = sending || isMoving(batch);
@@ -52,6 +53,7 @@ export function BatchScreen({ site, first, firstSamples, timeZone, mayWork, mine
   useEffect(() => {
     if (moving) store.watch(first.id);
   }, [moving, store, first.id]);
+  useFreshFrame(moving);
   const next = files.find((file) => file.report?.state === 'in-review')?.report?.id;
   const day = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', year: 'numeric', timeZone });
   const readyKey = `${counts.toReview} ${counts.confirmed}`;
@@ -111,7 +113,12 @@ function useSettled(sending: boolean, reload: () => Promise<void>): boolean {
   const [settled, setSettled] = useState(!sending);
   const latest = useLatest(reload);
   useEffect(() => {
-    if (sending) return setSettled(false);
+    if (sending) {
+      setSettled(false);
+      // A clock of its own: the screen is drawn anew with every few bytes, which would put a shared one back each time.
+      const timer = setInterval(() => void latest.current(), WHILE_SENDING_MS);
+      return () => clearInterval(timer);
+    }
     let gone = false;
     void latest.current().then(() => {
       if (!gone) setSettled(true);
@@ -121,6 +128,16 @@ function useSettled(sending: boolean, reload: () => Promise<void>): boolean {
     };
   }, [sending, latest]);
   return settled;
+}
+
+/** The count beside “Reports” in the frame is drawn by the server; it is asked anew once nothing moves any more. */
+function useFreshFrame(moving: boolean): void {
+  const router = useRouter();
+  const was = useRef(moving);
+  useEffect(() => {
+    if (was.current && !moving) router.refresh();
+    was.current = moving;
+  }, [moving, router]);
 }
 
 const isAnnounced = (file: Batch['files'][number]): boolean => file.state === 'announced';
