@@ -252,6 +252,16 @@ describe('a grower’s own spreadsheet', () => {
     expect(refused).toMatchObject({ state: 'unreadable', refusal: { code: 'not-a-sheet' } });
   });
 
+  it('takes a name that runs over two lines in its cell for one line', async () => {
+    const here = await place();
+    const reportId = await send(here, 'Bed,Date,pH\n"North\nbed\u202e",2019-04-10,6.1');
+    expect((await look(here, reportId)).names.map((one) => one.name)).toEqual(['North bed']);
+    const sheet = await look(here, reportId);
+    const plots = [{ name: 'North bed', plotId: here.north }];
+    const input = { siteId: here.site.id, reportId, version: sheet.report.version, ...choice(sheet), plots };
+    expect(await importOwnSheet({ ctx: here.owner, input })).toMatchObject({ results: 1 });
+  });
+
   it('says how many samples are taken at once, and imports none of more', async () => {
     const here = await place();
     const lines = Array.from({ length: 1001 }, (_, at) => `North,${2019 + (at % 5)}-04-10,6.${at % 9}`);

@@ -1,3 +1,4 @@
+import { clean } from '@/lib/reading/labels/normal';
 import { type AppliedMapping, applyMapping, type OwnMapping } from '@/lib/reading/ownSheet';
 import type { ReadResult, ReadSample } from '@/lib/reading/types';
 import { unitBasisOf } from '../review/unitBasis';
@@ -7,8 +8,13 @@ import { type SheetRow, sheetOf } from './sheetStore';
 /** Rows of a sheet that names no place share one name, so that one plot can be chosen for them. */
 export const NAMELESS = 'Rows without a name';
 
-export const nameOf = (sample: ReadSample): string =>
-  sample.fieldName?.trim() || sample.sampleId?.trim() || sample.labNumber?.trim() || NAMELESS;
+const LONGEST_NAME = 200;
+
+/** A cell may hold a line break or a character that is not seen; a name is one line. */
+export const nameOf = (sample: ReadSample): string => {
+  const [name] = [sample.fieldName, sample.sampleId, sample.labNumber].map((one) => clean(one ?? '')).filter(Boolean);
+  return name?.slice(0, LONGEST_NAME).trim() ?? NAMELESS;
+};
 
 export const readMapped = (row: SheetRow, mapping: OwnMapping, fileName: string): AppliedMapping =>
   applyMapping({ fileName, sheet: sheetOf(row, mapping.sheet), mapping });

@@ -1,3 +1,4 @@
+import { clean } from '@/lib/reading/labels/normal';
 import { decode } from '@/lib/reading/table/decode';
 import { gridOf } from '@/lib/reading/table/grid';
 import { refusal } from '@/lib/services/reading/refusals';
@@ -12,7 +13,7 @@ const fits = (rows: readonly (readonly string[])[]) =>
   rows.length <= MOST_ROWS &&
   rows.every((row) => row.length <= MOST_COLUMNS || row.slice(MOST_COLUMNS).every((cell) => cell === ''));
 
-const trimmed = (rows: readonly (readonly string[])[]) => rows.map((row) => row.slice(0, MOST_COLUMNS));
+const trimmed = (rows: readonly (readonly string[])[]) => rows.map((row) => row.slice(0, MOST_COLUMNS).map(clean));
 
 /** The cells of a CSV or workbook as text. Called in the process that is killed past its limits. */
 export async function rowsOfSheet(input: { kind: DataKind; bytes: Uint8Array }): Promise<SheetRows> {

@@ -36,6 +36,7 @@ const START: readonly GridRow[] = [
   row('3', 'Phosphorus', '41', '', {
     doubts: { unit: [{ code: 'unit-missing', sentence: 'the page gives no unit' }] },
   }),
+  row('10', 'Copper', '1.9', 'mg/kg', { notes: { unit: 'as you confirmed on 3 May 2025' } }),
   row('4', 'Potassium', '7.7', 'mg/kg', {
     doubts: { value: [{ code: 'two-readings', sentence: 'two readings differ: 7.1 / 7.7' }] },
   }),
