@@ -10,6 +10,8 @@ export type WorkerProcess = {
   /** kill -9: nothing of it runs any more when this resolves. */
   killHard: () => Promise<void>;
   askToStop: () => void;
+  pid: () => number;
+  alive: () => boolean;
   /** Exit code; null when a signal ended it. */
   ended: () => Promise<number | null>;
 };
@@ -38,10 +40,12 @@ export function startWorker(env: Record<string, string>): WorkerProcess {
         60_000,
       ),
     killHard: async () => {
-      child.kill('SIGKILL');
+      if (child.exitCode === null && child.signalCode === null) child.kill('SIGKILL');
       await exit;
     },
     askToStop: () => child.kill('SIGTERM'),
+    pid: () => child.pid ?? 0,
+    alive: () => child.exitCode === null && child.signalCode === null,
     ended: () => exit,
   };
 }
