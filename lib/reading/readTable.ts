@@ -10,13 +10,13 @@ import { gridOf, unwrapped } from './table/grid';
 import { joinSamples } from './table/joinSamples';
 import { materialByNumbers, materialOf } from './table/material';
 import { readSheet, type SheetReading, type Untaken, untakenOf } from './table/sheet';
-import type { Merge, Sheet } from './table/types';
+import type { Sheet } from './table/types';
 import { type Reading, type Remark, refusedReading } from './types';
 
 export const MAX_ROWS = 20_000;
 export const MAX_COLUMNS = 1_000;
 
-export type { Merge, Sheet, Untaken };
+export type { Sheet, Untaken };
 
 /** What the reader saw of a data file, kept so that a person can see why a number was taken or left. */
 export type TableTrace = {
