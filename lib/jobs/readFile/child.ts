@@ -1,12 +1,7 @@
-import { hasHidden, plainReading } from '@/lib/reading/plain';
-import { type Reading, refusedReading } from '@/lib/reading/types';
-import { wordsOfPdf } from '@/lib/services/pdf/words';
-import { refusal } from '@/lib/services/reading/refusals';
 import { confine } from './confine';
-import { readDataFile } from './dataFile';
-import { MAX_PAGES } from './limits';
 import { type FromChild, isDataKind, type ToChild } from './messages';
-import { readPdfPages, readPictureFile, type Told } from './pictures';
+import type { Told } from './pictures';
+import { readBytes } from './readBytes';
 import { rowsOfSheet } from './sheetRows';
 
 /** Child process that reads one file and ends. It has no environment, no database and no store. */
@@ -19,27 +14,11 @@ const tell: Told = {
   scans: (pages) => send({ type: 'scans', pages }),
 };
 
-async function read(input: ToChild): Promise<Reading> {
-  if (isDataKind(input.kind)) {
-    const { reading, hidden } = await readDataFile({ ...input, kind: input.kind });
-    return plainReading(reading, hidden);
-  }
-  if (input.kind === 'picture') return plainReading((await readPictureFile(input, tell)).reading, false);
-  const words = await wordsOfPdf({
-    bytes: input.bytes,
-    maxPages: MAX_PAGES,
-    onPage: tell.page,
-  });
-  if (!words.ok) return refusedReading({ file: input.fileName, pages: words.pages, error: refusal(words.reason) });
-  const hidden = words.pages.some((page) => page.words.some((word) => hasHidden(word.text)));
-  return plainReading(await readPdfPages({ ...input, pages: words.pages }, tell), hidden);
-}
-
 async function answer(input: ToChild): Promise<FromChild> {
   if (input.rowsOnly && isDataKind(input.kind)) {
     return { type: 'rows', rows: await rowsOfSheet({ kind: input.kind, bytes: input.bytes }) };
   }
-  return { type: 'done', reading: await read(input) };
+  return { type: 'done', reading: await readBytes(input, tell) };
 }
 
 confine();
