@@ -5,6 +5,9 @@ import { labelText } from './rowLabels';
 import type { Upright } from './words';
 
 const FEWEST = 3;
+/** Headings over the first name and lines under the last, in type sizes. */
+const HEAD = 4;
+const TAIL = 4;
 
 type Labelled = { readonly cell: PageCell; readonly analyte: string; readonly line: CellLine };
 
@@ -85,22 +88,22 @@ function besideLists(page: Upright, lines: readonly CellLine[]): Edge[] {
   const columns = labelColumns(lines).map((column) => ({ column, ...extent(column) }));
   const edges: Edge[] = [];
   for (const [index, right] of columns.entries()) {
-    // Boxes of a form have their numbers under the names; a list has them beside.
+    // Boxes of a form have their numbers under the names; a list has them beside, perhaps on a later line of the name.
+    const edgeOfNames = Math.max(...right.column.map(({ cell }) => cell.phrase.x1)) - right.size;
     const beside = right.column.filter(({ cell, line }) =>
       lines.some(
         (other) =>
           other.line.page === line.line.page &&
-          Math.abs(other.line.y0 - line.line.y0) < 1.3 * cell.phrase.size &&
+          Math.abs(other.line.y0 - line.line.y0) < 3 * cell.phrase.size &&
           other.cells.some(
             (one) =>
               one.meaning.kind === 'value' &&
-              one.phrase.x0 > cell.phrase.x0 + 2 * cell.phrase.size &&
-              one.phrase.y0 < cell.phrase.y1 &&
-              one.phrase.y1 > cell.phrase.y0,
+              one.phrase.x0 > edgeOfNames &&
+              one.phrase.x0 < (columns[index + 1]?.x ?? page.width),
           ),
       ),
     );
-    if (beside.length < 0.3 * right.column.length) continue;
+    if (beside.length < 0.5 * right.column.length) continue;
     const left = columns
       .slice(0, index)
       .filter((other) => other.y0 < right.y1 && other.y1 > right.y0 && right.x - other.x > 8 * right.size);
@@ -112,7 +115,13 @@ function besideLists(page: Upright, lines: readonly CellLine[]): Edge[] {
     if (numbersIn(lines, right.x, next, right.y0 - right.size, right.y1 + 2 * right.size) < FEWEST) continue;
     const edge = stretched(page, x, Math.max(right.y0, nearest.y0), Math.min(right.y1, nearest.y1));
     const clear = edge === null ? null : acrossPhrases(lines, edge);
-    if (clear !== null && clear.y0 <= Math.max(right.y0, nearest.y0) + right.size) edges.push(clear);
+    if (clear === null || clear.y0 > Math.max(right.y0, nearest.y0) + right.size) continue;
+    // Other tables over and under the lists are no part of them.
+    const reach = {
+      y0: Math.min(right.y0, nearest.y0) - HEAD * right.size,
+      y1: Math.max(right.y1, nearest.y1) + TAIL * right.size,
+    };
+    edges.push({ x, y0: Math.max(clear.y0, reach.y0), y1: Math.min(clear.y1, reach.y1) });
   }
   return edges;
 }

@@ -131,7 +131,7 @@ function analytesNamed(text: string): AnalyteKey[] {
   const groups: readonly (readonly [RegExp, readonly AnalyteKey[]])[] = [
     [/\b(micro-?nutrients?|trace elements?|minor elements?)\b/i, ['boron', 'zinc', 'manganese', 'iron', 'copper']],
     [
-      /\b(all |other |major |macro-?)?nutrients\b|\ball elements\b/i,
+      /\b(major |macro-?|primary |secondary )nutrients\b/i,
       ['phosphorus', 'potassium', 'calcium', 'magnesium', 'sulfur'],
     ],
     [/\b(exchangeable )?(cations|bases)\b/i, ['potassium', 'calcium', 'magnesium', 'sodium']],
