@@ -6,6 +6,7 @@ import { ANY_DATE } from './stages/dates';
 import type { Statements } from './stages/sections';
 import { type NumberStyle, numberStyle } from './stages/values';
 import { decode } from './table/decode';
+import { dateText } from './table/fields';
 import { gridOf, unwrapped } from './table/grid';
 import { joinSamples } from './table/joinSamples';
 import { materialByNumbers, materialOf } from './table/material';
@@ -103,6 +104,17 @@ function allStatements(readings: readonly SheetReading[]): Statements {
   return { unit: readings.find((one) => one.statements.unit !== null)?.statements.unit ?? null, methods };
 }
 
+/** ISO day -> the words of the file for it. */
+function printedDays(sheets: readonly Sheet[], shownDates: TableInput['shownDates']): ReadonlyMap<string, string> {
+  const days = new Map(shownDates ?? []);
+  for (const cell of cellsOf(sheets)) {
+    if (!/^[\d.]{5,10}$/.test(cell)) continue;
+    const iso = dateText(cell);
+    if (iso !== cell && !days.has(iso)) days.set(iso, cell);
+  }
+  return days;
+}
+
 function shown(reading: Reading, dates: ReadonlyMap<string, string>): Reading {
   const back = (printed: string | null) => (printed === null ? null : (dates.get(printed) ?? printed));
   return {
@@ -176,7 +188,7 @@ export function readTableTraced(input: TableInput): { reading: Reading; trace: T
     samples,
     recommendations: soil.flatMap((one) => one.recommendations),
   };
-  return { reading: input.shownDates === undefined ? reading : shown(reading, input.shownDates), trace };
+  return { reading: shown(reading, printedDays(open.sheets, input.shownDates)), trace };
 }
 
 /** The reading alone; see readTableTraced. */

@@ -1,16 +1,17 @@
 import type { Candidate, Identity, SamplePart } from '../candidate';
 import { unitOnly } from '../labels/label';
 import type { ReadRecommendation } from '../types';
-import { adviceInWords, isAdviceRow, isAdviceUnit } from './advice';
+import { adviceInWords, adviceItem, isAdviceRow, isAdviceUnit } from './advice';
 import { type Beside, candidateOf } from './candidates';
 import type { Facts } from './facts';
 import { DATE_ASSUMED, fieldOf, isBareDate } from './fields';
+import { withoutRole } from './headingRole';
 import { chosenColumns, columnsFor, type Kind, type ListColumn, labelColumn, nearest } from './listColumns';
 import { fieldIn, identityOfColumn, isNamed, rowIdentity, sampleOver, sectionAt, sharedOf } from './listIdentity';
 import { otherMaterial } from './material';
 import { isNoSample } from './names';
 import { spoken } from './spoken';
-import { type Ledger, type NotResult, note, type Shape } from './types';
+import { keyOf, type Ledger, type NotResult, note, type Shape } from './types';
 
 const ADVICE = /^(recommendation|recommended|advice|application|rec|fertili[sz]er)s?$/i;
 
@@ -129,6 +130,11 @@ class Walk {
     this.recommendations.push({ sampleId, item, amount, printed, unit, page: null, box: null });
   }
 
+  /** A column headed "Lime Rec" advises lime; one headed "Recommendation" advises on the row's analyte. */
+  private itemOf(column: ListColumn, name: string): string {
+    return withoutRole(column.head) === '' ? name : adviceItem(column.head);
+  }
+
   private besideResult(row: number, column: ListColumn) {
     const { facts, plan } = this;
     const name = facts.at(row, plan.labelAt);
@@ -137,10 +143,10 @@ class Walk {
     if (column.kind !== 'recommendation') return;
     if (meaning.kind === 'value') {
       const unit = meaning.unit ?? facts.label(row, plan.labelAt)?.unit ?? null;
-      this.advise(row, column.at, `${name} ${column.head}`.trim(), meaning.value, unit);
+      this.advise(row, column.at, this.itemOf(column, name), meaning.value, unit);
     } else if (meaning.kind === 'text') {
       const sampleId = this.own.sampleId ?? this.section.sampleId ?? null;
-      const advice = adviceInWords(facts.at(row, column.at), sampleId, name);
+      const advice = adviceInWords(facts.at(row, column.at), sampleId, this.itemOf(column, name));
       if (advice !== null) this.recommendations.push(advice);
     }
   }
@@ -189,6 +195,24 @@ class Walk {
   }
 }
 
+/** "Potassium index 2" on a line of its own is how the laboratory rates the potassium of another line. */
+function withClasses(candidates: readonly Candidate[], ledger: Ledger): Candidate[] {
+  const classOf = (one: Candidate) => /\bindex$/i.test(one.label.text.trim()) && /^\d[+-]?$/.test(one.value.printed);
+  const weighed = candidates.filter((one) => !classOf(one) && one.unit !== null && one.unit !== 'index');
+  const classes = candidates.filter(
+    (one) => classOf(one) && weighed.some((other) => other.label.analyte === one.label.analyte),
+  );
+  for (const { cell } of classes) if (cell !== null) ledger.set(keyOf(cell.row - 1, cell.column - 1), 'other-column');
+  return candidates
+    .filter((one) => !classes.includes(one))
+    .map((one) => {
+      const found = weighed.includes(one)
+        ? classes.find((other) => other.label.analyte === one.label.analyte)
+        : undefined;
+      return found === undefined || one.rating !== null ? one : { ...one, rating: found.value.printed };
+    });
+}
+
 /** Stage "analytes down": one row a number, or one row an analyte with one sample or several across. */
 export function analytesDown(facts: Facts, freeRows: readonly number[], ledger: Ledger): Shape | null {
   const plan = planOf(facts, freeRows);
@@ -196,7 +220,10 @@ export function analytesDown(facts: Facts, freeRows: readonly number[], ledger: 
   const free = new Set(freeRows);
   const walk = new Walk(facts, plan, free, ledger);
   for (const row of plan.rows) walk.row(row);
-  const parts: SamplePart[] = [...walk.parts.values()];
+  const parts: SamplePart[] = [...walk.parts.values()].map((part) => ({
+    ...part,
+    candidates: withClasses(part.candidates, ledger),
+  }));
   if (parts.length === 0) return null;
   const assumed = plan.columns.some(
     (one) => one.kind === 'identity' && isBareDate(one.head) && fieldIn(plan.columns, one.head) === 'dateSampled',

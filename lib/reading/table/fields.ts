@@ -30,7 +30,7 @@ const FURTHER: readonly (readonly [IdentityField, RegExp])[] = [
   ['depth', /^((sample|sampling|soil|core) )?(depth|horizon|layer|increment)( range| interval)?( (in|inches|cm|mm))?$/],
   [
     'sampleId',
-    /^(((client|grower|customer|your|field|soil|user|farm) )?(sample|spl|smp)[ .-]?(id|ident|identification|identity|identifier|name|description|desc|label|ref(erence)?|no|nr|num(ber)?|#|code|location|point|site)?|sampleid|samplename|your (mark|ref(erence)?)|bag( (no|id|number|label))?|plot( ?(id|name|no|number|label))?|bed( ?(id|name|no|number))?|site id|zone( ?(id|name|no))?|management zone|point( ?id)?|grid( ?(id|cell|point))?|bezeichnung|probe)$/,
+    /^(((client|grower|customer|your|field|soil|user|farm) )?(sample|spl|smp)[ .-]?(id|ident|identification|identity|identifier|name|description|desc|label|ref(erence)?|no|nr|num(ber)?|#|code|location|point|site)?|sampleid|samplename|(your|client|customer|grower|sender) ?(mark|ref(erence)?|label)|bag( (no|id|number|label))?|plot( ?(id|name|no|number|label))?|bed( ?(id|name|no|number))?|site id|zone( ?(id|name|no))?|management zone|point( ?id)?|grid( ?(id|cell|point))?|bezeichnung|probe)$/,
   ],
   [
     'fieldName',
@@ -53,7 +53,7 @@ function bare(text: string): string {
     .trim();
 }
 
-export const isBareDate = (text: string): boolean => /^dates?$/i.test(text.trim());
+export const isBareDate = (text: string): boolean => /^(dates?|datum)$/i.test(text.trim());
 
 export const DATE_ASSUMED = remark(
   'date-kind-assumed',
@@ -121,6 +121,10 @@ const FIRST_1900 = Date.UTC(1899, 11, 30);
 export function dateText(cell: string): string {
   const packed = /^((?:19|20)\d\d)(\d\d)(\d\d)$/.exec(cell);
   if (packed !== null) return `${packed[1]}-${packed[2]}-${packed[3]}`;
+  // Points between the numbers are written only where the day comes first.
+  const pointed = /^(\d{1,2})\.(\d{1,2})\.(\d{4})$/.exec(cell);
+  if (pointed !== null)
+    return `${pointed[3]}-${(pointed[2] ?? '').padStart(2, '0')}-${(pointed[1] ?? '').padStart(2, '0')}`;
   if (/^[34567]\d{4}(\.\d+)?$/.test(cell)) {
     const serial = Math.floor(Number(cell));
     return new Date(FIRST_1900 + serial * DAY).toISOString().slice(0, 10);

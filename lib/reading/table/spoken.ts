@@ -53,7 +53,7 @@ const UNIT_CODES: readonly (readonly [RegExp, string])[] = [
   [/\b(?:lbs?|pounds?|#)[ ./]*(?:per )?1,?000 ?(?:sq\.? ?ft\.?|sqft|sf|ft2|ft²|square feet)/gi, 'lb/1000ft2'],
   [/\b(?:lbs?|pounds?|#)[ ./]*(?:per )?100 ?(?:sq\.? ?ft\.?|sqft|sf|ft2|ft²|square feet)/gi, 'lb/100ft2'],
   [/\bparts per million\b/gi, 'ppm'],
-  [/\bmg (?:N|P|K|S|B|Mg|Ca|Na|Zn|Mn|Fe|Cu)\/kg\b/g, 'mg/kg'],
+  [/\bmg (?:N|P|K|S|B|Mg|Ca|Na|Zn|Mn|Fe|Cu|CO2-C)\/kg\b/g, 'mg/kg'],
 ];
 
 /** Column codes are written "P_ppm", "pH.1to1" or "CaSat_pct"; for reading they are words. */
@@ -76,6 +76,8 @@ export function spoken(text: string): string {
     .replace(/\bBray[ -]?P?[ -]?([12])\b/gi, 'Bray $1')
     .replace(/\b(?:v\/v|w\/v|w:v|v:v)\b/gi, ' ')
     .replace(/\bpH[ -]?Wert\b/gi, 'pH')
+    .replace(/\bpH[ -]?Buff?\b\.?|\bBuff?\.?[ -]?pH\b/gi, 'Buffer pH')
+    .replace(/\bC[ -]?org\b\.?/g, 'Organic Carbon')
     .replace(/\bKCl[ -]?40\b/gi, 'KCl-40')
     .replace(/\bK[ -]Colwell\b/g, 'Colwell K')
     .replace(/\b(NO3|NH4|SO4)[ -]?([NS])\b/gi, '$1-$2');

@@ -87,6 +87,14 @@ describe('days and depths', () => {
     // 45580 is 15 October 2024 in the 1900 calendar of spreadsheets (ECMA-376, 18.17.4.1).
     expect(dateText('45580')).toBe('2024-10-15');
     expect(dateText('10/12/2024')).toBe('10/12/2024');
+    expect(dateText('2.10.2024')).toBe('2024-10-02');
+  });
+  it('keeps the words of the file beside the day', () => {
+    const [sample] = readTable({
+      fileName: 'a.csv',
+      text: 'Sample,Date sampled,pH,P ppm\nA,20241012,6.4,33\n',
+    }).samples;
+    expect(sample).toMatchObject({ dateSampled: '2024-10-12', dateSampledPrinted: '20241012' });
   });
   it('takes the unit of a depth from cell or heading, and gives none of its own', () => {
     expect(depthText('0-6', 'Depth (in)')).toBe('0-6 in');
