@@ -52,7 +52,7 @@ describe('A file that cannot be used', () => {
     {
       what: 'of the wrong type',
       file: () => `${REFUSED}/program.exe`,
-      says: /Nothing was sent: reports are taken as PDF, CSV/,
+      says: /Nothing was sent: reports are taken as PDF, picture/,
     },
     {
       what: 'of 21 MB',
