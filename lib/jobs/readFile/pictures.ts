@@ -121,7 +121,7 @@ export async function readPicturesOfPdf(
       },
     });
     // A page with few words and no picture over it is a page of text.
-    if (drawn === 0) return null;
+    if (drawn === 0 && bare.length === 0) return null;
     const pages = input.pages.map((page): AnyPage => {
       const picture = seen.get(page.number);
       return picture === undefined ? page : scannedPage(page.number, picture, Math.max(page.width, page.height));

@@ -81,6 +81,30 @@ async function drawn(document: PDFDocumentProxy, page: PDFPageProxy, scale: numb
   }
 }
 
+/** Null for a page that has no picture over it and need not be drawn, and for one so broken that it cannot be. */
+async function pictureOf(
+  document: PDFDocumentProxy,
+  number: number,
+  OPS: Readonly<Record<string, number>>,
+  perhaps: boolean,
+): Promise<Grey | null> {
+  try {
+    const page = await document.getPage(number);
+    const { dpi, cover } = await largestPicture(page, OPS);
+    let picture: Grey | null = null;
+    if (!perhaps || cover >= COVERS) {
+      const flat = page.getViewport({ scale: 1, rotation: 0 });
+      const wanted = dpi === null || cover < 0.2 ? WITHOUT_PICTURE_DPI : Math.min(MOST_DPI, Math.max(LEAST_DPI, dpi));
+      const scale = Math.min(wanted / 72, Math.sqrt(MOST_POINTS / (flat.width * flat.height)));
+      picture = await drawn(document, page, scale);
+    }
+    page.cleanup();
+    return picture;
+  } catch {
+    return null;
+  }
+}
+
 /**
  * Draws pages of a PDF as pictures, as stored: crop box, /Rotate not applied. `numbers` are the pages without a text
  * layer; `perhaps` those with a few words only, which are drawn when a picture covers them. One page at a time is held.
@@ -108,16 +132,8 @@ export async function picturesOfPdf(input: {
   try {
     const document = await task.promise;
     for (const number of [...input.numbers, ...input.perhaps].sort((a, b) => a - b)) {
-      const page = await document.getPage(number);
-      const { dpi, cover } = await largestPicture(page, OPS);
-      if (!input.perhaps.includes(number) || cover >= COVERS) {
-        const flat = page.getViewport({ scale: 1, rotation: 0 });
-        const wanted = dpi === null || cover < 0.2 ? WITHOUT_PICTURE_DPI : Math.min(MOST_DPI, Math.max(LEAST_DPI, dpi));
-        const scale = Math.min(wanted / 72, Math.sqrt(MOST_POINTS / (flat.width * flat.height)));
-        const picture = await drawn(document, page, scale);
-        page.cleanup();
-        await input.onPicture(number, picture);
-      } else page.cleanup();
+      const picture = await pictureOf(document, number, OPS, input.perhaps.includes(number));
+      if (picture !== null) await input.onPicture(number, picture);
     }
   } finally {
     await task.destroy();
