@@ -3,6 +3,7 @@ import { fieldWithValue } from '../stages/identity';
 import type { Facts } from './facts';
 import { fieldOf } from './fields';
 import { roleIn } from './headingRole';
+import { ANALYTE_HEAD } from './listColumns';
 import { spoken } from './spoken';
 
 /** A table with samples down and analytes across: its heading rows, and the rows under them up to the next table. */
@@ -21,6 +22,10 @@ export const DEPTH = /^\d{1,3}\s*(?:-|â€“|to)\s*\d{1,3}\s*(?:in(?:ches)?|cm|"|â€
 function isHead(facts: Facts, row: number): boolean {
   const one = facts.rows[row];
   if (one === undefined || one.labels.length === 0) return false;
+  // "Test, Result, Unit" are the headings of a list, whatever else stands beside them.
+  const cells = facts.grid[row] ?? [];
+  const list = cells.some((cell) => ANALYTE_HEAD.test(spoken(cell))) && cells.some((cell) => roleIn(cell) === 'result');
+  if (list && one.analytes < 2) return false;
   if (one.values > 0 && !(one.analytes >= 4 && one.values <= 1)) return false;
   return (
     one.analytes >= 2 || (one.labels.length >= 1 && one.fields >= 1 && one.filled <= one.labels.length + one.fields + 3)

@@ -71,7 +71,14 @@ function planOf(facts: Facts, block: Block): Plan {
         );
       }) ?? null);
   const kinds = columns
-    .filter((one) => one.at < first && one.field === null && one.label === null && one.role === null && one !== named)
+    .filter(
+      (one) =>
+        one.at < first &&
+        (one.field === null || one.field === 'other') &&
+        one.label === null &&
+        one.role === null &&
+        one !== named,
+    )
     .map((one) => one.at);
   const depthHeading = columns.find((one) => one.field === 'depth')?.whole ?? '';
   return { columns, results, named, kinds, depthHeading };
