@@ -61,6 +61,14 @@ function withPoint(word: Merged, { bodies, points, height }: Parts): string | nu
   return [...characters.slice(0, at), '.', ...characters.slice(at)].join('');
 }
 
+/** "4.111" whose point hangs below the figures has a comma there, between thousands. */
+function withComma(text: string, { bodies, points, height }: Parts): string {
+  const [mark] = points;
+  if (!/^\d{1,3}\.\d{3}$/.test(text) || points.length !== 1 || mark === undefined) return text;
+  const bottom = Math.max(...bodies.map((piece) => piece.y1));
+  return mark.y1 > bottom + 0.06 * height ? text.replace('.', ',') : text;
+}
+
 /** A figure and a letter that stand apart, or a sign before a number, as two words. */
 function split(word: Merged, { bodies, height }: Parts): Merged[] {
   const characters = [...word.text].filter((character) => !/[.,]/.test(character));
@@ -95,8 +103,9 @@ export function checkInk(words: readonly Merged[], pieces: readonly Ink[], lette
     const parts = partsOf(word, find(word.y0 - letter, word.y1 + letter));
     const clear = parts.bodies.length === [...word.text].filter((character) => !/[.,]/.test(character)).length;
     if (/[.,]/.test(word.text)) {
+      const text = withComma(word.text, parts);
       const point = parts.points.length > 0 ? 'seen' : clear ? 'not-seen' : 'unknown';
-      return split({ ...word, point }, parts);
+      return split({ ...word, text, point }, parts);
     }
     const added = word.text.length > 1 || parts.points.length === 1 ? withPoint(word, parts) : null;
     if (added === null)

@@ -73,6 +73,14 @@ describe('the ink under a number', () => {
     expect(word).toMatchObject({ text: '7.1', point: 'not-seen' });
   });
 
+  it('tells a comma between thousands from a point by how low it hangs', () => {
+    const figures = bodies([102, 126, 144, 162]);
+    const hanging: Ink = { x0: 118, y0: 124, x1: 123, y1: 136 };
+    const word = merged('4.111', { x1: 180 });
+    expect(checkInk([word], [...figures, hanging], LETTER)[0]?.text).toBe('4,111');
+    expect(checkInk([word], [...figures, point(118)], LETTER)[0]?.text).toBe('4.111');
+  });
+
   it('parts a number from the rating letter that stands apart, and not from one that is glued on', () => {
     const apart = checkInk([merged('51L', { x1: 170 })], bodies([102, 120, 152]), LETTER);
     expect(apart.map((word) => word.text)).toEqual(['51', 'L']);
@@ -96,6 +104,11 @@ describe('usual confusions of the engine', () => {
     ['P205', 'P2O5'],
     ['pprn', 'ppm'],
     ['rng/kg', 'mg/kg'],
+    ['mgkg', 'mg/kg'],
+    ['0.M.', 'O.M.'],
+    ['Il', 'II'],
+    ['(p.p-m.)', '(p.p.m.)'],
+    ['Ibslacre', 'lbs/acre'],
     ['Magnesiurn', 'Magnesium'],
     ['1O4', '104'],
     ['l.5', '1.5'],

@@ -48,7 +48,17 @@ function collectForms(): ReadonlyMap<string, string> {
     }
   };
   for (const entry of ANALYTES) for (const text of [entry.symbol, ...entry.spellings]) add(text);
-  for (const entry of UNITS) entry.spellings.forEach(add);
+  for (const entry of UNITS) {
+    for (const spelling of entry.spellings) {
+      add(spelling);
+      // A stroke is lost or taken for an l: "mgkg", "lbslacre".
+      if (!/^[A-Za-z]{2,}\/[A-Za-z]{2,}$/.test(spelling)) continue;
+      for (const without of ['', 'l']) {
+        const form = blurredForm(spelling.replace('/', without));
+        if (!forms.has(form)) forms.set(form, spelling);
+      }
+    }
+  }
   for (const entry of METHODS) entry.spellings.forEach(add);
   return new Map([...forms].flatMap(([form, word]): [string, string][] => (word === null ? [] : [[form, word]])));
 }

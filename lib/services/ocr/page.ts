@@ -26,7 +26,7 @@ export type SeenPage = {
   readonly look: (spots: readonly Spot[], as: 'number' | 'word') => Promise<readonly string[]>;
 };
 
-/** A spot is looked at again this much larger. */
+/** A spot is looked at again this much larger; type much larger or smaller than usual is brought to one height. */
 const CLOSE_UP = 1.3;
 const NUMBERS = '0123456789.,<>-';
 
@@ -71,11 +71,13 @@ function columnOf(picture: Grey, letter: number, spots: readonly Spot[]): { shee
   const margin = Math.round(letter * CLOSE_UP);
   const cuts = spots.map((spot) => {
     const [width, height] = [spot.x1 - spot.x0, spot.y1 - spot.y0];
+    const usual = 1.2 * letter;
+    const zoom = height > 1.5 * usual ? (CLOSE_UP * usual) / height : CLOSE_UP;
     return warp(
       picture,
-      [1 / CLOSE_UP, 0, spot.x0, 0, 1 / CLOSE_UP, spot.y0, 0, 0, 1],
-      Math.max(1, Math.round(width * CLOSE_UP)),
-      Math.max(1, Math.round(height * CLOSE_UP)),
+      [1 / zoom, 0, spot.x0, 0, 1 / zoom, spot.y0, 0, 0, 1],
+      Math.max(1, Math.round(width * zoom)),
+      Math.max(1, Math.round(height * zoom)),
     );
   });
   const width = Math.max(...cuts.map((cut) => cut.width)) + 2 * margin;
