@@ -134,8 +134,21 @@ describe('a grower’s own spreadsheet', () => {
     await withdrawReport({ ctx: here.owner, input });
     expect(await live(here, here.north)).toEqual([]);
     expect((await look(here, reportId)).report.state).toBe('in-review');
+    expect((await look(here, reportId)).names.map((one) => one.plotId)).toEqual([here.north, here.south, null]);
     expect(await bring(here, reportId)).toMatchObject({ results: 11 });
     expect(await live(here, here.north)).toHaveLength(8);
+  });
+
+  it('asks for no plot twice when it was taken back', async () => {
+    const here = await place();
+    const reportId = await send(here);
+    const sheet = await look(here, reportId);
+    const plots = [{ name: 'Orchard', plotId: here.south }];
+    const at = { siteId: here.site.id, reportId };
+    await importOwnSheet({ ctx: here.owner, input: { ...at, version: sheet.report.version, ...choice(sheet), plots } });
+    await withdrawReport({ ctx: here.owner, input: { ...at, reason: 'Once more.' } });
+    const again = await look(here, reportId);
+    expect(again.names.find((one) => one.name === 'Orchard')?.plotId).toBe(here.south);
   });
 
   it('is brought in once by a double click, and not by somebody who sees an old state', async () => {

@@ -11,7 +11,7 @@ export const NAMELESS = 'Rows without a name';
 const LONGEST_NAME = 200;
 
 /** A cell may hold a line break or a character that is not seen; a name is one line. */
-export const nameOf = (sample: ReadSample): string => {
+export const nameOf = (sample: Pick<ReadSample, 'fieldName' | 'sampleId' | 'labNumber'>): string => {
   const [name] = [sample.fieldName, sample.sampleId, sample.labNumber].map((one) => clean(one ?? '')).filter(Boolean);
   return name?.slice(0, LONGEST_NAME).trim() ?? NAMELESS;
 };

@@ -1,6 +1,6 @@
-import { eq } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { report } from '@/db/schema';
+import { report, reportSample } from '@/db/schema';
 import type { SiteId } from '@/lib/domain/ids';
 import { notFound } from '@/lib/errors';
 import type { AppliedMapping } from '@/lib/reading/ownSheet';
@@ -18,19 +18,37 @@ const SHOWN_PROBLEMS = 100;
 
 type Known = Awaited<ReturnType<typeof loadKnownNames>>;
 
-function namesIn(applied: AppliedMapping, known: Known, ctx: Ctx): OwnSheet['names'] {
+/** The plots chosen when this sheet was brought in before and taken back: nobody is asked twice. */
+async function chosenBefore(tx: Transaction, siteId: SiteId, reportId: string): Promise<Map<string, string>> {
+  const rows = await tx
+    .select()
+    .from(reportSample)
+    .where(and(eq(reportSample.siteId, siteId), eq(reportSample.reportId, reportId)));
+  return new Map(
+    rows.flatMap(({ printedName: sampleId, fieldName, labNumber, plotId }) =>
+      plotId === null ? [] : [[nameOf({ sampleId, fieldName, labNumber }), plotId] as const],
+    ),
+  );
+}
+
+function namesIn(
+  applied: AppliedMapping,
+  known: Known,
+  before: ReadonlyMap<string, string>,
+  ctx: Ctx,
+): OwnSheet['names'] {
   const names = new Map<string, OwnSheet['names'][number]>();
   for (const sample of applied.reading.samples) {
     const name = nameOf(sample);
-    const before = names.get(name);
+    const so = names.get(name);
     const withoutDay = believableDay(sample.dateSampled, ctx) === null ? 1 : 0;
     names.set(name, {
       name,
-      samples: (before?.samples ?? 0) + 1,
-      withoutDay: (before?.withoutDay ?? 0) + withoutDay,
-      plotId: before
-        ? before.plotId
-        : suggestPlot({ printedName: sample.sampleId, fieldName: sample.fieldName }, known),
+      samples: (so?.samples ?? 0) + 1,
+      withoutDay: (so?.withoutDay ?? 0) + withoutDay,
+      plotId: so
+        ? so.plotId
+        : (before.get(name) ?? suggestPlot({ printedName: sample.sampleId, fieldName: sample.fieldName }, known)),
     });
   }
   return [...names.values()];
@@ -77,7 +95,7 @@ export async function sheetAnswer(
     }),
     problems: applied.problems.slice(0, SHOWN_PROBLEMS).map((problem) => ({ ...problem })),
     problemCount: applied.problems.length,
-    names: namesIn(applied, known, ctx),
+    names: namesIn(applied, known, await chosenBefore(tx, siteId, row.reportId), ctx),
     plots: known.plots.map(({ id, name }) => ({ id, name })),
   };
 }
