@@ -8,6 +8,7 @@ import { collectDue } from '@/lib/data/reminders/collectDue';
 import { listReports } from '@/lib/data/reports/listReports';
 import { latestResults } from '@/lib/data/results/latestResults';
 import { cookieFor, ctxAs, ctxWorker, makeLaboratory, makePlot, makeSite, makeTest } from '../support/factory';
+import { benchFuzz } from './fuzz';
 import { captureQueries, explainAll } from './hotQueries';
 import { line, median, ms, quantile, verdict } from './measure';
 import { fillMillion } from './million';
@@ -76,7 +77,9 @@ async function smallGround() {
 }
 
 async function main(): Promise<void> {
-  const only = process.argv[2];
+  const [, , only, count, seed] = process.argv;
+  // Hurt reports: `npm run bench -- fuzz 5000 1` tries 5,000 from seed 1 on.
+  if (only === 'fuzz') return benchFuzz(Number(count ?? 3_000), Number(seed ?? 1));
   const url = need('DATABASE_URL');
   if (!only || only === 'reading') {
     await benchReading([

@@ -49,14 +49,14 @@ export async function unpacksTooLarge(file: Uint8Array): Promise<boolean> {
     if (times > 1) {
       const opened = inner(part);
       if (opened === null) {
-        if ((await unpackedSize(part, 'zlib', MOST_OF_OUTER)) > MOST_OF_OUTER) return true;
+        if ((await unpackedSize(part, 'zlib', MOST_OF_OUTER)).size > MOST_OF_OUTER) return true;
         continue;
       }
       part = opened;
     }
     const most = /\/Image(?![A-Za-z])/.test(dictionary) ? MOST_OF_PICTURE : MOST_OF_OTHER;
     if (part.length * MOST_TIMES > most) {
-      const size = await unpackedSize(part, 'zlib', most);
+      const { size } = await unpackedSize(part, 'zlib', most);
       if (size > most) return true;
       if (most === MOST_OF_OTHER) others += size;
       if (others > MOST_OF_OTHERS) return true;

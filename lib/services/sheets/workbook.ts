@@ -220,8 +220,9 @@ export async function workbookOf(bytes: Uint8Array): Promise<Workbook> {
     if (directory.unpacked > MOST_UNPACKED || directory.entries > MOST_ENTRIES)
       return { ok: false, reason: 'unpacks-too-large' };
     styled = directory.names.some((name) => /styles\.(xml|bin)$/i.test(name));
-    if ((await zipUnpacked(bytes, directory, MOST_UNPACKED)) > MOST_UNPACKED)
-      return { ok: false, reason: 'unpacks-too-large' };
+    const unpacked = await zipUnpacked(bytes, directory, MOST_UNPACKED);
+    if (unpacked === null) return { ok: false, reason: 'broken-sheet' };
+    if (unpacked > MOST_UNPACKED) return { ok: false, reason: 'unpacks-too-large' };
   }
   const tools = await loadTools();
   const opened = open(tools, bytes, styled);
