@@ -77,9 +77,9 @@ async function smallGround() {
 }
 
 async function main(): Promise<void> {
-  const [, , only, count, seed] = process.argv;
+  const [, , only, mutants, seed] = process.argv;
   // Hurt reports: `npm run bench -- fuzz 5000 1` tries 5,000 from seed 1 on.
-  if (only === 'fuzz') return benchFuzz(Number(count ?? 3_000), Number(seed ?? 1));
+  if (only === 'fuzz') return benchFuzz(Number(mutants ?? 3_000), Number(seed ?? 1));
   const url = need('DATABASE_URL');
   if (!only || only === 'reading') {
     await benchReading([
