@@ -203,7 +203,7 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const structured = list.rows.length + tableRows.reduce((sum, row) => sum + row.candidates.length, 0);
   const cards = structured < ENOUGH_WITHOUT_SENTENCES ? cardRows(results, taken) : [];
   const prose =
-    structured + cards.length < ENOUGH_WITHOUT_SENTENCES
+    structured < ENOUGH_WITHOUT_SENTENCES && cards.length < ENOUGH_WITHOUT_SENTENCES
       ? proseRows(paragraphsOf(results, taken), style)
       : { rows: [], refused: [] };
   const toldAlready = new Set(list.rows.map((row) => row.candidate.label.analyte));

@@ -263,7 +263,7 @@ const nameIn = remembered(
     const bare = withoutMethod.replace(NOISE, ' ').replace(/\s+/g, ' ').trim();
     const fourth = bare === withoutMethod ? null : lookUp(bare, raw);
     if (fourth !== null) return { ...fourth, strength: 0.96 };
-    const same = twoNames(withoutUnit) ?? sameInAllParts(raw);
+    const same = twoNames(withoutUnit) ?? twoNames(withoutMethod) ?? sameInAllParts(raw);
     if (same !== null) return { analyte: same, strength: 0.97, ambiguous: null };
     const share =
       /^(?:share|portion|part|percent(?:age)?|saturation)\b.*\b(?:with|by|of|:)\s+(calcium|magnesium|potassium|sodium|hydrogen|bases)$/.exec(

@@ -208,7 +208,11 @@ export function choose(found: readonly Found[], run: Run): Choice {
   }
   const alone = (list: readonly Found[]) => list.map((one) => ({ one, identity: null }));
   const named = free.filter((one) => one.column?.role === 'result');
-  const open = named.length > 0 ? named : free;
+  // "Content" beside "Stock, kg/ha": a column with a unit of its own is the same amount said again.
+  const again = free.filter(
+    (one) => one.column?.role === null && one.column.unit !== null && one.column.unit.unit !== 'index' && named.some((other) => other.unit !== one.unit),
+  );
+  const open = named.length > 0 ? [...named, ...again] : free;
   for (const one of free)
     if (!open.includes(one))
       not.push({ cell: one.cell, role: 'several', why: 'another column is headed as the result' });
@@ -249,6 +253,14 @@ export function isAdvice(segment: Segment, unit: Value['unit'], run: Run): boole
   if (label.analyte === 'lime_requirement')
     return !/requirement|index|\blr\b/i.test(text) && (unit === null || ADVICE_UNIT.test(unit));
   if (label.form !== 'P2O5' && label.form !== 'K2O') return false;
+  const printed = segment.line.line.text;
+  if (
+    /P2O5/i.test(printed) &&
+    /K2O/i.test(printed) &&
+    /\bN\b|\blime\b/i.test(printed) &&
+    (unit === null || ADVICE_UNIT.test(unit))
+  )
+    return true;
   const found = run.segments.some(
     (other) => other !== segment && other.label.analyte === label.analyte && other.label.form === 'element',
   );

@@ -173,7 +173,10 @@ const CHARGED = new Set(['potassium', 'calcium', 'magnesium', 'sodium', 'exchang
 /** "Phosphorus" over "M3" and "Bray 1": the caption is the name, the column's own words are its method or unit. */
 function namedByCaption(own: string, caption: string): Label | null {
   const name = readLabel(caption);
-  if (own === '' || roleOf(own, false) !== null || name === null || name.strength < 0.93) return null;
+  if (own === '' || name === null || name.strength < 0.93) return null;
+  // "Found | Desired" under each name: the caption is the name, the column's own words its role.
+  if (roleOf(own, false) !== null && roleOf(own, false) !== 'rating') return readLabel(caption);
+  if (roleOf(own, false) !== null) return null;
   const joined = readLabel(`${caption} ${own}`) ?? (onlyDescribes(own) ? readLabel(caption, [own]) : null);
   return joined === null ? null : { ...joined, strength: Math.min(joined.strength, 0.97) };
 }

@@ -204,7 +204,14 @@ function namesBeside(lines: readonly CellLine[], hits: readonly IdentityHit[]): 
     );
     if (near) return [];
     const at = lines.findIndex((line) => line.line.page.number === hit.page && line.line.index === hit.line);
-    const [own, above] = [lines[at], lines[at - 1]];
+    const own = lines[at];
+    const above = lines.findLast(
+      (line) =>
+        line.line.page.number === hit.page &&
+        line.line.y1 <= hit.y0 + 2 &&
+        hit.y0 - line.line.y1 < 1.8 * line.line.size &&
+        line.cells.some((cell) => cell.phrase.x0 < hit.x0 + 60 && cell.phrase.x1 > hit.x0),
+    );
     const plain = (cell: PageCell | undefined) =>
       cell !== undefined &&
       cell.meaning.kind === 'text' &&
@@ -241,7 +248,7 @@ function namesBeside(lines: readonly CellLine[], hits: readonly IdentityHit[]): 
       above === undefined ||
       !plain(over) ||
       above.cells.length < 1 ||
-      number.phrase.y0 - over.phrase.y1 > 1.2 * over.phrase.size
+      number.phrase.y0 - over.phrase.y1 > 1.8 * over.phrase.size
     )
       return [];
     // The laboratory's own name over its address is no sample.

@@ -1,5 +1,5 @@
 import type { Candidate, Identity } from '../candidate';
-import { methodInAny, readLabel } from '../labels/label';
+import { methodInAny, readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { choose, isAdvice, NOT_RESULTS, unitUnder, valuesOf } from './chosen';
 import type { NotTaken } from './roles';
@@ -77,15 +77,83 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly Cel
   });
 }
 
+/** "1, 2, 3 …" before the names of a list count its rows. */
+function withoutSerials(lines: readonly CellLine[]): CellLine[] {
+  const serial = (line: CellLine) => {
+    const [first, next] = line.cells;
+    const whole = first?.meaning.kind === 'value' && /^\d{1,2}\.?$/.test(first.phrase.text) && next !== undefined;
+    return whole ? Number.parseInt(first.phrase.text, 10) : null;
+  };
+  const counted = new Set<CellLine>();
+  let run: { line: CellLine; number: number }[] = [];
+  for (const line of lines) {
+    const number = serial(line);
+    if (number === null) continue;
+    const last = run[run.length - 1];
+    const follows =
+      last !== undefined &&
+      number === last.number + 1 &&
+      Math.abs((last.line.cells[0]?.phrase.x1 ?? 0) - (line.cells[0]?.phrase.x1 ?? 0)) < 8;
+    run = follows ? [...run, { line, number }] : [{ line, number }];
+    if (run.length >= 4) for (const one of run) counted.add(one.line);
+  }
+  if (counted.size === 0) return [...lines];
+  return lines.map((line) =>
+    counted.has(line) ? { ...line, cells: line.cells.slice(1), values: line.values - 1 } : line,
+  );
+}
+
+/**
+ * A number set in the middle of the height of its row, half a line off its name, is put on the name's line: a line of
+ * nothing but numbers, units and ratings that overlaps in height with a line of words that has no number.
+ */
+function withSlipped(lines: readonly CellLine[], taken: ReadonlySet<CellLine>): CellLine[] {
+  const gone = new Set<CellLine>();
+  const merged = new Map<CellLine, CellLine>();
+  const bare = (line: CellLine) =>
+    line.values > 0 && line.cells.every((cell) => cell.meaning.kind !== 'text' || unitOnly(cell.phrase.text) !== null);
+  for (const [at, line] of lines.entries()) {
+    if (taken.has(line) || !bare(line) || line.values > 2) continue;
+    const home = [lines[at + 1], lines[at - 1]].find((other) => {
+      if (
+        other === undefined ||
+        taken.has(other) ||
+        other.values > 0 ||
+        other.line.page !== line.line.page ||
+        merged.has(other)
+      )
+        return false;
+      const shared = Math.min(other.line.y1, line.line.y1) - Math.max(other.line.y0, line.line.y0);
+      const first = other.cells[0];
+      return (
+        shared > 0.2 * line.line.size &&
+        first !== undefined &&
+        first.meaning.kind === 'text' &&
+        first.phrase.x0 < (line.cells[0]?.phrase.x0 ?? 0) &&
+        readLabel(first.phrase.text) !== null
+      );
+    });
+    if (home === undefined) continue;
+    gone.add(line);
+    merged.set(home, {
+      ...home,
+      cells: [...home.cells, ...line.cells].sort((a, b) => a.phrase.x0 - b.phrase.x0),
+      values: line.values,
+    });
+  }
+  return lines.flatMap((line) => (gone.has(line) ? [] : [merged.get(line) ?? line]));
+}
+
 /**
  * Stage 6b. Analytes down the side, their numbers to the right: labels (wrapped ones put together), rows in runs, the
  * columns of each run with what their headings say, and of each row the numbers that are results. What is not taken is
  * kept with the evidence.
  */
 export function listRows(
-  lines: readonly CellLine[],
+  all: readonly CellLine[],
   taken: ReadonlySet<CellLine>,
 ): { rows: ListRow[]; runs: Run[]; notTaken: NotTaken[] } {
+  const lines = withSlipped(withoutSerials(all), taken);
   const first = runsOf(
     lines,
     segmentsOf(lines, taken, () => false),

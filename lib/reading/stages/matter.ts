@@ -26,6 +26,7 @@ const KINDS: readonly { readonly name: string; readonly title: RegExp; readonly 
   },
   {
     name: 'a compost or manure test',
+    weak: /\b(compost|manure|digestate|slurry)\b/i,
     title:
       /\b(compost|manure|biosolids?|digestate|slurry|vermicompost|worm castings?)\b.{0,24}\b(analysis|test|report|sample|quality)\b|\b(analysis|test) of (compost|manure)/i,
     words: [
@@ -67,6 +68,9 @@ const SOIL_SIGNS: readonly RegExp[] = [
   /\b(sampling|sample|core) depth\b|\b0 ?[-–] ?\d{1,2} ?(in|cm|")/i,
 ];
 
+/** A word in passing ("Compost corner" as a plot's name) does not make a page. */
+const LEAST = 4;
+
 /**
  * What a page is when it is not about soil, weighed from its titles, its "sample type" and its words; null for soil.
  * A laboratory's own name ("… Soil Laboratory") is no evidence, and neither is a remark ("have the soil tested").
@@ -79,7 +83,7 @@ export function notSoil(lines: readonly CellLine[]): string | null {
   const page = lines[0]?.line.page;
   const top = (page?.height ?? 0) * 0.4;
   const isTitle = (cell: (typeof cells)[number]) => cell.phrase.size > 1.12 * usual || cell.phrase.y0 < top;
-  const typed = cells.filter((cell) => /^(sample|matrix|material)( type)?:/i.test(cell.phrase.text));
+  const typed = cells.filter((cell) => /^(sample type|matrix|material( type)?):/i.test(cell.phrase.text));
   const titles = cells.filter(isTitle).map((cell) => cell.phrase.text.split(' ').slice(0, 9).join(' '));
   const all = cells.map((cell) => cell.phrase.text).join(' | ');
   const soilTitle = titles.some((text) => SOIL_WORDS.test(text)) ? 4 : 0;
@@ -87,7 +91,13 @@ export function notSoil(lines: readonly CellLine[]): string | null {
   const soil = soilTitle + soilType + Math.min(4, SOIL_SIGNS.filter((sign) => sign.test(all)).length);
   let best: { name: string; weight: number } | null = null;
   for (const kind of KINDS) {
-    const title = titles.some((text) => kind.title.test(text)) ? 4 : 0;
+    const weak =
+      kind.weak !== undefined &&
+      titles.some((text) => kind.weak?.test(text)) &&
+      kind.words.filter((word) => word.test(all)).length >= 3
+        ? 1.5
+        : 0;
+    const title = titles.some((text) => kind.title.test(text)) ? 4 : weak;
     const type = typed.some(
       (cell) => kind.title.test(cell.phrase.text) || kind.words.some((word) => word.test(cell.phrase.text)),
     )
@@ -97,5 +107,5 @@ export function notSoil(lines: readonly CellLine[]): string | null {
     const weight = title + type + 1.5 * kind.words.filter((word) => word.test(all)).length;
     if (best === null || weight > best.weight) best = { name: kind.name, weight };
   }
-  return best !== null && best.weight > soil ? best.name : null;
+  return best !== null && best.weight >= LEAST && best.weight > soil ? best.name : null;
 }

@@ -32,7 +32,7 @@ const ROLES: readonly (readonly [Role, RegExp])[] = [
   ],
   [
     'result',
-    /^((your|soil|lab|laboratory|test|this|current|present|new|actual|amount) )*(results?|found|level( found)?|value( found)?|values|test|soil test|measured|actual|reading|current|concentration|amount|analysis result|your (soil|garden|bed|plot|sample)|this (year|test|sample))$/i,
+    /^((your|soil|lab|laboratory|test|this|current|present|new|actual|amount) )*(results?|found|level( found)?|value( found)?|values|test|soil test|measured|actual|reading|current|concentration|contents?|amount|analysis result|your (soil|garden|bed|plot|sample)|this (year|test|sample))$/i,
   ],
   [
     'analyte',
@@ -58,7 +58,7 @@ export const NOT_A_SAMPLE =
 
 /** Row names that say "this is the result" and name no sample. */
 export const JUST_RESULT =
-  /^(your |test |soil |this )?(values?|levels?|results?|year|test|reading)( found)?$|^(found|actual|measured|now|current|analysis)$/i;
+  /^(your |test |soil |this )?(values?|levels?|results?|year|test|reading)( found)?$|^(found|actual|measured|now|current|analysis|others?|saturation|amount|contents?)$/i;
 
 /** A number beside a label that is no result, and the evidence. */
 export type NotTaken = { readonly cell: PageCell; readonly role: Role | 'advice' | 'several'; readonly why: string };

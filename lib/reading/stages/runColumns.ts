@@ -90,7 +90,14 @@ function isYear(cell: PageCell): boolean {
 function canHead(line: CellLine, within: Span, busy: ReadonlySet<CellLine>): PageCell[] | null {
   const cells = line.cells.filter((cell) => overlap(cell.phrase, within) > 0);
   if (cells.length === 0) return [];
-  if (fieldLine(line, within) !== null) return cells;
+  const fields = fieldLine(line, within);
+  if (fields !== null) return fields.cells.length >= 2 ? cells : null;
+  // "Sample | Barley stubble | Sampled | 12 August": a form's own line is no heading.
+  const named = cells.filter((cell) => fieldOf(cell.phrase.text) !== null).length;
+  const answers = cells.filter(
+    (cell) => fieldOf(cell.phrase.text) === null && !says(cell.phrase.text) && readLabel(cell.phrase.text) === null,
+  ).length;
+  if (named > 0 && answers > 0) return null;
   if (cells.some((cell) => fieldWithValue(cell.phrase.text) !== null)) return null;
   if (busy.has(line)) return null;
   const numbers = cells.filter((cell) => cell.meaning.kind === 'value' && !isYear(cell));

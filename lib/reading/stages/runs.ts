@@ -22,6 +22,35 @@ function extent(segment: Segment): Span {
   return { x0: segment.x0, x1: Math.max(segment.x1, ...segment.cells.map((cell) => cell.phrase.x1)) };
 }
 
+function middle(span: Span): number {
+  return (span.x0 + span.x1) / 2;
+}
+
+/** The samples named once at the head of a page hold for the lists under it that have their columns in the same places. */
+function namedFromAbove(run: Run, before: readonly Run[]): readonly RunColumn[] {
+  const first = run.segments[0]?.line.line;
+  const nameless = run.columns.every((column) => Object.keys(column.identity).length === 0 && column.free === null);
+  const over = before.findLast(
+    (other) =>
+      other.segments[0]?.line.line.page === first?.page &&
+      other.columns.filter(
+        (column) =>
+          column.identity.sampleId !== undefined || column.identity.labNumber !== undefined || column.free !== null,
+      ).length >= 2,
+  );
+  if (!nameless || over === undefined || run.columns.length < 2) return run.columns;
+  const named = over.columns.filter((column) => column.free !== null || Object.keys(column.identity).length > 0);
+  const steps = named.slice(1).map((column, index) => middle(column) - middle(named[index] ?? column));
+  const reach = Math.min(...steps) / 2;
+  return run.columns.map((column) => {
+    const home = [...named].sort(
+      (a, b) => Math.abs(middle(a) - middle(column)) - Math.abs(middle(b) - middle(column)),
+    )[0];
+    if (home === undefined || Math.abs(middle(home) - middle(column)) > reach) return column;
+    return { ...column, identity: home.identity, free: home.free };
+  });
+}
+
 /** Rows under one another with their labels in one column, parted by headings and by pages. */
 export function runsOf(lines: readonly CellLine[], segments: readonly Segment[], taken: ReadonlySet<CellLine>): Run[] {
   const open: { segments: Segment[]; span: Span; labels: Span }[] = [];
@@ -48,7 +77,7 @@ export function runsOf(lines: readonly CellLine[], segments: readonly Segment[],
     }
   }
   const busy = new Set([...taken, ...segments.map((segment) => segment.line)]);
-  return open.map((run) => {
+  const runs = open.map((run) => {
     const first = run.segments[0];
     const size = first?.line.line.size ?? 10;
     // A heading of the last column may reach further right than its numbers, but not into the next list.
@@ -71,6 +100,7 @@ export function runsOf(lines: readonly CellLine[], segments: readonly Segment[],
       sections: sectionsOf(lines, run.segments, run.span),
     };
   });
+  return runs.map((run, at) => ({ ...run, columns: namedFromAbove(run, runs.slice(0, at)) }));
 }
 
 /** "Base saturation, %" or "Trace elements (DTPA), ppm" over the rows of a list adds what the rows leave open. */
