@@ -21,6 +21,9 @@ const NEAREST: readonly (UnitKey | null)[] = [
   '%',
 ];
 
+/** Of samples of one name only so many, the last ones, are looked through: a file of 20,000 nameless rows has its time. */
+const MOST_ALIKE = 100;
+
 type Group = { identity: Identity; results: ReadResult[] };
 
 function same(a: string | undefined, b: string | undefined): boolean {
@@ -40,6 +43,8 @@ function contradicts(a: readonly ReadResult[], b: readonly ReadResult[]): boolea
 }
 
 function belongs(group: Group, identity: Identity, results: readonly ReadResult[]): boolean {
+  const [depth, other] = [group.identity.depth, identity.depth];
+  if (depth !== undefined && other !== undefined && depth !== other) return false;
   if (same(group.identity.labNumber, identity.labNumber))
     return (
       same(group.identity.sampleId, identity.sampleId) ||
@@ -86,7 +91,7 @@ function merge(parts: readonly { identity: Identity; results: readonly ReadResul
   const byName = new Map<string, Group[]>();
   for (const part of parts) {
     if (part.results.length === 0) continue;
-    const near = namesOf(part.identity).flatMap((name) => byName.get(name) ?? []);
+    const near = namesOf(part.identity).flatMap((name) => byName.get(name)?.slice(-MOST_ALIKE) ?? []);
     const home = near.find((group) => belongs(group, part.identity, part.results));
     const group = home ?? { identity: part.identity, results: [] };
     if (home === undefined) groups.push(group);
@@ -94,8 +99,9 @@ function merge(parts: readonly { identity: Identity; results: readonly ReadResul
     if (home === undefined) group.results.push(...part.results);
     else addTo(home, part.results);
     for (const name of namesOf(group.identity)) {
-      const list = byName.get(name) ?? [];
-      if (!list.includes(group)) byName.set(name, [...list, group]);
+      const list = byName.get(name);
+      if (list === undefined) byName.set(name, [group]);
+      else if (!list.slice(-MOST_ALIKE).includes(group)) list.push(group);
     }
   }
   return groups;

@@ -134,6 +134,15 @@ function shown(reading: Reading, dates: ReadonlyMap<string, string>): Reading {
  * and why each number that was not taken is no result. Errors: none are thrown for content; see the refusal codes.
  */
 export function readTableTraced(input: TableInput): { reading: Reading; trace: TableTrace | null } {
+  return read(input, true);
+}
+
+/** The reading alone; see readTableTraced. */
+export function readTable(input: TableInput): Reading {
+  return read(input, false).reading;
+}
+
+function read(input: TableInput, traced: boolean): { reading: Reading; trace: TableTrace | null } {
   const file = input.fileName;
   const refuse = (error: Remark) => ({ reading: refusedReading({ file, pages: 0, error }), trace: null });
   const open = opened(input);
@@ -142,8 +151,8 @@ export function readTableTraced(input: TableInput): { reading: Reading; trace: T
   if (open.sheets.some((sheet) => sheet.grid.some((row) => row.length > MAX_COLUMNS)))
     return refuse(TOO_LARGE('1,000 columns'));
   const style = styleOf(open.sheets, open.delimiter);
-  const readings = open.sheets.map((sheet) => readSheet(sheet, style));
-  const trace: TableTrace = { sheets: readings, untaken: readings.flatMap((one) => untakenOf(one)) };
+  const readings = open.sheets.map((sheet) => readSheet(sheet, style, traced));
+  const trace: TableTrace = { sheets: readings, untaken: traced ? readings.flatMap((one) => untakenOf(one)) : [] };
   const lab = { name: readings.find((one) => one.laboratory !== null)?.laboratory ?? null };
   const materials = readings.map((one) =>
     materialOf([one.facts.sheet.name ?? '', ...one.texts.filter((text) => text.length < 200)]),
@@ -153,11 +162,10 @@ export function readTableTraced(input: TableInput): { reading: Reading; trace: T
   const parts = soil.flatMap((one) => shareAll(namedByField(one.parts), one.shared));
   const other = materials.find((one) => one !== null) ?? (soilSaid ? null : materialByNumbers(parts)) ?? null;
   const nothing = soil.length === 0 || (other !== null && materials.every((one) => one === null));
-  const unsoiled = trace.untaken.some((one) => one.why === 'not-soil');
   const remarks = new Map(soil.flatMap((one) => one.remarks.map((remark): [string, Remark] => [remark.code, remark])));
   const warnings: Remark[] = [...(input.warnings ?? []), ...remarks.values()];
-  if (other !== null || unsoiled) {
-    const what = other ?? 'an analysis of something else';
+  const what = other ?? soil.find((one) => one.other !== null)?.other ?? null;
+  if (what !== null) {
     const some = nothing || parts.every((part) => part.candidates.length === 0);
     warnings.push(
       remark(
@@ -189,9 +197,4 @@ export function readTableTraced(input: TableInput): { reading: Reading; trace: T
     recommendations: soil.flatMap((one) => one.recommendations),
   };
   return { reading: shown(reading, printedDays(open.sheets, input.shownDates)), trace };
-}
-
-/** The reading alone; see readTableTraced. */
-export function readTable(input: TableInput): Reading {
-  return readTableTraced(input).reading;
 }

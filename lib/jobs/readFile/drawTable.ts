@@ -35,7 +35,7 @@ export async function drawTable(input: { bytes: Uint8Array; fileName: string; di
       row.slice(0, MOST_COLUMNS).flatMap((text, c) => {
         if (text === '') return [];
         const number = facts.meaning(r, c).kind === 'value';
-        const what = ledger.get(`${r}:${c}`) ?? (number ? 'outside-table' : '');
+        const what = ledger?.get(`${r}:${c}`) ?? (number ? 'outside-table' : '');
         const fill = what === '' ? '#fff' : (COLOURS[what] ?? '#f3d0d0');
         const [x, y] = [c * WIDTH, r * HEIGHT];
         return [

@@ -97,6 +97,7 @@ function notResultOf(column: ListColumn): NotResult {
 class Walk {
   readonly parts = new Map<string, { identity: Identity; candidates: Candidate[] }>();
   readonly recommendations: ReadRecommendation[] = [];
+  other: string | null = null;
   private section: Identity = {};
   private own: Identity = {};
   private since = -1;
@@ -104,7 +105,7 @@ class Walk {
     private readonly facts: Facts,
     private readonly plan: Plan,
     private readonly free: ReadonlySet<number>,
-    private readonly ledger: Ledger,
+    private readonly ledger: Ledger | null,
   ) {}
 
   private hear(row: number) {
@@ -169,14 +170,10 @@ class Walk {
       const place = { sheet: facts.sheet.number, row, column: column.at };
       const beside = besideAt(facts, plan, row, column, label.unit !== null);
       const candidate = candidateOf({ ...label, text: name }, meaning, place, beside);
+      const material = otherMaterial(kind);
+      this.other ??= material;
       const why: NotResult | null =
-        otherMaterial(kind) !== null
-          ? 'not-soil'
-          : ADVICE.test(kind)
-            ? 'recommendation'
-            : noSample
-              ? 'summary-row'
-              : null;
+        material !== null ? 'not-soil' : ADVICE.test(kind) ? 'recommendation' : noSample ? 'summary-row' : null;
       const advice =
         why === 'recommendation' ||
         (why === null && (isAdviceUnit(candidate.unit) || isAdviceRow(name, candidate.unit)));
@@ -196,13 +193,13 @@ class Walk {
 }
 
 /** "Potassium index 2" on a line of its own is how the laboratory rates the potassium of another line. */
-function withClasses(candidates: readonly Candidate[], ledger: Ledger): Candidate[] {
+function withClasses(candidates: readonly Candidate[], ledger: Ledger | null): Candidate[] {
   const classOf = (one: Candidate) => /\bindex$/i.test(one.label.text.trim()) && /^\d[+-]?$/.test(one.value.printed);
   const weighed = candidates.filter((one) => !classOf(one) && one.unit !== null && one.unit !== 'index');
   const classes = candidates.filter(
     (one) => classOf(one) && weighed.some((other) => other.label.analyte === one.label.analyte),
   );
-  for (const { cell } of classes) if (cell !== null) ledger.set(keyOf(cell.row - 1, cell.column - 1), 'other-column');
+  for (const { cell } of classes) if (cell !== null) ledger?.set(keyOf(cell.row - 1, cell.column - 1), 'other-column');
   return candidates
     .filter((one) => !classes.includes(one))
     .map((one) => {
@@ -214,7 +211,7 @@ function withClasses(candidates: readonly Candidate[], ledger: Ledger): Candidat
 }
 
 /** Stage "analytes down": one row a number, or one row an analyte with one sample or several across. */
-export function analytesDown(facts: Facts, freeRows: readonly number[], ledger: Ledger): Shape | null {
+export function analytesDown(facts: Facts, freeRows: readonly number[], ledger: Ledger | null): Shape | null {
   const plan = planOf(facts, freeRows);
   if (plan === null) return null;
   const free = new Set(freeRows);
@@ -224,10 +221,11 @@ export function analytesDown(facts: Facts, freeRows: readonly number[], ledger: 
     ...part,
     candidates: withClasses(part.candidates, ledger),
   }));
-  if (parts.length === 0) return null;
+  if (parts.length === 0 && walk.other === null) return null;
   const assumed = plan.columns.some(
     (one) => one.kind === 'identity' && isBareDate(one.head) && fieldIn(plan.columns, one.head) === 'dateSampled',
   );
   const remarks = assumed ? [DATE_ASSUMED] : [];
-  return { parts, recommendations: walk.recommendations, rows: rowsUsed(facts, plan, free), remarks };
+  const { recommendations, other } = walk;
+  return { parts, recommendations, rows: rowsUsed(facts, plan, free), remarks, other };
 }

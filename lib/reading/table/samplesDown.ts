@@ -154,22 +154,22 @@ function sectionOf(facts: Facts, row: number): Identity | null {
   return { [first.field]: value };
 }
 
-function isOtherMaterial(facts: Facts, plan: Plan, row: number): boolean {
-  return plan.columns.some(
-    (column) =>
-      /^(sample |test )?(type|matrix|material|medium|category|kind)$/i.test(spoken(column.text)) &&
-      otherMaterial(facts.at(row, column.at)) !== null,
+function otherMaterialOf(facts: Facts, plan: Plan, row: number): string | null {
+  const column = plan.columns.find((one) =>
+    /^(sample |test )?(type|matrix|material|medium|category|kind)$/i.test(spoken(one.text)),
   );
+  return column === undefined ? null : otherMaterial(facts.at(row, column.at));
 }
 
 /** Stage "samples down": one row a sample, one column an analyte. */
-export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
+export function samplesDown(facts: Facts, block: Block, ledger: Ledger | null): Shape {
   const plan = planOf(facts, block);
   const parts: SamplePart[] = [];
   const recommendations: ReadRecommendation[] = [];
   const rows = new Set<number>([...block.captionRows, block.base, ...block.underRows]);
   const taken: (number | null)[][] = [];
   let section: Identity = {};
+  let other: string | null = null;
   const bare = (row: number, why: NotResult) => {
     for (let at = 0; at < facts.width; at++) if (facts.meaning(row, at).kind === 'value') note(ledger, row, at, why);
   };
@@ -198,7 +198,9 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
       bare(row, 'previous');
       continue;
     }
-    if (isOtherMaterial(facts, plan, row)) {
+    const material = otherMaterialOf(facts, plan, row);
+    if (material !== null) {
+      other ??= material;
       bare(row, 'not-soil');
       continue;
     }
@@ -245,7 +247,7 @@ export function samplesDown(facts: Facts, block: Block, ledger: Ledger): Shape {
     }
   }
   const assumed = plan.columns.some((column) => column.field === 'dateSampled' && isBareDate(column.text));
-  return { parts, recommendations, rows, remarks: assumed ? [DATE_ASSUMED] : [] };
+  return { parts, recommendations, rows, remarks: assumed ? [DATE_ASSUMED] : [], other };
 }
 
 function pick(identity: Identity): Identity {

@@ -22,8 +22,9 @@ export type SheetReading = {
   readonly laboratory: string | null;
   /** Lines that belong to no table: titles, notes, headings of columns. */
   readonly texts: readonly string[];
-  readonly ledger: Ledger;
+  readonly ledger: Ledger | null;
   readonly remarks: readonly Remark[];
+  readonly other: string | null;
 };
 
 /** "P1" in the list of codes gives the unit and the method that the column's heading leaves out. */
@@ -42,9 +43,9 @@ function withLegend(candidate: Candidate, legend: ReadonlyMap<string, string>): 
 }
 
 /** One sheet: its tables of samples, then what stands outside them as lists of analytes, then the lines around. */
-export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
+export function readSheet(sheet: Sheet, style: NumberStyle, traced: boolean): SheetReading {
   const facts = factsOf({ ...sheet, grid: withStackedHeads(sheet.grid) }, style);
-  const ledger: Ledger = new Map();
+  const ledger: Ledger | null = traced ? new Map() : null;
   const blocks = blocksOf(facts);
   const shapes = blocks.map((block) => samplesDown(facts, block, ledger));
   const used = new Set<number>(shapes.flatMap((shape) => [...shape.rows]));
@@ -79,6 +80,7 @@ export function readSheet(sheet: Sheet, style: NumberStyle): SheetReading {
     texts: [...around, ...heads].map((row) => (facts.grid[row] ?? []).filter((cell) => cell !== '').join(' ')),
     ledger,
     remarks: all.flatMap((shape) => shape.remarks),
+    other: all.find((shape) => shape.other !== null)?.other ?? null,
   };
 }
 
@@ -98,7 +100,7 @@ export function untakenOf(reading: SheetReading): Untaken[] {
     if ((facts.rows[row]?.values ?? 0) === 0) continue;
     for (const [column, text] of cells.entries()) {
       if (text === '' || facts.meaning(row, column).kind !== 'value') continue;
-      const what = ledger.get(keyOf(row, column));
+      const what = ledger?.get(keyOf(row, column));
       if (what !== 'taken')
         list.push({ sheet: facts.sheet.number, row: row + 1, column: column + 1, text, why: what ?? 'outside-table' });
     }

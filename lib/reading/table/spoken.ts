@@ -1,4 +1,5 @@
 import { type Label, readLabel } from '../labels/label';
+import { remembered } from '../labels/remember';
 
 /** Elements as column codes write them in small letters ("ca_ppm"); only inside a heading, never a unit by itself. */
 const SYMBOLS: Readonly<Record<string, string>> = {
@@ -58,6 +59,10 @@ const UNIT_CODES: readonly (readonly [RegExp, string])[] = [
 
 /** Column codes are written "P_ppm", "pH.1to1" or "CaSat_pct"; for reading they are words. */
 export function spoken(text: string): string {
+  return /^[\d.,<>+ -]*$/.test(text) ? text.trim() : inWords(text);
+}
+
+const inWords = remembered((text: string): string => {
   let words = text
     .replace(/_(\d)_(\d)\b/g, ' $1:$2')
     .replace(/_/g, ' ')
@@ -83,7 +88,7 @@ export function spoken(text: string): string {
     .replace(/\b(NO3|NH4|SO4)[ -]?([NS])\b/gi, '$1-$2');
   for (const [code, unit] of UNIT_CODES) words = words.replace(code, unit);
   return words.replace(/\s+/g, ' ').trim();
-}
+});
 
 const FILL =
   /\b(conc(entration)?|content|reading|res|results?|values?|found|measured|numeric|num|dry basis|db|oven dry|od|ext|extr)\b\.?/gi;

@@ -41,11 +41,15 @@ export type Shape = {
   /** Rows that belong to the table, so that the others can be read as titles and notes. */
   readonly rows: ReadonlySet<number>;
   readonly remarks: readonly Remark[];
+  /** What rows of the table are when they are not soil; null when none is another thing. */
+  readonly other: string | null;
 };
 
 export const keyOf = (row: number, column: number): string => `${row}:${column}`;
 
-export function note(ledger: Ledger, row: number, column: number, what: NotResult | 'taken') {
+/** Null where nobody asks afterwards: a large file is read without it. */
+export function note(ledger: Ledger | null, row: number, column: number, what: NotResult | 'taken') {
+  if (ledger === null) return;
   const key = keyOf(row, column);
   if (what === 'taken' || !ledger.has(key)) ledger.set(key, what);
 }
