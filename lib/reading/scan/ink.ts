@@ -55,7 +55,10 @@ function withPoint(word: Merged, { bodies, points, height }: Parts): string | nu
   const at = bodies.filter((body) => (body.x0 + body.x1) / 2 < middle).length;
   const [before, after] = [bodies[at - 1], bodies[at]];
   if (after === undefined || after.x0 - point.x1 > 0.45 * height) return null;
-  if (before !== undefined && point.x0 < before.x1 - 0.25 * height) return null;
+  // The end of a broken 5 or 2 lies below its own figure; a point has the room of a point between two.
+  if (point.x1 > after.x0 - 0.03 * height) return null;
+  if (before !== undefined && (point.x0 < before.x1 + 0.02 * height || after.x0 - before.x1 < 0.3 * height))
+    return null;
   if (at === 0 && !/^\d/.test(word.text)) return null;
   if (!/\d/.test(characters[at] ?? '')) return null;
   return [...characters.slice(0, at), '.', ...characters.slice(at)].join('');

@@ -15,6 +15,11 @@ const UNITS: readonly (readonly [RegExp, string])[] = [
   [/^([(]?)p[.,-]p[.,-]m[.,]?(?=$|[)])/, '$1p.p.m.'],
   [/^[Il|]{2}([).,:]?)$/, 'II$1'],
   [/^([(]?)0\.M\.?(?=$|[),])/, '$1O.M.'],
+  [/^([(]?)(?:[YV]o|yo|%o|[oO0]\/[oO0]|9\/[o0]|°\/[o0])(?=$|[),.])/, '$1%'],
+  [/\bS04/, 'SO4'],
+  [/\bN03/, 'NO3'],
+  [/KC[I1|](?![A-Za-z0-9])/, 'KCl'],
+  [/CaC[I1|]2/, 'CaCl2'],
   [/\bK20\b/, 'K2O'],
   [/\bP20[5S]\b|\bP2OS\b|\bP205\b/, 'P2O5'],
   [/\bH20\b/, 'H2O'],
@@ -48,9 +53,31 @@ function figuresMended(text: string): string | null {
   return core;
 }
 
+/** "Al" over "A2" and "A3" is a sample's name, and "l" over "2" and "3" a number: the column tells. */
+function namesMended(words: readonly Merged[]): readonly Merged[] {
+  const patterns = [
+    { wrong: /^([A-Z])[lI|]$/, beside: /^[A-Z]\d{1,2}$/ },
+    { wrong: /^()[lI|]$/, beside: /^\d{1,2}$/ },
+  ];
+  return words.map((word) => {
+    const fit = patterns.find(({ wrong }) => wrong.test(word.text));
+    if (fit === undefined) return word;
+    const height = word.y1 - word.y0;
+    const column = words.filter((other) => Math.abs(other.x0 - word.x0) < 0.8 * height && fit.beside.test(other.text));
+    if (column.length < 2) return word;
+    return {
+      ...word,
+      text: word.text.replace(fit.wrong, (_, first: string) => `${first}1`),
+      others: [...word.others, word.text],
+    };
+  });
+}
+
 /** Words with the engine's usual confusions undone. What was changed is doubted through the support it keeps. */
 export function mendWords(words: readonly Merged[]): Merged[] {
-  return words.map((word) => {
+  // An upright stroke alone is an edge of a table or of the sheet.
+  const written = namesMended(words).filter((word) => !/^[il|]$/.test(word.text));
+  return written.map((word) => {
     const figures = figuresMended(word.text);
     if (figures !== null && !isKnown(word.text) && !/^[A-Z]/.test(word.text)) {
       return { ...word, text: figures, support: Math.max(1, word.support - 1), others: [...word.others, word.text] };

@@ -62,6 +62,11 @@ describe('the ink under a number', () => {
     expect(word).toMatchObject({ text: '7.1', point: 'added', others: ['71'] });
   });
 
+  it('does not take the end of a broken figure for a point', () => {
+    const [word] = checkInk([merged('65', { x1: 140 })], [...bodies([102, 122]), point(118)], LETTER);
+    expect(word?.text).toBe('65');
+  });
+
   it('is not asked for a point where its pieces are not the characters', () => {
     const touching: Ink[] = [{ x0: 102, y0: 100, x1: 140, y1: 130 }];
     const [word] = checkInk([merged('71', { x1: 140 })], [...touching, point(119)], LETTER);
@@ -106,6 +111,11 @@ describe('usual confusions of the engine', () => {
     ['rng/kg', 'mg/kg'],
     ['mgkg', 'mg/kg'],
     ['0.M.', 'O.M.'],
+    ['Yo', '%'],
+    ['pH-KCI', 'pH-KCl'],
+    ['S04-S', 'SO4-S'],
+    ['N03-N', 'NO3-N'],
+    ['CI', 'Cl'],
     ['Il', 'II'],
     ['(p.p-m.)', '(p.p.m.)'],
     ['Ibslacre', 'lbs/acre'],
@@ -116,8 +126,14 @@ describe('usual confusions of the engine', () => {
     expect(mendWords([merged(wrong)])[0]?.text).toBe(right);
   });
 
-  it.each(['B1', 'Fee', 'Bed', 'Leeks', 'Reports', '6.4', '221H'])('%s stays', (text) => {
+  it.each(['B1', 'A1', 'C1', 'Fee', 'Bed', 'Leeks', 'Reports', '6.4', '221H'])('%s stays', (text) => {
     expect(mendWords([merged(text)])[0]?.text).toBe(text);
+  });
+
+  it('tells a sample called A1 from aluminium by its column', () => {
+    const column = ['Al', 'A2', 'A3'].map((text, row) => merged(text, { y0: 100 + row * 60, y1: 130 + row * 60 }));
+    expect(mendWords(column).map((word) => word.text)).toEqual(['A1', 'A2', 'A3']);
+    expect(mendWords([merged('Al')])[0]?.text).toBe('Al');
   });
 
   it('lets a third look decide between two', () => {

@@ -69,6 +69,8 @@ const FORMS = collectForms();
 export function unblurred(text: string): string | null {
   const core = /^[([]*(.*?)[)\],.;:*]*$/.exec(text)?.[1] ?? text;
   if (core.length < 2 || !/[A-Za-z]/.test(core) || WORDS.has(core.toLowerCase())) return null;
+  // A letter and a figure is a sample's name.
+  if (/^[A-Z]\d$/.test(core)) return null;
   const found = FORMS.get(blurredForm(core));
   // Two characters are too few to go by, but for these: sample names look like that.
   if (core.length === 2 && found !== undefined && !/^(lb|Cl|Al|OM)$/.test(found)) return null;
