@@ -10,10 +10,10 @@ import { type IdentityHit, identityHits } from './stages/identity';
 import { type Line, linesOf } from './stages/lines';
 import { type ListRow, listRows } from './stages/list';
 import { notSoil, SOIL_WORDS } from './stages/matter';
+import type { NotTaken } from './stages/notTaken';
 import { edgesOf } from './stages/panels';
 import { type ProseRefusal, paragraphsOf, proseRows } from './stages/prose';
 import { adviceOfLines, adviceOfTable, withSampleNames } from './stages/recommendations';
-import type { NotTaken } from './stages/roles';
 import type { Run } from './stages/runs';
 import { laboratoryName, type Statements, statementsOf, type ZoneBox, zoneAt, zonesOf } from './stages/sections';
 import { rowsOfTable, type TableRow } from './stages/tableRows';
@@ -41,6 +41,9 @@ export type Trace = {
 
 /** A letter tells its numbers in sentences; a report with tables repeats them there, or speaks of soils in general. */
 const ENOUGH_WITHOUT_SENTENCES = 4;
+
+/** A page whose parts were told apart by position alone. */
+const PARTED = 0.95;
 
 const NO_TEXT = remark(
   'no-text-layer',
@@ -110,6 +113,26 @@ function partsOf(tables: readonly TableRow[], list: readonly ListRow[], contexts
     });
   }
   return placed.sort((a, b) => a.page - b.page || a.y - b.y).map((one) => one.part);
+}
+
+/** Numbers of pages that were parted, and of samples without a name beside named ones, are given with less confidence. */
+function unsureOfPlace(parts: readonly SamplePart[], edges: Seen['edges']): SamplePart[] {
+  const parted = new Set(edges.map((edge) => edge.page));
+  const named = parts.filter((part) => part.identity.sampleId !== undefined || part.identity.labNumber !== undefined);
+  return parts.map((part) => {
+    const nameless = named.length > 0 && !named.includes(part);
+    const candidates = part.candidates.map((one) => ({
+      ...one,
+      position: one.position * (one.page !== null && parted.has(one.page) ? PARTED : 1),
+      doubts: nameless
+        ? [
+            ...one.doubts,
+            remark('sample-unclear', 'The page does not say clearly which sample this number belongs to.'),
+          ]
+        : one.doubts,
+    }));
+    return { ...part, candidates };
+  });
 }
 
 /** Pages that are about soil, and what the others are. A page that does not say goes with the page before it. */
@@ -216,7 +239,7 @@ export function readPagesTraced(input: { fileName: string; pages: readonly Page[
   const hits = identityHits(ofSoil, taken);
   const contexts = contextsOf(hits);
   const statements = statementsOf(texts);
-  const parts = partsOf(tableRows, rows, contexts);
+  const parts = unsureOfPlace(partsOf(tableRows, rows, contexts), edges);
   const dateTexts = texts.filter((text) => ANY_DATE.test(text));
   const { samples, warnings: found } = assemble({ parts, statements, dateTexts });
   const trace: Trace = {

@@ -275,9 +275,9 @@ const nameIn = remembered(
         : share[1] === 'bases'
           ? lookUp('base saturation', 'base saturation')
           : lookUp(share[1] ?? '', share[1] ?? '');
-    if (held !== null) return { ...held, strength: 0.955 };
+    if (held !== null) return { ...held, strength: 0.95 };
     const described = describedName(withoutUnit, (plain) => lookUp(plain, raw));
-    if (described !== null) return { ...described, strength: 0.955 };
+    if (described !== null) return { ...described, strength: 0.95 };
     return besideBrackets(raw);
   },
 );

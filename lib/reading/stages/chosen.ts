@@ -3,7 +3,8 @@ import { unitOnly } from '../labels/label';
 import type { Remark } from '../types';
 import type { CellLine, PageCell } from './cells';
 import { isCode } from './identity';
-import { type NotTaken, type Role, roleOf } from './roles';
+import type { NotTaken } from './notTaken';
+import { type Role, roleOf } from './roles';
 import { labelText, type Segment } from './rowLabels';
 import type { RunColumn } from './runColumns';
 import { overlapping, type Run } from './runs';
@@ -210,7 +211,11 @@ export function choose(found: readonly Found[], run: Run): Choice {
   const named = free.filter((one) => one.column?.role === 'result');
   // "Content" beside "Stock, kg/ha": a column with a unit of its own is the same amount said again.
   const again = free.filter(
-    (one) => one.column?.role === null && one.column.unit !== null && one.column.unit.unit !== 'index' && named.some((other) => other.unit !== one.unit),
+    (one) =>
+      one.column?.role === null &&
+      one.column.unit !== null &&
+      one.column.unit.unit !== 'index' &&
+      named.some((other) => other.unit !== one.unit),
   );
   const open = named.length > 0 ? [...named, ...again] : free;
   for (const one of free)

@@ -142,7 +142,15 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
   if (best !== undefined) {
     const at = stacks.indexOf(best);
     const below = best.own.join(' ');
-    const names = readLabel(phrase.text) !== null && readLabel(below) === null;
+    // A name over one column is that column's own, unless the next column stands bare and could take it too.
+    const bare = [stacks[at - 1], stacks[at + 1]].some(
+      (other) =>
+        other !== undefined &&
+        !line.some((one) => overlap(one, other) > 0) &&
+        readLabel(other.own.join(' ')) === null &&
+        namedByCaption(other.own.join(' '), phrase.text) !== null,
+    );
+    const names = bare && readLabel(phrase.text) !== null && readLabel(below) === null;
     const narrow = below !== '' && line.length < stacks.length && (names || saysForSeveral(phrase.text));
     if (narrow) captions.push(captionOf(phrase, line, stacks, at, at));
     else {
@@ -178,7 +186,7 @@ function namedByCaption(own: string, caption: string): Label | null {
   if (roleOf(own, false) !== null && roleOf(own, false) !== 'rating') return readLabel(caption);
   if (roleOf(own, false) !== null) return null;
   const joined = readLabel(`${caption} ${own}`) ?? (onlyDescribes(own) ? readLabel(caption, [own]) : null);
-  return joined === null ? null : { ...joined, strength: Math.min(joined.strength, 0.97) };
+  return joined === null ? null : { ...joined, strength: Math.min(joined.strength, 0.94) };
 }
 
 /** Whether a caption has something to say to a column that it does not yet know. */
@@ -264,7 +272,15 @@ function meaningOf(stack: Stack, first: boolean): Column {
     unexplained = 1;
     if (label !== null) label = { ...label, strength: Math.min(label.strength, 0.9) };
   }
-  for (const caption of [...stack.captions].reverse()) label ??= namedByCaption(heading, caption);
+  let said = heading;
+  for (const caption of [...stack.captions].reverse()) {
+    if (label !== null) break;
+    label = namedByCaption(heading, caption);
+    if (label !== null) said = `${caption} ${heading}`;
+  }
+  // A unit or method that only a caption gives is a little less sure than one in the column's own heading.
+  if (label !== null && label.unit !== null && stack.captions.length > 0 && unitIn(heading) === null)
+    label = { ...label, strength: Math.min(label.strength, 0.95) };
   const fields = stack.own.map((_, drop) => fieldOf(stack.own.slice(drop).join(' ')));
   const field = fields.find((found) => found !== null) ?? null;
   const all = [...stack.captions, heading].join(' ');
@@ -279,7 +295,15 @@ function meaningOf(stack: Stack, first: boolean): Column {
         ? 'previous'
         : null;
   }
-  return { ...span, label, field: label === null ? field : null, role, position: stack.over ? 1 : 0.96, unexplained };
+  return {
+    ...span,
+    heading: said,
+    label,
+    field: label === null ? field : null,
+    role,
+    position: stack.over ? 1 : 0.96,
+    unexplained,
+  };
 }
 
 /** "Found, in pounds per acre          Mehlich 3": one or two phrases over a whole table, the first at its left edge. */

@@ -2,7 +2,7 @@ import type { Candidate, Identity } from '../candidate';
 import { methodInAny, readLabel, unitOnly } from '../labels/label';
 import { type CellLine, numberBox, type PageCell } from './cells';
 import { choose, isAdvice, NOT_RESULTS, unitUnder, valuesOf } from './chosen';
-import type { NotTaken } from './roles';
+import type { NotTaken } from './notTaken';
 import type { Segment } from './rowLabels';
 import { overlapping, type Run, runsOf, underSection } from './runs';
 import { segmentsOf } from './segments';

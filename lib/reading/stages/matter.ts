@@ -1,7 +1,12 @@
 import type { CellLine } from './cells';
 
 /** What a page can be about when it is not soil, with the words that say so. */
-const KINDS: readonly { readonly name: string; readonly title: RegExp; readonly words: readonly RegExp[] }[] = [
+const KINDS: readonly {
+  readonly name: string;
+  readonly title: RegExp;
+  readonly weak?: RegExp;
+  readonly words: readonly RegExp[];
+}[] = [
   {
     name: 'a plant tissue test',
     title:

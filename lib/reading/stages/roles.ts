@@ -1,5 +1,3 @@
-import type { PageCell } from './cells';
-
 /** What a column holds, from its heading. Only "result" columns give results. */
 export type Role =
   | 'result'
@@ -59,6 +57,3 @@ export const NOT_A_SAMPLE =
 /** Row names that say "this is the result" and name no sample. */
 export const JUST_RESULT =
   /^(your |test |soil |this )?(values?|levels?|results?|year|test|reading)( found)?$|^(found|actual|measured|now|current|analysis|others?|saturation|amount|contents?)$/i;
-
-/** A number beside a label that is no result, and the evidence. */
-export type NotTaken = { readonly cell: PageCell; readonly role: Role | 'advice' | 'several'; readonly why: string };

@@ -138,7 +138,7 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
       const current = best === null ? -1 : best.lines.length === 0 ? best.rank + ownTells : best.rank;
       if (rank > current)
         best = {
-          label: { ...label, strength: Math.min(label.strength, 0.97) },
+          label: { ...label, strength: Math.min(label.strength, 0.95) },
           lines: parts.map((one) => one.line),
           x1: Math.max(cell.phrase.x1, ...parts.map((one) => one.cell.phrase.x1)),
           tail: '',
@@ -167,10 +167,4 @@ export function rowRoleOf(text: string): Role | null {
   const bare = labelText(text);
   const role = roleOf(bare, false);
   return role === 'unit' || role === 'analyte' || role === 'date' || role === 'unknown' ? null : role;
-}
-
-/** True when the words name an analyte neither alone nor as a field: a unit, a method, "Value found". */
-export function saysNoAnalyte(cell: PageCell): boolean {
-  const text = labelText(cell.phrase.text);
-  return readLabel(text) === null && fieldOf(text) === null;
 }

@@ -29,6 +29,17 @@ function seasonOf(text: string): number {
         : 0;
 }
 
+/** A day set on two lines ("26 Sep 2026 (this / report)") has its first line over the row's numbers. */
+function dateBeside(table: Table, row: CellLine, column: Column): PageCell | undefined {
+  return table.header
+    .filter((line) => line.line.page === row.line.page && Math.abs(row.line.y0 - line.line.y1) < 1.2 * row.line.size)
+    .flatMap((line) => line.cells)
+    .find(
+      (cell) =>
+        Math.min(cell.phrase.x1, column.x1) > Math.max(cell.phrase.x0, column.x0) && ANY_DATE.test(cell.phrase.text),
+    );
+}
+
 /**
  * Rows of one plot for several years ("2026", "2024", "2021" under a plot's name): the latest is the report's own, the
  * others are earlier years. A new plot begins with a name in its column, or after a wider gap. `at` finds a cell's column.
@@ -42,7 +53,7 @@ export function earlierYears(
   for (const column of table.columns) {
     if (column.label !== null) continue;
     const seen = rows.flatMap((row): Seen[] => {
-      const cell = row.cells.find((one) => at(one) === column);
+      const cell = row.cells.find((one) => at(one) === column) ?? dateBeside(table, row, column);
       const year = cell === undefined ? null : yearOf(cell.phrase.text);
       return year === null || cell === undefined ? [] : [{ row, year, text: cell.phrase.text }];
     });
