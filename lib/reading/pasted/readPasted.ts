@@ -9,6 +9,8 @@ import { pageOfLines, withTextPlaces } from './page';
 
 export const MAX_LINES = 20_000;
 const LONGEST_LINE = 20_000;
+/** "Label: value" lines are looked for in no longer ones: the time for a line of words grows with its square. */
+const LONGEST_OF_WORDS = 1_500;
 
 const TOO_LONG = remark(
   'text-too-long',
@@ -53,6 +55,12 @@ function byColumns(fileName: string, lines: ReturnType<typeof linesOfText>): Rea
   };
 }
 
+function byWords(fileName: string, lines: ReturnType<typeof linesOfText>): Reading | null {
+  if (lines.some((line) => line.text.length > LONGEST_OF_WORDS)) return null;
+  const page = pageOfLines(lines);
+  return withTextPlaces(readPages({ fileName, pages: [page] }), lines, page);
+}
+
 /**
  * Reads text pasted from a mail or a web page, or a .txt file: cells parted by tabs, semicolons, strokes or commas; columns
  * set with blanks; "label: value" lines. Every way is tried and the one that understands most is taken. A number's place is
@@ -67,12 +75,9 @@ export function readPasted(input: { fileName: string } & ({ text: string } | { b
   const lines = linesOfText(decoded.text);
   if (lines.length > MAX_LINES || lines.some((line) => line.text.length > LONGEST_LINE))
     return refusedReading({ file, pages: 0, error: TOO_LONG });
-  const page = pageOfLines(lines);
-  const ways = [
-    byCells(file, decoded.text),
-    byColumns(file, lines),
-    withTextPlaces(readPages({ fileName: file, pages: [page] }), lines, page),
-  ].filter((one) => one !== null);
+  const ways = [byCells(file, decoded.text), byColumns(file, lines), byWords(file, lines)].filter(
+    (one) => one !== null,
+  );
   const [first, ...others] = ways;
   if (first === undefined) return refusedReading({ file, pages: 0, error: EMPTY });
   return others.reduce((best, one) => (weight(one) > weight(best) + 0.01 ? one : best), first);
