@@ -17,6 +17,7 @@ function isRubbish(word: Seen, letter: number): boolean {
   const [w, h] = [word.x1 - word.x0, word.y1 - word.y0];
   if (!/[A-Za-z0-9%<>]/.test(word.text)) return !/^[-–—.]+$/.test(word.text) || w > 6 * letter || word.certainty < 0.4;
   if (h > 6 * letter || h < 0.25 * letter) return true;
+  if (word.text === '%') return false;
   if (word.certainty < 0.12) return true;
   // A word far wider than its letters can be is a line or a picture.
   return w > (word.text.length + 1) * Math.max(h, letter) * 1.6 && word.certainty < 0.6;

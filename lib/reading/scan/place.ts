@@ -42,18 +42,34 @@ function ownSet(word: Seen): Set | null {
 /** Advance of a typewriter's characters as a share of the type size. */
 const TYPEWRITER_ADVANCE = 0.6;
 
+/** Words long enough to tell the pitch of their type. */
+const LONG_WORD = /^[A-Za-z0-9./%-]{5,}$/;
+
+function pitchOf(word: Seen): number {
+  return (word.x1 - word.x0) / (word.text.length - 0.25);
+}
+
 /**
- * Size of a typewriter's type on this page, or null: all its characters are as wide, so ink width over characters hardly
- * differs from word to word, and its capitals are lower than other type's.
+ * The type size that the pitch tells, for a page set in typewriter type; null for any other. There all characters are as
+ * wide, so the long words of one line have one pitch, which in other type they have only by chance; and its capitals are
+ * lower than other type's, so that their height misleads.
  */
-function typewriterSize(words: readonly Seen[]): number | null {
-  const pitches = words
-    .filter((word) => /^[A-Za-z0-9./%-]{5,}$/.test(word.text) && word.certainty > 0.7)
-    .map((word) => (word.x1 - word.x0) / (word.text.length - 0.25));
-  if (pitches.length < 8) return null;
-  const usual = median(pitches);
-  const same = pitches.filter((pitch) => Math.abs(pitch - usual) < 0.05 * usual).length;
-  return same > 0.8 * pitches.length ? usual / TYPEWRITER_ADVANCE : null;
+function typewriter(words: readonly Seen[]): ((word: Seen) => number | null) | null {
+  const long = words.filter((word) => LONG_WORD.test(word.text) && word.certainty > 0.7);
+  const besideOf = (word: Seen) =>
+    long.filter((other) => other !== word && Math.abs(other.y0 + other.y1 - word.y0 - word.y1) < word.y1 - word.y0);
+  const told = long
+    .map((word) => ({ pitch: pitchOf(word), beside: besideOf(word) }))
+    .filter((one) => one.beside.length > 0);
+  const same = told.filter(({ pitch, beside }) =>
+    beside.every((other) => Math.abs(pitchOf(other) - pitch) < 0.05 * Math.max(pitch, pitchOf(other))),
+  );
+  if (told.length < 8 || same.length < 0.8 * told.length) return null;
+  return (word) => {
+    const own = LONG_WORD.test(word.text) ? [word] : [];
+    const line = [...besideOf(word), ...own];
+    return line.length === 0 ? null : median(line.map(pitchOf)) / TYPEWRITER_ADVANCE;
+  };
 }
 
 /**
@@ -61,11 +77,14 @@ function typewriterSize(words: readonly Seen[]): number | null {
  * letters in them, and the stages of the reader compare baselines and sizes.
  */
 export function setOf(words: readonly Seen[]): Map<Seen, Set> {
-  const typed = typewriterSize(words);
+  const typed = typewriter(words);
   const own = words.map((word) => {
     const set = ownSet(word);
-    const wide = typed !== null && set !== null && set.size < typed && set.size > 0.6 * typed;
-    return { word, set: wide ? { ...set, size: typed } : set };
+    const size = typed === null || set === null ? null : typed(word);
+    return {
+      word,
+      set: set !== null && size !== null && size > set.size && size < 1.7 * set.size ? { ...set, size } : set,
+    };
   });
   const usual = median(own.flatMap(({ set }) => set?.size ?? [])) || 1;
   const known = own.flatMap(({ word, set }) => (set === null ? [] : [{ word, set }]));
@@ -88,7 +107,7 @@ export function setOf(words: readonly Seen[]): Map<Seen, Set> {
   }
   const placed = snapped(sets);
   if (typed === null) return placed;
-  return new Map([...placed].map(([word, set]) => [word, { ...set, advance: typed * TYPEWRITER_ADVANCE }]));
+  return new Map([...placed].map(([word, set]) => [word, { ...set, advance: set.size * TYPEWRITER_ADVANCE }]));
 }
 
 /** Words that stand on one line get one baseline, and one size where theirs hardly differ. */

@@ -2,7 +2,7 @@ import type { Ink, Merged } from './types';
 import { isKnown, isNumber, mended, unblurred } from './vocabulary';
 
 function makesSense(text: string): boolean {
-  return isNumber(text) || isKnown(text) || unblurred(text) !== null || mended(text) !== null;
+  return text === '%' || isNumber(text) || isKnown(text) || unblurred(text) !== null || mended(text) !== null;
 }
 
 /** A word on which the views differ or of which the engine is not certain, unless it makes sense as it is. */
@@ -43,7 +43,7 @@ export function isStray(word: Merged): boolean {
 /** A word that only the look at left-over ink saw; nothing unless it makes sense. */
 export function foundLater(box: Ink, text: string, of: number): Merged[] {
   const seen = text.trim();
-  if (!makesSense(seen) || (seen.length === 1 && !/[0-9]/.test(seen))) return [];
+  if (!makesSense(seen) || (seen.length === 1 && !/[0-9%]/.test(seen))) return [];
   return [{ ...box, text: seen, certainty: 0.6, support: 1, others: [], of, point: 'unknown' }];
 }
 
