@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { readLabel, unitOnly } from './labels/label';
 import { clean } from './labels/normal';
 import { readPasted } from './pasted/readPasted';
+import { readPages } from './readPages';
 import { readTable } from './readTable';
 import { dateOrder, readDate } from './stages/dates';
 import { readCell } from './stages/values';
@@ -69,6 +70,24 @@ describe('texts of 10 kB', () => {
       return performance.now() - began > MILLISECONDS;
     });
     expect(slow.map((text) => text.slice(0, 20))).toEqual([]);
+  });
+
+  it.each([1e9, 1e30, 1e300, Number.POSITIVE_INFINITY, Number.NaN])('a word that lies %d pages down ends', (far) => {
+    const word = { x0: 0.1, x1: 0.2, size: 10, direction: 0 as const };
+    const near = ['Soil', 'pH', '6.4'].map((text, at) => ({
+      ...word,
+      text,
+      x0: at / 4,
+      x1: at / 4 + 0.05,
+      y0: 0.1,
+      y1: 0.11,
+    }));
+    const words = [...near, { ...word, text: 'Iron', y0: far, y1: far }, { ...word, text: '7', y0: -far, y1: far }];
+    const reading = readPages({
+      fileName: 'a.pdf',
+      pages: [{ number: 1, width: 612, height: 792, rotation: 0, words }],
+    });
+    expect(['soil', 'refused']).toContain(reading.kind);
   });
 
   it('are no number, unit or label, and the honest ones beside them are', () => {

@@ -33,6 +33,8 @@ export function confine(): void {
   net.Server.prototype.listen = noNetwork;
   dgram.Socket.prototype.bind = noNetwork;
   dgram.Socket.prototype.send = noNetwork;
+  // A promise that the PDF package dropped is no reason to give the file up; what it leaves hanging is ended by the clock.
+  process.on('unhandledRejection', () => undefined);
   // Files of a million small faults cost a stack trace each; nobody sees them.
   Error.stackTraceLimit = 0;
   new Worker(WATCH, { eval: true, execArgv: [], env: {}, resourceLimits: { maxOldGenerationSizeMb: 8 } }).unref();

@@ -102,7 +102,8 @@ function nextPiece(
   used: ReadonlySet<Placed>,
 ): Placed | undefined {
   const step = Math.round(whole.y1 / 2);
-  for (let at = step - 1; at <= step + 1; at++) {
+  // No counting loop: a step beyond the whole numbers never ends one.
+  for (const at of [step - 1, step, step + 1]) {
     const next = lines.get(at)?.find((other) => other !== first && continues(whole, other) && !used.has(other));
     if (next !== undefined) return next;
   }

@@ -75,6 +75,10 @@ function* splitRun(run: TextRun, even: boolean): Generator<{ text: string; from:
 /** Sine of the angle from which text counts as neither level nor upright; a crooked scan's text layer is below it. */
 const ASLANT = 0.15;
 
+/** Largest word, in pages; largest page, in points. */
+const LARGEST = 4;
+const LARGEST_PAGE = 1e9;
+
 function placeRun(run: TextRun, frame: Frame, even: boolean): PdfWord[] {
   const [a = 1, b = 0, c = 0, d = 1, e = 0, f = 0] = run.transform;
   const size = Math.hypot(c, d) || Math.hypot(a, b);
@@ -96,6 +100,8 @@ function placeRun(run: TextRun, frame: Frame, even: boolean): PdfWord[] {
     const box = { x0: Math.min(...xs), y0: Math.min(...ys), x1: Math.max(...xs), y1: Math.max(...ys) };
     // Words outside the crop box are not on the page that a person sees.
     if (box.x1 <= 0 || box.y1 <= 0 || box.x0 >= 1 || box.y0 >= 1) continue;
+    // Nor is one that is larger than several pages, or whose place is no number.
+    if (!(box.x1 - box.x0 < LARGEST && box.y1 - box.y0 < LARGEST)) continue;
     words.push({ text: part.text, ...box, size, direction: directionOf(a, b) });
   }
   return words;
@@ -150,7 +156,8 @@ export async function wordsOfPdf(input: {
         const family = content.styles[item.fontName]?.fontFamily ?? '';
         words.push(...placeRun(item, frame, family === 'monospace'));
       }
-      pages.push({ number, width: frame.width, height: frame.height, rotation: quarter(page.rotate), words });
+      const [width, height] = [Math.min(frame.width, LARGEST_PAGE), Math.min(frame.height, LARGEST_PAGE)];
+      pages.push({ number, width, height, rotation: quarter(page.rotate), words });
       page.cleanup();
       input.onPage?.(number, document.numPages);
     }
