@@ -45,4 +45,35 @@ describe('sniffReport', () => {
   ])('%s is refused', (fileName, content, code) => {
     expect(sniffReport({ bytes: content, fileName })).toMatchObject({ ok: false, code });
   });
+
+  const zip = (name: string) => Uint8Array.from([...hex('504b0304'), ...bytes(name)]);
+  const CONTENTS: Readonly<Record<string, Uint8Array>> = {
+    pdf: bytes('%PDF-1.7\n'),
+    jpg: hex('ffd8ffe000104a464946'),
+    png: hex('89504e470d0a1a0a'),
+    xlsx: zip('[Content_Types].xml'),
+    xls: hex('d0cf11e0a1b11ae1'),
+    xml: bytes('<?xml version="1.0"?><Event/>'),
+    json: bytes('{"id": 1}'),
+    csv: bytes('pH,P\n6.5,20\n'),
+    txt: bytes('pH: 6.5\n'),
+    'web page': bytes('<!doctype html><p>6.5</p>'),
+    drawing: bytes('<?xml version="1.0"?><svg/>'),
+    letter: zip('word/document.xml'),
+    program: hex('7f454c4602010100'),
+    'other picture': bytes('GIF89a\u0000\u0000\u0000\u0000'),
+  };
+  const ENDINGS = ['pdf', 'jpg', 'png', 'xlsx', 'xls', 'xml', 'json', 'csv', 'txt'];
+  const alike = (content: string, ending: string) =>
+    content === ending || (['csv', 'txt'].includes(content) && ['csv', 'txt'].includes(ending));
+  const pairs = Object.keys(CONTENTS).flatMap((content) => ENDINGS.map((ending) => ({ content, ending })));
+  it.each(pairs)('$content named .$ending', ({ content, ending }) => {
+    const sniffed = sniffReport({ bytes: CONTENTS[content] ?? new Uint8Array(), fileName: `a.${ending}` });
+    if (alike(content, ending)) expect(sniffed).toMatchObject({ ok: true });
+    else expect(sniffed).toMatchObject({ ok: false, code: ending === 'pdf' ? 'not-a-pdf' : 'not-what-it-says' });
+  });
+
+  it('takes a short text with a few control characters for text', () => {
+    expect(sniffReport({ bytes: bytes('Bed\u0007,pH\u001b\n1,6.5\n'), fileName: 'a.csv' })).toMatchObject({ ok: true });
+  });
 });

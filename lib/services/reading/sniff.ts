@@ -48,8 +48,10 @@ function includesText(bytes: Uint8Array, text: string): boolean {
 function looksLikeText(bytes: Uint8Array): boolean {
   const head = bytes.subarray(0, 4096);
   if (startsWith(head, 0xff, 0xfe) || startsWith(head, 0xfe, 0xff)) return true;
-  const zeros = head.reduce((count, byte) => count + (byte === 0 ? 1 : 0), 0);
-  if (zeros > 0) return zeros > head.length / 4 && zeros <= head.length / 2 + 1;
+  const zerosFrom = (first: number) =>
+    head.reduce((sum, byte, at) => sum + (byte === 0 && at % 2 === first ? 1 : 0), 0);
+  const [even, odd] = [zerosFrom(0), zerosFrom(1)];
+  if (even + odd > 0) return Math.min(even, odd) === 0 && even + odd > head.length / 4;
   const strange = head.reduce((count, byte) => count + (byte < 9 || (byte > 13 && byte < 32) ? 1 : 0), 0);
   // A short text may hold a few; they are left out of what is read.
   return strange <= Math.max(3, head.length / 100);
