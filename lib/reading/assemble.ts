@@ -1,5 +1,6 @@
 import type { UnitKey } from '@/lib/domain/analytes';
 import { type Identity, remark, type SamplePart } from './candidate';
+import { basisDoubts } from './checks/basis';
 import { checkDocument } from './checks/document';
 import { plausibleDoubt } from './checks/plausible';
 import { checkSample } from './checks/sample';
@@ -183,6 +184,11 @@ function doubtAll(groups: readonly Group[]): ReadResult[][] {
       if (doubt !== null) raise(result, doubt);
     }
     checkSample(group.results, raise);
+    for (const [result, doubts] of basisDoubts(
+      group.identity.sampleId ?? group.identity.fieldName ?? null,
+      group.results,
+    ))
+      for (const doubt of doubts) raise(result, doubt);
   }
   checkDocument(
     groups.map((group) => group.results),

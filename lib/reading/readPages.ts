@@ -47,7 +47,7 @@ const PARTED = 0.95;
 
 const NO_TEXT = remark(
   'no-text-layer',
-  'This file holds only pictures of pages, which cannot be read yet. It is kept; type the numbers in beside the page.',
+  'This file holds only pictures, and no print could be made out in them. It is kept; type the numbers in beside the page.',
 );
 export const NO_RESULTS = remark(
   'no-results',

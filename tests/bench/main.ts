@@ -13,6 +13,7 @@ import { captureQueries, explainAll } from './hotQueries';
 import { line, median, ms, quantile, verdict } from './measure';
 import { fillMillion } from './million';
 import { benchReading } from './reading';
+import { benchForms, benchLayout } from './sets';
 import { benchUpload, pageTimes } from './web';
 
 const need = (name: string): string => {
@@ -87,7 +88,14 @@ async function main(): Promise<void> {
       { name: '6-page PDF', path: SIX_PAGES },
     ]);
   }
-  if (only === 'reading') return;
+  if (!only || only === 'reading' || only === 'forms') {
+    await benchLayout([
+      { name: '1-page.pdf', path: ONE_PAGE },
+      { name: '6-page.pdf', path: SIX_PAGES },
+    ]);
+    await benchForms();
+  }
+  if (only === 'reading' || only === 'forms') return;
   const { site, plotId, phs } = await smallGround();
   const web = { origin: need('APP_ORIGIN'), cookie: await cookieFor(site.people.owner) };
   await benchUpload(web, site.id, '1-page PDF', ONE_PAGE);

@@ -7,6 +7,7 @@ import { sniffReport } from '@/lib/services/reading/sniff';
 import { drawTable } from './drawTable';
 import { MAX_PAGES } from './limits';
 import { readPictureFile, readPicturesOfPdf, type Told } from './pictures';
+import { stagesOf } from './stages';
 
 function escapeText(text: string): string {
   return text.replace(/&/g, '&amp;').replace(/</g, '&lt;').replace(/>/g, '&gt;').replace(/"/g, '&quot;');
@@ -66,6 +67,17 @@ function drawPage(trace: Trace, number: number, reading: Reading): string {
       `<text x="${hit.x0.toFixed(1)}" y="${(hit.y0 - 1).toFixed(1)}" font-size="4" fill="#080">${hit.field}: ${escapeText(hit.value)}</text>`,
     );
   }
+  for (const edge of trace.edges.filter((one) => one.page === number)) {
+    shapes.push(
+      `<line x1="${edge.x.toFixed(1)}" x2="${edge.x.toFixed(1)}" y1="${edge.y0.toFixed(1)}" y2="${edge.y1.toFixed(1)}" stroke="#0a8" stroke-width="0.8" stroke-dasharray="4 3"><title>edge between parts</title></line>`,
+    );
+  }
+  for (const one of trace.notTaken.filter((other) => other.cell.phrase.page === page)) {
+    shapes.push(rect(one.cell.phrase, 'fill="#c60" fill-opacity="0.25"', `not a result (${one.role}): ${one.why}`));
+  }
+  for (const one of trace.proseRefused.filter((other) => other.line.line.page === page)) {
+    shapes.push(rect(one.word, 'fill="#c60" fill-opacity="0.25"', `not a result: ${one.why}`));
+  }
   const taken = reading.samples
     .flatMap((sample) => sample.results)
     .filter((result) => result.page === number && result.box !== null);
@@ -106,7 +118,7 @@ async function tracedFile(input: { bytes: Uint8Array; fileName: string }) {
   return { level: reading, trace };
 }
 
-/** Writes DIR/<file>.page-<n>.svg for each page of a PDF or picture, DIR/<file>.sheet-<n>.svg for each sheet of a data file. */
+/** Writes DIR/<file>.page-<n>.svg and .stages.json for each page of a PDF or picture, DIR/<file>.sheet-<n>.svg for each sheet of a data file. */
 export async function drawFile(input: { bytes: Uint8Array; fileName: string; directory: string }): Promise<void> {
   const sniffed = sniffReport(input);
   if (sniffed.ok && ['csv', 'xlsx', 'xls'].includes(sniffed.kind)) return drawTable(input);
@@ -116,6 +128,10 @@ export async function drawFile(input: { bytes: Uint8Array; fileName: string; dir
     await writeFile(
       join(input.directory, `${input.fileName}.page-${page.number}.svg`),
       drawPage(traced.trace, page.number, traced.level),
+    );
+    await writeFile(
+      join(input.directory, `${input.fileName}.page-${page.number}.stages.json`),
+      `${JSON.stringify(stagesOf(traced.trace, page.number, traced.level), null, 1)}\n`,
     );
   }
 }

@@ -103,7 +103,8 @@ export function fieldsInside(words: readonly string[]): Inside[] {
           ? /^\d/.test(rest)
           : colon || (field === 'labNumber' && /^([A-Z]{1,4} )?\S*\d{2,}/.test(rest));
       if (!sure) continue;
-      if (field === 'other' && at > 0 && starts.length === 0) break;
+      // "Top bed: sulfur" is no field in the middle of words; a number, a day or a depth may follow a name.
+      if (at > 0 && starts.length === 0 && (field === 'other' || field === 'sampleId' || field === 'fieldName')) break;
       starts.push({ field, from: at, to });
       at = to;
       break;

@@ -1,6 +1,5 @@
 import { type Label, readLabel, unitOnly } from '../labels/label';
 import type { CellLine, PageCell } from './cells';
-import { fieldOf } from './identity';
 import { type Role, roleOf } from './roles';
 
 /** One label with the cells that follow it on its line, up to the next label. */
