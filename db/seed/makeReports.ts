@@ -6,8 +6,8 @@ import { getReview } from '@/lib/data/review/getReview';
 import { setSameAs } from '@/lib/data/review/setSameAs';
 import { setSample } from '@/lib/data/review/setSample';
 import { MAX_PAGES } from '@/lib/jobs/readFile/limits';
+import { readPdfPages } from '@/lib/jobs/readFile/pictures';
 import { type ReadFile, readReportWith } from '@/lib/jobs/readReport/handler';
-import { readPages } from '@/lib/reading/readPages';
 import { readTable } from '@/lib/reading/readTable';
 import { refusedReading } from '@/lib/reading/types';
 import { wordsOfPdf } from '@/lib/services/pdf/words';
@@ -24,7 +24,8 @@ const readHere: ReadFile = async ({ bytes, fileName }) => {
   if (fileName.endsWith('.csv')) return readTable({ fileName, bytes });
   const words = await wordsOfPdf({ bytes, maxPages: MAX_PAGES });
   if (!words.ok) return refusedReading({ file: fileName, pages: words.pages, error: refusal(words.reason) });
-  return readPages({ fileName, pages: words.pages });
+  const quiet = { page: () => undefined, scans: () => undefined };
+  return readPdfPages({ fileName, bytes, pages: words.pages }, quiet);
 };
 const read = readReportWith(readHere);
 

@@ -8,7 +8,7 @@ const SENTENCES = {
   'too-large':
     'This file is larger than Loamline reads: 20 MB for a PDF or picture, 5 MB for a data file. It was not opened; cut it into smaller files, or type the numbers in.',
   'kept-not-read':
-    'Pictures and spreadsheets of this kind cannot be read yet. The file is kept; type the numbers in beside the page.',
+    'Files of this kind cannot be read yet. The file is kept; type the numbers in beside the page.',
   encrypted:
     'This PDF is locked with a password. It is kept; save a copy without the password and upload that, or type the numbers in.',
   truncated:
