@@ -36,6 +36,20 @@ function byCells(fileName: string, text: string): Reading | null {
   return isDelimited(text) ? readTable({ fileName, text }) : null;
 }
 
+/** Lines parted by tabs in the midst of a letter: the letter's own lines are left empty, so that places stay true. */
+function byTabs(fileName: string, text: string): Reading | null {
+  const rows = text.split(/\r\n?|\n/);
+  const tabbed = rows.filter((row) => (row.match(/\t/g)?.length ?? 0) >= 2);
+  if (tabbed.length < 2 || isDelimited(text)) return null;
+  const kept = rows.map((row) =>
+    (row.match(/\t/g)?.length ?? 0) >= 2 ? row.split('\t').map((cell) => cell.trim()) : [''],
+  );
+  const around = rows.filter((row) => (row.match(/\t/g)?.length ?? 0) < 2).join('\n');
+  const reading = readTable({ fileName, sheets: [{ number: 1, name: null, grid: kept, merges: [] }] });
+  const other = readTable({ fileName, text: around });
+  return { ...reading, lab: reading.lab.name === null ? other.lab : reading.lab };
+}
+
 function byColumns(fileName: string, lines: ReturnType<typeof linesOfText>): Reading {
   const aligned = alignedGrid(lines);
   const reading = readTable({ fileName, sheets: [{ number: 1, name: null, grid: aligned.grid, merges: [] }] });
@@ -75,9 +89,12 @@ export function readPasted(input: { fileName: string } & ({ text: string } | { b
   const lines = linesOfText(decoded.text);
   if (lines.length > MAX_LINES || lines.some((line) => line.text.length > LONGEST_LINE))
     return refusedReading({ file, pages: 0, error: TOO_LONG });
-  const ways = [byCells(file, decoded.text), byColumns(file, lines), byWords(file, lines)].filter(
-    (one) => one !== null,
-  );
+  const ways = [
+    byCells(file, decoded.text),
+    byTabs(file, decoded.text),
+    byColumns(file, lines),
+    byWords(file, lines),
+  ].filter((one) => one !== null);
   const [first, ...others] = ways;
   if (first === undefined) return refusedReading({ file, pages: 0, error: EMPTY });
   return others.reduce((best, one) => (weight(one) > weight(best) + 0.01 ? one : best), first);

@@ -66,7 +66,10 @@ function partAt(line: CellLine | undefined, cell: PageCell, end: number): PageCe
   const busy = line.cells.some(
     (one) => NUMBERLIKE.has(one.meaning.kind) && one.phrase.x0 > part.phrase.x0 && one.phrase.x0 < end,
   );
-  return busy ? null : part;
+  // "Organic matter: 4.3 %" under "Buffer pH: 6.84" is a row of its own, however far left the number begins.
+  const next = line.cells[line.cells.indexOf(part) + 1];
+  const own = part.phrase.text.endsWith(':') && next !== undefined && NUMBERLIKE.has(next.meaning.kind);
+  return busy || own ? null : part;
 }
 
 type Wrap = { label: Label; lines: CellLine[]; x1: number; tail: string };

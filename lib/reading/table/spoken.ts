@@ -66,6 +66,13 @@ const inWords = remembered((text: string): string => {
   let words = text
     .replace(/_(\d)_(\d)\b/g, ' $1:$2')
     .replace(/_/g, ' ')
+    .replace(
+      /^(?:pct|prct|perc)[ _]?(k|ca|mg|na|h)$/i,
+      (_all, name: string) => `${SYMBOLS[name.toLowerCase()] ?? name} saturation %`,
+    )
+    .replace(/^p([12])$/, 'Bray P$1')
+    .replace(/\bsol(?:uble)?[ _.]?salts?\b/gi, 'Soluble salts')
+    .replace(/\bhot[ _]?water\b/gi, 'hot water')
     .replace(/(\d) ?to ?(\d)/gi, '$1:$2')
     .replace(/\b(\d) *[:/] *(\d(?:\.\d)?)\b/g, '$1:$2')
     .replace(/\b(p)h\b/gi, 'pH')
