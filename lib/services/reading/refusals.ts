@@ -7,8 +7,7 @@ const SENTENCES = {
     'Loamline reads PDF files, pictures, data files (CSV, XLSX, XLS), plain text and the open laboratory formats (XML, JSON). Save the report as one of these, or type the numbers in.',
   'too-large':
     'This file is larger than Loamline reads: 20 MB for a PDF or picture, 5 MB for a data file. It was not opened; cut it into smaller files, or type the numbers in.',
-  'kept-not-read':
-    'Files of this kind cannot be read yet. The file is kept; type the numbers in beside the page.',
+  'kept-not-read': 'Files of this kind cannot be read yet. The file is kept; type the numbers in beside the page.',
   encrypted:
     'This PDF is locked with a password. It is kept; save a copy without the password and upload that, or type the numbers in.',
   truncated:
