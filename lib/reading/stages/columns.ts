@@ -25,6 +25,7 @@ type Span = { x0: number; x1: number };
 /** `head` is where the column's own headings stand; numbers are often set to one side under them. */
 type Stack = Span & { own: string[]; captions: string[]; over: boolean; head: Span | null };
 type Caption = {
+  x0: number;
   text: string;
   middle: number;
   first: number;
@@ -124,7 +125,7 @@ function captionOf(
   for (const [index, stack] of stacks.entries())
     if (line.some((other) => other !== phrase && overlap(other, stack) > 0)) blocked.add(index);
   const title = line.length === 1 && saysForSeveral(phrase.text);
-  return { text: phrase.text, middle: (phrase.x0 + phrase.x1) / 2, first, last, blocked, title };
+  return { x0: phrase.x0, text: phrase.text, middle: (phrase.x0 + phrase.x1) / 2, first, last, blocked, title };
 }
 
 function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], captions: Caption[]) {
@@ -199,6 +200,25 @@ function takesCaption(stack: Stack | undefined, caption: string): boolean {
     return label.unit === null && CHARGED.has(label.analyte);
   if (unit !== undefined) return label.unit === null && analyte(label.analyte).unit === 'mg/kg';
   return label.method === null && methodIn(label.analyte, caption) !== null;
+}
+
+/** True when most headings begin where their columns begin: captions then begin at their first column. */
+function setLeft(stacks: readonly Stack[]): boolean {
+  const headed = stacks.flatMap((stack) => (stack.head === null ? [] : [{ head: stack.head, stack }]));
+  const left = headed.filter(({ head, stack }) => Math.abs(head.x0 - stack.x0) < 1.5).length;
+  const middle = headed.filter(({ head, stack }) => Math.abs(head.x0 + head.x1 - stack.x0 - stack.x1) < 3).length;
+  return headed.length >= 4 && left >= 0.7 * headed.length && left > middle;
+}
+
+/** A caption at the left of its group: from the column where it begins to the next caption. */
+function fromLeft(caption: Caption, stacks: readonly Stack[]): Caption {
+  const first = stacks.findIndex((stack) => Math.abs(stack.x0 - caption.x0) < 3);
+  if (first < 0 || caption.title) return caption;
+  let last = Math.max(first, caption.last);
+  while (!caption.blocked.has(last + 1) && takesCaption(stacks[last + 1], caption.text)) last += 1;
+  const whole = stacks.slice(first, last + 1);
+  const [from, to] = [whole[0], whole[whole.length - 1]];
+  return { ...caption, first, last, middle: ((from?.x0 ?? 0) + (to?.x1 ?? 0)) / 2 };
 }
 
 /** Distance of a caption from the middle of some columns, in columns. */
@@ -362,7 +382,8 @@ export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]
     const grouped = overGroups(phrases, stacks);
     for (const phrase of phrases) if (!grouped.has(phrase)) place(phrase, phrases, stacks, captions);
   }
-  for (const caption of captions.reverse()) spreadCaption(caption, stacks);
+  const left = setLeft(stacks);
+  for (const caption of captions.reverse()) spreadCaption(left ? fromLeft(caption, stacks) : caption, stacks);
   // "Main nutrients, lb/acre (Mehlich 3)" over the names speaks for every column.
   const [names, ...others] = stacks;
   const title = names?.own.join(' ') ?? '';

@@ -11,10 +11,9 @@ export function repeatedGroups<T>(columns: readonly T[], words: (column: T) => s
     if (last === undefined || last.some((other) => other.text === one.text)) groups.push([one]);
     else last.push(one);
   }
-  const [first] = groups;
-  const again = groups
-    .slice(1)
-    .every((group) => group.every(({ text }) => first?.some((other) => other.text === text)));
-  const wide = groups.some((group) => group.length >= 2);
+  // A column without a partner (one unit only) may stand before, between or after the groups.
+  const model = [...groups].sort((a, b) => b.length - a.length)[0];
+  const again = groups.every((group) => group.every(({ text }) => model?.some((other) => other.text === text)));
+  const wide = groups.filter((group) => group.length >= 2).length >= 2;
   return groups.length >= 2 && again && wide ? groups.map((group) => group.map(({ column }) => column)) : [];
 }

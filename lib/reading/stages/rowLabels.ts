@@ -123,7 +123,14 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
         .replace(/(\p{L})- (\p{Ll})/gu, '$1-$2');
       const label = readOwn(text) ?? readOwn(text.replace(/(\p{Ll})-(\p{Ll})/gu, '$1$2'));
       if (label === null) continue;
-      if (own !== null && label.analyte !== own.analyte && !fuller(own, label)) continue;
+      const inSalt =
+        own?.analyte === 'soil_ph_water' &&
+        up === 0 &&
+        /^(soil_ph_salt|buffer_ph)$/.test(label.analyte) &&
+        below
+          .slice(0, down)
+          .every((one) => /^\p{Ll}/u.test(one.cell.phrase.text) && readOwn(one.cell.phrase.text) === null);
+      if (own !== null && label.analyte !== own.analyte && !inSalt && !fuller(own, label)) continue;
       // A neighbour that reads as an analyte of its own is another row's label, unless only together they have a meaning.
       const foreign = parts.some((one) => {
         const alone = readOwn(one.cell.phrase.text);
@@ -133,9 +140,16 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
       const tells = (label.unit !== null ? 0.4 : 0) + (label.method !== null ? 0.4 : 0);
       const top = up > 0 ? readOwn(above[up - 1]?.cell.phrase.text ?? '') : null;
       // The name stands in the first line; a line that begins small goes on from the one before it.
-      const headed =
-        own === null || /^[\p{Ll}(]/u.test(cell.phrase.text) ? (top?.analyte === label.analyte ? 1 : 0) : 0;
-      const rank = headed + 10 * label.strength + tells - 0.15 * (up + down) - 0.05 * down - (foreign ? 0.5 : 0);
+      const headed = inSalt
+        ? 1
+        : own === null || /^[\p{Ll}(]/u.test(cell.phrase.text)
+          ? top?.analyte === label.analyte
+            ? 1
+            : 0
+          : 0;
+      // What begins small is the end of another name, not the beginning of one.
+      const cut = /^\p{Ll}/u.test(text) && !/^(pH|p[HK])/.test(text) ? 0.9 : 0;
+      const rank = headed - cut + 10 * label.strength + tells - 0.15 * (up + down) - 0.05 * down - (foreign ? 0.5 : 0);
       const ownTells = own === null ? 0 : (own.unit !== null ? 0.4 : 0) + (own.method !== null ? 0.4 : 0);
       const current = best === null ? -1 : best.lines.length === 0 ? best.rank + ownTells : best.rank;
       if (rank > current)
