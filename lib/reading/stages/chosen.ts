@@ -205,7 +205,9 @@ export function choose(found: readonly Found[], run: Run): Choice {
       if (identity === null) not.push({ cell: one.cell, role: 'several', why: 'no sample stands over it' });
       return identity === null ? [] : [{ one, identity }];
     });
-    return { taken, not, doubts: [], position: 0.98 };
+    // Two numbers of one sample in a row are two units: which is which rests on the headings alone.
+    const twice = new Set(taken.map(({ identity }) => identity.sampleId ?? identity.labNumber)).size < taken.length;
+    return { taken, not, doubts: [], position: twice ? 0.94 : 0.98 };
   }
   const alone = (list: readonly Found[]) => list.map((one) => ({ one, identity: null }));
   const named = free.filter((one) => one.column?.role === 'result');
@@ -224,7 +226,7 @@ export function choose(found: readonly Found[], run: Run): Choice {
   if (open.length <= 1) return { taken: alone(open), not, doubts: [], position: named.length === 1 ? 1 : 0.99 };
   const units = open.map((one) => one.unit);
   if (units.every((unit) => unit !== null) && new Set(units).size === units.length)
-    return { taken: alone(open), not, doubts: [], position: 0.97 };
+    return { taken: alone(open), not, doubts: [], position: 0.94 };
   for (const one of open.slice(1))
     not.push({ cell: one.cell, role: 'several', why: 'no heading says which number is the result' });
   const doubt = remark(

@@ -23,6 +23,24 @@ function ratingFor(row: CellLine, cell: PageCell, columns: readonly Column[]): s
   return between ? null : next.meaning.rating;
 }
 
+/** Confidence where some columns of numbers have no meaning: the headings may be a column off. */
+const UNEXPLAINED = 0.95;
+
+/** Two or more columns of numbers, and a seventh of all, whose headings say nothing. */
+function unexplained(table: Table): boolean {
+  const silent = table.columns.filter(
+    (column) =>
+      column.label === null &&
+      column.field === null &&
+      column.role === null &&
+      table.rows.filter((row) =>
+        row.cells.some((cell) => cell.meaning.kind === 'value' && columnAt(table.columns, cell) === column),
+      ).length >=
+        0.5 * table.rows.length,
+  );
+  return silent.length >= 2 && silent.length >= table.columns.length / 7;
+}
+
 /** "lb/A" or "ppm" at the head of a row is the unit of its numbers. */
 function rowUnit(row: CellLine, table: Table): ReturnType<typeof unitOnly> {
   const [first] = row.cells;
@@ -55,7 +73,7 @@ function candidateOf(
     page: row.line.page.number,
     box: storedBox(row.line.page, numberBox(cell.phrase, value.span)),
     cell: null,
-    position: column.position * (table.borrowed ? 0.95 : 1),
+    position: column.position * (table.borrowed ? 0.95 : 1) * (unexplained(table) ? UNEXPLAINED : 1),
     doubts: table.borrowed
       ? [remark('header-on-page-before', 'The headings of this column stand on the page before.')]
       : [],
