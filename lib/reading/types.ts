@@ -87,7 +87,7 @@ export type Reading = {
 };
 
 /** Raised each time the reader changes in a way that can change its answer. */
-export const READER_VERSION = '1';
+export const READER_VERSION = '2';
 
 /** A reading that took nothing, with the reason. */
 export function refusedReading(input: { file: string; pages: number; error: Remark }): Reading {

@@ -243,7 +243,7 @@ function besideBrackets(raw: string): { analyte: AnalyteKey; strength: number; a
 
 /** A target range inside a label ("Phosphorus (25-50 ppm)") is no part of the name. */
 const RANGE_IN_LABEL =
-  /\(\s*(?:[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*|(?:<|>|≤|≥|less than|more than|up to|below|above|under|over|at least|at most)\s*\d[\d.,]*)[^)]*\)/gi;
+  /\(\s*(?:(?:we )?(?:want|wanted|target|ideal|optimum|aim|normal|usual|range|desired|goal)s?:?\s*)?(?:[<>]?\d[\d.,]*\s*(?:-|–|to)\s*\d[\d.,]*|(?:<|>|≤|≥|less than|more than|up to|below|above|under|over|at least|at most)\s*\d[\d.,]*)[^)]*\)/gi;
 
 /** "7. Soil pH": the number of a form's box. */
 const NUMBERED = /^\s*\(?\d{1,2}[.)]\s+(?=\p{L})/u;
@@ -266,7 +266,7 @@ const nameIn = remembered(
     const same = twoNames(withoutUnit) ?? twoNames(withoutMethod) ?? sameInAllParts(raw);
     if (same !== null) return { analyte: same, strength: 0.97, ambiguous: null };
     const share =
-      /^(?:share|portion|part|percent(?:age)?|saturation)\b.*\b(?:with|by|of|:)\s+(calcium|magnesium|potassium|sodium|hydrogen|bases)$/.exec(
+      /^(?:share|portion|part|percent(?:age)?|saturation)\b.*\b(?:with|by|of|:)\s+(calcium|magnesium|potassium|sodium|hydrogen|bases)(?: (?:in|on|at|of) (?:the )?(?:cation )?(?:exchange (?:capacity|complex)|cec))?$/.exec(
         withoutUnit,
       );
     const held =

@@ -96,7 +96,10 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
   const meant = parts.every(
     (part) => readLabel(part.text) !== null || unitOnly(part.text) !== null || fieldOf(part.text) !== null,
   );
-  return meant ? parts : [phrase];
+  // "Depth water": a field's heading beside a word that only a caption explains.
+  const beside =
+    parts.length === 2 && parts.some((part) => fieldOf(part.text) !== null) && fieldOf(phrase.text) === null;
+  return meant || beside ? parts : [phrase];
 }
 
 function widened(span: Span | null, by: Span): Span {

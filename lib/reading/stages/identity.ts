@@ -304,12 +304,24 @@ export function identityHits(lines: readonly CellLine[], taken: ReadonlySet<Cell
       if (value !== null && fits(field, value)) hits.push({ field, value, ...place });
     }
   }
+  const sized = withoutSizes(hits);
+  hits.splice(0, hits.length, ...sized);
   const told = toldBefore(lines, taken);
   if (told.length > 0) {
     const codes = new Set(told.map((one) => one.value));
     return [...hits.filter((hit) => !codes.has(hit.value)), ...told];
   }
   return [...hits, ...namesBeside(lines, hits)];
+}
+
+/** "Area sampled: 5,500 sq ft" is a size and no name. */
+function withoutSizes(hits: readonly IdentityHit[]): IdentityHit[] {
+  return hits.map((hit) =>
+    hit.field === 'sampleId' &&
+    /^[\d.,]+ ?(sq\.? ?(ft|feet|m|yd)|square|acres?|ac|ha|m2|m²|hectares?)\b/i.test(hit.value)
+      ? { ...hit, field: 'other' }
+      : hit,
+  );
 }
 
 /** Hits that belong together, first one of each field kept. */

@@ -17,6 +17,9 @@ export type ListRow = {
   readonly identity: Identity | null;
 };
 
+/** Units in which one amount is said twice; a unit of any other kind in a label is the row's own. */
+const AMOUNTS: ReadonlySet<string> = new Set(['mg/kg', 'lb/acre', 'kg/ha', 'mg/L', 'mg/dm3', 'mg/100g']);
+
 /** Columns of one amount in several units: there the heading of the column decides, not the label. */
 function severalUnits(run: Run): boolean {
   return new Set(run.columns.flatMap((column) => column.unit?.unit ?? [])).size > 1;
@@ -41,7 +44,13 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly Cel
   }
   const choice = choose(found, run);
   not.push(...choice.not);
-  const label = underSection(segment, run);
+  const plain = underSection(segment, run);
+  // "pH value | 0.01 M CaCl2": the column of methods says which pH it is.
+  const salt =
+    plain.analyte === 'soil_ph_water' && /cacl ?2|calcium chloride|\bkcl\b/i.test(words)
+      ? (readLabel(`pH ${words.trim()}`) ?? readLabel(/kcl/i.test(words) ? 'pH KCl' : 'pH CaCl2'))
+      : null;
+  const label = salt?.analyte === 'soil_ph_salt' ? { ...salt, text: plain.text } : plain;
   const wrappedWords = segment.wrapped.flatMap((line) => line.cells.map((cell) => cell.phrase.text)).join(' ');
   const method = label.method === null ? methodInAny(label.analyte, `${words} ${wrappedWords} ${segment.tail}`) : null;
   return choice.taken.map(({ one, identity }): ListRow => {
@@ -61,7 +70,7 @@ function rowsOf(segment: Segment, run: Run, not: NotTaken[], lines: readonly Cel
         value: one.value,
         rating: one.rating,
         unit:
-          one.unitFrom === 'heading' && label.unit !== null && !severalUnits(run)
+          one.unitFrom === 'heading' && label.unit !== null && (!severalUnits(run) || !AMOUNTS.has(label.unit))
             ? label.unit
             : (one.unit ?? label.unit),
         unitPrinted: one.unit === null ? label.unitPrinted : one.unitPrinted,
