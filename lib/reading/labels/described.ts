@@ -35,6 +35,7 @@ const SYMBOLS: Readonly<Record<string, string>> = {
   cu: 'copper',
   al: 'aluminum',
   h: 'hydrogen',
+  t: 'exchange capacity',
   ph: 'soil acidity',
 };
 

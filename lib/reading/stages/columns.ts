@@ -1,12 +1,23 @@
-import { analyte } from '@/lib/domain/analytes';
 import type { IdentityField } from '../candidate';
-import { onlyDescribes } from '../labels/described';
-import { type Label, methodIn, readLabel, unitIn, unitOnly } from '../labels/label';
-import { type CellLine, isUnitOf, type PageCell } from './cells';
+import { type Label, readLabel, unitIn, unitOnly } from '../labels/label';
+import {
+  type Caption,
+  captionOf,
+  fromLeft,
+  isTitle,
+  namedByCaption,
+  overGroups,
+  saysAll,
+  saysForSeveral,
+  setLeft,
+  spreadCaption,
+  takesCaption,
+} from './captions';
+import type { CellLine, PageCell } from './cells';
 import { fieldOf } from './identity';
 import { type Phrase, phraseOf } from './lines';
-import { repeatedGroups } from './repeated';
 import { type Role, roleOf } from './roles';
+import { overlap, type Span, type Stack, spansOf } from './spans';
 
 export type Column = {
   readonly x0: number;
@@ -21,61 +32,8 @@ export type Column = {
   readonly unexplained: number;
 };
 
-type Span = { x0: number; x1: number };
-/** `head` is where the column's own headings stand; numbers are often set to one side under them. */
-type Stack = Span & { own: string[]; captions: string[]; over: boolean; head: Span | null };
-type Caption = {
-  x0: number;
-  text: string;
-  middle: number;
-  first: number;
-  last: number;
-  blocked: ReadonlySet<number>;
-  title: boolean;
-};
-
-/** Share of the narrower of two spans by which they must overlap to be one column. */
-const SAME_COLUMN = 0.2;
 /** A heading may stand this many type sizes beside its numbers. */
 const REACH = 3;
-
-function overlap(a: Span, b: Span): number {
-  return Math.min(a.x1, b.x1) - Math.max(a.x0, b.x0);
-}
-
-/** The words of a row headed "Mean of all customers" may run over the columns of names and numbers. */
-function liesOverSeveral(cell: PageCell, rows: readonly CellLine[]): boolean {
-  if (cell.meaning.kind !== 'text' || cell.phrase.words.length < 2) return false;
-  const covered = rows.filter(
-    (row) =>
-      row.line !== undefined &&
-      row.cells.filter(
-        (other) => other !== cell && overlap(other.phrase, cell.phrase) > 0.5 * (other.phrase.x1 - other.phrase.x0),
-      ).length >= 2,
-  );
-  return covered.length >= 2;
-}
-
-/** Columns from the numbers and names of the data rows: cells that stand over one another; units of a list have columns of their own. */
-export function spansOf(rows: readonly CellLine[], withUnits = false): Span[] {
-  const cells = rows
-    .flatMap((row) => row.cells.filter((cell, index) => withUnits || !isUnitOf(row.cells[index - 1], cell)))
-    .filter((cell) => cell.meaning.kind !== 'rating' && !liesOverSeveral(cell, rows))
-    .map((cell) => ({ x0: cell.phrase.x0, x1: cell.phrase.x1 }))
-    .sort((a, b) => a.x0 - b.x0);
-  const spans: Span[] = [];
-  for (const cell of cells) {
-    const home = spans.find(
-      (span) => overlap(span, cell) > SAME_COLUMN * Math.min(span.x1 - span.x0, cell.x1 - cell.x0),
-    );
-    if (home === undefined) spans.push({ ...cell });
-    else {
-      home.x0 = Math.min(home.x0, cell.x0);
-      home.x1 = Math.max(home.x1, cell.x1);
-    }
-  }
-  return spans.sort((a, b) => a.x0 - b.x0);
-}
 
 /** A heading set so tight that two headings became one phrase is parted when each word has a column and a meaning. */
 function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
@@ -104,31 +62,6 @@ function partHeading(phrase: Phrase, spans: readonly Span[]): Phrase[] {
 
 function widened(span: Span | null, by: Span): Span {
   return span === null ? { x0: by.x0, x1: by.x1 } : { x0: Math.min(span.x0, by.x0), x1: Math.max(span.x1, by.x1) };
-}
-
-/** A unit or an extractant above names may be a caption over more columns than the one it stands over. */
-function saysForSeveral(text: string): boolean {
-  return (
-    unitOnly(text) !== null ||
-    (readLabel(text) === null &&
-      fieldOf(text) === null &&
-      /extract|saturation|exchangeable|acetate|dtpa|mehlich|olsen|morgan|bicarb/i.test(text))
-  );
-}
-
-/** Columns under other phrases of the caption's line are not its own. */
-function captionOf(
-  phrase: Phrase,
-  line: readonly Phrase[],
-  stacks: readonly Stack[],
-  first: number,
-  last: number,
-): Caption {
-  const blocked = new Set<number>();
-  for (const [index, stack] of stacks.entries())
-    if (line.some((other) => other !== phrase && overlap(other, stack) > 0)) blocked.add(index);
-  const title = line.length === 1 && saysForSeveral(phrase.text);
-  return { x0: phrase.x0, text: phrase.text, middle: (phrase.x0 + phrase.x1) / 2, first, last, blocked, title };
 }
 
 function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], captions: Caption[]) {
@@ -178,86 +111,6 @@ function place(phrase: Phrase, line: readonly Phrase[], stacks: Stack[], caption
   if (near === undefined) return;
   near.own.unshift(phrase.text);
   near.head = widened(near.head, phrase);
-}
-
-const CHARGED = new Set(['potassium', 'calcium', 'magnesium', 'sodium', 'exchangeable_acidity', 'aluminium']);
-
-/** "Phosphorus" over "M3" and "Bray 1": the caption is the name, the column's own words are its method or unit. */
-function namedByCaption(own: string, caption: string): Label | null {
-  const name = readLabel(caption);
-  if (own === '' || name === null || name.strength < 0.93) return null;
-  // "Found | Desired" under each name: the caption is the name, the column's own words its role.
-  if (roleOf(own, false) !== null && roleOf(own, false) !== 'rating') return readLabel(caption);
-  if (roleOf(own, false) !== null) return null;
-  const joined = readLabel(`${caption} ${own}`) ?? (onlyDescribes(own) ? readLabel(caption, [own]) : null);
-  return joined === null ? null : { ...joined, strength: Math.min(joined.strength, 0.94) };
-}
-
-/** Whether a caption has something to say to a column that it does not yet know. */
-function takesCaption(stack: Stack | undefined, caption: string): boolean {
-  if (stack === undefined || stack.captions.length > 0) return false;
-  const label = readLabel(stack.own.join(' '));
-  if (label === null) return namedByCaption(stack.own.join(' '), caption) !== null;
-  const unit = unitIn(caption)?.unit;
-  if (unit === 'meq/100g' || unit === '%' || /saturation/i.test(caption))
-    return label.unit === null && CHARGED.has(label.analyte);
-  if (unit !== undefined) return label.unit === null && analyte(label.analyte).unit === 'mg/kg';
-  return label.method === null && methodIn(label.analyte, caption) !== null;
-}
-
-/** True when most headings begin where their columns begin: captions then begin at their first column. */
-function setLeft(stacks: readonly Stack[]): boolean {
-  const headed = stacks.flatMap((stack) => (stack.head === null ? [] : [{ head: stack.head, stack }]));
-  const left = headed.filter(({ head, stack }) => Math.abs(head.x0 - stack.x0) < 1.5).length;
-  const middle = headed.filter(({ head, stack }) => Math.abs(head.x0 + head.x1 - stack.x0 - stack.x1) < 3).length;
-  return headed.length >= 4 && left >= 0.7 * headed.length && left > middle;
-}
-
-/** A caption at the left of its group: from the column where it begins to the next caption. */
-function fromLeft(caption: Caption, stacks: readonly Stack[]): Caption {
-  const first = stacks.findIndex((stack) => Math.abs(stack.x0 - caption.x0) < 3);
-  if (first < 0 || caption.title) return caption;
-  let last = Math.max(first, caption.last);
-  while (!caption.blocked.has(last + 1) && takesCaption(stacks[last + 1], caption.text)) last += 1;
-  const whole = stacks.slice(first, last + 1);
-  const [from, to] = [whole[0], whole[whole.length - 1]];
-  return { ...caption, first, last, middle: ((from?.x0 ?? 0) + (to?.x1 ?? 0)) / 2 };
-}
-
-/** Distance of a caption from the middle of some columns, in columns. */
-function offCentre(left: Span, right: Span, count: number, caption: Caption): number {
-  return (Math.abs((left.x0 + right.x1) / 2 - caption.middle) * count) / (right.x1 - left.x0 || 1);
-}
-
-/** How far off its middle a caption may be, in columns, for one more column under it. */
-const WIDER = 0.12;
-
-/** A caption is centred over its group: the widest run of columns that can take it and has it in the middle. */
-function spreadCaption(caption: Caption, stacks: readonly Stack[]) {
-  if (caption.title && caption.last - caption.first + 1 === stacks.length) {
-    for (const stack of stacks) stack.captions.push(caption.text);
-    return;
-  }
-  let [low, high] = [caption.first, caption.last];
-  while (!caption.blocked.has(low - 1) && takesCaption(stacks[low - 1], caption.text)) low -= 1;
-  while (!caption.blocked.has(high + 1) && takesCaption(stacks[high + 1], caption.text)) high += 1;
-  let best = { first: caption.first, last: caption.last, cost: Number.POSITIVE_INFINITY };
-  for (let first = low; first <= caption.first; first++) {
-    for (let last = caption.last; last <= high; last++) {
-      const [left, right] = [stacks[first], stacks[last]];
-      if (left === undefined || right === undefined) continue;
-      const off = caption.title
-        ? 0
-        : Math.min(
-            offCentre(left, right, last - first + 1, caption),
-            offCentre(left.head ?? left, right.head ?? right, last - first + 1, caption),
-          );
-      const cost = off - WIDER * (last - first + 1);
-      if ((off < 0.75 || last - first === caption.last - caption.first) && cost < best.cost)
-        best = { first, last, cost };
-    }
-  }
-  for (const stack of stacks.slice(best.first, best.last + 1)) stack.captions.push(caption.text);
 }
 
 const ADVICE_UNITS = new Set([
@@ -329,45 +182,32 @@ function meaningOf(stack: Stack, first: boolean): Column {
   };
 }
 
-/** "Found, in pounds per acre          Mehlich 3": one or two phrases over a whole table, the first at its left edge. */
-function isTitle(phrases: readonly Phrase[], stacks: readonly Stack[]): boolean {
-  const [first] = phrases;
-  const [left] = stacks;
-  if (first === undefined || left === undefined || phrases.length > 2 || stacks.length < 4) return false;
-  if (first.x0 > left.x0 + first.size || first.words.length < 2) return false;
-  const numeric = stacks.slice(1).filter((stack) => overlap(stack, first) > 0);
-  return (
-    numeric.length <= 1 &&
-    phrases.every((phrase) => readLabel(phrase.text) === null && fieldOf(phrase.text) === null) &&
-    phrases.some((phrase) => saysAll(phrase.text))
-  );
+/**
+ * A column whose own words are only a method or a unit ("CaCl2", "lb/A") takes the nearest name above it that makes a
+ * meaning with them and that no column between them says otherwise.
+ */
+function nameBare(stacks: readonly Stack[], header: readonly CellLine[]) {
+  const names = header
+    .flatMap((line) => line.cells)
+    .filter((cell) => (readLabel(cell.phrase.text)?.strength ?? 0) >= 0.93);
+  const steps = stacks.slice(1).map((stack, index) => middle(stack) - middle(stacks[index] ?? stack));
+  const pitch = [...steps].sort((a, b) => a - b)[Math.floor(steps.length / 2)] ?? 0;
+  for (const [index, stack] of stacks.entries()) {
+    const column = meaningOf(stack, index === 0);
+    const own = stack.own.join(' ');
+    if (own === '' || column.label !== null || column.field !== null || column.role !== null) continue;
+    const near = names
+      .filter(
+        (cell) => Math.abs(middle(cell.phrase) - middle(stack)) < 1.8 * pitch && !stack.own.includes(cell.phrase.text),
+      )
+      .sort((a, b) => Math.abs(middle(a.phrase) - middle(stack)) - Math.abs(middle(b.phrase) - middle(stack)))
+      .find((cell) => namedByCaption(own, cell.phrase.text) !== null);
+    if (near !== undefined) stack.captions.push(near.phrase.text);
+  }
 }
 
-/** A heading over the names of a table that gives a unit or a method and is no field or analyte itself. */
-function saysAll(text: string): boolean {
-  return (
-    text.length > 6 &&
-    fieldOf(text) === null &&
-    readLabel(text) === null &&
-    (unitIn(text) !== null || /mehlich|morgan|olsen|bray|dtpa|acetate|saturation/i.test(text))
-  );
-}
-
-/** Captions over groups of columns that repeat one another, one caption a group; the phrases that were given away. */
-function overGroups(phrases: readonly Phrase[], stacks: readonly Stack[]): ReadonlySet<Phrase> {
-  const groups = repeatedGroups(stacks, (stack) => stack.own.join(' '));
-  const none = new Set<Phrase>();
-  if (groups.length === 0) return none;
-  const homes = groups.map((group) => {
-    const span = { x0: Math.min(...group.map((one) => one.x0)), x1: Math.max(...group.map((one) => one.x1)) };
-    return { group, over: group.length < 2 ? [] : phrases.filter((phrase) => overlap(span, phrase) > 0) };
-  });
-  if (homes.some(({ over }) => over.length > 1) || homes.filter(({ over }) => over.length === 1).length < 2)
-    return none;
-  if (new Set(homes.flatMap(({ over }) => over)).size < homes.flatMap(({ over }) => over).length) return none;
-  for (const { group, over } of homes)
-    for (const stack of group) for (const phrase of over) stack.captions.push(phrase.text);
-  return new Set(homes.flatMap(({ over }) => over));
+function middle(span: Span): number {
+  return (span.x0 + span.x1) / 2;
 }
 
 /** Stage 5. Columns with the meaning of their stacked headings; captions that stretch over several are given to each. */
@@ -392,6 +232,7 @@ export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]
   const title = names?.own.join(' ') ?? '';
   if (names !== undefined && saysAll(title))
     for (const stack of others) if (takesCaption(stack, title)) stack.captions.push(title);
+  nameBare(stacks, header);
   return stacks.map((stack, index) => meaningOf(stack, index === 0));
 }
 

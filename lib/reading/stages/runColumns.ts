@@ -2,13 +2,13 @@ import type { UnitKey } from '@/lib/domain/analytes';
 import type { Identity, IdentityField } from '../candidate';
 import { readLabel, unitIn, unitOnly } from '../labels/label';
 import type { CellLine, PageCell } from './cells';
-import { spansOf } from './columns';
 import { ANY_DATE } from './dates';
 import { fieldOf, fieldWithValue } from './identity';
 import { type Phrase, phraseOf } from './lines';
 import { repeatedGroups } from './repeated';
 import { type Role, roleOf } from './roles';
 import type { Segment } from './rowLabels';
+import { spansOf } from './spans';
 import { ratingIn } from './values';
 
 /** A column of numbers beside analytes that stand down the side, with everything its headings say. */

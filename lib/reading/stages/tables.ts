@@ -1,9 +1,10 @@
 import { readLabel, unitOnly } from '../labels/label';
 import { withAdvice } from './advised';
 import type { CellLine, PageCell } from './cells';
-import { type Column, columnsOf, headerScore, spansOf } from './columns';
+import { type Column, columnsOf, headerScore } from './columns';
 import { fieldsInside, fieldWithValue } from './identity';
 import { roleOf } from './roles';
+import { spansOf } from './spans';
 
 export type Table = {
   readonly header: readonly CellLine[];
