@@ -4,7 +4,7 @@ const ENTRY =
   /(?:^|[\s,;(.])([A-Z][A-Za-z/%]{0,5}(?:-[A-Z])?)\s?(?:=|stands for|is short for)\s?([A-Za-z][A-Za-z -]{3,48})/g;
 
 /**
- * Abbreviations that the document itself explains ("HM = humic matter; Ac = exchangeable acidity"), as a map from the
+ * Abbreviations that the document itself explains ("ZX = humic matter; Qa = exchangeable acidity"), as a map from the
  * abbreviation to the words. Only those that say an analyte and that the reader does not know by themselves.
  */
 export function legendOf(texts: readonly string[]): ReadonlyMap<string, string> {

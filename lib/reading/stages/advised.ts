@@ -24,8 +24,6 @@ function isLime(column: Column): boolean {
   return column.label?.analyte === 'lime_requirement' && !/requirement|index|\blr\b/i.test(column.heading);
 }
 
-const ADVISED = /\b(suggest|recommend|to apply|advice|advised)/i;
-
 /**
  * Columns of what to spread: "Crop | N | P2O5 | K2O | Lime" with nothing that only a soil has, or P2O5 and K2O to
  * apply beside the P and K that were found.
@@ -39,8 +37,6 @@ export function withAdvice(columns: readonly Column[]): Column[] {
   const found = columns.some(
     (column) => column.label?.form === 'element' && /^(phosphorus|potassium)$/.test(column.label.analyte),
   );
-  const [head] = columns;
-  const _titled = head !== undefined && head.label === null && head.field === null && ADVISED.test(head.heading);
   const some = oxides.length > 0 && soil && found && (oxides.length >= 2 || frame);
   return columns.map((column) => {
     const nitrogen = column.label === null && column.field === null && /^(N|nitrogen)\b/i.test(column.heading);

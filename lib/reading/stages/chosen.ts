@@ -10,6 +10,7 @@ import type { RunColumn } from './runColumns';
 import { overlapping, type Run } from './runs';
 import type { Value } from './values';
 
+/** Roles of columns and rows whose numbers are never results. */
 export const NOT_RESULTS = new Set<Role>([
   'desired',
   'previous',
@@ -37,6 +38,7 @@ function columnOf(columns: readonly RunColumn[], cell: PageCell): RunColumn | nu
   return columns.find((column) => overlapping(column, cell.phrase)) ?? null;
 }
 
+/** The numbers of a row, each with its column, unit and rating, and the words that stand beside them. */
 export function valuesOf(segment: Segment, run: Run): { found: Found[]; words: string } {
   const found: Found[] = [];
   let words = '';
@@ -178,6 +180,7 @@ function sideBySide(run: Run): boolean {
   );
 }
 
+/** Which of a row's numbers are results, for which sample, and of those left out the evidence. */
 export function choose(found: readonly Found[], run: Run): Choice {
   const samples = sideBySide(run);
   const not: NotTaken[] = [];

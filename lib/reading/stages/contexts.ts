@@ -60,6 +60,7 @@ export function contextsOf(hits: readonly IdentityHit[]): Context[] {
   return contexts.map((context) => ({ ...context, identity: withShared(context.identity, first) }));
 }
 
+/** What is said once for several samples: days and depth where they are missing, never another sample's name or number. */
 export function withShared(identity: Identity, shared: Identity): Identity {
   const filled: Identity = { ...identity };
   for (const field of SHARED) {

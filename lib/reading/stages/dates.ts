@@ -10,6 +10,7 @@ const NUMERIC = /(\d{1,4})[/.-](\d{1,2})[/.-](\d{1,4})/;
 const NAMED_DAY_FIRST = /(\d{1,2})(?:st|nd|rd|th)?[ .-]+([A-Za-z]{3,9})\.?,?[ .-]+(\d{2,4})/;
 const NAMED_MONTH_FIRST = /([A-Za-z]{3,9})\.? (\d{1,2})(?:st|nd|rd|th)?,? (\d{2,4})/;
 
+/** A day in any spelling, anywhere in a text. */
 export const ANY_DATE = new RegExp(`${NAMED_DAY_FIRST.source}|${NAMED_MONTH_FIRST.source}|${NUMERIC.source}`);
 
 function iso(year: number, month: number, day: number): ReadDate {

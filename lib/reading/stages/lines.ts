@@ -43,6 +43,7 @@ function around(words: readonly Placed[]) {
   return box;
 }
 
+/** A phrase of words that stand on one line, with the box around them. */
 export function phraseOf(page: Upright, line: number, words: readonly Placed[]): Phrase {
   return { page, line, words, text: words.map((word) => word.text).join(' '), ...around(words) };
 }

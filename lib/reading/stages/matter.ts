@@ -5,6 +5,8 @@ const KINDS: readonly {
   readonly name: string;
   readonly title: RegExp;
   readonly weak?: RegExp;
+  /** A word with which enough of the others tell the kind without a title. */
+  readonly alone?: RegExp;
   readonly words: readonly RegExp[];
 }[] = [
   {
@@ -27,7 +29,10 @@ const KINDS: readonly {
       /\b(TDS|total dissolved solids)\b/i,
       /\b(well|pond|stream|borehole|reservoir|irrigat\w+)\b/i,
       /\bresidual sodium carbonate\b/i,
+      /\b(bicarbonate|HCO3)\b/i,
+      /\bchlorides?\b/i,
     ],
+    alone: /\bwater\b/i,
   },
   {
     name: 'a compost or manure test',
@@ -87,7 +92,9 @@ export function notSoil(lines: readonly CellLine[]): string | null {
   const usual = sizes[Math.floor(sizes.length / 2)] ?? 10;
   const page = lines[0]?.line.page;
   const top = (page?.height ?? 0) * 0.4;
-  const isTitle = (cell: (typeof cells)[number]) => cell.phrase.size > 1.12 * usual || cell.phrase.y0 < top;
+  const isSentence = (cell: (typeof cells)[number]) => cell.phrase.words.length >= 5 && cell.phrase.text.endsWith('.');
+  const isTitle = (cell: (typeof cells)[number]) =>
+    (cell.phrase.size > 1.12 * usual || cell.phrase.y0 < top) && !isSentence(cell);
   const typed = cells.filter((cell) => /^(sample type|matrix|material( type)?):/i.test(cell.phrase.text));
   const titles = cells.filter(isTitle).map((cell) => cell.phrase.text.split(' ').slice(0, 9).join(' '));
   const all = cells.map((cell) => cell.phrase.text).join(' | ');
@@ -108,8 +115,10 @@ export function notSoil(lines: readonly CellLine[]): string | null {
     )
       ? 3
       : 0;
-    if (title + type === 0) continue;
-    const weight = title + type + 1.5 * kind.words.filter((word) => word.test(all)).length;
+    const told = kind.words.filter((word) => word.test(all)).length;
+    // Without a title the numbers speak: hardness, bicarbonate and chloride side by side are those of a water.
+    if (title + type === 0 && (kind.alone === undefined || told < 4 || !kind.alone.test(all))) continue;
+    const weight = title + type + 1.5 * told;
     if (best === null || weight > best.weight) best = { name: kind.name, weight };
   }
   return best !== null && best.weight >= LEAST && best.weight > soil ? best.name : null;

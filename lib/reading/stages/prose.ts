@@ -27,8 +27,6 @@ const BEFORE =
   /\b(last (year|time|season|spring|fall|autumn|test|sampling|report)|previous(ly)?|earlier|prior|in (19|20)\d\d|used to be|up from|down from|compared (with|to)|from)\b/i;
 const APPLY =
   /\b(apply|add|spread|broadcast|work in|incorporate|use|per (1,?000|100)|\/ ?(1,?000|100) ?(sq|ft)|bags?|pounds? of|lbs? of|tons? of|ounces? of|oz of)\b/i;
-const FOUND =
-  /\b(is|was|are|were|at|of|tested|tests|measured|measures|came|shows?|showed|found|reads?|read|reading|contains?|contained|has|had|stands?|averaged|registered|gave|recorded|reported|comes|determined|result)\b|[:=(]/i;
 
 function isText(line: CellLine): boolean {
   const widest = line.cells.reduce((most, cell) => Math.max(most, cell.phrase.words.length), 0);
@@ -220,18 +218,13 @@ function pairsOf(words: readonly Placed[], piece: Piece, style: NumberStyle) {
         (gap === '' || unitOnly(bare(gap)) !== null)
       );
     });
-    const link = after[0] === undefined ? '' : textOf(words, name.to, after[0].from);
-    const _close =
-      after[0] !== undefined &&
-      after[0].from - name.to <= 9 &&
-      (link === '' || FOUND.test(` ${link} `) || /[:=(]$/.test(words[name.to - 1]?.text ?? ''));
     const chosen = ahead !== undefined ? [ahead] : secondUnit(words, after);
     for (const number of chosen) {
       used.add(number);
       pairs.push({ name, number });
     }
   }
-  return { pairs, names, numbers };
+  return { pairs, names };
 }
 
 /** A second number counts only as the same amount in another unit: "45 ppm (90 lb/acre)". */
@@ -246,8 +239,9 @@ function secondUnit(words: readonly Placed[], after: readonly Number_[]): Number
     : [first];
 }
 
-function ratingNear(words: readonly Placed[], number: Number_): string | null {
-  for (let at = number.to; at < number.to + 8 && at < words.length; at++) {
+/** The rating that a sentence gives behind a number, before it goes on to another name. */
+function ratingNear(words: readonly Placed[], number: Number_, stop: number): string | null {
+  for (let at = number.to; at < number.to + 8 && at < stop; at++) {
     const text = words[at]?.text ?? '';
     const inBrackets = /^\(/.test(text);
     const rating = ratingIn(bare(text));
@@ -273,7 +267,7 @@ export function proseRows(
   for (const paragraph of paragraphs) {
     const words = paragraph.words.map((one) => one.word);
     for (const piece of sentencesOf(words)) {
-      const { pairs } = pairsOf(words, piece, style);
+      const { pairs, names } = pairsOf(words, piece, style);
       const seen = new Set<string>();
       for (const { name, number } of pairs) {
         const at = paragraph.words[number.from];
@@ -286,6 +280,7 @@ export function proseRows(
           continue;
         }
         seen.add(key);
+        const next = names.find((other) => other !== name && other.from >= number.to);
         const phrase = phraseOf(at.line.line.page, at.line.line.index, [at.word]);
         const share = number.unit === '%' ? readLabel(`${name.label.text} %`) : null;
         const label = share?.analyte.startsWith('sat_') ? share : name.label;
@@ -293,7 +288,7 @@ export function proseRows(
         const candidate: Candidate = {
           label: { ...label, text: name.label.text },
           value: number.value,
-          rating: number.value.rating ?? ratingNear(words, number),
+          rating: number.value.rating ?? ratingNear(words, number, next?.from ?? piece.to),
           unit: number.unit ?? name.label.unit,
           unitPrinted: number.unitPrinted ?? name.label.unitPrinted,
           method: name.label.method,

@@ -31,6 +31,7 @@ export function labelText(text: string): string {
     .trim();
 }
 
+/** What a cell's own words name, or null; see readLabel. */
 export function readOwn(text: string): Label | null {
   return readLabel(labelText(text));
 }
@@ -168,6 +169,8 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
   for (const one of below) {
     if (used.has(one.line)) continue;
     if (!/^[\p{Ll}(]/u.test(one.cell.phrase.text) && tail.length === 0) break;
+    const other = /^\p{Lu}/u.test(one.cell.phrase.text) ? readOwn(one.cell.phrase.text) : null;
+    if (other !== null && other.analyte !== best.label.analyte) break;
     tail.push(one.cell.phrase.text);
   }
   return { ...best, tail: tail.join(' ') };

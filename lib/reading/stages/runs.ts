@@ -14,6 +14,7 @@ export type Run = {
 
 type Span = { x0: number; x1: number };
 
+/** True when two spans share some of their width. */
 export function overlapping(a: Span, b: Span): boolean {
   return Math.min(a.x1, b.x1) > Math.max(a.x0, b.x0);
 }

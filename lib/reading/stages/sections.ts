@@ -91,6 +91,7 @@ export function zonesOf(lines: readonly CellLine[]): ZoneBox[] {
   });
 }
 
+/** What a place of a page belongs to: results, unless a box of advice or notes covers it. */
 export function zoneAt(zones: readonly ZoneBox[], page: number, x: number, y: number): Zone {
   let zone: Zone = 'results';
   for (const box of zones) {

@@ -1,6 +1,7 @@
 import { type Label, methodIn, readLabel, unitIn, unitOnly } from '../labels/label';
 import type { CellLine, PageCell } from './cells';
 import { fieldOf, fieldWithValue } from './identity';
+import { roleOf } from './roles';
 import { isRatingHere, labelText, rowRoleOf, type Segment, wrappedLabel } from './rowLabels';
 
 const NUMBERLIKE = new Set(['value', 'none', 'range']);
@@ -9,6 +10,17 @@ function hasNumberAfter(line: CellLine, index: number): boolean {
   return line.cells
     .slice(index + 1)
     .some((cell) => cell.meaning.kind === 'value' || cell.meaning.kind === 'none' || cell.meaning.kind === 'range');
+}
+
+/** "Test | 2022 | 2024 | 2026": years beside a word that is no name by itself are the heading of the rows under them. */
+function headsYears(line: CellLine, cell: PageCell): boolean {
+  const numbers = line.cells.filter((one) => one.meaning.kind === 'value');
+  const text = labelText(cell.phrase.text);
+  return (
+    numbers.every((one) => /^(19|20)\d\d$/.test(one.phrase.text)) &&
+    (numbers.length >= 2 || (numbers.length === 1 && roleOf(text, true) === 'analyte')) &&
+    readLabel(text) === null
+  );
 }
 
 type Start = { index: number; label: Label; cell: PageCell; wrapped: readonly CellLine[]; x1: number; tail: string };
@@ -32,6 +44,7 @@ function startsOf(lines: readonly CellLine[], at: number, notLabel: (cell: PageC
       .slice(index + 1)
       .some((one) => one.meaning.kind === 'value' || one.meaning.kind === 'none');
     if (last !== undefined && filled && !valued) continue;
+    if (headsYears(line, cell)) continue;
     const found = wrappedLabel(lines, at, cell, end);
     if (found === null || (fieldOf(cell.phrase.text) !== null && found.lines.length === 0)) continue;
     if (last !== undefined && !filled) {
@@ -147,6 +160,10 @@ function toTheLeft(line: CellLine, starts: readonly Start[]): Segment[] | null {
   ];
 }
 
+/**
+ * Rows of lists: each label with the cells that follow it up to the next label. Lines in `taken` are left out; a cell
+ * of which `notLabel` is true begins no row.
+ */
 export function segmentsOf(
   lines: readonly CellLine[],
   taken: ReadonlySet<CellLine>,

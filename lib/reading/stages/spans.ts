@@ -8,6 +8,7 @@ export type Stack = Span & { own: string[]; captions: string[]; over: boolean; h
 /** Share of the narrower of two spans by which they must overlap to be one column. */
 const SAME_COLUMN = 0.2;
 
+/** How far two spans overlap, in points; less than nothing is the gap between them. */
 export function overlap(a: Span, b: Span): number {
   return Math.min(a.x1, b.x1) - Math.max(a.x0, b.x0);
 }

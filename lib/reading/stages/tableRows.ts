@@ -127,6 +127,7 @@ function plotIdentity(plot: readonly CellLine[], own: CellLine, table: Table): I
   };
 }
 
+/** The samples of a table, row by row, with their numbers; what is left out goes to `notTaken` with its evidence. */
 export function rowsOfTable(table: Table, notTaken: NotTaken[] = []): TableRow[] {
   const rows: TableRow[] = [];
   const kinds = rowKinds(table);

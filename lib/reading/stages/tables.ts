@@ -113,6 +113,7 @@ function isRow(line: CellLine, columns: readonly Column[]): boolean {
   return hits >= 2 || (hits === 1 && named);
 }
 
+/** The column over a cell: the one it shares most of its width with. */
 export function columnAt(columns: readonly Column[], cell: PageCell): Column | undefined {
   let best: Column | undefined;
   let most = 0;
@@ -185,6 +186,7 @@ function borrow(
   return [...last.columns];
 }
 
+/** A row of ratings under the numbers of a sample: "Rating | H | L | M". */
 export function isRatingRow(line: CellLine): boolean {
   if (line.values > 0) return false;
   const [first, ...rest] = line.cells;

@@ -29,6 +29,11 @@ function seasonOf(text: string): number {
         : 0;
 }
 
+/** Later is more: the year, then the season inside it. */
+function when(one: Seen): number {
+  return one.year * 10 + seasonOf(one.text);
+}
+
 /** A day set on two lines ("26 Sep 2026 (this / report)") has its first line over the row's numbers. */
 function dateBeside(table: Table, row: CellLine, column: Column): PageCell | undefined {
   return table.header
@@ -57,7 +62,7 @@ export function earlierYears(
       const year = cell === undefined ? null : yearOf(cell.phrase.text);
       return year === null || cell === undefined ? [] : [{ row, year, text: cell.phrase.text }];
     });
-    if (seen.length < 2 || seen.length < 0.7 * rows.length || new Set(seen.map((one) => one.year)).size < 2) continue;
+    if (seen.length < 2 || seen.length < 0.7 * rows.length || new Set(seen.map(when)).size < 2) continue;
     const gaps = seen.slice(1).map((one, index) => one.row.line.y0 - (seen[index]?.row.line.y1 ?? 0));
     const usual = [...gaps].sort((a, b) => a - b)[Math.floor(gaps.length / 4)] ?? 0;
     const groups: Seen[][] = [];
@@ -74,8 +79,8 @@ export function earlierYears(
     if (!groups.some((group) => group.length >= 2)) continue;
     const earlier = new Map<CellLine, string>();
     for (const group of groups) {
-      const best = Math.max(...group.map((one) => one.year * 10 + seasonOf(one.text)));
-      for (const one of group) if (one.year * 10 + seasonOf(one.text) < best) earlier.set(one.row, one.text);
+      const best = Math.max(...group.map(when));
+      for (const one of group) if (when(one) < best) earlier.set(one.row, one.text);
     }
     return { earlier, groups: groups.map((group) => group.map((one) => one.row)) };
   }

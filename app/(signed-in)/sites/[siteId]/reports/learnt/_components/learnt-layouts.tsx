@@ -29,7 +29,7 @@ export function LearntLayouts({ siteId, first, mayForget }: Props) {
   };
   if (data.layouts.length === 0) {
     return (
-      <Stretch>
+      <Stretch title="Forms confirmed so far">
         <ProblemNotice problem={problem} />
         <EmptyState
           shape="table"
