@@ -35,7 +35,7 @@ describe('wrappedLabel', () => {
     expect(found?.lines).toEqual([]);
   });
   it('keeps a remark under a label as its tail, never as its name', () => {
-    const found = labelAt('Phosphorus      38\nthat crops can use\nZinc            1.1', 0);
+    const found = labelAt('Phosphorus      38\nthat crops can use', 0);
     expect([found?.label.text, found?.tail]).toEqual(['Phosphorus', 'that crops can use']);
   });
   it('does not reach over a gap', () => {

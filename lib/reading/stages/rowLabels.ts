@@ -169,8 +169,6 @@ export function wrappedLabel(lines: readonly CellLine[], at: number, cell: PageC
   for (const one of below) {
     if (used.has(one.line)) continue;
     if (!/^[\p{Ll}(]/u.test(one.cell.phrase.text) && tail.length === 0) break;
-    const other = /^\p{Lu}/u.test(one.cell.phrase.text) ? readOwn(one.cell.phrase.text) : null;
-    if (other !== null && other.analyte !== best.label.analyte) break;
     tail.push(one.cell.phrase.text);
   }
   return { ...best, tail: tail.join(' ') };
