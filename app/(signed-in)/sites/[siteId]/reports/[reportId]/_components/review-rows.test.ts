@@ -40,6 +40,9 @@ describe('what stands on the page', () => {
   it('is the label and the number, the unit only where the label lacks it', () => {
     expect(printedWords(makeRow('a', { label: 'P ppm', printed: '41', unitPrinted: 'ppm' }))).toBe('P ppm: 41');
     expect(printedWords(makeRow('a', { label: 'P', printed: '41', unitPrinted: 'ppm' }))).toBe('P: 41 ppm');
+    expect(printedWords(makeRow('a', { label: 'Organic matter', printed: '5.8%', unitPrinted: '%' }))).toBe(
+      'Organic matter: 5.8%',
+    );
   });
   it("stays the page's own after an edit, and is empty for a row typed in", () => {
     const original = {

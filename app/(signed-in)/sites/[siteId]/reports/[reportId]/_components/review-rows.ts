@@ -127,7 +127,8 @@ function printedPlace(row: ReviewRow): string {
 export function printedWords(row: ReviewRow): string {
   if (row.state === 'added') return '';
   const value = row.original?.printed ?? row.printed;
-  const unit = row.unitPrinted && !row.label.includes(row.unitPrinted) ? ` ${row.unitPrinted}` : '';
+  const told = row.unitPrinted && (row.label.includes(row.unitPrinted) || value.trimEnd().endsWith(row.unitPrinted));
+  const unit = row.unitPrinted && !told ? ` ${row.unitPrinted}` : '';
   return [row.label, `${value}${unit}`].filter(Boolean).join(': ');
 }
 
