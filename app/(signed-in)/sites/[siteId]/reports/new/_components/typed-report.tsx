@@ -84,7 +84,7 @@ export function TypedReport({ siteId, unit, plots, laboratories, today }: TypedR
             <TextField name={`name-${row}`} label="Name on the report" optional autoComplete="off" />
             <TextField name={`number-${row}`} label="Laboratory number" optional autoComplete="off" />
           </div>
-          <div className="grid grid-cols-2 gap-4">
+          <div className="grid grid-cols-2 items-end gap-4">
             <TextField
               name={`from-${row}`}
               label="Depth from"
