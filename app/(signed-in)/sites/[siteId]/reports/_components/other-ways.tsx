@@ -14,6 +14,7 @@ export function OtherWays({ home, today, onFile }: OtherWaysProps) {
       <LinkButton
         look="quiet"
         size="small"
+        className="min-h-(--target)!"
         href={`${home}/reports/own-sheet`}
         icon={<Sheet aria-hidden="true" className="size-5" />}
       >
@@ -22,6 +23,7 @@ export function OtherWays({ home, today, onFile }: OtherWaysProps) {
       <LinkButton
         look="quiet"
         size="small"
+        className="min-h-(--target)!"
         href={`${home}/reports/learnt`}
         icon={<GraduationCap aria-hidden="true" className="size-5" />}
       >

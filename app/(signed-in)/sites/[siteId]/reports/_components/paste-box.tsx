@@ -36,6 +36,7 @@ export function PasteBox({ onFile, today }: PasteBoxProps) {
       <Button
         look="quiet"
         size="small"
+        className="min-h-(--target)!"
         icon={<ClipboardPaste aria-hidden="true" className="size-5" />}
         aria-haspopup="dialog"
         onClick={() => change(true)}

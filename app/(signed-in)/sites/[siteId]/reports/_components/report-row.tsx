@@ -92,7 +92,7 @@ function RowActions(props: ReportRowProps & { name: string }) {
   return (
     <>
       {report.state === 'in-review' && mayWork ? (
-        <LinkButton href={path} size="small" className="min-h-(--target)">
+        <LinkButton href={path} size="small" className="min-h-(--target)!">
           {report.origin === 'own-sheet' ? 'Say what its columns hold' : reviewLabel(report.samples.all)}
           {of}
         </LinkButton>

@@ -46,7 +46,10 @@ export function BatchStrip({ siteId, place }: StripProps) {
       ) : null}
       {place.next ? (
         <Link className={link} href={`${reports}/${place.next.reportId}`} aria-keyshortcuts="Alt+R">
-          Next to review <kbd className="ml-2 rounded-sm border border-fallow px-1.5 text-sm font-normal">Alt+R</kbd>
+          Next to review{' '}
+          <kbd className="pointer-coarse:hidden max-md:hidden ml-2 rounded-sm border border-fallow px-1.5 text-sm font-normal">
+            Alt+R
+          </kbd>
         </Link>
       ) : null}
       <Link className={link} href={`${reports}/batches/${place.batchId}`}>

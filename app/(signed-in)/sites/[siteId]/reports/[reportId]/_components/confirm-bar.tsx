@@ -74,6 +74,7 @@ export function ConfirmBar(props: ConfirmBarProps) {
                       <Button
                         look="plain"
                         size="small"
+                        className="min-h-(--target)!"
                         title={one.blockers[0]?.sentence}
                         onClick={() => one.blockers[0] && onShow(one.blockers[0])}
                       >

@@ -25,7 +25,13 @@ export function OtherForms({ sample, name, saves, separate, onSeparate }: OtherF
       <Notice
         title="Counts once"
         action={
-          <Button look="quiet" size="small" busy={saves.busy} onClick={() => void saves.setSameAs(null)}>
+          <Button
+            look="quiet"
+            size="small"
+            className="min-h-(--target)!"
+            busy={saves.busy}
+            onClick={() => void saves.setSameAs(null)}
+          >
             It is an analysis of its own<span className="sr-only">, {name}</span>
           </Button>
         }
@@ -42,15 +48,20 @@ export function OtherForms({ sample, name, saves, separate, onSeparate }: OtherF
       title={separate ? 'Counts as a second analysis' : 'This may be the same analysis in another form'}
       action={
         separate ? (
-          <Button look="quiet" size="small" onClick={() => onSeparate(false)}>
+          <Button look="quiet" size="small" className="min-h-(--target)!" onClick={() => onSeparate(false)}>
             Ask me again<span className="sr-only"> about {name}</span>
           </Button>
         ) : (
           <>
-            <Button size="small" busy={saves.busy} onClick={() => void saves.setSameAs(form.reportSampleId)}>
+            <Button
+              size="small"
+              className="min-h-(--target)!"
+              busy={saves.busy}
+              onClick={() => void saves.setSameAs(form.reportSampleId)}
+            >
               The same: count it once<span className="sr-only">, {name}</span>
             </Button>
-            <Button look="quiet" size="small" onClick={() => onSeparate(true)}>
+            <Button look="quiet" size="small" className="min-h-(--target)!" onClick={() => onSeparate(true)}>
               A second analysis of the same bag<span className="sr-only">, {name}</span>
             </Button>
           </>

@@ -41,7 +41,13 @@ export function ReasonButton(props: ReasonButtonProps) {
   };
   return (
     <>
-      <Button look={look} size="small" aria-haspopup="dialog" onClick={() => change(true)}>
+      <Button
+        look={look}
+        size="small"
+        className="min-h-(--target)!"
+        aria-haspopup="dialog"
+        onClick={() => change(true)}
+      >
         {label}
         {about ? <span className="sr-only"> {about}</span> : null}
       </Button>

@@ -32,7 +32,7 @@ export function RemovedRows({ review, readOnly, onRestore }: RemovedProps) {
                 </span>
               </span>
               {readOnly ? null : (
-                <Button look="quiet" size="small" onClick={() => onRestore(row.id)}>
+                <Button look="quiet" size="small" className="min-h-(--target)!" onClick={() => onRestore(row.id)}>
                   Bring back<span className="sr-only"> {what}</span>
                 </Button>
               )}

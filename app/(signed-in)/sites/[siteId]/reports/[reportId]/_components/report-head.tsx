@@ -70,13 +70,12 @@ function HeadActions({ path, report, role, personId, refresh }: Omit<HeadProps, 
   return (
     <div className="flex flex-wrap gap-3">
       {report.origin === 'file' && can(role, 'reading.work') && !isWaiting(report.state) ? (
-        <LinkButton size="small" look="plain" href={`${path}/read-wrong`}>
+        <LinkButton look="plain" href={`${path}/read-wrong`} className="max-md:px-0">
           This was read wrong
         </LinkButton>
       ) : null}
       {maySetAside ? (
         <ConfirmButton
-          size="small"
           title="Set this report aside?"
           sentence="It leaves the list of open reviews. The file and everything you changed are kept, and it can be brought back."
           confirmLabel="Set it aside"
@@ -89,7 +88,6 @@ function HeadActions({ path, report, role, personId, refresh }: Omit<HeadProps, 
       ) : null}
       {report.state === 'set-aside' && decides ? (
         <ConfirmButton
-          size="small"
           title="Bring this report back?"
           sentence="It stands among the open reviews again, with its rows as they were."
           confirmLabel="Bring it back"

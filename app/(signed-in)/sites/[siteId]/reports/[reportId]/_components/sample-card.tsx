@@ -188,7 +188,7 @@ function LeftOut({ sample, name, onTake }: { sample: ReviewSample; name: string;
       <p className="min-w-0 flex-1">
         <span className="font-semibold">Left out:</span> {sample.leftOutReason}
       </p>
-      <Button look="quiet" size="small" onClick={onTake}>
+      <Button look="quiet" size="small" className="min-h-(--target)!" onClick={onTake}>
         Take in again<span className="sr-only"> {name}</span>
       </Button>
     </div>

@@ -45,7 +45,7 @@ export function SamplesStrip(props: StripProps) {
             {review.samples.length === 1 ? 'The sample' : `${review.samples.length} samples`}
           </h2>
           {readOnly ? null : (
-            <Button look="quiet" size="small" busy={busy} onClick={() => void add()}>
+            <Button look="quiet" size="small" className="min-h-(--target)!" busy={busy} onClick={() => void add()}>
               Add a sample
             </Button>
           )}

@@ -57,7 +57,14 @@ export function UsualRows({ review, sampleId, onAdd, onDone }: UsualProps) {
       <p className="min-w-0 flex-1 basis-64 text-sm text-clay">
         {sampleLabel(first)} has no rows yet. Start with what most reports print, and remove what yours lacks.
       </p>
-      <Button look="quiet" size="small" busy={busy} busyLabel="Adding rows" onClick={() => void fill()}>
+      <Button
+        look="quiet"
+        size="small"
+        className="min-h-(--target)!"
+        busy={busy}
+        busyLabel="Adding rows"
+        onClick={() => void fill()}
+      >
         Add {USUAL.length} usual rows
       </Button>
     </div>

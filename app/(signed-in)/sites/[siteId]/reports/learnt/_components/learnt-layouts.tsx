@@ -99,7 +99,6 @@ function OneLayout({
         </p>
         {onForget ? (
           <ConfirmButton
-            size="small"
             title={`Forget this form of ${laboratoryWords(layout)}?`}
             sentence="What its labels meant is no longer used. Confirmed results and open reviews stay as they are; the next report you confirm teaches it anew."
             confirmLabel="Forget this layout"

@@ -67,10 +67,15 @@ export function SendSheet({ siteId }: { siteId: string }) {
           title="This file was sent before"
           action={
             <>
-              <LinkButton look="quiet" size="small" href={`${home}/${seen.reportId}`}>
+              <LinkButton look="quiet" size="small" className="min-h-(--target)!" href={`${home}/${seen.reportId}`}>
                 Open it
               </LinkButton>
-              <Button look="quiet" size="small" onClick={() => void send(seen.file, true)}>
+              <Button
+                look="quiet"
+                size="small"
+                className="min-h-(--target)!"
+                onClick={() => void send(seen.file, true)}
+              >
                 Send it again as a spreadsheet of your own
               </Button>
             </>

@@ -86,7 +86,7 @@ function Sending({ item, store }: { item: UploadItem; store: FilesProps['store']
             valueText={shortText(item)}
           />
         </div>
-        <Button look="plain" size="small" onClick={() => store.cancel(item.id)}>
+        <Button look="plain" size="small" className="min-h-(--target)!" onClick={() => store.cancel(item.id)}>
           Stop{name}
         </Button>
       </div>
@@ -96,7 +96,7 @@ function Sending({ item, store }: { item: UploadItem; store: FilesProps['store']
     <div className="flex flex-wrap items-baseline gap-x-4">
       <span className="min-w-0 font-semibold break-all">{item.file.name}</span>
       <StatusWord status={item.stage.kind === 'cancelled' ? 'off' : 'failed'}>{shortText(item)}</StatusWord>
-      <Button look="quiet" size="small" onClick={() => store.retry(item.id)}>
+      <Button look="quiet" size="small" className="min-h-(--target)!" onClick={() => store.retry(item.id)}>
         Send{name} again
       </Button>
       {item.stage.kind === 'refused' ? <p className="max-w-measure basis-full">{item.stage.detail}</p> : null}
