@@ -60,15 +60,20 @@ function Reviewed(props: ComponentProps<typeof ReviewScreen>) {
 function useSayNewState(report: Report, personId: string): void {
   const announce = useAnnounce();
   const before = useRef(report.state);
-  const { state, confirmedBy } = report;
+  const { state, origin, confirmedBy } = report;
   useEffect(() => {
     const was = before.current;
     before.current = state;
     if (was === state) return;
-    if (isWaiting(was) && state === 'in-review') announce('The report is read. Check its values beside the page.');
+    if (isWaiting(was) && state === 'in-review')
+      announce(
+        origin === 'own-sheet'
+          ? 'The spreadsheet is opened. Say what its columns hold.'
+          : 'The report is read. Check its values beside the page.',
+      );
     if (isWaiting(was) && (state === 'unreadable' || state === 'not-soil')) announce('The report could not be read.');
     if (state === 'confirmed' && confirmedBy && confirmedBy.id !== personId) {
       announce(`${confirmedBy.name} confirmed this report.`, { tone: 'look' });
     }
-  }, [state, confirmedBy, personId, announce]);
+  }, [state, origin, confirmedBy, personId, announce]);
 }
