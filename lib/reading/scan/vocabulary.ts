@@ -51,9 +51,9 @@ function collectForms(): ReadonlyMap<string, string> {
   for (const entry of UNITS) {
     for (const spelling of entry.spellings) {
       add(spelling);
-      // A stroke is lost or taken for an l: "mgkg", "lbslacre".
+      // A stroke is lost or taken for an l or an f: "mgkg", "lbslacre", "lbfacre".
       if (!/^[A-Za-z]{2,}\/[A-Za-z]{2,}$/.test(spelling)) continue;
-      for (const without of ['', 'l']) {
+      for (const without of ['', 'l', 'f']) {
         const form = blurredForm(spelling.replace('/', without));
         if (!forms.has(form)) forms.set(form, spelling);
       }

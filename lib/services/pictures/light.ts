@@ -6,7 +6,13 @@ const DARKEST_SHADOW = 0.42;
 const BRIGHT = 0.85;
 
 /** Paper is put a little beyond white, so that its grain is lost. */
-const WHITE = 255 * 1.12;
+const WHITE = 1 / 1.12;
+/** The same for faded type, whose hair strokes are not much darker than the paper. */
+const FADED_WHITE = 0.955;
+/** Type lighter than this share of its paper has faded. */
+const FADED = 0.42;
+/** Shares of paper are kept in steps of this many to one. */
+const FINE = 8192;
 
 type Field = { width: number; height: number; data: Float32Array };
 
@@ -56,10 +62,39 @@ function paperOf(picture: Grey, block: number): Field {
   return blurred({ width, height, data: floor }, 1);
 }
 
-/** Divides the picture by the brightness of its paper, so that shadows and yellowed paper become white. */
+/** The value below which so many of the counted lie. */
+function quantile(counts: Uint32Array, wanted: number): number {
+  let [value, below] = [0, counts[0] ?? 0];
+  while (value < counts.length - 1 && below < wanted) below += counts[++value] ?? 0;
+  return value;
+}
+
+/**
+ * Which share of the paper's brightness becomes black and which white. Type that has faded is darkened until it is as dark
+ * as fresh type; a page with enough dark ink on it stays as it is, so that its shades do not turn black.
+ */
+function toneOf(shares: Uint16Array): { black: number; white: number } {
+  const usual = { black: 0, white: WHITE };
+  const counts = new Uint32Array(512);
+  let total = 0;
+  for (let at = 0; at < shares.length; at += 3) {
+    const step = Math.min(511, (shares[at] ?? 0) >> 5);
+    counts[step] = (counts[step] ?? 0) + 1;
+    total += 1;
+  }
+  const share = (step: number) => (step + 0.5) / 256;
+  const paper = share(quantile(counts, total / 2));
+  const white = Math.max(WHITE, Math.min(FADED_WHITE, paper - 2 * Math.max(0, 1 - paper)));
+  const type = counts.subarray(0, Math.floor(white * 256) - 4).reduce((sum, count) => sum + count, 0);
+  if (type < 0.002 * total) return usual;
+  const ink = share(Math.min(quantile(counts, 0.15 * type), quantile(counts, 0.005 * total)));
+  return ink < FADED ? usual : { black: ink - 0.12 * (white - ink), white };
+}
+
+/** Divides the picture by the brightness of its paper, so that shadows and yellowed paper become white and faded type dark. */
 export function flatten(picture: Grey, block: number): Grey {
   const paper = paperOf(picture, block);
-  const data = new Uint8Array(picture.data.length);
+  const shares = new Uint16Array(picture.data.length);
   for (let y = 0; y < picture.height; y++) {
     const fy = Math.min(paper.height - 1, Math.max(0, (y + 0.5) / block - 0.5));
     const [top, ty] = [Math.floor(fy), fy - Math.floor(fy)];
@@ -72,9 +107,14 @@ export function flatten(picture: Grey, block: number): Grey {
       const lower = (paper.data[row1 + left] ?? 0) * (1 - tx) + (paper.data[row1 + right] ?? 0) * tx;
       const light = Math.max(8, upper * (1 - ty) + lower * ty);
       const at = y * picture.width + x;
-      data[at] = Math.min(255, Math.round((WHITE * (picture.data[at] ?? 0)) / light));
+      shares[at] = Math.min(65535, Math.round((FINE * (picture.data[at] ?? 0)) / light));
     }
   }
+  const { black, white } = toneOf(shares);
+  const data = new Uint8Array(shares.length);
+  const by = 255 / (white - black) / FINE;
+  for (let at = 0; at < data.length; at++)
+    data[at] = Math.max(0, Math.min(255, Math.round(by * ((shares[at] ?? 0) - black * FINE))));
   return { ...picture, data };
 }
 
