@@ -17,7 +17,7 @@ import type { CellLine, PageCell } from './cells';
 import { fieldOf } from './identity';
 import { type Phrase, phraseOf } from './lines';
 import { type Role, roleOf } from './roles';
-import { overlap, type Span, type Stack, spansOf } from './spans';
+import { overlap, type Span, type Stack } from './spans';
 
 export type Column = {
   readonly x0: number;
@@ -211,8 +211,7 @@ function middle(span: Span): number {
 }
 
 /** Stage 5. Columns with the meaning of their stacked headings; captions that stretch over several are given to each. */
-export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]): Column[] {
-  const spans = spansOf(rows);
+export function columnsOf(header: readonly CellLine[], spans: readonly Span[], whole = true): Column[] {
   const stacks: Stack[] = spans.map((span) => ({ ...span, own: [], captions: [], over: false, head: null }));
   const captions: Caption[] = [];
   for (const line of [...header].reverse()) {
@@ -232,7 +231,7 @@ export function columnsOf(header: readonly CellLine[], rows: readonly CellLine[]
   const title = names?.own.join(' ') ?? '';
   if (names !== undefined && saysAll(title))
     for (const stack of others) if (takesCaption(stack, title)) stack.captions.push(title);
-  nameBare(stacks, header);
+  if (whole) nameBare(stacks, header);
   return stacks.map((stack, index) => meaningOf(stack, index === 0));
 }
 

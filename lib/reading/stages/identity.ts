@@ -1,5 +1,6 @@
 import type { Identity, IdentityField } from '../candidate';
 import { readLabel } from '../labels/label';
+import { remembered } from '../labels/remember';
 import type { CellLine, PageCell } from './cells';
 import { ANY_DATE } from './dates';
 
@@ -43,11 +44,11 @@ function bareHeading(text: string): string {
 }
 
 /** The field that a heading names, or null when it names none. */
-export function fieldOf(text: string): IdentityField | null {
+export const fieldOf = remembered((text: string): IdentityField | null => {
   const bare = bareHeading(text);
   if (bare === '' || bare.length > 40) return null;
   return FIELDS.find(([, pattern]) => pattern.test(bare))?.[0] ?? null;
-}
+});
 
 /** "Sample ID: Top bed" or "Lab No 20418" in one phrase. */
 export function fieldWithValue(text: string): { field: IdentityField; value: string } | null {
@@ -85,7 +86,12 @@ export function isCode(text: string): boolean {
 type Inside = { field: IdentityField; value: string; from: number };
 
 /** Fields set one after another in one phrase: "Sample 1: Marrow bed Lab no. WL-901 Depth 0-20 cm". */
-export function fieldsInside(words: readonly string[]): Inside[] {
+export function fieldsInside(words: readonly string[]): readonly Inside[] {
+  return insideOf(words.join(' '));
+}
+
+const insideOf = remembered((text: string): readonly Inside[] => {
+  const words = text.split(' ');
   const starts: { field: IdentityField; from: number; to: number }[] = [];
   for (let at = 0; at < words.length; at++) {
     for (let to = Math.min(words.length - 1, at + 4); to > at; to--) {
@@ -121,7 +127,7 @@ export function fieldsInside(words: readonly string[]): Inside[] {
       .trim(),
     from: start.from,
   }));
-}
+});
 
 export type IdentityHit = {
   readonly field: IdentityField;

@@ -1,3 +1,5 @@
+import { remembered } from '../labels/remember';
+
 /** What a column holds, from its heading. Only "result" columns give results. */
 export type Role =
   | 'result'
@@ -40,6 +42,13 @@ const ROLES: readonly (readonly [Role, RegExp])[] = [
 
 /** The role that a heading names, or null. A heading of the first column is the analyte's ("Test", "Analysis"). */
 export function roleOf(text: string, first: boolean): Role | null {
+  return first ? firstRole(text) : otherRole(text);
+}
+
+const firstRole = remembered((text: string) => roleIn(text, true));
+const otherRole = remembered((text: string) => roleIn(text, false));
+
+function roleIn(text: string, first: boolean): Role | null {
   const bare = text
     .replace(/[:*]/g, '')
     .replace(/\s*\([^)]*\)\s*/g, ' ')

@@ -141,14 +141,15 @@ export function tablesOf(lines: readonly CellLine[]): Table[] {
     const above = headerAbove(lines, at, taken);
     const under = unitsUnder(block);
     let best: { header: CellLine[]; columns: Column[]; score: number } | null = null;
+    const spans = spansOf(data);
     for (let count = 1; count <= above.length; count++) {
       const header = [...above.slice(above.length - count), ...under];
-      const columns = columnsOf(header, data);
+      const columns = columnsOf(header, spans, false);
       const score = headerScore(columns);
       if (trustworthy(columns) && score >= (best?.score ?? 0.01)) best = { header, columns, score };
     }
     const borrowed = best === null ? borrow(tables[tables.length - 1], data, line, lines, at) : null;
-    const plain = best?.columns ?? borrowed;
+    const plain = best === null ? borrowed : columnsOf(best.header, spans);
     if (plain === null || plain === undefined) continue;
     const columns = withAdvice(plain);
     const rows = block.filter((row) => isRow(row, columns) || isRatingRow(row) || isTail(row, columns));

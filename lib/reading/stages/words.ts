@@ -117,12 +117,22 @@ const UNIT_END = /(^|[ /])(k|d|c|m|µ)?(m|g)$|(^|[ /])(ft|yd|ha|acre|dm|cm)$/i;
  * any other raised mark points to a footnote or a charge and is dropped.
  */
 function withScripts(words: readonly Placed[]): Placed[] {
-  const small = words.filter((word) => /^[\d+*†‡§a-e-]{1,3}$/.test(word.text));
+  const largest = words.reduce((most, word) => Math.max(most, word.size), 0);
+  const small = words.filter((word) => word.size < 0.82 * largest && /^[\d+*†‡§a-e-]{1,3}$/.test(word.text));
   if (small.length === 0) return [...words];
+  // Only a larger word that ends where the script begins can be its base.
+  const ends = new Map<number, Placed[]>();
+  for (const word of words) {
+    const step = Math.round(word.x1 / 4);
+    const list = ends.get(step);
+    if (list === undefined) ends.set(step, [word]);
+    else list.push(word);
+  }
+  const before = (x: number) => [-2, -1, 0, 1, 2].flatMap((step) => ends.get(Math.round(x / 4) + step) ?? []);
   const gone = new Set<Placed>();
   const grown = new Map<Placed, Placed>();
   for (const script of [...small].sort((a, b) => a.x0 - b.x0)) {
-    const base = words.find((word) => {
+    const base = before(script.x0).find((word) => {
       const now = grown.get(word) ?? word;
       return (
         word !== script &&
@@ -136,8 +146,11 @@ function withScripts(words: readonly Placed[]): Placed[] {
     if (base === undefined) continue;
     const now = grown.get(base) ?? base;
     const lowered = (script.y0 + script.y1) / 2 > (base.y0 + base.y1) / 2;
-    if (lowered || (/^[-+]?[123]$/.test(script.text) && UNIT_END.test(now.text)))
-      grown.set(base, { ...now, text: now.text + script.text, x1: Math.max(now.x1, script.x1) });
+    if (lowered || (/^[-+]?[123]$/.test(script.text) && UNIT_END.test(now.text))) {
+      const whole = { ...now, text: now.text + script.text, x1: Math.max(now.x1, script.x1) };
+      grown.set(base, whole);
+      ends.get(Math.round(whole.x1 / 4))?.push(base) ?? ends.set(Math.round(whole.x1 / 4), [base]);
+    }
     gone.add(script);
   }
   return words.flatMap((word) => (gone.has(word) ? [] : [grown.get(word) ?? word]));
