@@ -8,7 +8,7 @@ import { pageOf } from './pages';
 import { covers, foundLater, isStray, isUnsure, withThirdLook } from './third';
 import { figuresOf, judge, pointDoubts, type Spot, spotOf } from './trust';
 import type { Merged, ScannedPage } from './types';
-import { wholeWords } from './whole';
+import { wholeWords, withoutTypedRules } from './whole';
 
 export type AnyPage = Page | ScannedPage;
 type Words = ReadonlyMap<number, readonly Merged[]>;
@@ -39,7 +39,7 @@ export async function wordsOf(page: ScannedPage, lookAgain: LookAgain): Promise<
   const kept = merged
     .map((word) => looked.get(word) ?? word)
     .filter((word) => !isStray(word) && !found.some((later) => covers(later, word)));
-  return mendWords(checkInk(wholeWords([...kept, ...found]), page.pieces, page.letter));
+  return mendWords(checkInk(wholeWords(withoutTypedRules([...kept, ...found], page.letter)), page.pieces, page.letter));
 }
 
 function readWords(input: { fileName: string; pages: readonly AnyPage[] }, words: Words) {

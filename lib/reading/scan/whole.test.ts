@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Merged } from './types';
-import { wholeWords } from './whole';
+import { wholeWords, withoutTypedRules } from './whole';
 
 function word(text: string, x0: number, x1: number, more: Partial<Merged> = {}): Merged {
   return { text, x0, x1, y0: 100, y1: 130, certainty: 0.9, support: 1, others: [], of: 2, point: 'unknown', ...more };
@@ -23,5 +23,12 @@ describe('words that a look cut or saw twice', () => {
   });
   it('keeps a part that two looks saw', () => {
     expect(wholeWords([word('4.3', 0, 60), word('4', 1, 20, { support: 2 })])).toHaveLength(2);
+  });
+  it('drops the scraps of a typed rule, and keeps doubtful cells of a row that was read', () => {
+    const scraps = Array.from({ length: 7 }, (_, at) => word('3', at * 80, at * 80 + 20, { certainty: 0.5 }));
+    const below = { y0: 160, y1: 190 };
+    const row = Array.from({ length: 7 }, (_, at) => word('41', at * 80, at * 80 + 30, { ...below, support: 2 }));
+    const doubtful = word('7', 600, 620, { ...below, certainty: 0.5 });
+    expect(withoutTypedRules([...scraps, ...row, doubtful], 30)).toEqual([...row, doubtful]);
   });
 });

@@ -5,6 +5,24 @@ const OVER = 0.7;
 /** Gap between a figure and the point after it, in heights of the figure. */
 const NEAR = 0.45;
 
+/** So many doubtful scraps on one line, and hardly a word beside them, are a line typed of dashes or equals signs. */
+const SCRAPS = 6;
+const MOSTLY = 0.8;
+
+/** The words without what a rule typed of "=====" was taken for. */
+export function withoutTypedRules(words: readonly Merged[], letter: number): Merged[] {
+  const isScrap = (word: Merged) => word.support <= 1 && word.certainty < 0.76 && word.text.length <= 3;
+  const middle = (word: Merged) => (word.y0 + word.y1) / 2;
+  const scraps = words.filter(isScrap);
+  if (scraps.length < SCRAPS) return [...words];
+  return words.filter((word) => {
+    if (!isScrap(word)) return true;
+    const line = words.filter((other) => Math.abs(middle(other) - middle(word)) < 0.5 * letter);
+    const here = line.filter(isScrap).length;
+    return here < SCRAPS || here < MOSTLY * line.length;
+  });
+}
+
 function sharedOf(word: Merged, other: Merged): number {
   const w = Math.min(word.x1, other.x1) - Math.max(word.x0, other.x0);
   const h = Math.min(word.y1, other.y1) - Math.max(word.y0, other.y0);

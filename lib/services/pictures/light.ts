@@ -10,7 +10,7 @@ const WHITE = 1 / 1.12;
 /** The same for faded type, whose hair strokes are not much darker than the paper. */
 const FADED_WHITE = 0.955;
 /** Type lighter than this share of its paper has faded. */
-const FADED = 0.42;
+const FADED = 0.5;
 /** Shares of paper are kept in steps of this many to one. */
 const FINE = 8192;
 

@@ -1,11 +1,9 @@
-import { withDarkType } from './faint';
 import { shrink, warp } from './grey';
 import { flatten, HAIRLINE, inkOf } from './light';
 import { carry, chain, inverse, type Matrix, rectangleToQuad, SAME, scaling, shifting, turning } from './matrix';
 import { findPage, flatSize } from './page';
 import { lettersOf, median, piecesOf } from './pieces';
 import { withoutRules } from './rules';
-import { isTwoToned, withoutSpecks } from './specks';
 import { runsUpright, skewOf } from './straight';
 import type { Grey, Piece } from './types';
 
@@ -97,8 +95,7 @@ export function prepare(source: Grey, photo: boolean): Prepared | null {
     Math.round(high * scale),
   );
   const ruled = flatten(raw, Math.round(LETTER * 1.6));
-  const unruled = withoutRules(ruled, inkOf(ruled, HAIRLINE), type * scale);
-  const picture = isTwoToned(source) ? withoutSpecks(unruled, type * scale) : withDarkType(unruled, type * scale);
+  const picture = withoutRules(ruled, inkOf(ruled, HAIRLINE), type * scale);
   return {
     picture,
     toStored: chain(scaling(1 / source.width, 1 / source.height), toSource),
