@@ -11,8 +11,6 @@ const WHITE = 1 / 1.12;
 const FADED_WHITE = 0.955;
 /** Type lighter than this share of its paper has faded. */
 const FADED = 0.5;
-/** Shares of paper are kept in steps of this many to one. */
-const FINE = 8192;
 
 type Field = { width: number; height: number; data: Float32Array };
 
@@ -73,12 +71,12 @@ function quantile(counts: Uint32Array, wanted: number): number {
  * Which share of the paper's brightness becomes black and which white. Type that has faded is darkened until it is as dark
  * as fresh type; a page with enough dark ink on it stays as it is, so that its shades do not turn black.
  */
-function toneOf(shares: Uint16Array): { black: number; white: number } {
+function toneOf(shares: Float32Array): { black: number; white: number } {
   const usual = { black: 0, white: WHITE };
   const counts = new Uint32Array(512);
   let total = 0;
   for (let at = 0; at < shares.length; at += 3) {
-    const step = Math.min(511, (shares[at] ?? 0) >> 5);
+    const step = Math.min(511, Math.floor((shares[at] ?? 0) * 256));
     counts[step] = (counts[step] ?? 0) + 1;
     total += 1;
   }
@@ -94,7 +92,7 @@ function toneOf(shares: Uint16Array): { black: number; white: number } {
 /** Divides the picture by the brightness of its paper, so that shadows and yellowed paper become white and faded type dark. */
 export function flatten(picture: Grey, block: number): Grey {
   const paper = paperOf(picture, block);
-  const shares = new Uint16Array(picture.data.length);
+  const shares = new Float32Array(picture.data.length);
   for (let y = 0; y < picture.height; y++) {
     const fy = Math.min(paper.height - 1, Math.max(0, (y + 0.5) / block - 0.5));
     const [top, ty] = [Math.floor(fy), fy - Math.floor(fy)];
@@ -107,14 +105,14 @@ export function flatten(picture: Grey, block: number): Grey {
       const lower = (paper.data[row1 + left] ?? 0) * (1 - tx) + (paper.data[row1 + right] ?? 0) * tx;
       const light = Math.max(8, upper * (1 - ty) + lower * ty);
       const at = y * picture.width + x;
-      shares[at] = Math.min(65535, Math.round((FINE * (picture.data[at] ?? 0)) / light));
+      shares[at] = (picture.data[at] ?? 0) / light;
     }
   }
   const { black, white } = toneOf(shares);
   const data = new Uint8Array(shares.length);
-  const by = 255 / (white - black) / FINE;
+  const by = 255 / (white - black);
   for (let at = 0; at < data.length; at++)
-    data[at] = Math.max(0, Math.min(255, Math.round(by * ((shares[at] ?? 0) - black * FINE))));
+    data[at] = Math.max(0, Math.min(255, Math.round(by * ((shares[at] ?? 0) - black))));
   return { ...picture, data };
 }
 
