@@ -204,6 +204,12 @@ describe('what a number from a scan is worth', () => {
     expect(ceiling).toBeLessThan(0.7);
     expect(doubts.map((one) => one.code)).toEqual(['decimal-point']);
   });
+
+  it('is doubted when its point may be a comma between thousands', () => {
+    const { ceiling, doubts } = judge(result('3.060'), spot(merged('3.060', { point: 'seen' })), '3.060');
+    expect(ceiling).toBeLessThan(0.7);
+    expect(doubts.map((one) => one.code)).toEqual(['decimal-point']);
+  });
 });
 
 describe('a scanned page through all stages', () => {

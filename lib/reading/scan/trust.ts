@@ -80,6 +80,11 @@ export function judge(result: ReadResult, spot: Spot, again: string | null): Jud
   if (lost)
     doubts.push(remark('decimal-point', `No decimal point can be seen in ${result.printed}; look at the page.`));
   if (lost) return { ceiling: CEILING.point, doubts };
+  // A faint comma between thousands looks like a point, to every look alike.
+  if (/^[<>]?\d{1,3}\.\d{3}$/.test(printed) && result.printed.includes('.')) {
+    doubts.push(remark('decimal-point', `The point in ${result.printed} may be a comma; look at the page.`));
+    return { ceiling: CEILING.point, doubts };
+  }
   if (others.length > 0)
     return { ceiling: votes >= 2 && votes > others.length ? CEILING.outvoted : CEILING.conflict, doubts };
   if (votes <= 1) {
